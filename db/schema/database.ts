@@ -1,0 +1,66 @@
+import {
+  type ConditionItemsTable,
+  type ConditionsTable,
+  type ConfigurationListsTable,
+  type ConfigurationsTable,
+  type RollUpsTable,
+  type RotorRevisionsTable,
+} from './configurations';
+import {
+  type ImportsTable,
+  type ListRevisionsTable,
+  type ListsTable,
+  type MassRowsTable,
+  type RevisionSubtotalsTable,
+  type RowChangesTable,
+  type StoredFilesTable,
+} from './lists';
+import {
+  type ApiTokensTable,
+  type AuditEventsTable,
+  type IdempotencyKeysTable,
+  type MailLinksTable,
+  type RateLimitsTable,
+  type SessionsTable,
+  type UsersTable,
+} from './people';
+import {
+  type BuildsTable,
+  type FrameIssuesTable,
+  type GrowthAllowancesTable,
+  type LimitsTable,
+  type ProgramMembersTable,
+  type ProgramsTable,
+  type ReferencePointsTable,
+} from './programs';
+
+/** Every table of the application, by its name in PostgreSQL. */
+export interface Database {
+  users: UsersTable;
+  sessions: SessionsTable;
+  mail_links: MailLinksTable;
+  rate_limits: RateLimitsTable;
+  api_tokens: ApiTokensTable;
+  idempotency_keys: IdempotencyKeysTable;
+  audit_events: AuditEventsTable;
+  programs: ProgramsTable;
+  program_members: ProgramMembersTable;
+  frame_issues: FrameIssuesTable;
+  reference_points: ReferencePointsTable;
+  builds: BuildsTable;
+  limits: LimitsTable;
+  growth_allowances: GrowthAllowancesTable;
+  stored_files: StoredFilesTable;
+  lists: ListsTable;
+  list_revisions: ListRevisionsTable;
+  mass_rows: MassRowsTable;
+  row_changes: RowChangesTable;
+  revision_subtotals: RevisionSubtotalsTable;
+  imports: ImportsTable;
+  rotor_revisions: RotorRevisionsTable;
+  configurations: ConfigurationsTable;
+  configuration_lists: ConfigurationListsTable;
+  conditions: ConditionsTable;
+  condition_items: ConditionItemsTable;
+  roll_ups: RollUpsTable;
+}

@@ -1,0 +1,10 @@
+export type Severity = 'blocker' | 'warning' | 'note';
+
+/** What a check saw. `rows` names the items concerned (the first 200), `count` says how many there are. */
+export interface Finding {
+  readonly rule: string;
+  readonly severity: Severity;
+  readonly message: string;
+  readonly rows: readonly string[];
+  readonly count: number;
+}
