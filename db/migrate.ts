@@ -13,8 +13,8 @@ class FolderOfMigrations implements MigrationProvider {
     const found: Record<string, Migration> = {};
     for (const file of (await readdir(MIGRATIONS)).sort()) {
       if (!file.endsWith('.ts')) continue;
-      const module = (await import(pathToFileURL(path.join(MIGRATIONS, file)).href)) as Migration;
-      found[file.slice(0, -3)] = module;
+      const migration = (await import(pathToFileURL(path.join(MIGRATIONS, file)).href)) as Migration;
+      found[file.slice(0, -3)] = migration;
     }
     return found;
   }
