@@ -5,7 +5,7 @@ export default [
   { ignores: ['.next/**', '.data/**', '.test-data/**', 'node_modules/**', 'public/**', 'next-env.d.ts'] },
   ...coreWebVitals,
   ...typescript,
-  { settings: { next: { rootDir: '.' } } },
+  { rules: { '@next/next/no-html-link-for-pages': 'off' } },
   {
     rules: {
       '@typescript-eslint/no-explicit-any': 'error',

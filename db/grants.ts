@@ -25,7 +25,6 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   lists: ['select', 'insert', 'update'],
   list_revisions: ['select', 'insert'],
   mass_rows: ['select', 'insert'],
-  row_changes: ['select', 'insert'],
   revision_subtotals: ['select', 'insert'],
   imports: ['select', 'insert', 'update'],
   rotor_revisions: ['select', 'insert'],
@@ -34,4 +33,5 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   conditions: ['select', 'insert', 'update', 'delete'],
   condition_items: ['select', 'insert', 'update', 'delete'],
   roll_ups: ['select', 'insert'],
+  job_workers: ['select', 'insert', 'delete'],
 };

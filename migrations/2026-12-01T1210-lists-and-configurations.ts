@@ -44,7 +44,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
     );
 
     create table mass_rows (
-      revision_id text not null references list_revisions,
+      revision_id text not null references list_revisions deferrable initially deferred,
       position integer not null,
       line integer,
       item text not null,
@@ -83,16 +83,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       unique (revision_id, item)
     );
 
-    create table row_changes (
-      revision_id text not null references list_revisions,
-      item text not null,
-      change text not null check (change in ('added', 'removed', 'changed')),
-      fields jsonb not null,
-      primary key (revision_id, item)
-    );
-
     create table revision_subtotals (
-      revision_id text not null references list_revisions,
+      revision_id text not null references list_revisions deferrable initially deferred,
       frame_issue_id text not null references frame_issues,
       group_path text not null,
       category text not null,
@@ -170,6 +162,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       code text not null check (code ~ '^[a-z0-9][a-z0-9-]{0,62}$'),
       title text not null check (title <> ''),
       position integer not null,
+      categories text[] not null default '{empty}',
       unique (configuration_id, code)
     );
 
@@ -194,5 +187,11 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       created_at timestamptz not null default now()
     );
     create index on roll_ups (configuration_id, created_at desc);
+
+    create table job_workers (
+      worker_id text primary key,
+      lease integer not null,
+      started_at timestamptz not null default now()
+    );
   `.execute(db);
 }

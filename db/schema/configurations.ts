@@ -45,6 +45,8 @@ export interface ConditionsTable {
   code: string;
   title: string;
   position: number;
+  /** Categories of list rows that are on board. */
+  categories: Generated<Category[]>;
 }
 
 /** A named item on board: kg, place in airframe components in m, a point mass. */

@@ -8,11 +8,11 @@ import {
 } from './configurations';
 import {
   type ImportsTable,
+  type JobWorkersTable,
   type ListRevisionsTable,
   type ListsTable,
   type MassRowsTable,
   type RevisionSubtotalsTable,
-  type RowChangesTable,
   type StoredFilesTable,
 } from './lists';
 import {
@@ -54,7 +54,6 @@ export interface Database {
   lists: ListsTable;
   list_revisions: ListRevisionsTable;
   mass_rows: MassRowsTable;
-  row_changes: RowChangesTable;
   revision_subtotals: RevisionSubtotalsTable;
   imports: ImportsTable;
   rotor_revisions: RotorRevisionsTable;
@@ -63,4 +62,5 @@ export interface Database {
   conditions: ConditionsTable;
   condition_items: ConditionItemsTable;
   roll_ups: RollUpsTable;
+  job_workers: JobWorkersTable;
 }

@@ -86,14 +86,6 @@ export interface MassRowsTable {
   extra: Json<Record<string, string>> | null;
 }
 
-export interface RowChangesTable {
-  revision_id: string;
-  item: string;
-  change: 'added' | 'removed' | 'changed';
-  /** field -> [before, after], in SI. */
-  fields: Json<Record<string, [unknown, unknown]>>;
-}
-
 /** Accounts of ten numbers about the frame issue's reference: mass, first moment (3), second moment (6). Insert-only. */
 export interface RevisionSubtotalsTable {
   revision_id: string;
@@ -129,4 +121,11 @@ export interface ImportsTable {
   created_at: Generated<Date>;
   touched_at: Generated<Date>;
   finished_at: Date | null;
+}
+
+/** A worker of the job queue and the advisory lock that its process holds while it lives. */
+export interface JobWorkersTable {
+  worker_id: string;
+  lease: number;
+  started_at: Generated<Date>;
 }

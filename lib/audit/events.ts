@@ -1,0 +1,44 @@
+/**
+ * Every kind of event that the trail records, with the detail it carries. A new step of the product adds its kind here; the
+ * trail page and the verify command read from the same table.
+ */
+export interface AuditDetails {
+  'user.invited': { email: string };
+  'user.joined': { email: string };
+  'user.disabled': { email: string };
+  'user.enabled': { email: string };
+  'user.made-admin': { email: string };
+  'user.signed-in': { email: string };
+  'user.password-changed': { email: string };
+  'user.sessions-ended': { email: string };
+  'token.made': { name: string; scopes: readonly string[]; expiresAt: string };
+  'token.revoked': { name: string };
+  'program.created': { code: string; title: string };
+  'member.added': { email: string; role: string };
+  'member.role-changed': { email: string; from: string; to: string };
+  'member.removed': { email: string; role: string };
+  'frame.issued': { number: number; title: string; reason: string };
+  'reference-point.added': { code: string; frameIssue: number };
+  'build.added': { code: string; kind: string };
+  'limit.set': { quantity: string; value: number; before: number | null; source: string };
+  'limit.removed': { quantity: string; before: number };
+  'allowance.set': { maturity: string; fraction: number; before: number | null };
+  'list.created': { code: string; title: string };
+  'list.declared': { code: string; before: unknown; after: unknown };
+  'import.requested': { list: string; file: string; sha256: string };
+  'import.failed': { list: string; file: string; problems: number };
+  'list.revised': {
+    list: string;
+    number: number;
+    origin: string;
+    reason: string;
+    rows: number;
+    contentSha256: string;
+  };
+  'rotors.revised': { number: number; reason: string };
+  'configuration.created': { code: string; title: string; build: string };
+  'configuration.changed': { code: string; what: string; version: number };
+  'configuration.rolled-up': { code: string; version: number; inputSha256: string };
+}
+
+export type AuditKind = keyof AuditDetails;

@@ -1,0 +1,4 @@
+import { randomUUID } from 'node:crypto';
+
+/** A new identifier for a row. */
+export const newId = (): string => randomUUID();
