@@ -1,0 +1,168 @@
+import { type Moments, NO_MOMENTS, tensorOf } from '@/lib/frames/products';
+import { type AirframeVec, type In } from '@/lib/frames/tags';
+import { CompensatedSum } from '@/lib/numerics/sums';
+import { halfTraceMinus } from '@/lib/numerics/sym3';
+import { subVec } from '@/lib/numerics/vec3';
+
+import { type Account, AccountSum, accountOfBody } from './account';
+import { CATEGORIES, type Category, type ChangeStatus, type Maturity } from './component';
+import { type AirframeGeometry } from './geometry';
+import { type MassResult, resultOf } from './result';
+import { type Subtotal } from './subtotals';
+
+/** The program's mass growth allowance per maturity, a fraction of mass, for rows that state none. */
+export type GrowthAllowances = Readonly<Record<Maturity, number>>;
+
+export const NO_GROWTH: GrowthAllowances = { E: 0, C: 0, A: 0 };
+
+/** A named item of a condition: mass (kg), place from the datum and own moments (kg.m2) in airframe components. It does not grow. */
+export interface OnBoardItem {
+  readonly name: string;
+  readonly mass: number;
+  readonly position: AirframeVec;
+  readonly moments?: In<'airframe', Moments>;
+}
+
+export interface RollUpOptions {
+  /** Which adjustments count; approved ones only unless said otherwise. */
+  readonly statuses?: readonly ChangeStatus[];
+  /** Which categories count; all unless said otherwise. */
+  readonly categories?: readonly Category[];
+}
+
+/** The rows of one group path, without those of the paths below it. */
+export interface GroupTotal {
+  readonly group: string;
+  readonly rows: number;
+  readonly pieces: number;
+  readonly memoRows: number;
+  readonly basic: MassResult;
+  readonly predicted: MassResult;
+  readonly basicAccount: Account;
+  readonly predictedAccount: Account;
+}
+
+export interface RollUp {
+  readonly rows: number;
+  readonly pieces: number;
+  readonly memoRows: number;
+  /** Mass, kg, of rows that state no growth and have no maturity, or one without an allowance: predicted as basic. */
+  readonly ungrownMass: number;
+  /** Lists and items on board, without growth. */
+  readonly basic: MassResult;
+  /** The same with growth. */
+  readonly predicted: MassResult;
+  /** In the order of their paths. */
+  readonly groups: readonly GroupTotal[];
+  /** The items on board alone; mass 0 without any. */
+  readonly onBoard: MassResult;
+}
+
+/** Running counts and sums of whatever is added up: a group, a branch of groups, the whole. */
+class Tally {
+  rows = 0;
+  pieces = 0;
+  memoRows = 0;
+  readonly basic = new AccountSum();
+  readonly predicted = new AccountSum();
+
+  count(part: Pick<Subtotal, 'rows' | 'pieces' | 'memoRows'>): void {
+    this.rows += part.rows;
+    this.pieces += part.pieces;
+    this.memoRows += part.memoRows;
+  }
+
+  total(group: string, geometry: AirframeGeometry): GroupTotal {
+    const [basicAccount, predictedAccount] = [this.basic.account, this.predicted.account];
+    return {
+      group,
+      rows: this.rows,
+      pieces: this.pieces,
+      memoRows: this.memoRows,
+      basic: resultOf(basicAccount, geometry),
+      predicted: resultOf(predictedAccount, geometry),
+      basicAccount,
+      predictedAccount,
+    };
+  }
+}
+
+function tallyOf(tallies: Map<string, Tally>, group: string): Tally {
+  const tally = tallies.get(group) ?? new Tally();
+  tallies.set(group, tally);
+  return tally;
+}
+
+/** Paths compare level by level, so that `Wing/Spars` stands before `Wing tips`. */
+function byPath(a: GroupTotal, b: GroupTotal): number {
+  const [p, q] = [a.group.split('/'), b.group.split('/')];
+  for (let level = 0; level < Math.min(p.length, q.length); level += 1) {
+    const [left = '', right = ''] = [p[level], q[level]];
+    if (left !== right) return left < right ? -1 : 1;
+  }
+  return p.length - q.length;
+}
+
+/** The account, about r0, of an item on board. */
+export function accountOfItem(item: OnBoardItem, geometry: AirframeGeometry): Account {
+  const own = halfTraceMinus(tensorOf(item.moments ?? NO_MOMENTS));
+  return accountOfBody(item.mass, subVec(item.position, geometry.reference), own);
+}
+
+/**
+ * Adds up the subtotals of any number of lists and the items on board. All subtotals must have been kept about the reference
+ * point of this same geometry.
+ */
+export function rollUp(
+  subtotals: Iterable<Subtotal>,
+  items: Iterable<OnBoardItem>,
+  geometry: AirframeGeometry,
+  allowances: GrowthAllowances,
+  options: RollUpOptions = {},
+): RollUp {
+  const { statuses = ['approved'], categories = CATEGORIES } = options;
+  const whole = new Tally();
+  const groups = new Map<string, Tally>();
+  const ungrown = new CompensatedSum();
+  for (const part of subtotals) {
+    if (!statuses.includes(part.status) || !categories.includes(part.category)) continue;
+    const allowance = part.maturity === null ? 0 : allowances[part.maturity];
+    if (allowance === 0) ungrown.add(part.unstatedBasic.mass);
+    for (const tally of [whole, tallyOf(groups, part.group)]) {
+      tally.count(part);
+      tally.basic.add(part.basic);
+      tally.predicted.add(part.statedPredicted);
+      tally.predicted.add(part.unstatedBasic, 1 + allowance);
+    }
+  }
+  const onBoard = new AccountSum();
+  for (const item of items) onBoard.add(accountOfItem(item, geometry));
+  whole.basic.add(onBoard.account);
+  whole.predicted.add(onBoard.account);
+  const { rows, pieces, memoRows, basic, predicted } = whole.total('', geometry);
+  return {
+    rows,
+    pieces,
+    memoRows,
+    ungrownMass: ungrown.value,
+    basic,
+    predicted,
+    groups: [...groups].map(([group, tally]) => tally.total(group, geometry)).sort(byPath),
+    onBoard: resultOf(onBoard.account, geometry),
+  };
+}
+
+/** Every group path and every path above one, each with all that is below it: `Wing` holds `Wing/Spars` and `Wing/Ribs`. */
+export function groupBranches(groups: readonly GroupTotal[], geometry: AirframeGeometry): GroupTotal[] {
+  const branches = new Map<string, Tally>();
+  for (const part of groups) {
+    const levels = part.group.split('/');
+    for (let depth = 1; depth <= levels.length; depth += 1) {
+      const tally = tallyOf(branches, levels.slice(0, depth).join('/'));
+      tally.count(part);
+      tally.basic.add(part.basicAccount);
+      tally.predicted.add(part.predictedAccount);
+    }
+  }
+  return [...branches].map(([group, tally]) => tally.total(group, geometry)).sort(byPath);
+}

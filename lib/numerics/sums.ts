@@ -1,0 +1,42 @@
+/** a + b = sum + error exactly (Knuth, TAOCP vol. 2, 4.2.2). */
+function sumError(a: number, b: number, sum: number): number {
+  const bRounded = sum - a;
+  return a - (sum - bRounded) + (b - bRounded);
+}
+
+// 2^27 + 1 halves a double's 53-bit significand (Veltkamp).
+const SPLITTER = 134217729;
+
+/** a b = product + error exactly (Dekker 1971), as long as no term over- or underflows. */
+function productError(a: number, b: number, product: number): number {
+  const aShift = SPLITTER * a;
+  const aHigh = aShift - (aShift - a);
+  const aLow = a - aHigh;
+  const bShift = SPLITTER * b;
+  const bHigh = bShift - (bShift - b);
+  const bLow = b - bHigh;
+  return aLow * bLow - (product - aHigh * bHigh - aLow * bHigh - aHigh * bLow);
+}
+
+/** A running sum whose error does not grow with the number of terms (Neumaier 1974). */
+export class CompensatedSum {
+  #sum = 0;
+  #lost = 0;
+
+  add(term: number): void {
+    const sum = this.#sum + term;
+    this.#lost += sumError(this.#sum, term, sum);
+    this.#sum = sum;
+  }
+
+  /** Adds a b without rounding the product (Ogita, Rump and Oishi 2005, Dot2). */
+  addProduct(a: number, b: number): void {
+    const product = a * b;
+    this.add(product);
+    this.#lost += productError(a, b, product);
+  }
+
+  get value(): number {
+    return this.#sum + this.#lost;
+  }
+}
