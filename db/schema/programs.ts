@@ -1,8 +1,8 @@
 import { type Generated } from 'kysely';
 import { type Direction } from '@/lib/frames/axes';
 import { type Maturity } from '@/lib/mass/component';
+import { type MemberRole } from '@/lib/permissions';
 
-export type MemberRole = 'chief' | 'weights' | 'simulation';
 export type BuildKind = 'design' | 'as-built' | 'as-weighed';
 export type LimitQuantity = 'cg-forward-percent-mac' | 'cg-aft-percent-mac' | 'mass-maximum';
 export type LimitKind = 'contract' | 'specification' | 'target' | 'allocation';
