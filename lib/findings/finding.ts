@@ -1,5 +1,8 @@
 export type Severity = 'blocker' | 'warning' | 'note';
 
+/** How many of the rows concerned a finding names. */
+export const ROWS_NAMED = 200;
+
 /** What a check saw. `rows` names the items concerned (the first 200), `count` says how many there are. */
 export interface Finding {
   readonly rule: string;

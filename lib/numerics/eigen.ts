@@ -10,6 +10,25 @@ export interface Eigen {
   readonly vectors: readonly [Vec3, Vec3, Vec3];
 }
 
+/** Exact, and what most component tensors are. */
+function eigenDiagonal({ xx, yy, zz }: Sym3): Eigen {
+  const pairs: { value: number; vector: Vec3 }[] = [
+    { value: xx, vector: [1, 0, 0] },
+    { value: yy, vector: [0, 1, 0] },
+    { value: zz, vector: [0, 0, 1] },
+  ];
+  return ascending(pairs);
+}
+
+function ascending(pairs: { readonly value: number; readonly vector: Vec3 }[]): Eigen {
+  const [first, second, third] = pairs.sort((p, q) => p.value - q.value);
+  if (!first || !second || !third) throw new RangeError('A 3x3 matrix has three eigenvalues.');
+  return {
+    values: [first.value, second.value, third.value],
+    vectors: [first.vector, second.vector, third.vector],
+  };
+}
+
 /**
  * Eigenvalues and eigenvectors of a symmetric 3x3 matrix.
  *
@@ -19,15 +38,7 @@ export function eigenSym(a: Sym3): Eigen {
   const size = normSym(a);
   if (!Number.isFinite(size))
     throw new RangeError('A matrix with an element that is not finite has no eigenvalues.');
-  if (size === 0)
-    return {
-      values: [0, 0, 0],
-      vectors: [
-        [1, 0, 0],
-        [0, 1, 0],
-        [0, 0, 1],
-      ],
-    };
+  if (a.xy === 0 && a.xz === 0 && a.yz === 0) return eigenDiagonal(a);
   // Scaled to norm 1, so that grams and millimetres converge like tonnes and metres.
   const scaled = [
     [a.xx / size, a.xy / size, a.xz / size],
@@ -35,16 +46,10 @@ export function eigenSym(a: Sym3): Eigen {
     [a.xz / size, a.yz / size, a.zz / size],
   ];
   const found = new EigenvalueDecomposition(new Matrix(scaled), { assumeSymmetric: true });
-  const pairs = found.realEigenvalues.map((value, k) => {
-    const [x = NaN, y = NaN, z = NaN] = found.eigenvectorMatrix.getColumn(k);
-    return { value: value * size, vector: [x, y, z] as const };
-  });
-  pairs.sort((p, q) => p.value - q.value);
-  const [first, second, third] = pairs;
-  if (!first || !second || !third)
-    throw new RangeError('The decomposition did not return three eigenvalues.');
-  return {
-    values: [first.value, second.value, third.value],
-    vectors: [first.vector, second.vector, third.vector],
-  };
+  return ascending(
+    found.realEigenvalues.map((value, k) => {
+      const [x = NaN, y = NaN, z = NaN] = found.eigenvectorMatrix.getColumn(k);
+      return { value: value * size, vector: [x, y, z] };
+    }),
+  );
 }

@@ -1,0 +1,46 @@
+import { type Component } from '@/lib/mass/component';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type RollUp } from '@/lib/mass/roll-up';
+
+import { type Finding, type Severity } from './finding';
+import { RowFacts } from './row-facts';
+import { type RotatingParts, type Rule, type Sighting } from './rule';
+import { ROTOR_RULES, ROW_RULES, WHOLE_RULES } from './rules';
+
+const ORDER: Readonly<Record<Severity, number>> = { blocker: 0, warning: 1, note: 2 };
+
+function findingsOf(seen: readonly (readonly [Rule, Sighting | null])[]): Finding[] {
+  return seen
+    .flatMap(([{ id, severity }, sighting]) =>
+      sighting === null ? [] : [{ rule: id, severity, ...sighting }],
+    )
+    .sort((a, b) => ORDER[a.severity] - ORDER[b.severity]);
+}
+
+/** Shows every row of one list to every row rule, one row at a time. */
+export class RowChecks {
+  readonly #watches = ROW_RULES.map((rule) => [rule, rule.watch()] as const);
+
+  constructor(readonly declarations: ListDeclarations) {}
+
+  see(component: Component): void {
+    const row = new RowFacts(component, this.declarations);
+    for (const [, watch] of this.#watches) watch.see(row);
+  }
+
+  /** After the last row: blockers first. */
+  findings(): Finding[] {
+    return findingsOf(this.#watches.map(([rule, watch]) => [rule, watch.report()]));
+  }
+}
+
+/** Findings on a rolled-up condition: blockers first. */
+export function findingsOnWhole(whole: RollUp, geometry: AirframeGeometry): Finding[] {
+  return findingsOf(WHOLE_RULES.map((rule) => [rule, rule.look(whole, geometry)]));
+}
+
+/** Findings on rotating parts and their operating points: blockers first. */
+export function findingsOnRotors(parts: RotatingParts): Finding[] {
+  return findingsOf(ROTOR_RULES.map((rule) => [rule, rule.look(parts)]));
+}
