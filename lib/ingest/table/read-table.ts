@@ -10,7 +10,7 @@ export interface TableReader {
   /** False ends the reading: its problems are in the log. */
   header(record: CsvRecord, delimiter: Delimiter): boolean;
   row(record: CsvRecord): void | Promise<void>;
-  progress(progress: { readonly rows: number; readonly bytes: number }): void;
+  progress?(progress: { readonly rows: number; readonly bytes: number }): void;
 }
 
 /**
@@ -43,7 +43,7 @@ export async function readTable(
   try {
     for await (const batch of readRecords(bytes, limits.recordLength)) {
       if (!(await take(batch))) return rows;
-      reader.progress({ rows, bytes: batch.bytes });
+      reader.progress?.({ rows, bytes: batch.bytes });
     }
   } catch (error) {
     if (!(error instanceof CsvFault)) throw error;
