@@ -32,3 +32,16 @@ export function createPool(url: string, max: number, onError: (error: Error) => 
 export function createDb(pool: pg.Pool): Db {
   return new Kysely<Database>({ dialect: new PostgresDialect({ pool }) });
 }
+
+/**
+ * A query builder on one connection that the caller has taken from the pool, for work that also speaks COPY on it. It never gives
+ * the connection back; the caller does.
+ */
+export function onClient(client: pg.PoolClient): Db {
+  const borrowed = {
+    query: client.query.bind(client),
+    release: () => undefined,
+  };
+  const pool = { connect: async () => borrowed, end: async () => undefined };
+  return new Kysely<Database>({ dialect: new PostgresDialect({ pool: pool as unknown as pg.Pool }) });
+}

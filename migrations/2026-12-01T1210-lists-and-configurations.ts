@@ -92,6 +92,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       status text not null,
       rows integer not null,
       pieces bigint not null,
+      memo_rows integer not null,
       basic double precision[] not null check (cardinality(basic) = 10),
       stated_predicted double precision[] not null check (cardinality(stated_predicted) = 10),
       unstated_basic double precision[] not null check (cardinality(unstated_basic) = 10),

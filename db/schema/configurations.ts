@@ -1,5 +1,6 @@
 import { type Generated } from 'kysely';
 import { type Finding } from '@/lib/findings/finding';
+import { type ConfigurationResult } from '@/lib/loading/configuration';
 import { type Category } from '@/lib/mass/component';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 import { type Json } from './lists';
@@ -64,7 +65,7 @@ export interface RollUpsTable {
   configuration_id: string;
   configuration_version: number;
   input_sha256: string;
-  result: Json<unknown>;
+  result: Json<ConfigurationResult>;
   findings: Json<Finding[]>;
   created_by: string;
   created_at: Generated<Date>;

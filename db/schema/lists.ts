@@ -97,6 +97,7 @@ export interface RevisionSubtotalsTable {
   status: ChangeStatus;
   rows: number;
   pieces: number;
+  memo_rows: number;
   basic: number[];
   stated_predicted: number[];
   unstated_basic: number[];

@@ -1,0 +1,69 @@
+import { type Category } from '@/lib/mass/component';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type GrowthAllowances, type OnBoardItem, type RollUp, rollUp } from '@/lib/mass/roll-up';
+import { type Subtotal } from '@/lib/mass/subtotals';
+import { type AngularMomentum, angularMomentum, shaftsWithoutSpeed } from '@/lib/rotors/momentum';
+import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
+
+/** One loading: the list rows of some categories, and named items. */
+export interface Condition {
+  readonly code: string;
+  readonly title: string;
+  readonly categories: readonly Category[];
+  readonly items: readonly OnBoardItem[];
+}
+
+export interface ConfigurationInput {
+  readonly geometry: AirframeGeometry;
+  readonly allowances: GrowthAllowances;
+  /** The subtotals of every pinned list revision, about the geometry's reference point. */
+  readonly subtotals: readonly Subtotal[];
+  readonly conditions: readonly Condition[];
+  readonly rotors: readonly Rotor[];
+  readonly points: readonly OperatingPoint[];
+}
+
+export interface ConditionResult {
+  readonly code: string;
+  readonly title: string;
+  readonly categories: readonly Category[];
+  readonly items: readonly OnBoardItem[];
+  readonly rollUp: RollUp;
+}
+
+export interface PointResult {
+  readonly code: string;
+  readonly title: string;
+  readonly momentum: AngularMomentum;
+}
+
+/** Everything a configuration says: SI, CG in airframe components, inertia and angular momentum in body axes. */
+export interface ConfigurationResult {
+  readonly geometry: AirframeGeometry;
+  readonly allowances: GrowthAllowances;
+  readonly conditions: readonly ConditionResult[];
+  readonly operatingPoints: readonly PointResult[];
+}
+
+/**
+ * Evaluates a configuration from its subtotals; approved adjustments only. An operating point that leaves a shaft without a speed
+ * has no angular momentum and is left out: the findings name it.
+ */
+export function evaluateConfiguration(input: ConfigurationInput): ConfigurationResult {
+  const { geometry, allowances, subtotals, conditions, rotors, points } = input;
+  return {
+    geometry,
+    allowances,
+    conditions: conditions.map((condition) => ({
+      ...condition,
+      rollUp: rollUp(subtotals, condition.items, geometry, allowances, { categories: condition.categories }),
+    })),
+    operatingPoints: points
+      .filter((point) => shaftsWithoutSpeed(rotors, point).length === 0)
+      .map((point) => ({
+        code: point.code,
+        title: point.title,
+        momentum: angularMomentum(rotors, point, geometry),
+      })),
+  };
+}

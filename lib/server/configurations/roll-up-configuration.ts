@@ -1,0 +1,150 @@
+import { createHash } from 'node:crypto';
+import canonicalize from 'canonicalize';
+import { type Db } from '@/db/client';
+import {
+  allowancesOf,
+  conditionsOf,
+  type Configuration,
+  findRotorRevision,
+  pinnedRevisions,
+  subtotalsOf,
+} from '@/db/queries/configurations';
+import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { AppError } from '@/lib/errors';
+import { type Finding } from '@/lib/findings/finding';
+import { findingsOnRotors, findingsOnWhole } from '@/lib/findings/look';
+import { type Condition, type ConfigurationResult, evaluateConfiguration } from '@/lib/loading/configuration';
+import { type Person } from '@/lib/server/actor';
+import { recordEvent } from '@/lib/server/audit/record-event';
+import { newId } from '@/lib/server/ids';
+
+/** A finding and where it was seen: a list revision, a condition, the rotating parts. */
+export interface PlacedFinding extends Finding {
+  readonly where: {
+    readonly kind: 'list' | 'condition' | 'rotors';
+    readonly code: string;
+    readonly revision?: number;
+  };
+}
+
+export interface Evaluation {
+  readonly result: ConfigurationResult;
+  readonly findings: readonly PlacedFinding[];
+  readonly inputSha256: string;
+}
+
+/**
+ * Evaluates a configuration from the stored subtotals of its pinned revisions: no row is read.
+ * @throws AppError conflict when it has no condition or no list yet.
+ */
+export async function evaluate(db: Db, configuration: Configuration): Promise<Evaluation> {
+  const [issue, pins, conditions, allowances] = await Promise.all([
+    findFrameIssue(db, configuration.frame_issue_id),
+    pinnedRevisions(db, configuration.id),
+    conditionsOf(db, configuration.id),
+    allowancesOf(db, configuration.program_id),
+  ]);
+  if (pins.length === 0)
+    throw new AppError('conflict', 'This configuration holds no list yet. Choose list revisions first.');
+  if (conditions.length === 0)
+    throw new AppError(
+      'conflict',
+      'This configuration has no condition yet. Add one, the empty aircraft for a start.',
+    );
+  const rotating =
+    configuration.rotor_revision_id === null
+      ? null
+      : await findRotorRevision(db, configuration.rotor_revision_id);
+  const geometry = geometryOf(issue);
+  const subtotals = await subtotalsOf(
+    db,
+    pins.map((pin) => pin.revision_id),
+    issue.id,
+  );
+  const loadings: Condition[] = conditions.map((condition) => ({
+    code: condition.code,
+    title: condition.title,
+    categories: condition.categories,
+    items: condition.items.map((item) => ({ name: item.name, mass: item.mass, position: vec(item.place) })),
+  }));
+  const result = evaluateConfiguration({
+    geometry,
+    allowances,
+    subtotals,
+    conditions: loadings,
+    rotors: rotating?.rotors ?? [],
+    points: rotating?.points ?? [],
+  });
+  const inputs = {
+    frameIssue: issue.id,
+    allowances,
+    lists: pins.map((pin) => ({ list: pin.list_code, revision: pin.number, sha256: pin.content_sha256 })),
+    rotors:
+      rotating === null
+        ? null
+        : { revision: rotating.number, rotors: rotating.rotors, points: rotating.points },
+    conditions: loadings,
+  };
+  return {
+    result,
+    findings: [
+      ...result.conditions.flatMap(({ code, rollUp }) =>
+        placed(findingsOnWhole(rollUp, geometry), { kind: 'condition', code }),
+      ),
+      ...placed(rotating?.findings ?? [], { kind: 'rotors', code: '', revision: rotating?.number ?? 0 }),
+      ...pins.flatMap((pin) =>
+        placed(pin.findings, { kind: 'list', code: pin.list_code, revision: pin.number }),
+      ),
+    ],
+    inputSha256: createHash('sha256')
+      .update(canonicalize(inputs) ?? '')
+      .digest('hex'),
+  };
+}
+
+/** Rolls a configuration up and keeps the result, with who asked and what it was made from. */
+export async function rollUpConfiguration(
+  db: Db,
+  input: { readonly person: Person; readonly configuration: Configuration },
+): Promise<Evaluation> {
+  const { person, configuration } = input;
+  return db
+    .transaction()
+    .setIsolationLevel('repeatable read')
+    .execute(async (trx) => {
+      const evaluation = await evaluate(trx, configuration);
+      await trx
+        .insertInto('roll_ups')
+        .values({
+          id: newId(),
+          configuration_id: configuration.id,
+          configuration_version: configuration.version,
+          input_sha256: evaluation.inputSha256,
+          result: JSON.stringify(evaluation.result),
+          findings: JSON.stringify(evaluation.findings),
+          created_by: person.userId,
+        })
+        .execute();
+      await recordEvent(trx, {
+        scope: configuration.program_id,
+        actor: person,
+        kind: 'configuration.rolled-up',
+        subject: configuration.code,
+        detail: {
+          code: configuration.code,
+          version: configuration.version,
+          inputSha256: evaluation.inputSha256,
+        },
+      });
+      return evaluation;
+    });
+}
+
+function placed(findings: readonly Finding[], where: PlacedFinding['where']): PlacedFinding[] {
+  return findings.map((finding) => ({ ...finding, where }));
+}
+
+function vec(numbers: readonly number[]): readonly [number, number, number] {
+  const [x = NaN, y = NaN, z = NaN] = numbers;
+  return [x, y, z];
+}

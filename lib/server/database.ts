@@ -1,0 +1,26 @@
+import type pg from 'pg';
+import { type Db, createDb, createPool } from '@/db/client';
+import { env } from './env';
+import { log } from './log';
+
+interface Opened {
+  readonly pool: pg.Pool;
+  readonly db: Db;
+}
+
+// Kept on globalThis: the framework may load this module more than once in a process, and there must be one pool.
+const holder = globalThis as typeof globalThis & { polhodeDatabase?: Opened };
+
+function opened(): Opened {
+  if (holder.polhodeDatabase === undefined) {
+    const pool = createPool(env().DATABASE_URL, 12, (error) =>
+      log.warn({ err: error }, 'database connection lost'),
+    );
+    holder.polhodeDatabase = { pool, db: createDb(pool) };
+  }
+  return holder.polhodeDatabase;
+}
+
+/** This process's connections to PostgreSQL as the application's role. */
+export const serverPool = (): pg.Pool => opened().pool;
+export const serverDb = (): Db => opened().db;

@@ -1,0 +1,113 @@
+import { createHash } from 'node:crypto';
+import canonicalize from 'canonicalize';
+import type pg from 'pg';
+import { type Transaction } from 'kysely';
+import { type Database } from '@/db/schema/database';
+import { type Finding } from '@/lib/findings/finding';
+import { RowChecks } from '@/lib/findings/look';
+import { toNumbers } from '@/lib/mass/account';
+import { type Component } from '@/lib/mass/component';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { Placement } from '@/lib/mass/place';
+import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
+import { RowCopy } from './copy-rows';
+import { copyLine, rowValues } from './row-codec';
+
+/** What a finished revision amounts to. */
+export interface RevisionContent {
+  readonly rows: number;
+  readonly memoRows: number;
+  readonly pieces: number;
+  readonly contentSha256: string;
+  readonly findings: readonly Finding[];
+}
+
+/**
+ * Writes the rows of one new revision: each goes to the database, into the subtotals, past the row rules and into the content
+ * hash, and none is kept. The caller holds the transaction; until it commits nobody sees anything.
+ */
+export class RevisionWriter {
+  #copy: RowCopy | null = null;
+  readonly #book: SubtotalBook;
+  readonly #rules: RowChecks;
+  readonly #hash;
+  #rows = 0;
+
+  constructor(
+    private readonly client: pg.PoolClient,
+    private readonly revisionId: string,
+    private readonly frame: { readonly id: string; readonly geometry: AirframeGeometry },
+    declarations: ListDeclarations,
+  ) {
+    this.#book = new SubtotalBook(new Placement(declarations, frame.geometry));
+    this.#rules = new RowChecks(declarations);
+    this.#hash = createHash('sha256').update(contentHead(declarations));
+  }
+
+  get rows(): number {
+    return this.#rows;
+  }
+
+  /** From the first row on the connection speaks COPY: no other query on it until `finish` or `abort`. */
+  async add(component: Component, line: number | null): Promise<void> {
+    this.#copy ??= new RowCopy(this.client, this.revisionId);
+    this.#rows += 1;
+    const values = rowValues(component, this.#rows, line);
+    this.#hash.update(contentLine(component));
+    this.#book.add(component);
+    this.#rules.see(component);
+    await this.#copy.write(copyLine(values));
+  }
+
+  /** Closes the stream of rows, then stores the subtotals in `trx`, which must be on the same connection. */
+  async finish(trx: Transaction<Database>): Promise<RevisionContent> {
+    await this.#copy?.end();
+    const subtotals = this.#book.subtotals();
+    if (subtotals.length > 0) {
+      await trx
+        .insertInto('revision_subtotals')
+        .values(subtotals.map((subtotal) => subtotalValues(this.revisionId, this.frame.id, subtotal)))
+        .execute();
+    }
+    const total = (count: (subtotal: Subtotal) => number): number =>
+      subtotals.reduce((sum, subtotal) => sum + count(subtotal), 0);
+    return {
+      rows: this.#rows,
+      memoRows: total((subtotal) => subtotal.memoRows),
+      pieces: total((subtotal) => subtotal.pieces),
+      contentSha256: this.#hash.digest('hex'),
+      findings: this.#rules.findings(),
+    };
+  }
+
+  async abort(reason: Error): Promise<void> {
+    await this.#copy?.abort(reason);
+  }
+}
+
+/** The content hash covers the declarations, then every row in its order, each as canonical JSON (RFC 8785) on a line. */
+export function contentHead(declarations: ListDeclarations): string {
+  return `${canonicalize(declarations) ?? ''}\n`;
+}
+
+export function contentLine(component: Component): string {
+  return `${canonicalize(component) ?? ''}\n`;
+}
+
+function subtotalValues(revisionId: string, frameIssueId: string, subtotal: Subtotal) {
+  return {
+    revision_id: revisionId,
+    frame_issue_id: frameIssueId,
+    group_path: subtotal.group,
+    category: subtotal.category,
+    maturity: subtotal.maturity ?? ('' as const),
+    status: subtotal.status,
+    rows: subtotal.rows,
+    pieces: subtotal.pieces,
+    memo_rows: subtotal.memoRows,
+    basic: [...toNumbers(subtotal.basic)],
+    stated_predicted: [...toNumbers(subtotal.statedPredicted)],
+    unstated_basic: [...toNumbers(subtotal.unstatedBasic)],
+  };
+}
