@@ -129,10 +129,11 @@ function Limit({
     <g>
       <line x1={x} x2={x} y1="16" y2={BAR + 5} className="stroke-limit" strokeWidth="2" />
       <text x={x} y="26" {...side} className="fill-ink text-note">
-        {word} limit
+        {word}
+        <tspan className="max-sm:hidden"> limit</tspan>
       </text>
       <text x={x} y="41" {...side} className="num fill-ink text-note">
-        {at.toFixed(1)}
+        {at.toFixed(1).replace('-', '\u2212')}
       </text>
     </g>
   );
@@ -171,8 +172,14 @@ function CgMark({
         <circle r="8" className={`fill-sheet ${ink}`} strokeWidth="2" />
         <path d="M0 0V-7A7 7 0 0 1 7 0ZM0 0V7A7 7 0 0 1 -7 0Z" className={fill} />
       </svg>
-      <text x={percent(at)} y={BAR + 54} textAnchor={anchor} className="num fill-ink text-body font-semibold">
-        CG {cg.toFixed(2)} % MAC{sigma > 0 ? ` ± ${sigma.toFixed(2)}` : ''}
+      <text x={percent(at)} y={BAR + 54} textAnchor={anchor} className="fill-ink text-body font-semibold">
+        CG <tspan className="num">{cg.toFixed(2).replace('-', '\u2212')}</tspan> % MAC
+        {sigma > 0 ? (
+          <>
+            {' ± '}
+            <tspan className="num">{sigma.toFixed(2)}</tspan>
+          </>
+        ) : null}
       </text>
     </g>
   );

@@ -141,7 +141,7 @@ function Element({
   return (
     <>
       <div className="text-left text-note text-ink-2">
-        {cell.diagonal ? null : <span className="num-minus">-</span>}
+        {cell.diagonal ? null : '\u2212'}
         <InertiaSymbol symbol={cell.symbol} />
       </div>
       <Num value={cell.value} decimals={decimals} plus={!cell.diagonal} className="max-sm:text-note" />

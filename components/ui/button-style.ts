@@ -11,10 +11,10 @@ const KINDS: Record<ButtonKind, string> = {
 
 export function buttonClass(kind: ButtonKind, extra?: string): string {
   return classes(
-    'inline-flex min-h-8 items-center justify-center gap-2 rounded border px-4 py-1 text-body font-semibold select-none',
+    'inline-flex min-h-8 items-center justify-center gap-2 rounded border py-1 text-body font-semibold select-none',
     'pointer-coarse:min-h-11 disabled:cursor-not-allowed disabled:border-rule disabled:bg-transparent disabled:text-ink-2',
     'no-print cursor-pointer text-center no-underline',
-    kind === 'quiet' && 'px-1',
+    kind === 'quiet' ? 'px-0' : 'px-4',
     KINDS[kind],
     extra,
   );

@@ -29,7 +29,7 @@ export function errorText(error: FieldWords['error']): string {
 export const CONTROL_CLASS =
   'block w-full min-h-8 rounded border border-ink-2 bg-sheet px-2 py-1 text-body text-ink placeholder:text-ink-2 ' +
   'hover:border-ink aria-invalid:border-limit pointer-coarse:min-h-11 pointer-coarse:text-lead ' +
-  'disabled:border-rule disabled:text-ink-2 read-only:bg-transparent';
+  'disabled:border-rule disabled:text-ink-2';
 
 /** Label above, hint under it, the control, the error beneath. */
 export function Field({

@@ -2,6 +2,8 @@ import { type ComponentProps, useId } from 'react';
 import { CONTROL_CLASS, Field, fieldAria, type FieldWords } from '@/components/ui/field';
 import { classes } from '@/components/ui/classes';
 
+const READ_ONLY = 'read-only:bg-transparent';
+
 type InputProps = Omit<ComponentProps<'input'>, 'className' | 'id' | 'children' | 'type'>;
 
 type TextFieldProps = FieldWords &
@@ -22,7 +24,7 @@ export function TextField({ label, hint, error, optional, mono, type = 'text', .
         {...input}
         {...fieldAria(id, words)}
         type={type}
-        className={classes(CONTROL_CLASS, mono && 'font-mono')}
+        className={classes(CONTROL_CLASS, READ_ONLY, mono && 'font-mono')}
       />
     </Field>
   );
@@ -56,7 +58,7 @@ export function NumberField({ label, hint, error, optional, unit, ...input }: Nu
           type="text"
           inputMode="decimal"
           spellCheck={false}
-          className={classes(CONTROL_CLASS, 'num text-right', unit && unitRoom(unit))}
+          className={classes(CONTROL_CLASS, READ_ONLY, 'num text-right', unit && unitRoom(unit))}
         />
         {unit ? (
           <span
