@@ -1,9 +1,24 @@
+// For every answer. proxy.ts adds what pages need: the content security policy with its nonce, and HSTS on https.
+const headers = [
+  { key: 'X-Content-Type-Options', value: 'nosniff' },
+  { key: 'Referrer-Policy', value: 'same-origin' },
+  { key: 'Permissions-Policy', value: 'camera=(), geolocation=(), microphone=(), payment=(), usb=()' },
+  { key: 'Cross-Origin-Opener-Policy', value: 'same-origin' },
+  { key: 'Cross-Origin-Resource-Policy', value: 'same-origin' },
+];
+// Answers of the API are data and show nothing.
+const apiHeaders = [{ key: 'Content-Security-Policy', value: "default-src 'none'; frame-ancestors 'none'" }];
+
 /** @type {import('next').NextConfig} */
 const config = {
   poweredByHeader: false,
   reactStrictMode: true,
   typedRoutes: false,
   serverExternalPackages: ['pg', 'graphile-worker', 'pino', '@node-rs/argon2'],
-  experimental: { turbopackFileSystemCacheForBuild: false },
+  experimental: { turbopackFileSystemCacheForBuild: false, authInterrupts: true },
+  headers: async () => [
+    { source: '/:path*', headers },
+    { source: '/api/:path*', headers: apiHeaders },
+  ],
 };
 export default config;

@@ -9,9 +9,7 @@ import { serverDb, serverPool } from '@/lib/server/database';
 import { env } from '@/lib/server/env';
 import { type ProgramAccess, requireProgramAction, requireSiteAction } from './access';
 import { clientAddress } from './client-address';
-
-/** Set by proxy.ts, so that sign-in can lead back. */
-export const PATH_HEADER = 'x-polhode-path';
+import { PATH_HEADER } from './path-header';
 
 /** Whose session the request carries; asked once per request. */
 export const currentUser = cache(async (): Promise<SignedIn | null> => {

@@ -1,5 +1,14 @@
 import { EventEmitter } from 'node:events';
-import { type Runner, type TaskList, type WorkerEvents, Logger, makeWorkerUtils, run } from 'graphile-worker';
+import {
+  type Runner,
+  type TaskList,
+  type WorkerEvents,
+  type CronItem,
+  Logger,
+  makeWorkerUtils,
+  parseCronItems,
+  run,
+} from 'graphile-worker';
 import type pg from 'pg';
 import { type Db } from '@/db/client';
 import { log } from '@/lib/server/log';
@@ -21,6 +30,7 @@ export async function startRunner(options: {
   readonly pool: pg.Pool;
   readonly db: Db;
   readonly tasks: TaskList;
+  readonly cron?: readonly CronItem[];
   readonly concurrency?: number;
 }): Promise<JobRunner> {
   const { pool, db, tasks } = options;
@@ -36,7 +46,7 @@ export async function startRunner(options: {
     taskList: tasks,
     concurrency: options.concurrency ?? 2,
     noHandleSignals: true,
-    parsedCronItems: [],
+    parsedCronItems: parseCronItems([...(options.cron ?? [])]),
     pollInterval: 1000,
     logger: quiet,
     events: registering(db, lease),

@@ -79,3 +79,13 @@ export function rateHeaders(state: RateState): Record<string, string> {
     ...(state.allowed ? {} : { 'Retry-After': String(state.reset) }),
   };
 }
+
+/** Gives one back: what turned out well does not count. */
+export async function giveBack(db: Db, policy: RatePolicy, key: string): Promise<void> {
+  await db
+    .updateTable('rate_limits')
+    .set((eb) => ({ count: eb('count', '-', 1) }))
+    .where('bucket', '=', bucketOf(policy, key))
+    .where('count', '>', 0)
+    .execute();
+}
