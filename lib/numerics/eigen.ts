@@ -38,12 +38,16 @@ export function eigenSym(a: Sym3): Eigen {
   const size = normSym(a);
   if (!Number.isFinite(size))
     throw new RangeError('A matrix with an element that is not finite has no eigenvalues.');
-  if (a.xy === 0 && a.xz === 0 && a.yz === 0) return eigenDiagonal(a);
-  // Scaled to norm 1, so that grams and millimetres converge like tonnes and metres.
+  if (size === 0) return eigenDiagonal(a);
+  // Scaled to norm 1, so that grams and millimetres converge like tonnes and metres. What is then below 1e-30 cannot be seen in any
+  // eigenvalue, and its square may underflow inside the decomposition, which divides by it.
+  const part = (element: number): number => (Math.abs(element) < 1e-30 * size ? 0 : element / size);
+  const [xy, xz, yz] = [part(a.xy), part(a.xz), part(a.yz)];
+  if (xy === 0 && xz === 0 && yz === 0) return eigenDiagonal(a);
   const scaled = [
-    [a.xx / size, a.xy / size, a.xz / size],
-    [a.xy / size, a.yy / size, a.yz / size],
-    [a.xz / size, a.yz / size, a.zz / size],
+    [part(a.xx), xy, xz],
+    [xy, part(a.yy), yz],
+    [xz, yz, part(a.zz)],
   ];
   const found = new EigenvalueDecomposition(new Matrix(scaled), { assumeSymmetric: true });
   return ascending(
