@@ -28,6 +28,8 @@ async function provideTemplate(): Promise<void> {
     if (rowCount === 0) await createDatabase(client, TEMPLATE);
     return rowCount === 0;
   });
+  // Nobody's database; its name tells whoever connects what to do.
+  process.env['DATABASE_URL'] = databaseUrl(APP, cluster.app, cluster.port, 'call_createTestDatabase_first');
   if (isNew) await migrateToLatest(databaseUrl(OWNER, cluster.owner, cluster.port, TEMPLATE), APP);
 }
 

@@ -1,6 +1,6 @@
-import { useLocalServices } from './local-env';
+import { findLocalServices } from './local-env';
 import { migrate } from './schema';
 
-useLocalServices();
+findLocalServices();
 const done = await migrate();
 console.log(done.length === 0 ? 'The database is up to date.' : `Ran ${done.join(', ')}.`);

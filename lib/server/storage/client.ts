@@ -15,6 +15,8 @@ export interface StoreSettings {
   readonly secretAccessKey: string;
   /** How long the store may stay silent, ms. */
   readonly patience?: number;
+  /** How often a request is made before it has failed. */
+  readonly attempts?: number;
 }
 
 export function createStore(settings: StoreSettings): ObjectStore {
@@ -28,7 +30,7 @@ export function createStore(settings: StoreSettings): ObjectStore {
     requestChecksumCalculation: 'WHEN_REQUIRED',
     responseChecksumValidation: 'WHEN_REQUIRED',
     expectContinueHeader: false,
-    maxAttempts: 3,
+    maxAttempts: settings.attempts ?? 3,
     requestHandler: { connectionTimeout: 5000, socketTimeout: patience },
   });
   return { client, bucket: settings.bucket };

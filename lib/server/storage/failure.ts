@@ -17,7 +17,7 @@ export function storeFailed(what: string, error: unknown): AppError {
   const why = isDamaged
     ? 'the bytes did not arrive there unharmed'
     : 'the file store does not answer as it should';
-  return new AppError('unavailable', `${what}: ${why}. Nothing was kept; try again.`, {
+  return new AppError('unavailable', `${what}: ${why}. Try again later.`, {
     cause: error,
     retryAfter: 30,
   });

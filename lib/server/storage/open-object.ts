@@ -8,8 +8,9 @@ import { Measure } from './measure';
 
 /** Whether the bytes with this SHA-256 are kept. */
 export async function objectExists(sha256: string, store: ObjectStore = objectStore()): Promise<boolean> {
+  const Key = keyOf(sha256);
   try {
-    await store.client.send(new HeadObjectCommand({ Bucket: store.bucket, Key: keyOf(sha256) }));
+    await store.client.send(new HeadObjectCommand({ Bucket: store.bucket, Key }));
     return true;
   } catch (error) {
     if (isMissing(error)) return false;
@@ -22,7 +23,7 @@ export async function objectExists(sha256: string, store: ObjectStore = objectSt
  * were stored, so read to the end before trusting them. Throws AppError `not-found`, or `unavailable` if the store fails.
  */
 export async function openObject(sha256: string, store: ObjectStore = objectStore()): Promise<Readable> {
-  const body = await bodyOf(sha256, store);
+  const body = await bodyOf(keyOf(sha256), store);
   const check = new Measure(
     () => undefined,
     (found) => {
@@ -34,11 +35,9 @@ export async function openObject(sha256: string, store: ObjectStore = objectStor
   return body.pipe(check);
 }
 
-async function bodyOf(sha256: string, store: ObjectStore): Promise<Readable> {
+async function bodyOf(Key: string, store: ObjectStore): Promise<Readable> {
   try {
-    const { Body } = await store.client.send(
-      new GetObjectCommand({ Bucket: store.bucket, Key: keyOf(sha256) }),
-    );
+    const { Body } = await store.client.send(new GetObjectCommand({ Bucket: store.bucket, Key }));
     if (Body instanceof Readable) return Body;
     throw new Error('The store gave no stream.');
   } catch (error) {

@@ -54,7 +54,7 @@ export async function storeStream(source: Readable, options: StoreStreamOptions)
     return { sha256, bytes };
   } catch (error) {
     measure.destroy();
-    throw storeFailed('The file was not stored', measure.errored ?? error);
+    throw storeFailed('The file was not stored and nothing of it was kept', measure.errored ?? error);
   } finally {
     source.off('error', fail);
     signal?.removeEventListener('abort', abort);

@@ -71,8 +71,9 @@ async function handle(
 
 function refuse(request: IncomingMessage, response: ServerResponse, error: unknown): void {
   const known = error instanceof S3Error ? error : new S3Error(500, 'InternalError', String(error));
-  if (!(error instanceof S3Error) && !request.destroyed) console.error(error);
-  if (response.headersSent || request.destroyed) {
+  const isGone = request.socket.destroyed;
+  if (!(error instanceof S3Error) && !isGone) console.error(error);
+  if (response.headersSent || isGone) {
     response.destroy();
     return;
   }
