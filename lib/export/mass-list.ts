@@ -10,10 +10,17 @@ import {
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 
+/** A row as the file holds it: numbers in the list's own units and signs, null where a cell is blank. */
+export type ListCells = Readonly<Record<ListColumn, string | number | null>>;
+
 /** Writes the lines of a mass list one after another, CRLF included. */
 export interface MassListWriter {
+  readonly columns: readonly ListColumn[];
   readonly header: string;
+  cells(component: Component): ListCells;
   line(component: Component): string;
+  /** The line of a row given cell by cell; `own` holds the texts of the list's own columns. */
+  lineOf(cells: ListCells, own: Readonly<Record<string, string>>): string;
 }
 
 /**
@@ -24,28 +31,27 @@ export function massListWriter(declarations: ListDeclarations, own: readonly str
   const scales = listScales(declarations);
   const left: readonly ListColumn[] = declarations.kind === 'components' ? CHANGE_COLUMNS : [];
   const columns = LIST_COLUMNS.filter((column) => !left.includes(column));
+  const cells = (component: Component): ListCells =>
+    cellsOf(component, (value, column) => (value === null ? null : typedNumber(value, scales[column])));
+  const lineOf: MassListWriter['lineOf'] = (row, texts) =>
+    csvLine([...columns.map((column) => row[column]), ...own.map((name) => ownText(texts, name))]);
   return {
+    columns,
     header: csvLine([...columns, ...own]),
-    line(component) {
-      const cells = cellsOf(component, (value, column) =>
-        value === null ? null : typedNumber(value, scales[column]),
-      );
-      return csvLine([
-        ...columns.map((column) => cells[column]),
-        ...own.map((name) => ownText(component, name)),
-      ]);
-    },
+    cells,
+    line: (component) => lineOf(cells(component), component.extra),
+    lineOf,
   };
 }
 
-function ownText({ extra }: Component, name: string): string | null {
-  return Object.hasOwn(extra, name) ? (extra[name] ?? null) : null;
+function ownText(texts: Readonly<Record<string, string>>, name: string): string | null {
+  return Object.hasOwn(texts, name) ? (texts[name] ?? null) : null;
 }
 
 function cellsOf(
   row: Component,
   typed: (value: number | null, column: ScaledColumn) => number | null,
-): Record<ListColumn, string | number | null> {
+): ListCells {
   const { moments, position, orientation, sigma } = row;
   return {
     item: row.item,

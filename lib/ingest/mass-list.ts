@@ -1,6 +1,6 @@
 import { Cells } from '@/lib/ingest/table/cells';
 import { readComponent } from '@/lib/ingest/mass-list/component-row';
-import { type ColumnMapping, type Header, readHeader } from '@/lib/ingest/table/header';
+import { type ColumnMapping, type HeaderProblem, readHeader } from '@/lib/ingest/table/header';
 import { ItemTree } from '@/lib/ingest/mass-list/item-tree';
 import { type IngestLimits, MASS_LIST_LIMITS } from '@/lib/ingest/limits';
 import {
@@ -33,7 +33,7 @@ export interface MassListReading {
   readonly problems: readonly Problem[];
   /** The number of every kind of problem. */
   readonly problemCounts: Readonly<Record<string, number>>;
-  /** Names of the file's own columns, as the file has them. */
+  /** Names of the file's own columns, as the file has them; also of a file whose header is not right, so that they can be mapped. */
   readonly unknownColumns: readonly string[];
 }
 
@@ -54,58 +54,53 @@ export async function readMassList(
   const problemsSoFar = (): number => log.total;
   let cells: Cells<ListColumn> | null = null;
   let key: ListColumn = 'item';
+  let unknownColumns: readonly string[] = [];
+  let everyRow = true;
 
-  const rows = await readTable(bytes, limits, log, {
+  const { rows, whole } = await readTable(bytes, limits, log, {
     header(record, delimiter) {
-      const header = readHeader(
-        record,
-        { columns: LIST_COLUMNS, needed: NEEDED_COLUMNS, mapping, maxColumns: limits.columns },
-        log,
-      );
-      if (header === null || !keysStand(header, declarations, log)) return false;
+      const check = (positions: ReadonlyMap<ListColumn, number>, problem: HeaderProblem): void =>
+        checkKeys(positions, declarations, problem);
+      const { columns: maxColumns, fieldLength } = limits;
+      const contract = { columns: LIST_COLUMNS, needed: NEEDED_COLUMNS, mapping, maxColumns, check };
+      const header = readHeader(record, contract, log);
+      unknownColumns = header.own.map(({ name }) => name);
       key = header.positions.has('item') ? 'item' : 'part_number';
-      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength: limits.fieldLength });
-      return true;
+      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength });
+      return log.total === 0;
     },
     row(record) {
-      if (cells === null || !cells.load(record)) return;
+      if (cells === null) return;
+      if (!cells.load(record)) {
+        everyRow = false;
+        return;
+      }
       const component = readComponent(cells, scales, declarations, problemsSoFar);
       const item = component?.item ?? cells.text(key);
       const fresh = item !== null && tree.add(item, cells.text('parent'), record.line, key);
       if (component !== null && fresh) return onComponent(component, record.line);
     },
-    progress(progress) {
-      onProgress?.(progress);
-    },
+    progress: (progress) => onProgress?.(progress),
   });
-  const read = cells as Cells<ListColumn> | null;
-  if (read !== null) {
-    read.finish();
-    tree.finish();
-  }
-  return {
-    rows,
-    problems: log.problems(),
-    problemCounts: log.counts(),
-    unknownColumns: read === null ? [] : read.header.own.map(({ name }) => name),
-  };
+  (cells as Cells<ListColumn> | null)?.finish();
+  // A parent may stand in a row that could not be read.
+  if (whole && everyRow) tree.finish();
+  return { rows, problems: log.problems(), problemCounts: log.counts(), unknownColumns };
 }
 
 /** A list needs item or part_number; columns of changes belong to adjustments. */
-function keysStand(
-  { positions, line }: Header<ListColumn>,
+function checkKeys(
+  positions: ReadonlyMap<ListColumn, number>,
   { kind }: ListDeclarations,
-  log: ProblemLog,
-): boolean {
-  const before = log.total;
+  problem: HeaderProblem,
+): void {
   if (!positions.has('item') && !positions.has('part_number')) {
     const message = 'The column item is missing. Add it, or a part_number that is unique in the list.';
-    log.add({ kind: 'missing-column', line, column: 'item', found: null, message });
+    problem('missing-column', 'item', null, message);
   }
   for (const column of kind === 'components' ? CHANGE_COLUMNS : []) {
     if (!positions.has(column)) continue;
     const message = `The column ${column} belongs to lists of kind adjustments. Declare the list so, or rename the column.`;
-    log.add({ kind: 'adjustments-only-column', line, column, found: column, message });
+    problem('adjustments-only-column', column, column, message);
   }
-  return log.total === before;
 }

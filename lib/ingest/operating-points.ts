@@ -39,24 +39,23 @@ export async function readOperatingPoints(
   const log = new ProblemLog();
   const drafts = new Map<string, Draft>();
   let cells: Cells<PointColumn> | null = null;
+  let unknownColumns: readonly string[] = [];
 
   await readTable(bytes, limits, log, {
     header(record, delimiter) {
-      const header = readHeader(
-        record,
-        { columns: POINT_COLUMNS, needed: ['point', 'shaft', 'rpm'], mapping, maxColumns: limits.columns },
-        log,
-      );
-      if (header === null) return false;
-      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength: limits.fieldLength });
-      return true;
+      const needed: readonly PointColumn[] = ['point', 'shaft', 'rpm'];
+      const { columns: maxColumns, fieldLength } = limits;
+      const contract = { columns: POINT_COLUMNS, needed, mapping, maxColumns, check: () => undefined };
+      const header = readHeader(record, contract, log);
+      unknownColumns = header.own.map(({ name }) => name);
+      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength });
+      return log.total === 0;
     },
     row(record) {
       if (cells !== null && cells.load(record)) readRow(cells, drafts);
     },
   });
-  const read = cells as Cells<PointColumn> | null;
-  read?.finish();
+  (cells as Cells<PointColumn> | null)?.finish();
   return {
     points: Array.from(drafts, ([code, { title, speeds }]) => ({
       code,
@@ -65,7 +64,7 @@ export async function readOperatingPoints(
     })),
     problems: log.problems(),
     problemCounts: log.counts(),
-    unknownColumns: read === null ? [] : read.header.own.map(({ name }) => name),
+    unknownColumns,
   };
 }
 

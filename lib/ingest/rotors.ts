@@ -3,7 +3,7 @@ import { type Problem } from '@/lib/ingest/problem';
 import { ProblemLog } from '@/lib/ingest/problem-log';
 import { ROTOR_COLUMNS, type RotorColumn, readRotor } from '@/lib/ingest/rotors/rotor-row';
 import { Cells } from '@/lib/ingest/table/cells';
-import { type ColumnMapping, readHeader } from '@/lib/ingest/table/header';
+import { type ColumnMapping, type HeaderProblem, readHeader } from '@/lib/ingest/table/header';
 import { readTable } from '@/lib/ingest/table/read-table';
 import { type Rotor } from '@/lib/rotors/rotor';
 import { FACTORS, type InertiaUnit } from '@/lib/units/table';
@@ -36,22 +36,17 @@ export async function readRotors(
   const rotors: Rotor[] = [];
   const lines = new Map<string, number>();
   let cells: Cells<RotorColumn> | null = null;
+  let unknownColumns: readonly string[] = [];
 
   await readTable(bytes, limits, log, {
     header(record, delimiter) {
-      const header = readHeader(
-        record,
-        {
-          columns: ROTOR_COLUMNS,
-          needed: ['rotor', 'polar_inertia', 'sense'],
-          mapping,
-          maxColumns: limits.columns,
-        },
-        log,
-      );
-      if (header === null || !axisStands(header.positions, header.line, log)) return false;
-      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength: limits.fieldLength });
-      return true;
+      const needed: readonly RotorColumn[] = ['rotor', 'polar_inertia', 'sense'];
+      const { columns: maxColumns, fieldLength } = limits;
+      const contract = { columns: ROTOR_COLUMNS, needed, mapping, maxColumns, check: checkAxis };
+      const header = readHeader(record, contract, log);
+      unknownColumns = header.own.map(({ name }) => name);
+      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength });
+      return log.total === 0;
     },
     row(record) {
       if (cells === null || !cells.load(record)) return;
@@ -68,23 +63,16 @@ export async function readRotors(
       if (rotor !== null) rotors.push(rotor);
     },
   });
-  const read = cells as Cells<RotorColumn> | null;
-  read?.finish();
-  return {
-    rotors,
-    problems: log.problems(),
-    problemCounts: log.counts(),
-    unknownColumns: read === null ? [] : read.header.own.map(({ name }) => name),
-  };
+  (cells as Cells<RotorColumn> | null)?.finish();
+  return { rotors, problems: log.problems(), problemCounts: log.counts(), unknownColumns };
 }
 
 /** A file gives its axes as arrows, as angles, or some rows so and some so. */
-function axisStands(positions: ReadonlyMap<RotorColumn, number>, line: number, log: ProblemLog): boolean {
+function checkAxis(positions: ReadonlyMap<RotorColumn, number>, problem: HeaderProblem): void {
   const arrow = (['axis_x', 'axis_y', 'axis_z'] as const).filter((column) => positions.has(column)).length;
   const angles = (['axis_yaw', 'axis_pitch'] as const).filter((column) => positions.has(column)).length;
-  if ((arrow === 3 || arrow === 0) && (angles === 2 || angles === 0) && arrow + angles > 0) return true;
+  if ((arrow === 3 || arrow === 0) && (angles === 2 || angles === 0) && arrow + angles > 0) return;
   const message =
     'A shaft needs axis_x, axis_y and axis_z, or axis_yaw and axis_pitch. Add the missing columns.';
-  log.add({ kind: 'missing-column', line, column: arrow > 0 ? 'axis_x' : 'axis_yaw', found: null, message });
-  return false;
+  problem('missing-column', arrow > 0 ? 'axis_x' : 'axis_yaw', null, message);
 }

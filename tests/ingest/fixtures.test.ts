@@ -60,11 +60,11 @@ describe('a right mass list', () => {
 describe('a wrong mass list', () => {
   const folder = 'lists/invalid';
   const names = fixtureNames(folder);
-  const undeclared = names.filter(
+  const incomplete = names.filter(
     (name) => fixtureExpectation<InvalidFile>(folder, name).undeclared !== undefined,
   );
 
-  it.each(names.filter((name) => !undeclared.includes(name)))('%s gives its problems', async (name) => {
+  it.each(names.filter((name) => !incomplete.includes(name)))('%s gives its problems', async (name) => {
     const wanted = fixtureExpectation<InvalidFile>(folder, name);
     const { problems, problemCounts } = await readList(
       fixtureBytes(folder, name),
@@ -77,16 +77,16 @@ describe('a wrong mass list', () => {
     expect(problemCounts).toEqual(Object.fromEntries(counts));
   });
 
-  it.each(undeclared)('%s is refused by its declarations', async (name) => {
+  it.each(incomplete)('%s is refused by its declarations', async (name) => {
     const { declarations, undeclared: member } = fixtureExpectation<InvalidFile>(folder, name);
     const { error } = listDeclarationsSchema.safeParse(declarations);
     expect(error?.issues.map(({ path }) => path.join('.'))).toEqual([member]);
   });
 
   it('is never read with a unit that nobody declared', async () => {
-    const { inertiaUnit: _left, ...rest } = declare();
-    const bytes = fixtureBytes(folder, 'undeclared-unit');
-    await expect(readList(bytes, rest as ListDeclarations)).rejects.toThrow('inertia_unit');
+    const bytes = fixtureBytes('lists/invalid', 'undeclared-unit');
+    const undeclared = { ...declare(), inertiaUnit: undefined } as unknown as ListDeclarations;
+    await expect(readList(bytes, undeclared)).rejects.toThrow('inertia_unit');
   });
 });
 

@@ -14,22 +14,33 @@ export interface Header<C extends string> {
 /** Header names of a file that stand for columns of the contract, as its list remembers them. */
 export type ColumnMapping<C extends string> = Readonly<Record<string, C>>;
 
+/** Logs a problem of the header row. */
+export type HeaderProblem = (
+  kind: string,
+  column: string | null,
+  found: string | null,
+  message: string,
+) => void;
+
+/** What a header row must hold; `check` may log what is wrong with the columns as a whole. */
+export interface HeaderContract<C extends string> {
+  readonly columns: readonly C[];
+  readonly needed: readonly C[];
+  readonly mapping: ColumnMapping<C>;
+  readonly maxColumns: number;
+  readonly check: (positions: ReadonlyMap<C, number>, problem: HeaderProblem) => void;
+}
+
 /**
  * Reads a header row: known names in any case and order, mapped names, and columns of the file's own.
- * Logs names that are missing, stand twice or are blank before others; null when there were any.
+ * Logs names that are missing, stand twice or are blank before others; the rows can be read where none was logged.
  */
 export function readHeader<C extends string>(
   record: CsvRecord,
-  contract: {
-    readonly columns: readonly C[];
-    readonly needed: readonly C[];
-    readonly mapping: ColumnMapping<C>;
-    readonly maxColumns: number;
-  },
+  contract: HeaderContract<C>,
   log: ProblemLog,
-): Header<C> | null {
-  const before = log.total;
-  const problem = (kind: string, column: string | null, found: string | null, message: string): void =>
+): Header<C> {
+  const problem: HeaderProblem = (kind, column, found, message) =>
     log.add({ kind, line: record.line, column, found, message });
 
   const texts = record.fields.map((field) => restoreFormula(field.trim()));
@@ -37,7 +48,7 @@ export function readHeader<C extends string>(
   if (width > contract.maxColumns) {
     const message = `The file has ${width} columns; at most ${contract.maxColumns} are read. Leave some out.`;
     problem('too-many-columns', null, null, message);
-    return null;
+    return { line: record.line, positions: new Map(), own: [], names: [], width };
   }
   if (record.misplacedQuote !== null) problem('misplaced-quote', null, '"', 'A quote stands within a name.');
 
@@ -62,7 +73,7 @@ export function readHeader<C extends string>(
     const message = `The column ${column} is missing. Add it, or map one of the file's columns to it.`;
     problem('missing-column', column, null, message);
   }
-  if (log.total > before) return null;
+  contract.check(positions, problem);
   return {
     line: record.line,
     positions,

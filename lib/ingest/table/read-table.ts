@@ -14,7 +14,8 @@ export interface TableReader {
 }
 
 /**
- * Runs through a CSV file once, a row at a time; a row's promise is awaited before the next. Returns the number of rows.
+ * Runs through a CSV file once, a row at a time; a row's promise is awaited before the next.
+ * Returns the number of rows and whether the file was read to its end.
  * Faults of the file go to the log; errors of the source and of the reader pass through.
  */
 export async function readTable(
@@ -22,7 +23,7 @@ export async function readTable(
   limits: IngestLimits,
   log: ProblemLog,
   reader: TableReader,
-): Promise<number> {
+): Promise<{ readonly rows: number; readonly whole: boolean }> {
   let rows = 0;
   let header = false;
   const take = async ({ records, delimiter }: CsvBatch): Promise<boolean> => {
@@ -42,18 +43,18 @@ export async function readTable(
 
   try {
     for await (const batch of readRecords(bytes, limits.recordLength)) {
-      if (!(await take(batch))) return rows;
+      if (!(await take(batch))) return { rows, whole: false };
       reader.progress?.({ rows, bytes: batch.bytes });
     }
   } catch (error) {
     if (!(error instanceof CsvFault)) throw error;
     log.add(error.problem);
-    return rows;
+    return { rows, whole: false };
   }
   if (!header)
     log.add(fileProblem('empty-file', 'The file is empty. It needs a header row and at least one row.'));
   else if (rows === 0) log.add(fileProblem('no-rows', 'The file has a header row and no rows.'));
-  return rows;
+  return { rows, whole: true };
 }
 
 function tooManyRows(line: number, rows: number): CsvFault {
