@@ -9,8 +9,15 @@ const headers = [
 // Answers of the API are data and show nothing.
 const apiHeaders = [{ key: 'Content-Security-Policy', value: "default-src 'none'; frame-ancestors 'none'" }];
 
+// npm test builds beside what is served, from sources whose types it has checked, and with a tsconfig that next may rewrite.
+const distDir = process.env.NEXT_DIST_DIR ?? '.next';
+const typescript =
+  distDir === '.next' ? {} : { ignoreBuildErrors: true, tsconfigPath: '.test-data/tsconfig.json' };
+
 /** @type {import('next').NextConfig} */
 const config = {
+  distDir,
+  typescript,
   poweredByHeader: false,
   reactStrictMode: true,
   typedRoutes: false,

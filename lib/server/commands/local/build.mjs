@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import { ROOT } from './places.mjs';
+import { ROOT, TEST_DATA } from './places.mjs';
 
 /** Everything that `next build` reads. */
 const SOURCES = [
@@ -51,6 +51,10 @@ export async function ensureBuild(children, distDir, log) {
   const sources = hashOfSources();
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === sources) return;
   console.log('Building (about a minute) ...');
+  if (distDir !== '.next') {
+    mkdirSync(TEST_DATA, { recursive: true });
+    writeFileSync(path.join(TEST_DATA, 'tsconfig.json'), '{ "extends": "../tsconfig.json" }\n');
+  }
   rmSync(stamp, { force: true });
   rmSync(log, { force: true });
   await children.finish({

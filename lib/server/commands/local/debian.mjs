@@ -49,3 +49,16 @@ export function installFromDebian(packageName, otherwise) {
     if (status !== 0) throw new Failure(`apt-get ${args.join(' ')} failed. ${remedy}`);
   }
 }
+
+/**
+ * The browser that tests drive: CHROMIUM_BIN, or one on PATH, or Debian's, installed if it must be.
+ * @returns {string}
+ */
+export function chromium() {
+  const find = () => process.env.CHROMIUM_BIN ?? onPath(['chromium', 'chromium-browser', 'google-chrome']);
+  if (!find()) installFromDebian('chromium', 'or set CHROMIUM_BIN to its program');
+  const found = find();
+  if (!found)
+    throw new Failure('chromium was installed and is still not on PATH; set CHROMIUM_BIN to its program.');
+  return found;
+}
