@@ -1,0 +1,183 @@
+'use client';
+
+import { type ClipboardEvent, type KeyboardEvent, useId, useMemo, useRef, useState } from 'react';
+import { type CellValue, columnWidth, type DataColumn } from '@/components/data-table/column';
+import { toTsv } from '@/components/data-table/export-text';
+import { GridLine } from '@/components/data-table/grid-line';
+import { GridHead, GridFoot } from '@/components/data-table/grid-ends';
+import { type Line } from '@/components/data-table/lines';
+import { at, bounds, moved, type Selection } from '@/components/data-table/selection';
+import { nextSort, type TableView } from '@/components/data-table/view';
+import { usePrinting, useRowHeight } from '@/components/data-table/surroundings';
+import { useRowWindow } from '@/components/data-table/use-row-window';
+import { Button } from '@/components/ui/button';
+
+interface GridProps<Row> {
+  readonly caption: string;
+  readonly columns: readonly DataColumn<Row>[];
+  readonly lines: readonly Line<Row>[];
+  readonly shown: readonly Row[];
+  readonly total: number;
+  readonly of: string;
+  readonly view: TableView;
+  readonly onView: (view: TableView) => void;
+  readonly loading: string | null;
+  readonly totals: Readonly<Record<string, CellValue>> | undefined;
+  readonly opens: boolean;
+  readonly onPlain: () => void;
+}
+
+/** Rows that go on paper; more than these belong in the CSV. */
+const MOST_PRINTED = 2000;
+
+/** The ruled grid itself: only the lines in sight are in the document. */
+export function Grid<Row>(props: GridProps<Row>) {
+  const { caption, columns, lines, shown, total, of, view, onView, loading, totals, opens, onPlain } = props;
+  const id = useId();
+  const box = useRef<HTMLDivElement>(null);
+  const rowHeight = useRowHeight();
+  const printing = usePrinting();
+  const [kept, setKept] = useState<{ readonly lines: readonly Line<Row>[]; readonly selection: Selection }>();
+  const selection = kept?.lines === lines ? kept.selection : at(0, 0);
+  const setSelection = (next: Selection) => setKept({ lines, selection: next });
+  const chosen = bounds(selection);
+
+  const rowWindow = useRowWindow(box, lines.length, rowHeight);
+  const first = printing ? 0 : rowWindow.first;
+  const last = printing ? Math.min(lines.length, MOST_PRINTED) : rowWindow.last;
+  const width = useMemo(() => columns.reduce((sum, column) => sum + columnWidth(column), 0), [columns]);
+
+  const go = (next: Selection) => {
+    setSelection(next);
+    rowWindow.show(next.head.line);
+    box.current?.querySelector(`[data-column="${next.head.column}"]`)?.scrollIntoView({
+      block: 'nearest',
+      inline: 'nearest',
+    });
+  };
+  const openLine = (line: number) => {
+    const target = lines[line];
+    if (opens && target?.kind === 'row') onView({ ...view, open: target.id });
+  };
+  const onKeyDown = (event: KeyboardEvent<HTMLTableElement>) => {
+    if (event.target !== event.currentTarget || event.altKey || lines.length === 0) return;
+    const screen = Math.max(1, Math.floor(((box.current?.clientHeight ?? 640) - 60) / rowHeight));
+    const press = { key: event.key, shift: event.shiftKey, control: event.ctrlKey || event.metaKey };
+    const next = moved(selection, press, { lines: lines.length, columns: columns.length, screen });
+    if (next) go(next);
+    else if (event.key === 'Enter') openLine(selection.head.line);
+    else return;
+    event.preventDefault();
+  };
+  const onCopy = (event: ClipboardEvent) => {
+    if (window.getSelection()?.isCollapsed === false || lines.length === 0) return;
+    const picked = lines.slice(chosen.top, chosen.bottom + 1).filter((line) => line.kind === 'row');
+    const across = columns.slice(chosen.left, chosen.right + 1);
+    const whole = picked.length === shown.length && shown.length > 1;
+    event.clipboardData.setData(
+      'text/plain',
+      toTsv(
+        across,
+        picked.map((line) => line.row),
+        whole,
+      ),
+    );
+    event.preventDefault();
+  };
+
+  return (
+    <div ref={box} className="print-whole max-h-[70vh] min-w-0 overflow-auto border-b border-ink-2">
+      <table
+        role="grid"
+        tabIndex={0}
+        aria-label={caption}
+        aria-rowcount={lines.length + 1}
+        aria-colcount={columns.length}
+        aria-multiselectable="true"
+        aria-busy={loading !== null}
+        aria-activedescendant={
+          lines.length > 0 ? `${id}-${selection.head.line}-${selection.head.column}` : undefined
+        }
+        onKeyDown={onKeyDown}
+        onCopy={onCopy}
+        className="ruled grid-table w-full border-separate border-spacing-0"
+        style={{ minWidth: width }}
+      >
+        <colgroup>
+          {columns.map((column) => (
+            <col key={column.id} style={{ width: columnWidth(column) }} />
+          ))}
+        </colgroup>
+        <GridHead
+          columns={columns}
+          sort={view.sort}
+          onSort={(column) => onView({ ...view, sort: nextSort(view.sort, column) })}
+        />
+        <tbody>
+          <Spacer height={first * rowHeight} columns={columns.length} />
+          {lines.slice(first, last).map((line, offset) => (
+            <GridLine
+              key={line.id}
+              gridId={id}
+              line={line}
+              index={first + offset}
+              columns={columns}
+              chosen={chosen}
+              active={selection.head}
+              isOpen={line.kind === 'row' && view.open === line.id}
+              onPick={(place, extend) =>
+                setSelection(
+                  extend ? { anchor: selection.anchor, head: place } : { anchor: place, head: place },
+                )
+              }
+              onOpen={() => openLine(first + offset)}
+            />
+          ))}
+          {printing ? null : <Spacer height={(lines.length - last) * rowHeight} columns={columns.length} />}
+          {lines.length === 0 ? (
+            <tr>
+              <td colSpan={columns.length}>
+                <Nothing loading={loading} of={of} onPlain={onPlain} />
+              </td>
+            </tr>
+          ) : null}
+        </tbody>
+        <GridFoot columns={columns} rows={shown} total={total} of={of} totals={totals} />
+      </table>
+      {printing && lines.length > MOST_PRINTED ? (
+        <p className="pt-2 text-note">
+          The first {MOST_PRINTED} of {lines.length} lines. The CSV export has them all.
+        </p>
+      ) : null}
+    </div>
+  );
+}
+
+function Spacer({ height, columns }: { readonly height: number; readonly columns: number }) {
+  if (height <= 0) return null;
+  return (
+    <tr aria-hidden="true" className="spacer">
+      <td colSpan={columns} style={{ height }} />
+    </tr>
+  );
+}
+
+function Nothing({
+  loading,
+  of,
+  onPlain,
+}: {
+  readonly loading: string | null;
+  readonly of: string;
+  readonly onPlain: () => void;
+}) {
+  if (loading) return <p role="status">{loading}</p>;
+  return (
+    <p className="flex flex-wrap items-center gap-x-4 py-1">
+      No {of} match what is asked for.
+      <Button kind="quiet" onClick={onPlain}>
+        Show all {of}
+      </Button>
+    </p>
+  );
+}

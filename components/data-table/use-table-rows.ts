@@ -1,0 +1,94 @@
+'use client';
+
+import {
+  columnFilteringFeature,
+  columnVisibilityFeature,
+  createColumnHelper,
+  createFilteredRowModel,
+  createSortedRowModel,
+  globalFilteringFeature,
+  type RowData,
+  rowSortingFeature,
+  tableFeatures,
+  useTable,
+} from '@tanstack/react-table';
+import { useMemo } from 'react';
+import { type DataColumn } from '@/components/data-table/column';
+import { inGroup, type TableView } from '@/components/data-table/view';
+
+const features = tableFeatures({
+  columnVisibilityFeature,
+  columnFilteringFeature,
+  globalFilteringFeature,
+  rowSortingFeature,
+  filteredRowModel: createFilteredRowModel(),
+  sortedRowModel: createSortedRowModel(),
+});
+
+const collator = new Intl.Collator('en', { numeric: true });
+
+function compare(a: unknown, b: unknown): number {
+  return typeof a === 'number' && typeof b === 'number' ? a - b : collator.compare(String(a), String(b));
+}
+
+interface TableRowsOptions<Row> {
+  readonly columns: readonly DataColumn<Row>[];
+  readonly rows: readonly Row[];
+  readonly rowId: (row: Row) => string;
+  readonly view: TableView;
+  /** The column that holds group paths. */
+  readonly groupColumn: string | undefined;
+  /** Rows come sorted and filtered by the server. */
+  readonly manual: boolean;
+}
+
+/** The rows that a view shows, in its order, and the columns it shows. Empty cells sort last, both ways. */
+export function useTableRows<Row extends RowData>(options: TableRowsOptions<Row>) {
+  const { columns, rows, rowId, view, groupColumn, manual } = options;
+  const defs = useMemo(() => {
+    const helper = createColumnHelper<typeof features, Row>();
+    return helper.columns(
+      columns.map((column) =>
+        helper.accessor((row) => column.value(row) ?? undefined, {
+          id: column.id,
+          sortFn: (a, b, id) => compare(a.getValue(id), b.getValue(id)),
+          sortUndefined: 'last',
+          filterFn: (row, id, group) => inGroup(String(row.getValue(id) ?? ''), String(group)),
+          enableGlobalFilter: column.searched ?? column.kind === 'text',
+        }),
+      ),
+    );
+  }, [columns]);
+  const data = useMemo(() => [...rows], [rows]);
+  const state = useMemo(
+    () => ({
+      sorting: view.sort ? [{ id: view.sort.column, desc: view.sort.descending }] : [],
+      globalFilter: view.text,
+      columnFilters: groupColumn && view.group ? [{ id: groupColumn, value: view.group }] : [],
+      columnVisibility: Object.fromEntries(view.hidden.map((id) => [id, false])),
+    }),
+    [view.sort, view.text, view.group, view.hidden, groupColumn],
+  );
+  const table = useTable({
+    features,
+    columns: defs,
+    data,
+    state,
+    getRowId: rowId,
+    getColumnCanGlobalFilter: () => true,
+    globalFilterFn: (row, id, text) =>
+      String(row.getValue(id) ?? '')
+        .toLowerCase()
+        .includes(String(text).toLowerCase()),
+    manualSorting: manual,
+    manualFiltering: manual,
+    enableMultiSort: false,
+  });
+  const model = table.getRowModel();
+  const shown = useMemo(() => model.rows.map((row) => row.original), [model]);
+  const visible = useMemo(
+    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
+    [columns, view.hidden],
+  );
+  return { shown, visible };
+}

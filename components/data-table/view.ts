@@ -1,0 +1,61 @@
+/** What a reader has made of a table: kept in the page's address, so that it can be sent on and gone back to. */
+export interface TableView {
+  readonly sort: { readonly column: string; readonly descending: boolean } | null;
+  readonly text: string;
+  /** A group path; its subgroups are included. Empty: all groups. */
+  readonly group: string;
+  readonly subtotals: boolean;
+  readonly hidden: readonly string[];
+  /** The id of the row that the inspector shows. */
+  readonly open: string | null;
+}
+
+export const PLAIN_VIEW: TableView = {
+  sort: null,
+  text: '',
+  group: '',
+  subtotals: false,
+  hidden: [],
+  open: null,
+};
+
+const KEYS = ['sort', 'find', 'group', 'subtotals', 'hide', 'row'] as const;
+
+/** The view that an address asks for. */
+export function viewFromParams(params: Pick<URLSearchParams, 'get' | 'getAll'>): TableView {
+  const sort = params.get('sort') ?? '';
+  const descending = sort.startsWith('-');
+  const column = descending ? sort.slice(1) : sort;
+  return {
+    sort: column ? { column, descending } : null,
+    text: params.get('find') ?? '',
+    group: params.get('group') ?? '',
+    subtotals: params.get('subtotals') === 'yes',
+    hidden: params.getAll('hide'),
+    open: params.get('row'),
+  };
+}
+
+/** `params` with this view in it; what is as plain leaves no trace, what belongs to others stays. */
+export function paramsWithView(params: URLSearchParams, view: TableView): URLSearchParams {
+  const next = new URLSearchParams(params);
+  for (const key of KEYS) next.delete(key);
+  if (view.sort) next.set('sort', `${view.sort.descending ? '-' : ''}${view.sort.column}`);
+  if (view.text) next.set('find', view.text);
+  if (view.group) next.set('group', view.group);
+  if (view.subtotals) next.set('subtotals', 'yes');
+  for (const column of view.hidden) next.append('hide', column);
+  if (view.open !== null) next.set('row', view.open);
+  return next;
+}
+
+/** A column's head pressed: ascending, then descending, then the order of the file. */
+export function nextSort(sort: TableView['sort'], column: string): TableView['sort'] {
+  if (sort?.column !== column) return { column, descending: false };
+  return sort.descending ? null : { column, descending: true };
+}
+
+/** Whether a group path lies in another, or is it. */
+export function inGroup(path: string, group: string): boolean {
+  return group === '' || path === group || path.startsWith(`${group}/`);
+}
