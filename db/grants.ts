@@ -14,6 +14,7 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   api_tokens: ['select', 'insert', 'update'],
   idempotency_keys: ['select', 'insert', 'update', 'delete'],
   audit_events: ['select', 'insert'],
+  audit_heads: ['select', 'insert', 'update'],
   programs: ['select', 'insert', 'update'],
   program_members: ['select', 'insert', 'update', 'delete'],
   frame_issues: ['select', 'insert'],
@@ -34,4 +35,10 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   condition_items: ['select', 'insert', 'update', 'delete'],
   roll_ups: ['select', 'insert'],
   job_workers: ['select', 'insert', 'delete'],
+  submissions: ['select', 'insert'],
+  submission_revisions: ['select', 'insert'],
+  decisions: ['select', 'insert'],
+  baselines: ['select', 'insert'],
+  supersessions: ['select', 'insert'],
+  withdrawals: ['select', 'insert'],
 };

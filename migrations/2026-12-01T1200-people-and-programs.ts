@@ -148,8 +148,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       user_id text not null references users on delete cascade,
       key text not null check (length(key) between 1 and 255),
       request_hash text not null,
-      status integer not null,
-      body jsonb not null,
+      result jsonb not null,
       created_at timestamptz not null default now(),
       primary key (user_id, key)
     );
@@ -168,5 +167,11 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       primary key (scope, number)
     );
     create index on audit_events (scope, at desc);
+
+    create table audit_heads (
+      scope text primary key,
+      number bigint not null,
+      hash text not null
+    );
   `.execute(db);
 }

@@ -1,5 +1,5 @@
 import { type Generated } from 'kysely';
-import { type Finding } from '@/lib/findings/finding';
+import { type Finding, type PlacedFinding } from '@/lib/findings/finding';
 import { type ConfigurationResult } from '@/lib/loading/configuration';
 import { type Category } from '@/lib/mass/component';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
@@ -66,7 +66,7 @@ export interface RollUpsTable {
   configuration_version: number;
   input_sha256: string;
   result: Json<ConfigurationResult>;
-  findings: Json<Finding[]>;
+  findings: Json<PlacedFinding[]>;
   created_by: string;
   created_at: Generated<Date>;
 }

@@ -1,4 +1,12 @@
 import {
+  type BaselinesTable,
+  type DecisionsTable,
+  type SubmissionRevisionsTable,
+  type SubmissionsTable,
+  type SupersessionsTable,
+  type WithdrawalsTable,
+} from './baselines';
+import {
   type ConditionItemsTable,
   type ConditionsTable,
   type ConfigurationListsTable,
@@ -18,6 +26,7 @@ import {
 import {
   type ApiTokensTable,
   type AuditEventsTable,
+  type AuditHeadsTable,
   type IdempotencyKeysTable,
   type MailLinksTable,
   type RateLimitsTable,
@@ -43,6 +52,7 @@ export interface Database {
   api_tokens: ApiTokensTable;
   idempotency_keys: IdempotencyKeysTable;
   audit_events: AuditEventsTable;
+  audit_heads: AuditHeadsTable;
   programs: ProgramsTable;
   program_members: ProgramMembersTable;
   frame_issues: FrameIssuesTable;
@@ -63,4 +73,10 @@ export interface Database {
   condition_items: ConditionItemsTable;
   roll_ups: RollUpsTable;
   job_workers: JobWorkersTable;
+  submissions: SubmissionsTable;
+  submission_revisions: SubmissionRevisionsTable;
+  decisions: DecisionsTable;
+  baselines: BaselinesTable;
+  supersessions: SupersessionsTable;
+  withdrawals: WithdrawalsTable;
 }

@@ -55,8 +55,7 @@ export interface IdempotencyKeysTable {
   user_id: string;
   key: string;
   request_hash: string;
-  status: number;
-  body: ColumnType<unknown, string, string>;
+  result: ColumnType<unknown, string, string>;
   created_at: Generated<Date>;
 }
 
@@ -71,5 +70,12 @@ export interface AuditEventsTable {
   subject: string;
   detail: ColumnType<Record<string, unknown>, string, never>;
   previous_hash: string;
+  hash: string;
+}
+
+/** Where each chain ends, so that an event taken off its end is missed. */
+export interface AuditHeadsTable {
+  scope: string;
+  number: number;
   hash: string;
 }

@@ -38,6 +38,11 @@ export interface AuditDetails {
   'rotors.revised': { number: number; reason: string };
   'configuration.created': { code: string; title: string; build: string };
   'configuration.changed': { code: string; what: string; version: number };
+  'baseline.submitted': { submission: string; title: string; configuration: string; version: number };
+  'baseline.returned': { submission: string; title: string; reason: string };
+  'baseline.signed': { submission: string; title: string; number: number; digest: string };
+  'baseline.superseded': { number: number; by: number };
+  'baseline.withdrawn': { number: number; reason: string };
   'configuration.rolled-up': { code: string; version: number; inputSha256: string };
 }
 

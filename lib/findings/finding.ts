@@ -11,3 +11,12 @@ export interface Finding {
   readonly rows: readonly string[];
   readonly count: number;
 }
+
+/** A finding and where it was seen: a list revision, a condition, the rotating parts. */
+export interface PlacedFinding extends Finding {
+  readonly where: {
+    readonly kind: 'list' | 'condition' | 'rotors';
+    readonly code: string;
+    readonly revision?: number;
+  };
+}

@@ -38,11 +38,9 @@ export async function recordEvent<K extends AuditKind>(
 ): Promise<void> {
   await sql`select pg_advisory_xact_lock(hashtextextended(${`audit:${event.scope}`}, 0))`.execute(trx);
   const last = await trx
-    .selectFrom('audit_events')
+    .selectFrom('audit_heads')
     .select(['number', 'hash'])
     .where('scope', '=', event.scope)
-    .orderBy('number', 'desc')
-    .limit(1)
     .executeTakeFirst();
   const clock = await sql<{ at: Date }>`select date_trunc('milliseconds', clock_timestamp()) as at`.execute(
     trx,
@@ -61,6 +59,7 @@ export async function recordEvent<K extends AuditKind>(
     detail: JSON.parse(JSON.stringify(event.detail)) as unknown,
     previousHash: last?.hash ?? FIRST_HASH,
   };
+  const hash = hashEntry(entry);
   await trx
     .insertInto('audit_events')
     .values({
@@ -73,7 +72,12 @@ export async function recordEvent<K extends AuditKind>(
       subject: entry.subject,
       detail: JSON.stringify(entry.detail),
       previous_hash: entry.previousHash,
-      hash: hashEntry(entry),
+      hash,
     })
+    .execute();
+  await trx
+    .insertInto('audit_heads')
+    .values({ scope: entry.scope, number: entry.number, hash })
+    .onConflict((conflict) => conflict.column('scope').doUpdateSet({ number: entry.number, hash }))
     .execute();
 }

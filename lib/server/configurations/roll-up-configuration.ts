@@ -11,21 +11,12 @@ import {
 } from '@/db/queries/configurations';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
 import { AppError } from '@/lib/errors';
-import { type Finding } from '@/lib/findings/finding';
-import { findingsOnRotors, findingsOnWhole } from '@/lib/findings/look';
+import { type Finding, type PlacedFinding } from '@/lib/findings/finding';
+import { findingsOnWhole } from '@/lib/findings/look';
 import { type Condition, type ConfigurationResult, evaluateConfiguration } from '@/lib/loading/configuration';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
-
-/** A finding and where it was seen: a list revision, a condition, the rotating parts. */
-export interface PlacedFinding extends Finding {
-  readonly where: {
-    readonly kind: 'list' | 'condition' | 'rotors';
-    readonly code: string;
-    readonly revision?: number;
-  };
-}
 
 export interface Evaluation {
   readonly result: ConfigurationResult;
@@ -38,12 +29,10 @@ export interface Evaluation {
  * @throws AppError conflict when it has no condition or no list yet.
  */
 export async function evaluate(db: Db, configuration: Configuration): Promise<Evaluation> {
-  const [issue, pins, conditions, allowances] = await Promise.all([
-    findFrameIssue(db, configuration.frame_issue_id),
-    pinnedRevisions(db, configuration.id),
-    conditionsOf(db, configuration.id),
-    allowancesOf(db, configuration.program_id),
-  ]);
+  const issue = await findFrameIssue(db, configuration.frame_issue_id);
+  const pins = await pinnedRevisions(db, configuration.id);
+  const conditions = await conditionsOf(db, configuration.id);
+  const allowances = await allowancesOf(db, configuration.program_id);
   if (pins.length === 0)
     throw new AppError('conflict', 'This configuration holds no list yet. Choose list revisions first.');
   if (conditions.length === 0)

@@ -6,9 +6,6 @@ import { type ObjectStore, objectStore } from '@/lib/server/storage/client';
 import { storeStream } from '@/lib/server/storage/store-stream';
 import { sentFileName } from './file-name';
 
-/** A mass list of the API or the browser is at most this long. */
-export const LIST_BYTES = 1024 ** 3;
-
 export interface ReceiveOptions {
   readonly maxBytes: number;
   readonly store?: ObjectStore;

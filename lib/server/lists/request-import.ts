@@ -1,5 +1,7 @@
+import { type Transaction } from 'kysely';
 import { type Db } from '@/db/client';
 import { openImportsOf } from '@/db/queries/lists';
+import { type Database } from '@/db/schema/database';
 import { AppError } from '@/lib/errors';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
@@ -33,36 +35,39 @@ export interface RequestImport {
 
 /** Records a stored file as waiting to be read into a list, and queues the job that reads it. Returns the import's id. */
 export async function requestImport(db: Db, input: RequestImport): Promise<string> {
+  return db.transaction().execute((trx) => queueImport(trx, input));
+}
+
+/** `requestImport` in the caller's transaction. */
+export async function queueImport(trx: Transaction<Database>, input: RequestImport): Promise<string> {
   const { person, list, file } = input;
-  return db.transaction().execute(async (trx) => {
-    await assertMayImport(trx, person.userId);
-    const id = newId();
-    await trx
-      .insertInto('stored_files')
-      .values({ sha256: file.sha256, bytes: file.bytes })
-      .onConflict((conflict) => conflict.column('sha256').doNothing())
-      .execute();
-    await trx
-      .insertInto('imports')
-      .values({
-        id,
-        list_id: list.id,
-        file_sha256: file.sha256,
-        file_name: file.name,
-        reason: input.reason,
-        // The header is no row; an estimate until the file has been read.
-        of_rows: Math.max(0, file.lines - 1),
-        created_by: person.userId,
-      })
-      .execute();
-    await recordEvent(trx, {
-      scope: list.programId,
-      actor: person,
-      kind: 'import.requested',
-      subject: list.code,
-      detail: { list: list.code, file: file.name, sha256: file.sha256 },
-    });
-    await enqueue(trx, 'import-list', { importId: id }, { maxAttempts: 8 });
-    return id;
+  await assertMayImport(trx, person.userId);
+  const id = newId();
+  await trx
+    .insertInto('stored_files')
+    .values({ sha256: file.sha256, bytes: file.bytes })
+    .onConflict((conflict) => conflict.column('sha256').doNothing())
+    .execute();
+  await trx
+    .insertInto('imports')
+    .values({
+      id,
+      list_id: list.id,
+      file_sha256: file.sha256,
+      file_name: file.name,
+      reason: input.reason,
+      // The header is no row; an estimate until the file has been read.
+      of_rows: Math.max(0, file.lines - 1),
+      created_by: person.userId,
+    })
+    .execute();
+  await recordEvent(trx, {
+    scope: list.programId,
+    actor: person,
+    kind: 'import.requested',
+    subject: list.code,
+    detail: { list: list.code, file: file.name, sha256: file.sha256 },
   });
+  await enqueue(trx, 'import-list', { importId: id }, { maxAttempts: 8, queue: `list:${list.id}` });
+  return id;
 }

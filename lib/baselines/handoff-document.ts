@@ -1,0 +1,108 @@
+import { findingKey } from '@/lib/baselines/finding-key';
+import { CAUTION } from '@/lib/baselines/caution';
+import { conventionsOf, rollUpMembers } from '@/lib/contracts/condition-members';
+import { type PlacedFinding } from '@/lib/findings/finding';
+import { airframeToBody } from '@/lib/frames/body';
+import { type ConfigurationResult, type PointResult } from '@/lib/loading/configuration';
+import { type Vec3 } from '@/lib/numerics/vec3';
+import { degreesAsTyped, rpm } from '@/lib/units/convert';
+
+export interface Stamp {
+  /** ISO 8601, UTC. */
+  readonly at: string;
+  readonly by: string;
+}
+
+export interface HandoffInput {
+  readonly program: string;
+  readonly baseline: number;
+  readonly build: string;
+  readonly title: string;
+  readonly supersedes: number | null;
+  readonly marking: string | null;
+  readonly submitted: Stamp;
+  readonly approved: Stamp;
+  readonly frameIssue: string;
+  readonly referencePoints: readonly { readonly code: string; readonly place: Vec3 }[];
+  readonly result: ConfigurationResult;
+  readonly findings: readonly PlacedFinding[];
+  readonly answers: Readonly<Record<string, string>>;
+  readonly sources: readonly {
+    readonly list: string;
+    readonly revision: number;
+    readonly contentSha256: string;
+    readonly fileSha256: string | null;
+    readonly rows: number;
+  }[];
+}
+
+/**
+ * The hand-off document of contract section 3 without `digest` and `state`: the digest is taken over just this, and the state
+ * follows from later events. SI; CG in airframe axes, inertia about the CG in body axes with products as positive integrals.
+ */
+export function handoffDocument(input: HandoffInput) {
+  const { result } = input;
+  const { geometry } = result;
+  return {
+    format: 1 as const,
+    program: input.program,
+    baseline: input.baseline,
+    build: input.build,
+    title: input.title,
+    supersedes: input.supersedes,
+    marking: input.marking,
+    caution: CAUTION,
+    submitted: input.submitted,
+    approved: input.approved,
+    conventions: {
+      ...conventionsOf(geometry, 'si', degreesAsTyped(geometry.incidence)),
+      frameIssue: input.frameIssue,
+      airframeToBody: airframeToBody(geometry.axes, geometry.incidence).map((row) => [...row]),
+    },
+    referencePoints: input.referencePoints.map(({ code, place: [x, y, z] }) => ({
+      code,
+      airframe: { x, y, z },
+    })),
+    conditions: result.conditions.map(({ code, title, rollUp }) => ({
+      code,
+      title,
+      ...rollUpMembers(rollUp, 'si'),
+    })),
+    operatingPoints: result.operatingPoints.map(pointMember),
+    findings: input.findings.map((finding) => {
+      const answer = input.answers[findingKey(finding)];
+      return {
+        rule: finding.rule,
+        severity: finding.severity,
+        message: finding.message,
+        ...(answer === undefined ? {} : { answer }),
+      };
+    }),
+    sources: input.sources.map(({ list, revision, contentSha256, fileSha256, rows }) => ({
+      list,
+      revision,
+      sha256: contentSha256,
+      ...(fileSha256 === null ? {} : { fileSha256 }),
+      rows,
+    })),
+  };
+}
+
+export type HandoffDocument = ReturnType<typeof handoffDocument>;
+
+/** Angular momentum in body axes, kg.m2/s, by the right-hand rule; rpm of each rotor about its own axis. */
+export function pointMember({ code, momentum }: Pick<PointResult, 'code' | 'momentum'>) {
+  const [hx, hy, hz] = momentum.total;
+  return {
+    code,
+    angularMomentum: { hx, hy, hz },
+    gyroMatrix: momentum.gyroMatrix.map((row) => [...row]),
+    rotors: momentum.rotors.map((part) => ({
+      rotor: part.rotor,
+      rpm: rpm(part.speed),
+      hx: part.momentum[0],
+      hy: part.momentum[1],
+      hz: part.momentum[2],
+    })),
+  };
+}

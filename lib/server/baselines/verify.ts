@@ -1,0 +1,116 @@
+import { createHash } from 'node:crypto';
+import { type Db } from '@/db/client';
+import { digestOf, canonicalText } from './digest';
+import { verifyTrail } from '@/lib/server/audit/verify-trail';
+import { hashRevision } from '@/lib/server/lists/hash-revision';
+
+/** One thing that does not hold, in words that say which. */
+export interface Breach {
+  readonly what: string;
+  readonly detail: string;
+}
+
+export interface Verification {
+  readonly baselines: number;
+  readonly revisions: number;
+  readonly auditEvents: number;
+  readonly breaches: readonly Breach[];
+}
+
+/**
+ * Recomputes every digest from what is stored: each baseline's document, the content of every list revision that a
+ * submission holds against its content hash and against the sources its baseline names, and the chain of the trail.
+ */
+export async function verifyEverything(db: Db): Promise<Verification> {
+  const breaches: Breach[] = [];
+  const baselines = await verifyBaselines(db, breaches);
+  const revisions = await verifyRevisions(db, breaches);
+  const trail = await verifyTrail(db);
+  breaches.push(...trail.breaches);
+  return { baselines, revisions, auditEvents: trail.events, breaches };
+}
+
+interface SourceMember {
+  readonly list: string;
+  readonly revision: number;
+  readonly sha256: string;
+}
+
+async function verifyBaselines(db: Db, breaches: Breach[]): Promise<number> {
+  const rows = await db
+    .selectFrom('baselines')
+    .innerJoin('programs', 'programs.id', 'baselines.program_id')
+    .select(['programs.code', 'programs.id as program_id', 'number', 'submission_id', 'document', 'digest'])
+    .orderBy('programs.code')
+    .orderBy('number')
+    .execute();
+  const expected = new Map<string, number>();
+  for (const row of rows) {
+    const what = `baseline ${row.number} of ${row.code}`;
+    const next = (expected.get(row.code) ?? 0) + 1;
+    expected.set(row.code, row.number);
+    if (row.number !== next) breaches.push({ what, detail: `the number should be ${next}` });
+    if (digestOf(row.document) !== row.digest)
+      breaches.push({
+        what,
+        detail: `the document hashes to ${digestOf(row.document)}, recorded is ${row.digest}`,
+      });
+    const parsed: unknown = JSON.parse(row.document);
+    if (typeof parsed !== 'object' || parsed === null || canonicalText(parsed) !== row.document)
+      breaches.push({ what, detail: 'the document is not the canonical JSON of its content' });
+    breaches.push(...(await compareSources(db, what, row.submission_id, parsed)));
+  }
+  return rows.length;
+}
+
+async function compareSources(
+  db: Db,
+  what: string,
+  submissionId: string,
+  document: unknown,
+): Promise<Breach[]> {
+  const held = await db
+    .selectFrom('submission_revisions')
+    .innerJoin('list_revisions', 'list_revisions.id', 'submission_revisions.revision_id')
+    .innerJoin('lists', 'lists.id', 'submission_revisions.list_id')
+    .select([
+      'lists.code as list',
+      'list_revisions.number as revision',
+      'list_revisions.content_sha256 as sha256',
+    ])
+    .where('submission_id', '=', submissionId)
+    .orderBy('lists.code')
+    .execute();
+  const { sources = [] } = document as { readonly sources?: readonly SourceMember[] };
+  const named = sources.map(({ list, revision, sha256 }) => ({ list, revision, sha256 }));
+  if (canonicalText(named) === canonicalText(held)) return [];
+  return [{ what, detail: 'its sources are not the list revisions that were submitted' }];
+}
+
+async function verifyRevisions(db: Db, breaches: Breach[]): Promise<number> {
+  const revisions = await db
+    .selectFrom('list_revisions')
+    .innerJoin('lists', 'lists.id', 'list_revisions.list_id')
+    .innerJoin('programs', 'programs.id', 'lists.program_id')
+    .select([
+      'programs.code as program',
+      'lists.code as list',
+      'list_revisions.id',
+      'list_revisions.number',
+      'content_sha256',
+    ])
+    .where('list_revisions.id', 'in', (eb) => eb.selectFrom('submission_revisions').select('revision_id'))
+    .orderBy('programs.code')
+    .orderBy('lists.code')
+    .orderBy('list_revisions.number')
+    .execute();
+  for (const revision of revisions) {
+    const found = await hashRevision(db, revision.id, createHash('sha256'));
+    if (found !== revision.content_sha256)
+      breaches.push({
+        what: `revision ${revision.number} of list ${revision.list} in ${revision.program}`,
+        detail: `its rows hash to ${found}, recorded is ${revision.content_sha256}`,
+      });
+  }
+  return revisions.length;
+}

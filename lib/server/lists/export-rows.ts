@@ -1,0 +1,52 @@
+import { type Db } from '@/db/client';
+import { everyRow, ownColumnsOf, positionsOfView, rowsAt } from '@/db/queries/list-rows';
+import { type ListRevision } from '@/db/queries/lists';
+import { isFiltered, type ListView } from '@/lib/contracts/list-view';
+import { massListWriter } from '@/lib/export/mass-list';
+import { componentOf, type StoredRow } from './row-codec';
+import { filterOf, orderOf } from './row-view';
+
+/** The column that carries a list's marking in what leaves it. */
+const MARKING = 'marking';
+const BATCH = 2_000;
+
+/**
+ * The rows of a view as a CSV of the contract, in the units and signs that the revision declares, texts neutralised against
+ * spreadsheet formulas. Each row of a marked list carries its marking.
+ */
+export async function* exportRows(
+  db: Db,
+  revision: ListRevision,
+  view: ListView,
+  marking: string | null,
+): AsyncGenerator<string> {
+  const own = await ownColumnsOf(db, revision.id);
+  const marked = marking === null ? {} : { [MARKING]: marking };
+  const writer = massListWriter(revision.declarations, [...new Set([...own, ...Object.keys(marked)])]);
+  let block = writer.header;
+  for await (const row of rowsInOrder(db, revision, view)) {
+    const component = componentOf(row);
+    block += writer.lineOf(writer.cells(component), { ...component.extra, ...marked });
+    if (block.length < 65_536) continue;
+    yield block;
+    block = '';
+  }
+  if (block !== '') yield block;
+}
+
+async function* rowsInOrder(db: Db, revision: ListRevision, view: ListView): AsyncGenerator<StoredRow> {
+  const order = orderOf(view, revision.declarations);
+  if (!isFiltered(view) && order.column === 'position' && !order.descending) {
+    yield* everyRow(db, revision.id);
+    return;
+  }
+  const positions = await positionsOfView(db, revision.id, filterOf(view, revision.findings), order);
+  for (let at = 0; at < positions.length; at += BATCH) {
+    const wanted = positions.slice(at, at + BATCH);
+    const rows = new Map((await rowsAt(db, revision.id, wanted)).map((row) => [row.position, row]));
+    for (const position of wanted) {
+      const row = rows.get(position);
+      if (row !== undefined) yield row;
+    }
+  }
+}

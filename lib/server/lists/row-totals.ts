@@ -1,0 +1,118 @@
+import { type Db } from '@/db/client';
+import { subtotalsOf } from '@/db/queries/configurations';
+import { type RowFilter, sumRows, unsummedRows } from '@/db/queries/list-rows';
+import { type RowTotals } from '@/lib/contracts/list-rows';
+import { listToAirframe } from '@/lib/frames/pose';
+import { lateralIndex } from '@/lib/frames/reflection';
+import { type AirframeVec, type ListVec } from '@/lib/frames/tags';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { isMirrored } from '@/lib/mass/place';
+import { type GroupTotal, groupBranches, NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
+import { applyMat, transpose } from '@/lib/numerics/mat3';
+import { addVec, scaleVec, subVec } from '@/lib/numerics/vec3';
+import { fromSi } from '@/lib/units/convert';
+
+export interface ListTotals {
+  readonly whole: RowTotals;
+  /** Every group and every group above one, in the order of their paths. */
+  readonly groups: readonly (RowTotals & { readonly group: string })[];
+}
+
+interface InFrame {
+  readonly declarations: ListDeclarations;
+  readonly geometry: AirframeGeometry;
+}
+
+/** Totals of a revision and of its groups from the stored subtotals, basic (without growth): no row is read. */
+export async function totalsOfRevision(
+  db: Db,
+  revisionId: string,
+  frameIssueId: string,
+  frame: InFrame,
+): Promise<ListTotals> {
+  const subtotals = await subtotalsOf(db, [revisionId], frameIssueId);
+  const approved = rollUp(subtotals, [], frame.geometry, NO_GROWTH);
+  const waiting = new Map<string, number>();
+  for (const part of subtotals) {
+    if (part.status === 'approved') continue;
+    const levels = part.group.split('/');
+    for (let depth = 0; depth <= levels.length; depth += 1) {
+      const path = levels.slice(0, depth).join('/');
+      waiting.set(path, (waiting.get(path) ?? 0) + part.rows);
+    }
+  }
+  const totals = (
+    total: Pick<GroupTotal, 'rows' | 'pieces' | 'memoRows' | 'basic'>,
+    path: string,
+  ): RowTotals => ({
+    rows: total.rows,
+    pieces: total.pieces,
+    mass: fromSi(total.basic.mass, frame.declarations.massUnit),
+    cg: total.basic.properties === null ? null : inListUnits(total.basic.properties.cg, frame),
+    memoRows: total.memoRows,
+    waitingRows: waiting.get(path) ?? 0,
+  });
+  return {
+    whole: totals(approved, ''),
+    groups: groupBranches(approved.groups, frame.geometry).map((branch) => ({
+      group: branch.group,
+      ...totals(branch, branch.group),
+    })),
+  };
+}
+
+/**
+ * Totals of the rows that a filter leaves in, summed in the database. A mirror image has its piece's place but for the lateral
+ * coordinate, so pairs need no more than their own first moment.
+ */
+export async function totalsOfView(
+  db: Db,
+  revisionId: string,
+  filter: RowFilter,
+  frame: InFrame,
+): Promise<RowTotals> {
+  const { declarations, geometry } = frame;
+  const near = toList(geometry.reference, frame);
+  const [sums, unsummed] = await Promise.all([
+    sumRows(db, revisionId, filter, near),
+    unsummedRows(db, revisionId, filter),
+  ]);
+  const matrix = matrixOf(frame);
+  const lateral = lateralIndex(geometry.axes);
+  const across = geometry.lateralPlane - geometry.reference[lateral];
+  let [rows, pieces, mass] = [0, 0, 0];
+  let first: AirframeVec = [0, 0, 0];
+  for (const sum of sums) {
+    const own = applyMat(matrix, [sum.px, sum.py, sum.pz]);
+    const mirrored = isMirrored(sum, declarations);
+    const both = (k: 0 | 1 | 2): number => (k === lateral ? 2 * sum.mass * across : 2 * own[k]);
+    first = addVec(first, mirrored ? [both(0), both(1), both(2)] : own);
+    rows += sum.rows;
+    pieces += mirrored ? 2 * sum.pieces : sum.pieces;
+    mass += mirrored ? 2 * sum.mass : sum.mass;
+  }
+  return {
+    rows,
+    pieces,
+    mass: fromSi(mass, declarations.massUnit),
+    cg: mass > 0 ? inListUnits(addVec(geometry.reference, scaleVec(1 / mass, first)), frame) : null,
+    memoRows: unsummed.memo,
+    waitingRows: unsummed.waiting,
+  };
+}
+
+function matrixOf({ declarations, geometry }: InFrame) {
+  return listToAirframe(declarations.axes, declarations.pose, geometry.axes);
+}
+
+/** A place in the airframe, m, as the list states places: the inverse of o + R P r. */
+function toList(place: AirframeVec, frame: InFrame): ListVec {
+  return applyMat(transpose(matrixOf(frame)), subVec(place, frame.declarations.pose.origin));
+}
+
+function inListUnits(place: AirframeVec, frame: InFrame): [number, number, number] {
+  const [x, y, z] = toList(place, frame);
+  const { lengthUnit } = frame.declarations;
+  return [fromSi(x, lengthUnit), fromSi(y, lengthUnit), fromSi(z, lengthUnit)];
+}

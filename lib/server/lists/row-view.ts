@@ -1,0 +1,42 @@
+import { type RowFilter, type RowOrder } from '@/db/queries/list-rows';
+import { type ListRow } from '@/lib/contracts/list-rows';
+import { type ListView } from '@/lib/contracts/list-view';
+import { massListWriter } from '@/lib/export/mass-list';
+import { type Finding } from '@/lib/findings/finding';
+import { type ListColumn } from '@/lib/ingest/mass-list/columns';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+import { componentOf, type StoredRow } from './row-codec';
+
+/** What a view asks of the database. A finding that the revision has not leaves no row in. */
+export function filterOf(view: ListView, findings: readonly Finding[]): RowFilter {
+  return {
+    text: view.find,
+    group: view.group,
+    category: view.category === '' ? null : view.category,
+    counting: view.counting === '' ? null : view.counting,
+    items: view.finding === '' ? null : (findings.find(({ rule }) => rule === view.finding)?.rows ?? []),
+  };
+}
+
+const PRODUCTS: readonly string[] = ['ixy', 'ixz', 'iyz'];
+
+/** Rows are ordered by what they show: where a list states its products with the other sign, their order turns round. */
+export function orderOf({ sort }: ListView, declarations: ListDeclarations): RowOrder {
+  const turned = declarations.products === 'negative' && PRODUCTS.includes(sort.column);
+  return { column: sort.column, descending: sort.descending !== turned };
+}
+
+/** Stored rows as their list states them. */
+export function rowReader(declarations: ListDeclarations): (row: StoredRow) => ListRow {
+  const writer = massListWriter(declarations, []);
+  return (row) => {
+    const component = componentOf(row);
+    const cells = writer.cells(component);
+    const stated: Partial<Record<ListColumn, string | number>> = {};
+    for (const column of writer.columns) {
+      const value = cells[column];
+      if (value !== null) stated[column] = value;
+    }
+    return { position: row.position, line: row.line, cells: stated, own: { ...component.extra } };
+  };
+}
