@@ -13,6 +13,12 @@ export const MASS_LIST_LIMITS: IngestLimits = {
   rows: 2_000_000,
 };
 
+/** A file that becomes a list is at most this long, bytes. */
+export const LIST_BYTES = 1024 ** 3;
+
+/** One that is rolled up while the caller waits. */
+export const ROLL_UP_BYTES = 32 * 1024 ** 2;
+
 export const ROTOR_LIMITS: IngestLimits = { ...MASS_LIST_LIMITS, rows: 10_000 };
 
 /** So many problems of a file are kept; the rest are counted. */

@@ -1,7 +1,7 @@
 import { type IngestLimits, ROTOR_LIMITS } from '@/lib/ingest/limits';
 import { type Problem } from '@/lib/ingest/problem';
 import { ProblemLog } from '@/lib/ingest/problem-log';
-import { ROTOR_COLUMNS, type RotorColumn, readRotor } from '@/lib/ingest/rotors/rotor-row';
+import { ROTOR_COLUMNS, type RotorColumn, readRotor } from '@/lib/ingest/rotor-row';
 import { Cells } from '@/lib/ingest/table/cells';
 import { type ColumnMapping, type HeaderProblem, readHeader } from '@/lib/ingest/table/header';
 import { readTable } from '@/lib/ingest/table/read-table';
