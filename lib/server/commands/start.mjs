@@ -12,6 +12,7 @@ import { stopCluster } from './local/postgres.mjs';
 import { localSecrets } from './local/secrets.mjs';
 
 const dev = process.argv.includes('--dev');
+const distDir = process.env.NEXT_DIST_DIR ?? '.next';
 const log = (name) => path.join(DATA, 'log', `${name}.log`);
 
 let stopping = false;
@@ -72,7 +73,7 @@ async function startWith(settings) {
   if (!(await isFree(port, host)))
     throw new Failure(`Port ${port} on ${host} is taken; set PORT to another.`);
   await prepare({ ...process.env, ...settings });
-  if (!dev) await ensureBuild(children, '.next', log('build'));
+  if (!dev) await ensureBuild(children, distDir, log('build'));
   await serve(settings, host, port);
   console.log(`\nPolhode serves ${settings.APP_URL} on ${host}:${port}.`);
   console.log('The first administrator is made by: npm run admin -- --email ...');
@@ -97,14 +98,14 @@ async function startLocal() {
 
   await prepare({ ...process.env, ...all });
   await loadDemoOnce(children, cluster, { ...process.env, ...all, DEMO_PASSWORD: secrets.demo });
-  if (!dev) await ensureBuild(children, '.next', log('build'));
+  if (!dev) await ensureBuild(children, distDir, log('build'));
   await serve(all, '127.0.0.1', port);
 
   console.log(`\nPolhode is at      ${all.APP_URL}`);
   console.log(`Mail it sends is at ${mailbox}`);
   console.log(`Demo sign-ins, all with the password ${secrets.demo} :`);
   for (const { email, role } of DEMO_PEOPLE) console.log(`  ${email.padEnd(28)} ${role}`);
-  console.log(`The data stay in .data. Ctrl-C stops everything.`);
+  console.log(`The data stay in ${path.relative('', DATA)}. Ctrl-C stops everything.`);
 }
 
 try {

@@ -39,8 +39,7 @@ async function check(name, run) {
 
 const seconds = (since) => `${((Date.now() - since) / 1000).toFixed(0)} s`;
 
-const tool = (log, name, args) =>
-  children.finish({ name, args, log, env: { ...process.env, NEXT_TELEMETRY_DISABLED: '1' } });
+const tool = (log, name, args) => children.finish({ name, args, log, env: process.env });
 
 async function types(log) {
   await tool(log, 'next typegen', ['node_modules/next/dist/bin/next', 'typegen']);

@@ -72,12 +72,7 @@ export async function ensureBuild(children, distDir, log) {
  * @returns {NodeJS.ProcessEnv}
  */
 export function webEnvironment(settings) {
-  const env = {
-    ...process.env,
-    ...settings,
-    NEXT_TELEMETRY_DISABLED: '1',
-    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
-  };
+  const env = { ...process.env, ...settings };
   delete env.MIGRATION_DATABASE_URL;
   return env;
 }
