@@ -150,26 +150,6 @@ export function unsummedRows(
   ).executeTakeFirstOrThrow();
 }
 
-const BATCH = 2_000;
-
-/** All rows of a revision in the order of the list, a batch at a time. */
-export async function* everyRow(db: Db, revisionId: string) {
-  for (let after = 0; ;) {
-    const rows = await db
-      .selectFrom('mass_rows')
-      .selectAll()
-      .where('revision_id', '=', revisionId)
-      .where('position', '>', after)
-      .orderBy('position')
-      .limit(BATCH)
-      .execute();
-    yield* rows;
-    const last = rows.at(-1);
-    if (last === undefined || rows.length < BATCH) return;
-    after = last.position;
-  }
-}
-
 /** The names of the list's own columns that any row of a revision fills, in the order of the alphabet. */
 export async function ownColumnsOf(db: Db, revisionId: string): Promise<string[]> {
   const { rows } = await sql<{ name: string }>`

@@ -1,10 +1,10 @@
 import { type Db } from '@/db/client';
-import { everyRow } from '@/db/queries/list-rows';
 import { type RowEdit } from '@/lib/contracts/list-edits';
 import { type ListCells, type MassListWriter } from '@/lib/export/mass-list';
 import { LIST_COLUMNS, type ListColumn } from '@/lib/ingest/mass-list/columns';
 import { type Component } from '@/lib/mass/component';
 import { componentOf } from './row-codec';
+import { storedRows } from './stored-rows';
 
 /** One row of the list as it will be: its line of CSV, and the stored component where nothing was edited. */
 export interface EditedRow {
@@ -38,7 +38,7 @@ export async function* editedRows(
   edits: EditSet,
   writer: MassListWriter,
 ): AsyncGenerator<EditedRow> {
-  for await (const row of everyRow(db, revisionId)) {
+  for await (const row of storedRows(db, revisionId)) {
     if (edits.removed.has(row.item)) continue;
     const component = componentOf(row);
     const fields = edits.changed.get(row.item);

@@ -1,9 +1,10 @@
 import { type Db } from '@/db/client';
-import { everyRow, ownColumnsOf, positionsOfView, rowsAt } from '@/db/queries/list-rows';
+import { ownColumnsOf, positionsOfView, rowsAt } from '@/db/queries/list-rows';
 import { type ListRevision } from '@/db/queries/lists';
 import { isFiltered, type ListView } from '@/lib/contracts/list-view';
 import { massListWriter } from '@/lib/export/mass-list';
 import { componentOf, type StoredRow } from './row-codec';
+import { storedRows } from './stored-rows';
 import { filterOf, orderOf } from './row-view';
 
 /** The column that carries a list's marking in what leaves it. */
@@ -37,7 +38,7 @@ export async function* exportRows(
 async function* rowsInOrder(db: Db, revision: ListRevision, view: ListView): AsyncGenerator<StoredRow> {
   const order = orderOf(view, revision.declarations);
   if (!isFiltered(view) && order.column === 'position' && !order.descending) {
-    yield* everyRow(db, revision.id);
+    yield* storedRows(db, revision.id);
     return;
   }
   const positions = await positionsOfView(db, revision.id, filterOf(view, revision.findings), order);

@@ -1,0 +1,21 @@
+import { isFiltered, listViewOf } from '@/lib/contracts/list-view';
+import { serverDb } from '@/lib/server/database';
+import { attachment, CSV_TYPE, streamOf } from '@/lib/server/http/attachment';
+import { programRoute } from '@/lib/server/http/internal-route';
+import { exportRows } from '@/lib/server/lists/export-rows';
+import { markingOf, reachList, reachRevision } from '@/lib/server/lists/reach-list';
+
+type Params = { program: string; list: string; revision: string };
+
+/** The rows of a view as a file: all of the revision unless the query leaves some out. */
+export const GET = programRoute<Params>('lists.read', async ({ request, params, program }) => {
+  const db = serverDb();
+  const list = await reachList(db, program.id, params.list);
+  const revision = await reachRevision(db, list, params.revision);
+  const view = listViewOf(new URL(request.url).searchParams);
+  const part = isFiltered(view) ? '-part' : '';
+  return attachment(streamOf(exportRows(db, revision, view, markingOf(list, revision))), {
+    name: `${program.code}-${list.code}-revision-${revision.number}${part}.csv`,
+    type: CSV_TYPE,
+  });
+});
