@@ -10,3 +10,6 @@ export interface FormState<T = null> {
 }
 
 export const IDLE: FormState<never> = { status: 'idle', message: null, errors: {}, values: {}, result: null };
+
+/** A server action as `useActionState` takes it. */
+export type FormAction<T = null> = (state: FormState<T>, form: FormData) => Promise<FormState<T>>;

@@ -23,3 +23,11 @@ export function isTokenScope(text: string): text is TokenScope {
 export function carriesScope(scope: TokenScope, standing: Standing): boolean {
   return may(SCOPE_ACTION[scope], standing);
 }
+
+/** The scopes that someone with these roles can ask for; reading what one may see is open to all. */
+export function scopesWithin(programs: readonly { readonly role: Standing['role'] }[]): TokenScope[] {
+  return TOKEN_SCOPES.filter(
+    (scope) =>
+      scope === 'baselines:read' || programs.some(({ role }) => carriesScope(scope, { admin: false, role })),
+  );
+}

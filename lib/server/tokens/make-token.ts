@@ -7,7 +7,7 @@ import { hashSecret, newSecret } from '@/lib/server/auth/secret';
 import { newId } from '@/lib/server/ids';
 import { RATE_POLICIES } from '@/lib/server/rate-limit/policies';
 import { takeOrRefuse } from '@/lib/server/rate-limit/take';
-import { carriesScope, SCOPE_NAMES, type TokenScope } from '@/lib/token-scopes';
+import { SCOPE_NAMES, scopesWithin, type TokenScope } from '@/lib/token-scopes';
 
 /** Marks a string as ours, so that one left in a repository or a log is recognised. */
 const PREFIX = 'polhode_';
@@ -35,11 +35,10 @@ export async function makeToken(
       throw fieldError('programs', `You do not belong to a program ${code}.`);
   }
   const reached = own.filter(({ code }) => programs === null || programs.includes(code));
-  for (const scope of scopes) {
-    const carried = reached.some(({ role }) => carriesScope(scope, { admin: false, role }));
-    if (!carried && scope !== 'baselines:read') {
-      throw fieldError('scopes', `No role of yours in these programs carries "${SCOPE_NAMES[scope]}".`);
-    }
+  const within = scopesWithin(reached);
+  const missing = scopes.find((scope) => !within.includes(scope));
+  if (missing !== undefined) {
+    throw fieldError('scopes', `No role of yours in these programs carries "${SCOPE_NAMES[missing]}".`);
   }
   const token = PREFIX + newSecret();
   const id = newId();

@@ -1,0 +1,124 @@
+import { configurationsOfProgram, rotorRevisionsOf } from '@/db/queries/configurations';
+import { listsOfProgram } from '@/db/queries/lists';
+import { StationSummary } from '@/components/programs/station-summary';
+import { ButtonLink } from '@/components/ui/button';
+import { Day } from '@/components/ui/day';
+import { EmptyPlace } from '@/components/ui/empty-place';
+import { Section } from '@/components/ui/section';
+import { serverDb } from '@/lib/server/database';
+import { type ProgramAccess } from '@/lib/server/http/access';
+
+interface HereProps {
+  readonly access: ProgramAccess;
+}
+
+/** The lists of a program, those with something to do first. */
+export async function ListsHere({ access: { program, can } }: HereProps) {
+  const home = `/programs/${program.code}/lists`;
+  const lists = await listsOfProgram(serverDb(), program.id);
+  const lines = lists.map((list) => ({
+    href: `${home}/${list.code}`,
+    title: list.title,
+    facts:
+      list.revised_at === null ? (
+        'No revision yet'
+      ) : (
+        <>
+          Revision {list.number}, {list.rows} rows, <Day at={list.revised_at} />, {list.author}
+        </>
+      ),
+    waits: importWords(list.import_state),
+  }));
+  return (
+    <Section title="Lists">
+      {lines.length === 0 ? (
+        <EmptyPlace
+          title="There is no mass list yet"
+          action={can('lists.keep') ? <ButtonLink href={home}>Go to lists</ButtonLink> : null}
+        >
+          <p>Mass lists hold the components, from one source each, in revisions.</p>
+        </EmptyPlace>
+      ) : (
+        <StationSummary
+          lines={[...lines].sort((a, b) => Number(b.waits !== null) - Number(a.waits !== null))}
+        />
+      )}
+    </Section>
+  );
+}
+
+function importWords(state: string | null): string | null {
+  if (state === 'failed') return 'Newest file has problems';
+  return state === 'waiting' || state === 'running' ? 'A file is being read' : null;
+}
+
+/** The newest revision of the rotating parts. */
+export async function RotatingPartsHere({ access: { program, can } }: HereProps) {
+  const home = `/programs/${program.code}/rotating-parts`;
+  const [newest] = await rotorRevisionsOf(serverDb(), program.id);
+  return (
+    <Section title="Rotating parts">
+      {newest === undefined ? (
+        <EmptyPlace
+          title="There are no rotating parts yet"
+          action={can('rotors.keep') ? <ButtonLink href={home}>Go to rotating parts</ButtonLink> : null}
+        >
+          <p>Rotors with their spin axes and inertias, and the operating points that set their speeds.</p>
+        </EmptyPlace>
+      ) : (
+        <StationSummary
+          lines={[
+            {
+              href: home,
+              title: `Revision ${newest.number}`,
+              facts: (
+                <>
+                  {newest.rotors.length} rotors, {newest.points.length} operating points,{' '}
+                  <Day at={newest.created_at} />, {newest.author}
+                </>
+              ),
+              waits: null,
+            },
+          ]}
+        />
+      )}
+    </Section>
+  );
+}
+
+/** The configurations of a program, those without a roll-up of what they now hold first. */
+export async function ConfigurationsHere({ access: { program, can } }: HereProps) {
+  const home = `/programs/${program.code}/configurations`;
+  const configurations = await configurationsOfProgram(serverDb(), program.id);
+  const lines = configurations.map((one) => ({
+    href: `${home}/${one.code}`,
+    title: one.title,
+    facts:
+      one.rolled_up_at === null ? (
+        `${one.build_title}, never rolled up`
+      ) : (
+        <>
+          {one.build_title}, rolled up <Day at={one.rolled_up_at} />
+        </>
+      ),
+    waits: one.rolled_up_version === one.version ? null : 'To roll up',
+  }));
+  return (
+    <Section title="Configurations">
+      {lines.length === 0 ? (
+        <EmptyPlace
+          title="There is no configuration yet"
+          action={
+            can('configurations.keep') ? <ButtonLink href={home}>Go to configurations</ButtonLink> : null
+          }
+        >
+          <p>A configuration pins list revisions and rotating parts and rolls them up.</p>
+        </EmptyPlace>
+      ) : (
+        <StationSummary
+          lines={[...lines].sort((a, b) => Number(b.waits !== null) - Number(a.waits !== null))}
+        />
+      )}
+    </Section>
+  );
+}
