@@ -1,6 +1,6 @@
 import { type AirframeVec, type In } from '@/lib/frames/tags';
 import { CompensatedSum } from '@/lib/numerics/sums';
-import { type Sym3, ZERO_SYM, addSym, outer, scaleSym, traceMinus } from '@/lib/numerics/sym3';
+import { type Sym3, ZERO_SYM, addSym, outer, scaleSym, trace, traceMinus } from '@/lib/numerics/sym3';
 import { ZERO_VEC, addVec, scaleVec } from '@/lib/numerics/vec3';
 
 /**
@@ -46,11 +46,30 @@ export interface Reading {
   readonly tensor: In<'airframe', Sym3>;
 }
 
+/** What a difference of two sums of this size may hold and mean nothing, as a share of their size. */
+const ROUNDING = 4 * Number.EPSILON;
+
+/** Q - m c cᵀ; what is no more than the rounding of that difference is zero, so that a point seen from afar has no moments. */
+function aboutCentre(q: Sym3, mass: number, place: AirframeVec): Sym3 {
+  const moved = scaleSym(mass, outer(place));
+  const rounding = ROUNDING * (Math.abs(trace(q)) + Math.abs(trace(moved)));
+  const { xx, yy, zz, xy, xz, yz } = addSym(q, moved, -1);
+  const beyond = (element: number): number => (Math.abs(element) <= rounding ? 0 : element);
+  return {
+    xx: beyond(xx),
+    yy: beyond(yy),
+    zz: beyond(zz),
+    xy: beyond(xy),
+    xz: beyond(xz),
+    yz: beyond(yz),
+  };
+}
+
 /** c = p/m, S = Q - m c cᵀ, J = tr(S) 1 - S. Null when the mass is zero: then there is no CG to speak of. */
 export function readAccount(a: Account): Reading | null {
   if (a.mass === 0) return null;
   const place: AirframeVec = [a.first[0] / a.mass, a.first[1] / a.mass, a.first[2] / a.mass];
-  const second = addSym(a.second, outer(place), -a.mass);
+  const second = aboutCentre(a.second, a.mass, place);
   return { mass: a.mass, place, second, tensor: traceMinus(second) };
 }
 
