@@ -69,7 +69,7 @@ export async function ensureBuild(children, distDir, log) {
 /**
  * The environment of Next's own processes: this one's and `settings`, without the owner's connection.
  * @param {Record<string, string>} settings
- * @returns {NodeJS.ProcessEnv}
+ * @returns {NodeJS.Dict<string>}
  */
 export function webEnvironment(settings) {
   const env = { ...process.env, ...settings };

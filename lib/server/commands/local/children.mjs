@@ -13,7 +13,7 @@ const TSX = ['--import', import.meta.resolve('tsx')];
  * @typedef {object} ChildOptions
  * @property {string} name what messages call it
  * @property {string[]} args arguments of node
- * @property {NodeJS.ProcessEnv} env the whole environment
+ * @property {NodeJS.Dict<string>} env the whole environment
  * @property {string} [log] a file for its output; without it the terminal
  * @property {boolean} [typescript] run through tsx
  */
@@ -132,7 +132,7 @@ export function saysReady(child) {
  * @param {string} url
  * @param {number} [patience] ms
  */
-export async function answers(url, patience = 60_000) {
+export async function answers(url, patience = 120_000) {
   const until = Date.now() + patience;
   for (;;) {
     try {

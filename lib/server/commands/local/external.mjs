@@ -15,7 +15,7 @@ const NEEDED = [
 
 /**
  * The settings of the given services, or null if none is set; a Failure that names the missing ones if some are.
- * @param {NodeJS.ProcessEnv} source
+ * @param {Readonly<Record<string, string | undefined>>} source
  * @returns {Record<string, string> | null}
  */
 export function externalSettings(source) {

@@ -119,7 +119,7 @@ export async function startFakes(children, secrets, taken, onDeath) {
  * Loads the demo into a database that has not had it; what says so lies beside the cluster and goes with it.
  * @param {import('./children.mjs').Children} children
  * @param {import('./postgres.mjs').Cluster} cluster
- * @param {NodeJS.ProcessEnv} env
+ * @param {NodeJS.Dict<string>} env
  */
 export async function loadDemoOnce(children, cluster, env) {
   const stamp = path.join(cluster.home, 'demo-loaded');
