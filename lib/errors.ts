@@ -20,10 +20,11 @@ export const ERROR_CODES = {
 
 export type ErrorCode = keyof typeof ERROR_CODES;
 
-/** One thing wrong in an input: by line and column in a file, by JSON pointer (RFC 6901) elsewhere. */
+/** One thing wrong in an input: by line and column in a file, by JSON pointer (RFC 6901) in a body, by name in a query or path. */
 export interface InputError {
   readonly message: string;
   readonly pointer?: string;
+  readonly parameter?: string;
   readonly line?: number | null;
   readonly column?: string | null;
   readonly found?: string | null;

@@ -18,10 +18,11 @@ const axes = z
 
 const finite = z.number().finite();
 
+// A mistyped member would leave a default in force unseen.
 const frame = z
-  .object({
+  .strictObject({
     origin: z
-      .object({ x: finite.default(0), y: finite.default(0), z: finite.default(0) })
+      .strictObject({ x: finite.default(0), y: finite.default(0), z: finite.default(0) })
       .default({ x: 0, y: 0, z: 0 })
       .describe("Origin of the list's frame in airframe components, in the list's length unit"),
     yaw: finite.default(0).describe('deg'),

@@ -10,12 +10,17 @@ import { ROTOR_RULES, ROW_RULES, WHOLE_RULES } from './rules';
 
 const ORDER: Readonly<Record<Severity, number>> = { blocker: 0, warning: 1, note: 2 };
 
+/** Blockers first, then warnings, then notes. */
+export function bySeverity(a: Finding, b: Finding): number {
+  return ORDER[a.severity] - ORDER[b.severity];
+}
+
 function findingsOf(seen: readonly (readonly [Rule, Sighting | null])[]): Finding[] {
   return seen
     .flatMap(([{ id, severity }, sighting]) =>
       sighting === null ? [] : [{ rule: id, severity, ...sighting }],
     )
-    .sort((a, b) => ORDER[a.severity] - ORDER[b.severity]);
+    .sort(bySeverity);
 }
 
 /** Shows every row of one list to every row rule, one row at a time. */

@@ -1,0 +1,8 @@
+import { openapiEndpoint } from '@/lib/contracts/api/openapi';
+import { openApiDocument } from '@/lib/server/api/openapi/document';
+import { respond } from '@/lib/server/api/respond';
+import { openRoute } from '@/lib/server/http/api-route';
+
+export const GET = openRoute(async () =>
+  respond(openapiEndpoint, 200, openApiDocument(), { 'Cache-Control': 'public, max-age=300' }),
+);

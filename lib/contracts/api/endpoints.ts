@@ -1,0 +1,19 @@
+import { type Endpoint } from '@/lib/contracts/api/endpoint';
+import { healthEndpoint } from '@/lib/contracts/api/health';
+import { importEndpoint } from '@/lib/contracts/api/imports';
+import { saveListEndpoint } from '@/lib/contracts/api/lists';
+import { openapiEndpoint } from '@/lib/contracts/api/openapi';
+import { programsEndpoint } from '@/lib/contracts/api/programs';
+import { addRevisionEndpoint } from '@/lib/contracts/api/revisions';
+import { rollUpEndpoint } from '@/lib/contracts/api/roll-ups';
+
+/** Every endpoint of the JSON API, in the order of the documentation. */
+export const ENDPOINTS: readonly Endpoint[] = [
+  rollUpEndpoint,
+  programsEndpoint,
+  saveListEndpoint,
+  addRevisionEndpoint,
+  importEndpoint,
+  openapiEndpoint,
+  healthEndpoint,
+];
