@@ -6,6 +6,7 @@ import { toCsv } from '@/components/data-table/export-text';
 import { type TableView } from '@/components/data-table/view';
 import { Button } from '@/components/ui/button';
 import { CONTROL_CLASS } from '@/components/ui/field';
+import { SelectControl } from '@/components/ui/select-control';
 
 interface ToolbarProps<Row> {
   readonly columns: readonly DataColumn<Row>[];
@@ -32,11 +33,10 @@ export function Toolbar<Row>(props: ToolbarProps<Row>) {
           <label htmlFor={`${id}-group`} className="text-note text-ink-2">
             Group
           </label>
-          <select
+          <SelectControl
             id={`${id}-group`}
             value={view.group}
             onChange={(event) => onView({ ...view, group: event.target.value })}
-            className={CONTROL_CLASS}
           >
             <option value="">All groups</option>
             {groups.map((group) => (
@@ -44,7 +44,7 @@ export function Toolbar<Row>(props: ToolbarProps<Row>) {
                 {group}
               </option>
             ))}
-          </select>
+          </SelectControl>
         </div>
       ) : null}
       {groups.length > 0 ? (

@@ -60,14 +60,18 @@ export function useTableRows<Row extends RowData>(options: TableRowsOptions<Row>
     );
   }, [columns]);
   const data = useMemo(() => [...rows], [rows]);
+  const { text, group } = view;
+  const sortColumn = view.sort?.column;
+  const descending = view.sort?.descending ?? false;
+  const hidden = view.hidden.join('\n');
   const state = useMemo(
     () => ({
-      sorting: view.sort ? [{ id: view.sort.column, desc: view.sort.descending }] : [],
-      globalFilter: view.text,
-      columnFilters: groupColumn && view.group ? [{ id: groupColumn, value: view.group }] : [],
-      columnVisibility: Object.fromEntries(view.hidden.map((id) => [id, false])),
+      sorting: sortColumn ? [{ id: sortColumn, desc: descending }] : [],
+      globalFilter: text,
+      columnFilters: groupColumn && group ? [{ id: groupColumn, value: group }] : [],
+      columnVisibility: Object.fromEntries(hidden.split('\n').map((id) => [id, false])),
     }),
-    [view.sort, view.text, view.group, view.hidden, groupColumn],
+    [sortColumn, descending, text, group, hidden, groupColumn],
   );
   const table = useTable({
     features,
@@ -86,9 +90,9 @@ export function useTableRows<Row extends RowData>(options: TableRowsOptions<Row>
   });
   const model = table.getRowModel();
   const shown = useMemo(() => model.rows.map((row) => row.original), [model]);
-  const visible = useMemo(
-    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
-    [columns, view.hidden],
-  );
+  const visible = useMemo(() => {
+    const ids = new Set(hidden.split('\n'));
+    return columns.filter((column, index) => index === 0 || !ids.has(column.id));
+  }, [columns, hidden]);
   return { shown, visible };
 }

@@ -1,6 +1,6 @@
 import { type ComponentProps, useId } from 'react';
-import { CONTROL_CLASS, Field, fieldAria, type FieldWords } from '@/components/ui/field';
-import { classes } from '@/components/ui/classes';
+import { Field, fieldAria, type FieldWords } from '@/components/ui/field';
+import { SelectControl } from '@/components/ui/select-control';
 
 export interface Option {
   readonly value: string;
@@ -24,32 +24,15 @@ export function SelectField(props: SelectFieldProps) {
   const initial = select.value === undefined ? { defaultValue: defaultValue ?? '' } : {};
   return (
     <Field id={id} {...words}>
-      <div className="relative">
-        {/* The key keeps the choice: React resets a form after its action, and a select then forgets a changed default. */}
-        <select
-          key={String(defaultValue)}
-          {...initial}
-          {...select}
-          {...fieldAria(id, words)}
-          className={classes(CONTROL_CLASS, 'appearance-none pr-7')}
-        >
-          {placeholder === undefined ? null : <option value="">{placeholder}</option>}
-          {options.map((option) => (
-            <option key={option.value} value={option.value} disabled={option.disabled ?? false}>
-              {option.label}
-            </option>
-          ))}
-        </select>
-        <svg
-          width="8"
-          height="8"
-          viewBox="0 0 8 8"
-          aria-hidden="true"
-          className="pointer-events-none absolute inset-y-0 right-2.5 my-auto fill-none stroke-current"
-        >
-          <path d="M1 2.5 4 6 7 2.5" strokeWidth="1.5" />
-        </svg>
-      </div>
+      {/* The key keeps the choice: React resets a form after its action, and a select then forgets a changed default. */}
+      <SelectControl key={String(defaultValue)} {...initial} {...select} {...fieldAria(id, words)}>
+        {placeholder === undefined ? null : <option value="">{placeholder}</option>}
+        {options.map((option) => (
+          <option key={option.value} value={option.value} disabled={option.disabled ?? false}>
+            {option.label}
+          </option>
+        ))}
+      </SelectControl>
     </Field>
   );
 }
