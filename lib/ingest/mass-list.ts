@@ -1,5 +1,5 @@
 import { Cells } from '@/lib/ingest/table/cells';
-import { readComponent } from '@/lib/ingest/mass-list/component-row';
+import { ComponentRows } from '@/lib/ingest/mass-list/component-row';
 import { type ColumnMapping, type HeaderProblem, readHeader } from '@/lib/ingest/table/header';
 import { ItemTree } from '@/lib/ingest/mass-list/item-tree';
 import { type IngestLimits, MASS_LIST_LIMITS } from '@/lib/ingest/limits';
@@ -51,8 +51,8 @@ export async function readMassList(
   const scales = listScales(declarations);
   const log = new ProblemLog();
   const tree = new ItemTree(log);
-  const problemsSoFar = (): number => log.total;
   let cells: Cells<ListColumn> | null = null;
+  let components: ComponentRows | null = null;
   let key: ListColumn = 'item';
   let unknownColumns: readonly string[] = [];
   let everyRow = true;
@@ -67,15 +67,16 @@ export async function readMassList(
       unknownColumns = header.own.map(({ name }) => name);
       key = header.positions.has('item') ? 'item' : 'part_number';
       cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength });
+      components = new ComponentRows(cells, scales, declarations);
       return log.total === 0;
     },
     row(record) {
-      if (cells === null) return;
+      if (cells === null || components === null) return;
       if (!cells.load(record)) {
         everyRow = false;
         return;
       }
-      const component = readComponent(cells, scales, declarations, problemsSoFar);
+      const component = components.read();
       const item = component?.item ?? cells.text(key);
       const fresh = item !== null && tree.add(item, cells.text('parent'), record.line, key);
       if (component !== null && fresh) return onComponent(component, record.line);

@@ -41,8 +41,8 @@ export const ROTOR_COLUMNS: readonly RotorColumn[] = [
 type RotorCells = Cells<RotorColumn>;
 
 /** The rotor of the row that `cells` holds, in SI, or null when something in it is wrong (which is in the log). */
-export function readRotor(cells: RotorCells, unit: Factor, problemsSoFar: () => number): Rotor | null {
-  const before = problemsSoFar();
+export function readRotor(cells: RotorCells, unit: Factor): Rotor | null {
+  const before = cells.problems;
   const rotor = cells.neededText('rotor');
   const inertia = cells.neededNumber('polar_inertia');
   if (inertia !== undefined && inertia <= 0) {
@@ -71,7 +71,7 @@ export function readRotor(cells: RotorCells, unit: Factor, problemsSoFar: () => 
   }
   const blades = cells.count('blades') ?? null;
   const axis = readAxis(cells);
-  if (rotor === null || inertia === undefined || axis === null || problemsSoFar() > before) return null;
+  if (rotor === null || inertia === undefined || axis === null || cells.problems > before) return null;
   return {
     rotor,
     polarInertia: (inertia * unit.times) / unit.over,

@@ -50,7 +50,7 @@ export async function readRotors(
     },
     row(record) {
       if (cells === null || !cells.load(record)) return;
-      const rotor = readRotor(cells, FACTORS[inertiaUnit], () => log.total);
+      const rotor = readRotor(cells, FACTORS[inertiaUnit]);
       const name = cells.text('rotor');
       if (name === null) return;
       const earlier = lines.get(name);

@@ -67,6 +67,11 @@ export class Cells<C extends string> {
     return true;
   }
 
+  /** How many problems the file has so far. */
+  get problems(): number {
+    return this.log.total;
+  }
+
   has(column: C): boolean {
     return this.header.positions.has(column);
   }
