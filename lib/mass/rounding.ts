@@ -9,6 +9,9 @@ function decimals(value: number): number {
   return Math.max(0, fraction.length - Number(exponent));
 }
 
+/** Whole numbers do not say how they were rounded (3 may be exact): they excuse this share of tr S at most. */
+const WHOLE_NUMBERS = 0.01;
+
 /**
  * What rounding in the source can do to an eigenvalue of S, kg.m2: each printed figure is off by half a unit of its last
  * place, the finest place among the six counting for all. A diagonal of S is half the sum of three moments, an off-diagonal
@@ -19,5 +22,8 @@ export function roundingOfPrinted(moments: Moments, unit: InertiaUnit): number {
   const places = Math.max(...printed.map(decimals));
   const halfUnit = toSi(0.5 * 10 ** -places, unit);
   const hasProducts = moments.ixy !== 0 || moments.ixz !== 0 || moments.iyz !== 0;
-  return (hasProducts ? 3.5 : 1.5) * halfUnit;
+  const rounding = (hasProducts ? 3.5 : 1.5) * halfUnit;
+  if (places > 0) return rounding;
+  const traceOfS = Math.abs(moments.ixx + moments.iyy + moments.izz) / 2;
+  return Math.min(rounding, WHOLE_NUMBERS * traceOfS);
 }

@@ -70,7 +70,13 @@ describe('the rounding of printed moments', () => {
   });
 
   it('is more where products are stated', () => {
-    expect(roundingOfPrinted({ ...diagonal([8, 9, 11]), ixz: -2 }, 'kg.m2')).toBe(1.75);
+    expect(roundingOfPrinted({ ...diagonal([80.5, 90, 110]), ixz: -2 }, 'kg.m2')).toBeCloseTo(0.175, 14);
+  });
+
+  it('excuses no more than a hundredth where all figures are whole numbers', () => {
+    // S of (1, 1, 3) has trace 2.5: 1, 1 and 3 are not 1.4, 1.4 and 2.6.
+    expect(roundingOfPrinted(diagonal([1, 1, 3]), 'kg.m2')).toBeCloseTo(0.025, 14);
+    expect(checkOwnMoments(1, diagonal([1, 1, 3]), 0.025).verdict).toBe('impossible');
   });
 
   it('reads exponents', () => {
