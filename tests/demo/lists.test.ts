@@ -143,7 +143,7 @@ describe('the people', () => {
   it('let somebody else sign: two weights engineers, two chiefs, one invented domain', () => {
     const of = (role: string): number => demo.people.filter((person) => person.role === role).length;
     expect([of('weights'), of('chief'), of('simulation'), of('admin')]).toEqual([2, 2, 1, 1]);
-    expect(demo.people.every(({ email }) => email.endsWith('@skerry-aircraft.example'))).toBe(true);
+    expect(demo.people.every(({ email }) => email.endsWith('@skerry.example'))).toBe(true);
     const engineers = new Set(demo.people.filter(({ role }) => role === 'weights').map(({ code }) => code));
     const authors = demo.lists.flatMap(({ revisions }) => revisions.map(({ by }) => by));
     expect(authors.every((author) => engineers.has(author))).toBe(true);
