@@ -158,11 +158,11 @@ async function placed(
     if (wanted.has(line)) items.set(line, row.item);
     line += lineBreaks(row.text);
   }
-  return problems.map(({ line: at, column, found, message }) => ({
+  return problems.map(({ kind, line: at, column, found, message }) => ({
     item: at === null ? null : (items.get(at) ?? null),
     column,
     found,
-    message,
+    message: kind === 'no-rows' ? 'No row would be left. A list needs at least one.' : message,
   }));
 }
 
