@@ -4,6 +4,8 @@ import { type Header } from '@/lib/ingest/table/header';
 import { COMMA, POINT_OR_THOUSANDS, readNumber } from '@/lib/ingest/table/number-text';
 import { type ProblemLog, shorten } from '@/lib/ingest/problem-log';
 
+const LARGEST_COUNT = 1_000_000;
+
 interface Place {
   readonly line: number;
   readonly column: string;
@@ -116,12 +118,16 @@ export class Cells<C extends string> {
     return undefined;
   }
 
-  /** A whole number of at least 1, null when blank, undefined when wrong. */
+  /** A whole number from 1 to a million, null when blank, undefined when wrong. */
   count(column: C): number | null | undefined {
     const value = this.number(column);
     if (value === null || value === undefined) return value;
-    if (Number.isSafeInteger(value) && value >= 1) return value;
-    this.problem('not-a-count', column, `${this.quoted(column)} is not a whole number of 1 or more.`);
+    if (Number.isInteger(value) && value >= 1 && value <= LARGEST_COUNT) return value;
+    this.problem(
+      'not-a-count',
+      column,
+      `${this.quoted(column)} is not a whole number from 1 to ${LARGEST_COUNT}.`,
+    );
     return undefined;
   }
 
