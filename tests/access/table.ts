@@ -1,0 +1,98 @@
+/**
+ * Every page, route handler and server action, and what it asks before it does anything. Written by hand: whoever adds one says
+ * here who is meant to reach it. `public` needs no sign-in; `site` and `program` are followed by an action of lib/permissions.ts;
+ * `token` is a bearer token, with the action that the program's role must allow where one is concerned.
+ */
+export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> = {
+  'app/(auth)/sign-in/page.tsx': { page: 'public' },
+  'app/(auth)/sign-in/actions.ts': { signInAction: 'public' },
+  'app/(auth)/invitation/[secret]/page.tsx': { page: 'public' },
+  'app/(auth)/invitation/[secret]/actions.ts': { acceptInvitationAction: 'public' },
+  'app/(auth)/password-reset/page.tsx': { page: 'public' },
+  'app/(auth)/password-reset/actions.ts': { requestPasswordResetAction: 'public' },
+  'app/(auth)/password-reset/[secret]/page.tsx': { page: 'public' },
+  'app/(auth)/password-reset/[secret]/actions.ts': { resetPasswordAction: 'public' },
+
+  'app/(workspace)/page.tsx': { page: 'site programs.list' },
+  'app/(workspace)/actions.ts': { signOutAction: 'site account.keep' },
+  'app/(workspace)/account/page.tsx': { page: 'site account.keep' },
+  'app/(workspace)/account/actions.ts': {
+    changePasswordAction: 'site account.keep',
+    signOutEverywhereAction: 'site account.keep',
+    makeTokenAction: 'site tokens.keep',
+    revokeTokenAction: 'site tokens.keep',
+  },
+  'app/(workspace)/admin/page.tsx': { page: 'site people.keep' },
+  'app/(workspace)/admin/actions.ts': {
+    invitePersonAction: 'site people.keep',
+    resendInvitationAction: 'site people.keep',
+    disablePersonAction: 'site people.keep',
+    enablePersonAction: 'site people.keep',
+    createProgramAction: 'site programs.create',
+  },
+  'app/(workspace)/admin/programs/[program]/page.tsx': { page: 'site people.keep, program members.keep' },
+
+  'app/(workspace)/programs/[program]/page.tsx': { page: 'program program.read' },
+  'app/(workspace)/programs/[program]/settings/members/page.tsx': { page: 'program members.read' },
+  'app/(workspace)/programs/[program]/settings/members/actions.ts': {
+    addMemberAction: 'program members.keep',
+    changeMemberRoleAction: 'program members.keep',
+    removeMemberAction: 'program members.keep',
+  },
+
+  'app/api/internal/programs/[program]/lists/example/route.ts': { GET: 'program lists.read' },
+  'app/api/internal/programs/[program]/lists/[list]/edits/route.ts': { POST: 'program lists.keep' },
+  'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': { GET: 'program lists.read' },
+  'app/api/internal/programs/[program]/lists/[list]/imports/[import]/problems/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/route.ts': { POST: 'program lists.keep' },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/changes/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/export/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/file/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/rows/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/totals/route.ts': {
+    GET: 'program lists.read',
+  },
+
+  'app/api/v1/openapi.json/route.ts': { GET: 'public' },
+  'app/api/v1/health/route.ts': { GET: 'public' },
+  'app/api/v1/[...path]/route.ts': {
+    DELETE: 'public',
+    GET: 'public',
+    PATCH: 'public',
+    POST: 'public',
+    PUT: 'public',
+  },
+  'app/api/v1/roll-ups/route.ts': { POST: 'token' },
+  'app/api/v1/programs/route.ts': { GET: 'token' },
+  'app/api/v1/imports/[id]/route.ts': { GET: 'token' },
+  'app/api/v1/programs/[program]/lists/[list]/route.ts': { PUT: 'token lists.keep' },
+  'app/api/v1/programs/[program]/lists/[list]/revisions/route.ts': { POST: 'token lists.keep' },
+};
+
+export interface Entry {
+  readonly file: string;
+  readonly name: string;
+  /** `public`, `site`, `program` or `token`, each with its action or ''. */
+  readonly asks: readonly { readonly kind: string; readonly action: string }[];
+}
+
+export const ENTRIES: readonly Entry[] = Object.entries(ACCESS).flatMap(([file, handlers]) =>
+  Object.entries(handlers).map(([name, words]) => ({
+    file,
+    name,
+    asks: words.split(', ').map((each) => {
+      const [kind = '', action = ''] = each.split(' ');
+      return { kind, action };
+    }),
+  })),
+);
