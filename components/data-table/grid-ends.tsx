@@ -73,7 +73,7 @@ export function GridFoot<Row>({ columns, rows, total, of, totals }: GridFootProp
           <td key={column.id}>
             {index === 0 ? (
               <span className="block truncate">
-                {totals || rows.length === total ? `All ${of}` : `${rows.length} ${of} shown`}
+                {totals || rows.length === total ? `All ${of}` : `${rows.length} shown`}
               </span>
             ) : (
               <CellContent column={column} value={values[index] ?? null} />

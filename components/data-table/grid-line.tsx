@@ -38,7 +38,6 @@ export function GridLine<Row>(props: GridLineProps<Row>) {
           <td
             key={column.id}
             id={`${gridId}-${index}-${at}`}
-            data-column={at}
             aria-colindex={at + 1}
             aria-selected={picked}
             className={classes(
@@ -57,7 +56,7 @@ export function GridLine<Row>(props: GridLineProps<Row>) {
             {line.kind === 'row' ? (
               (column.cell?.(line.row) ?? <CellContent column={column} value={column.value(line.row)} />)
             ) : at === 0 ? (
-              <span className="block truncate" title={line.path}>
+              <span className="whitespace-nowrap">
                 {line.path || 'No group'}, {line.rows.length}
               </span>
             ) : (

@@ -50,10 +50,7 @@ export function Grid<Row>(props: GridProps<Row>) {
   const go = (next: Selection) => {
     setSelection(next);
     rowWindow.show(next.head.line);
-    box.current?.querySelector(`[data-column="${next.head.column}"]`)?.scrollIntoView({
-      block: 'nearest',
-      inline: 'nearest',
-    });
+    showColumn(box.current, next.head.column);
   };
   const openLine = (line: number) => {
     const target = lines[line];
@@ -151,6 +148,16 @@ export function Grid<Row>(props: GridProps<Row>) {
       ) : null}
     </div>
   );
+}
+
+/** Brings a column beside the frozen first one into sight. */
+function showColumn(box: HTMLElement | null, column: number): void {
+  const heads = box?.querySelectorAll('th') ?? [];
+  const [frozen, head] = [heads[0], heads[column]];
+  if (!box || !frozen || !head || column === 0) return;
+  const [left, right] = [head.offsetLeft, head.offsetLeft + head.offsetWidth];
+  if (left - frozen.offsetWidth < box.scrollLeft) box.scrollLeft = left - frozen.offsetWidth;
+  else if (right > box.scrollLeft + box.clientWidth) box.scrollLeft = right - box.clientWidth;
 }
 
 function Spacer({ height, columns }: { readonly height: number; readonly columns: number }) {
