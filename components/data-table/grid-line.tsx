@@ -19,13 +19,14 @@ interface GridLineProps<Row> {
   readonly onOpen: () => void;
 }
 
-/** One line of the body: a row, or a group with its subtotals. */
+/** One line of the body: a row, a group with its subtotals, or the room of a row on its way. */
 export function GridLine<Row>(props: GridLineProps<Row>) {
   const { gridId, line, index, columns, chosen, active, isOpen, onPick, onOpen } = props;
   const several = chosen.top !== chosen.bottom || chosen.left !== chosen.right;
   return (
     <tr
       aria-rowindex={index + 2}
+      aria-busy={line.kind === 'waiting' || undefined}
       className={classes(line.kind === 'group' && 'group-line', isOpen && 'open-line')}
       onClick={(event) => {
         if (!several && !event.shiftKey && !isControl(event.target)) onOpen();
@@ -55,7 +56,7 @@ export function GridLine<Row>(props: GridLineProps<Row>) {
           >
             {line.kind === 'row' ? (
               (column.cell?.(line.row) ?? <CellContent column={column} value={column.value(line.row)} />)
-            ) : at === 0 ? (
+            ) : line.kind === 'waiting' ? null : at === 0 ? (
               <span className="whitespace-nowrap">
                 {line.path || 'No group'}, {line.rows.length}
               </span>

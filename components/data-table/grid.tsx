@@ -1,6 +1,6 @@
 'use client';
 
-import { type ClipboardEvent, type KeyboardEvent, useId, useMemo, useRef, useState } from 'react';
+import { type ClipboardEvent, type KeyboardEvent, useEffect, useId, useMemo, useRef, useState } from 'react';
 import { type CellValue, columnWidth, type DataColumn } from '@/components/data-table/column';
 import { toTsv } from '@/components/data-table/export-text';
 import { GridLine } from '@/components/data-table/grid-line';
@@ -25,6 +25,12 @@ interface GridProps<Row> {
   readonly totals: Readonly<Record<string, CellValue>> | undefined;
   readonly opens: boolean;
   readonly onPlain: () => void;
+  /** What the lines are of, when they arrive piece by piece: the selection holds while it stays the same. */
+  readonly subject?: string;
+  /** Told which lines are in sight, from `first` up to, not including, `last`. */
+  readonly onWindow?: (first: number, last: number) => void;
+  /** Called instead of a copy that would lack lines which are still on their way. */
+  readonly onCopyTooEarly?: () => void;
 }
 
 /** Rows that go on paper; more than these belong in the CSV. */
@@ -37,14 +43,18 @@ export function Grid<Row>(props: GridProps<Row>) {
   const box = useRef<HTMLDivElement>(null);
   const rowHeight = useRowHeight();
   const printing = usePrinting();
-  const [kept, setKept] = useState<{ readonly lines: readonly Line<Row>[]; readonly selection: Selection }>();
-  const selection = kept?.lines === lines ? kept.selection : at(0, 0);
-  const setSelection = (next: Selection) => setKept({ lines, selection: next });
+  const subject = props.subject ?? lines;
+  const [kept, setKept] = useState<{ readonly subject: unknown; readonly selection: Selection }>();
+  const selection = kept?.subject === subject ? kept.selection : at(0, 0);
+  const setSelection = (next: Selection) => setKept({ subject, selection: next });
   const chosen = bounds(selection);
 
   const rowWindow = useRowWindow(box, lines.length, rowHeight);
+  const body = printing ? lines.filter((line) => line.kind !== 'waiting').slice(0, MOST_PRINTED) : lines;
   const first = printing ? 0 : rowWindow.first;
-  const last = printing ? Math.min(lines.length, MOST_PRINTED) : rowWindow.last;
+  const last = printing ? body.length : rowWindow.last;
+  const { onWindow } = props;
+  useEffect(() => onWindow?.(first, last), [onWindow, first, last]);
   const width = useMemo(() => columns.reduce((sum, column) => sum + columnWidth(column), 0), [columns]);
 
   const go = (next: Selection) => {
@@ -68,7 +78,13 @@ export function Grid<Row>(props: GridProps<Row>) {
   };
   const onCopy = (event: ClipboardEvent) => {
     if (window.getSelection()?.isCollapsed === false || lines.length === 0) return;
-    const picked = lines.slice(chosen.top, chosen.bottom + 1).filter((line) => line.kind === 'row');
+    const within = lines.slice(chosen.top, chosen.bottom + 1);
+    if (within.some((line) => line.kind === 'waiting')) {
+      event.preventDefault();
+      props.onCopyTooEarly?.();
+      return;
+    }
+    const picked = within.filter((line) => line.kind === 'row');
     const across = columns.slice(chosen.left, chosen.right + 1);
     const whole = picked.length === shown.length && shown.length > 1;
     event.clipboardData.setData(
@@ -112,7 +128,7 @@ export function Grid<Row>(props: GridProps<Row>) {
         />
         <tbody>
           <Spacer height={first * rowHeight} columns={columns.length} />
-          {lines.slice(first, last).map((line, offset) => (
+          {body.slice(first, last).map((line, offset) => (
             <GridLine
               key={line.id}
               gridId={id}
@@ -141,9 +157,9 @@ export function Grid<Row>(props: GridProps<Row>) {
         </tbody>
         <GridFoot columns={columns} rows={shown} total={total} of={of} totals={totals} />
       </table>
-      {printing && lines.length > MOST_PRINTED ? (
+      {printing && lines.length > body.length ? (
         <p className="pt-2 text-note">
-          The first {MOST_PRINTED} of {lines.length} lines. The CSV export has them all.
+          The first {body.length} of {lines.length} lines. The CSV export has them all.
         </p>
       ) : null}
     </div>

@@ -1,7 +1,8 @@
-/** A line of the table's body: a row, or the head of a group with the rows below it. */
+/** A line of the table's body: a row, the head of a group with the rows below it, or a row that is still on its way. */
 export type Line<Row> =
   | { readonly kind: 'row'; readonly row: Row; readonly id: string }
-  | { readonly kind: 'group'; readonly path: string; readonly rows: readonly Row[]; readonly id: string };
+  | { readonly kind: 'group'; readonly path: string; readonly rows: readonly Row[]; readonly id: string }
+  | { readonly kind: 'waiting'; readonly id: string };
 
 /** Rows as lines, in the order given. */
 export function plainLines<Row>(rows: readonly Row[], idOf: (row: Row) => string): readonly Line<Row>[] {

@@ -1,15 +1,38 @@
 'use client';
 
 import { useCallback, useSyncExternalStore } from 'react';
+import { flushSync } from 'react-dom';
 
 /** 28 px, or 44 px under a finger. */
 export function useRowHeight(): number {
   return useMedia('(pointer: coarse)') ? 44 : 28;
 }
 
-/** True while the page is being put on paper. */
+let onPaper = false;
+
+/** True while the page is being put on paper. The browser asks for the page right after `beforeprint`, so that event counts first. */
 export function usePrinting(): boolean {
-  return useMedia('print');
+  return useSyncExternalStore(
+    watchPrinting,
+    () => onPaper || window.matchMedia('print').matches,
+    () => false,
+  );
+}
+
+function watchPrinting(changed: () => void): () => void {
+  const set = (event: Event) => {
+    onPaper = event.type === 'beforeprint';
+    flushSync(changed);
+  };
+  const list = window.matchMedia('print');
+  list.addEventListener('change', changed);
+  window.addEventListener('beforeprint', set);
+  window.addEventListener('afterprint', set);
+  return () => {
+    list.removeEventListener('change', changed);
+    window.removeEventListener('beforeprint', set);
+    window.removeEventListener('afterprint', set);
+  };
 }
 
 function useMedia(query: string): boolean {

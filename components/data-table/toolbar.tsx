@@ -75,7 +75,7 @@ export function Toolbar<Row>(props: ToolbarProps<Row>) {
 }
 
 /** The text filter: what is typed takes effect after a short rest, so that large tables keep up. */
-function Find({ text, onText }: { readonly text: string; readonly onText: (text: string) => void }) {
+export function Find({ text, onText }: { readonly text: string; readonly onText: (text: string) => void }) {
   const id = useId();
   const [typed, setTyped] = useState(text);
   const [given, setGiven] = useState(text);
@@ -106,7 +106,8 @@ function Find({ text, onText }: { readonly text: string; readonly onText: (text:
   );
 }
 
-function ColumnChoice<Row>({
+/** Which columns are shown; the first always is. */
+export function ColumnChoice<Row>({
   columns,
   view,
   onView,

@@ -41,7 +41,7 @@ export async function PageFrame(props: PageFrameProps) {
   } = props;
   const theme = themeFromCookie((await cookies()).get(THEME_COOKIE)?.value);
   return (
-    <div className="flex min-h-screen flex-col">
+    <div className="page flex min-h-screen flex-col">
       <a
         href="#content"
         className="sr-only z-40 bg-sheet px-4 py-2 focus:not-sr-only focus:absolute focus:top-2 focus:left-2"
@@ -49,52 +49,54 @@ export async function PageFrame(props: PageFrameProps) {
         Skip to the content
       </a>
       {marking ? <MarkingStrip marking={marking} /> : null}
-      <header className="no-print flex flex-wrap items-center gap-x-6 gap-y-1 px-4 pt-3 pb-1 sm:px-6">
-        <Link href="/" className="flex items-center gap-2">
-          <BrandMark />
-          <span className="text-lead font-semibold">Polhode</span>
-        </Link>
-        {program ? (
-          <Link
-            href={program.href}
-            className="min-w-0 truncate text-lead hover:underline hover:underline-offset-4"
-          >
-            {program.title}
+      <div className="page-body flex flex-1 flex-col">
+        <header className="no-print flex flex-wrap items-center gap-x-6 gap-y-1 px-4 pt-3 pb-1 sm:px-6">
+          <Link href="/" className="flex items-center gap-2">
+            <BrandMark />
+            <span className="text-lead font-semibold">Polhode</span>
           </Link>
-        ) : null}
-        <div className="ml-auto flex flex-wrap items-center gap-x-6 gap-y-1">
-          {links.map((link) => (
-            <Link key={link.href} href={link.href} className="hover:underline hover:underline-offset-4">
-              {link.words}
+          {program ? (
+            <Link
+              href={program.href}
+              className="min-w-0 truncate text-lead hover:underline hover:underline-offset-4"
+            >
+              {program.title}
             </Link>
-          ))}
-          {person ? (
-            <>
-              <Link href={person.href} className="hover:underline hover:underline-offset-4">
-                {person.name}
-              </Link>
-              {person.signOut}
-            </>
           ) : null}
-        </div>
-      </header>
-      {stations && stations.length > 0 ? <StationRule stations={stations} current={current} /> : null}
-      <main
-        id="content"
-        tabIndex={-1}
-        className={classes(
-          'grid w-full min-w-0 flex-1 content-start gap-8 px-4 py-8 outline-none sm:px-6',
-          width === 'narrow' ? 'mx-auto max-w-160' : 'max-w-480',
-        )}
-      >
-        {children}
-      </main>
-      <footer className="no-print flex flex-wrap items-center gap-x-6 gap-y-2 border-t border-rule px-4 py-2 text-ink-2 sm:px-6">
-        <ThemeSwitch theme={theme} />
-        <span className="ml-auto">
-          <KeyHelp keys={keys} />
-        </span>
-      </footer>
+          <div className="ml-auto flex flex-wrap items-center gap-x-6 gap-y-1">
+            {links.map((link) => (
+              <Link key={link.href} href={link.href} className="hover:underline hover:underline-offset-4">
+                {link.words}
+              </Link>
+            ))}
+            {person ? (
+              <>
+                <Link href={person.href} className="hover:underline hover:underline-offset-4">
+                  {person.name}
+                </Link>
+                {person.signOut}
+              </>
+            ) : null}
+          </div>
+        </header>
+        {stations && stations.length > 0 ? <StationRule stations={stations} current={current} /> : null}
+        <main
+          id="content"
+          tabIndex={-1}
+          className={classes(
+            'grid w-full min-w-0 flex-1 content-start gap-8 px-4 py-8 outline-none sm:px-6',
+            width === 'narrow' ? 'mx-auto max-w-160' : 'max-w-480',
+          )}
+        >
+          {children}
+        </main>
+        <footer className="no-print flex flex-wrap items-center gap-x-6 gap-y-2 border-t border-rule px-4 py-2 text-ink-2 sm:px-6">
+          <ThemeSwitch theme={theme} />
+          <span className="ml-auto">
+            <KeyHelp keys={keys} />
+          </span>
+        </footer>
+      </div>
     </div>
   );
 }
