@@ -71,7 +71,9 @@ describe('reflection across the plane of symmetry', () => {
         twice.forEach((part, i) => expect(part).toBeCloseTo(r[i] ?? NaN, 12));
         const inPlane: [number, number, number] = [...r];
         inPlane[k] = plane + 0;
-        expect(mirrorPlace(inPlane, k, plane)).toEqual(inPlane);
+        expect(mirrorPlace(inPlane, k, plane).map((part) => part + 0)).toEqual(
+          inPlane.map((part) => part + 0),
+        );
       }),
     );
   });
