@@ -4,7 +4,7 @@ import os from 'node:os';
 import path from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import pg from 'pg';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { DEMO_PEOPLE } from '@/lib/server/commands/local/demo-people.mjs';
 import { ROOT } from '@/lib/server/commands/local/places.mjs';
 import { anyFreePort, isFree } from '@/lib/server/commands/local/ports.mjs';
@@ -21,6 +21,16 @@ interface Start {
   readonly settled: Promise<string>;
   readonly ended: Promise<number | null>;
 }
+
+const started: Start[] = [];
+
+// A test that fails half-way must leave nothing either.
+afterEach(async () => {
+  for (const { child, ended } of started.splice(0)) {
+    if (child.exitCode === null && child.signalCode === null) child.kill('SIGTERM');
+    await ended;
+  }
+});
 
 /** What `npm start` runs, with the build of this test run and nothing of its services. */
 function start(env: Readonly<Record<string, string>>): Start {
@@ -40,7 +50,9 @@ function start(env: Readonly<Record<string, string>>): Start {
     }
     child.on('close', () => resolve(text));
   });
-  return { child, output: () => text, settled, ended };
+  const running = { child, output: () => text, settled, ended };
+  started.push(running);
+  return running;
 }
 
 /** Every process whose command line or environment names `folder`: all that a start on it has made. */

@@ -22,6 +22,8 @@ export interface Answer {
   readonly description: string;
   readonly schema: z.ZodType;
   readonly example: unknown;
+  /** Headers of its own and what they say. */
+  readonly headers?: Readonly<Record<string, string>>;
 }
 
 /**
@@ -30,7 +32,7 @@ export interface Answer {
  */
 export interface Endpoint {
   readonly method: 'get' | 'post' | 'put';
-  /** Below /api/v1, with `{name}` for each member of `path parameters`. */
+  /** Below /api/v1, with `{name}` for each member of `pathParameters`. */
   readonly path: `/${string}`;
   readonly operationId: string;
   readonly summary: string;

@@ -51,6 +51,7 @@ export const addRevisionEndpoint = {
     202: {
       description: 'Stored, and waiting to be read',
       schema: acceptedSchema,
+      headers: { Location: 'The same as `url`' },
       example: {
         import: '5f0c7a52-9a55-4d52-8d0e-6f5a3a1f2c11',
         url: 'https://polhode.example/api/v1/imports/5f0c7a52-9a55-4d52-8d0e-6f5a3a1f2c11',

@@ -23,7 +23,5 @@ export function requireCsv(headers: Headers, maxBytes: number): number {
   const declared = headers.get('content-length');
   if (declared === null) throw new AppError('length-required', 'Send the file with a Content-Length.');
   requireDeclaredSize('POST', headers, maxBytes);
-  const bytes = Number(declared);
-  if (bytes === 0) throw new AppError('invalid-request', 'The file is empty.');
-  return bytes;
+  return Number(declared);
 }

@@ -47,7 +47,7 @@ const BROKEN_OFF = 'The body broke off before its end. Nothing was kept.';
 
 /** The two declarations of a web stream, the browser's and Node's, describe one and the same object. */
 function bodyOf(request: Request): ReadableStream<Uint8Array> {
-  if (request.body === null) throw new AppError('invalid-request', 'The request has no body. Send the file.');
+  if (request.body === null) throw new AppError('invalid-request', 'The file is empty.');
   return request.body as ReadableStream<Uint8Array>;
 }
 

@@ -1,11 +1,13 @@
 import { AppError } from '@/lib/errors';
 import { openRoute } from '@/lib/server/http/api-route';
 
-/** Whatever has no route of its own: a problem, where the framework would answer with a page. */
-const nothingHere = openRoute(async ({ request }) => {
+const refuse = openRoute(async ({ request }) => {
   const { pathname } = new URL(request.url);
   throw new AppError('not-found', `There is no ${pathname}. What there is stands in /api/v1/openapi.json.`);
 });
+
+/** Whatever has no route of its own: a problem, where the framework would answer with a page. */
+const nothingHere = (request: Request): Promise<Response> => refuse(request, { params: Promise.resolve({}) });
 
 export {
   nothingHere as DELETE,

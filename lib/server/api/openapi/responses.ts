@@ -33,23 +33,31 @@ export function responsesOf(endpoint: Endpoint, book: SchemaBook): Json {
   return responses;
 }
 
-function answered({ description, schema, example }: Answer, metered: boolean, book: SchemaBook): Json {
+function answered(
+  { description, schema, example, headers = {} }: Answer,
+  metered: boolean,
+  book: SchemaBook,
+): Json {
+  const own = Object.entries(headers).map(([name, says]) => [
+    name,
+    { description: says, schema: { type: 'string' } },
+  ]);
   return {
     description,
-    ...(metered ? { headers: RATE_HEADERS } : {}),
+    headers: { ...(metered ? RATE_HEADERS : {}), ...Object.fromEntries(own) },
     content: { 'application/json': { schema: book.of(schema, 'output'), example } },
   };
 }
 
-function problemsByStatus({ scope, problems }: Endpoint): [number, ErrorCode[]][] {
-  const scoped: readonly ErrorCode[] = scope === null || scope === 'any' ? [] : ['insufficient-scope'];
-  const codes = new Set<ErrorCode>([
-    ...problems,
-    ...(scope === null ? ['internal' as const] : WITH_TOKEN),
-    ...scoped,
-  ]);
+/** Every way in which an endpoint can fail, with what all endpoints of its kind share. */
+export function problemCodesOf({ scope, problems }: Endpoint): ErrorCode[] {
+  if (scope === null) return [...problems, 'internal'];
+  return [...problems, ...WITH_TOKEN, ...(scope === 'any' ? [] : ['insufficient-scope' as const])];
+}
+
+function problemsByStatus(endpoint: Endpoint): [number, ErrorCode[]][] {
   const byStatus = new Map<number, ErrorCode[]>();
-  for (const code of codes) {
+  for (const code of problemCodesOf(endpoint)) {
     const { status } = ERROR_CODES[code];
     byStatus.set(status, [...(byStatus.get(status) ?? []), code]);
   }
