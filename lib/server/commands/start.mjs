@@ -12,7 +12,8 @@ import { stopCluster } from './local/postgres.mjs';
 import { localSecrets } from './local/secrets.mjs';
 
 const dev = process.argv.includes('--dev');
-const distDir = process.env.NEXT_DIST_DIR ?? '.next';
+// Whoever names a build of their own has made it, and it is served as it is.
+const isBuilt = Boolean(process.env.NEXT_DIST_DIR);
 const log = (name) => path.join(DATA, 'log', `${name}.log`);
 
 let stopping = false;
@@ -73,7 +74,7 @@ async function startWith(settings) {
   if (!(await isFree(port, host)))
     throw new Failure(`Port ${port} on ${host} is taken; set PORT to another.`);
   await prepare({ ...process.env, ...settings });
-  if (!dev) await ensureBuild(children, distDir, log('build'));
+  if (!dev && !isBuilt) await ensureBuild(children, '.next', log('build'));
   await serve(settings, host, port);
   console.log(`\nPolhode serves ${settings.APP_URL} on ${host}:${port}.`);
   console.log('The first administrator is made by: npm run admin -- --email ...');
@@ -98,7 +99,7 @@ async function startLocal() {
 
   await prepare({ ...process.env, ...all });
   await loadDemoOnce(children, cluster, { ...process.env, ...all, DEMO_PASSWORD: secrets.demo });
-  if (!dev) await ensureBuild(children, distDir, log('build'));
+  if (!dev && !isBuilt) await ensureBuild(children, '.next', log('build'));
   await serve(all, '127.0.0.1', port);
 
   console.log(`\nPolhode is at      ${all.APP_URL}`);

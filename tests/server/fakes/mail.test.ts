@@ -19,15 +19,13 @@ afterEach(async () => {
 });
 
 const send = (to: string, subject: string, html = '<p>Hello</p>') =>
-  nodemailer
-    .createTransport(fake.smtpUrl)
-    .sendMail({
-      from: 'Polhode <no-reply@polhode.example>',
-      to,
-      subject,
-      text: 'See http://a.example/x?y=1',
-      html,
-    });
+  nodemailer.createTransport(fake.smtpUrl).sendMail({
+    from: 'Polhode <no-reply@polhode.example>',
+    to,
+    subject,
+    text: 'See http://a.example/x?y=1',
+    html,
+  });
 
 const list = async (query = '') => (await (await fetch(`${fake.webUrl}/api/mails${query}`)).json()) as Mail[];
 

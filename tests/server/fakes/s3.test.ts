@@ -1,4 +1,5 @@
 import { createHash, randomBytes } from 'node:crypto';
+import { rmSync } from 'node:fs';
 import { Readable } from 'node:stream';
 import {
   CopyObjectCommand,
@@ -228,6 +229,8 @@ describe('the S3 fake', () => {
     expect(await Body?.transformToString()).toBe('kept');
     client.destroy();
     await second.close();
+    running.client.destroy();
+    rmSync(running.folder, { recursive: true });
   });
 
   it('listens on the loopback address only', async () => {

@@ -7,7 +7,7 @@ import { ROOT } from './places.mjs';
 /** Ends a child when the process that started it dies without a word, so that none is left behind. */
 const WITH_PARENT = ['--import', path.join(ROOT, 'lib/server/commands/local/with-parent.mjs')];
 const QUIET = { NEXT_TELEMETRY_DISABLED: '1', AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true' };
-const TSX = ['--import', import.meta.resolve('tsx')];
+const TSX = ['--import', 'tsx'];
 
 /**
  * @typedef {object} ChildOptions
@@ -33,7 +33,7 @@ export class Children {
     const out = log ? openSync(log, 'a') : 'inherit';
     const child = spawn(process.execPath, [...WITH_PARENT, ...(typescript ? TSX : []), ...args], {
       cwd: ROOT,
-      env: { ...env, ...QUIET },
+      env: { ...env, ...QUIET, POLHODE_PARENT: String(process.pid) },
       detached: true,
       stdio: ['ignore', out, out, 'ipc'],
     });
