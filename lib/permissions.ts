@@ -47,6 +47,12 @@ const PROGRAM = {
   'rotors.keep': ['weights'],
   'configurations.read': ['chief', 'weights'],
   'configurations.keep': ['weights'],
+  'baselines.read': ['chief', 'weights', 'simulation'],
+  'submissions.read': ['chief', 'weights'],
+  'baselines.submit': ['weights'],
+  'baselines.decide': ['chief'],
+  'baselines.withdraw': ['chief'],
+  'trail.read': ['chief', 'weights'],
 } as const satisfies Record<string, readonly Holder[]>;
 
 export type SiteAction = keyof typeof SITE;

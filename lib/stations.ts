@@ -5,6 +5,7 @@ export const STATIONS = [
   { code: 'lists', title: 'Lists', action: 'lists.read' },
   { code: 'rotating-parts', title: 'Rotating parts', action: 'rotors.read' },
   { code: 'configurations', title: 'Configurations', action: 'configurations.read' },
+  { code: 'baselines', title: 'Baselines', action: 'baselines.read' },
 ] as const satisfies readonly { code: string; title: string; action: ProgramAction }[];
 
 export type StationCode = (typeof STATIONS)[number]['code'];

@@ -42,6 +42,12 @@ const EXPECTED: Readonly<Record<Action, readonly Who[]>> = {
   'rotors.keep': ['weights'],
   'configurations.read': ['chief', 'weights'],
   'configurations.keep': ['weights'],
+  'baselines.read': ['chief', 'weights', 'simulation'],
+  'submissions.read': ['chief', 'weights'],
+  'baselines.submit': ['weights'],
+  'baselines.decide': ['chief'],
+  'baselines.withdraw': ['chief'],
+  'trail.read': ['chief', 'weights'],
 };
 
 const names = Object.keys(STANDINGS) as Who[];

@@ -5,11 +5,13 @@ export interface Waiting {
   readonly listsWithProblems: number;
   /** Configurations without a roll-up of what they now hold. */
   readonly configurationsToRollUp: number;
+  /** Submissions that nobody has signed or returned yet. */
+  readonly submissionsToDecide: number;
 }
 
 /** What waits at the stations of a program. */
 export async function whatWaits(db: Db, programId: string): Promise<Waiting> {
-  const { lists, configurations } = await db
+  const { lists, configurations, submissions } = await db
     .selectNoFrom((eb) => [
       eb
         .selectFrom('lists')
@@ -47,9 +49,18 @@ export async function whatWaits(db: Db, programId: string): Promise<Waiting> {
         .$asScalar()
         .$notNull()
         .as('configurations'),
+      eb
+        .selectFrom('submissions')
+        .leftJoin('decisions', 'decisions.submission_id', 'submissions.id')
+        .where('submissions.program_id', '=', programId)
+        .where('decisions.submission_id', 'is', null)
+        .select((inner) => inner.fn.countAll<number>().as('count'))
+        .$asScalar()
+        .$notNull()
+        .as('submissions'),
     ])
     .executeTakeFirstOrThrow();
-  return { listsWithProblems: lists, configurationsToRollUp: configurations };
+  return { listsWithProblems: lists, configurationsToRollUp: configurations, submissionsToDecide: submissions };
 }
 
 /** The markings that lists of a program carry, each once. */

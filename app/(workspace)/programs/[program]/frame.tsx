@@ -40,11 +40,14 @@ export async function ProgramFrame({
         code,
         title,
         href: `${home}/${code}`,
-        waiting: waitingAt(code, waiting),
+        waiting: waitingAt(code, waiting, can('submissions.read')),
       }))}
       current={current ?? null}
       marking={combinedMarking(markings)}
-      links={can('settings.read') ? [{ href: `${home}/settings`, words: 'Settings' }] : []}
+      links={[
+        ...(can('trail.read') ? [{ href: `${home}/trail`, words: 'Trail' }] : []),
+        ...(can('settings.read') ? [{ href: `${home}/settings`, words: 'Settings' }] : []),
+      ]}
       keys={keys}
       width={width}
     >
@@ -53,12 +56,19 @@ export async function ProgramFrame({
   );
 }
 
-function waitingAt(code: StationCode, waiting: Waiting): { count: number; words: string } | null {
+function waitingAt(
+  code: StationCode,
+  waiting: Waiting,
+  seesSubmissions: boolean,
+): { count: number; words: string } | null {
   if (code === 'lists' && waiting.listsWithProblems > 0) {
     return { count: waiting.listsWithProblems, words: 'with problems' };
   }
   if (code === 'configurations' && waiting.configurationsToRollUp > 0) {
     return { count: waiting.configurationsToRollUp, words: 'to roll up' };
+  }
+  if (code === 'baselines' && seesSubmissions && waiting.submissionsToDecide > 0) {
+    return { count: waiting.submissionsToDecide, words: 'to decide' };
   }
   return null;
 }
