@@ -29,7 +29,8 @@ export function plainText(text: NumberText): string {
 /** How many decimals give `value` that many significant digits, never fewer than none. */
 export function decimalsFor(value: number, digits: number): number {
   if (value === 0 || !Number.isFinite(value)) return 0;
-  const order = Math.floor(Math.log10(Math.abs(value)));
+  // The order after rounding: 0.9999999 to six digits is 1.00000.
+  const order = Number(value.toExponential(digits - 1).split('e')[1]);
   return Math.min(12, Math.max(0, digits - 1 - order));
 }
 
@@ -54,4 +55,10 @@ export function digitGroups(digits: string, from: 'right' | 'left'): readonly st
   const groups = [digits.slice(0, first)];
   for (let at = first; at < digits.length; at += 3) groups.push(digits.slice(at, at + 3));
   return groups;
+}
+
+/** The decimals that a person typed, for figures that are shown back: of the shortest text that reads as `value`, at most 12. */
+export function typedDecimals(value: number): number {
+  const [, fraction = ''] = String(value).split('.');
+  return fraction.includes('e') ? 12 : Math.min(12, fraction.length);
 }
