@@ -26,7 +26,7 @@ export function Banner({ severity, word, title, children, action, live = false }
     <div
       role={live ? (severity === 'blocker' ? 'alert' : 'status') : undefined}
       className={classes(
-        'noted keep-together grid gap-x-4 gap-y-1 border-y py-2 sm:grid-cols-[88px_1fr_auto]',
+        'noted keep-together grid gap-x-4 gap-y-1 border-y py-2 [&:has(+.noted)]:border-b-0 sm:grid-cols-[88px_1fr_auto]',
         RULES[severity],
       )}
     >

@@ -31,7 +31,7 @@ export function Table({ caption, captionHidden = false, children, tall = false }
 
 type Side = 'left' | 'right';
 
-/** A column head. `unit` stands under the title's breath, once for the column. */
+/** A column head. `unit` stands beside the title, once for the column. */
 export function ColumnHead({
   children,
   unit,
@@ -52,7 +52,7 @@ export function ColumnHead({
 /** The first cell of a row: its name. */
 export function RowHead({ children }: { readonly children: ReactNode }) {
   return (
-    <th scope="row" className="text-left font-normal">
+    <th scope="row" className="min-w-24 text-left font-normal">
       {children}
     </th>
   );
