@@ -108,6 +108,32 @@ export function findImport(db: Db, id: string) {
     .executeTakeFirst();
 }
 
+/** The newest import of a list: its state and file; null before the first. */
+export async function findNewestImport(
+  db: Db,
+  listId: string,
+): Promise<Pick<Import, 'id' | 'state' | 'file_name'> | null> {
+  const found = await db
+    .selectFrom('imports')
+    .select(['id', 'state', 'file_name'])
+    .where('list_id', '=', listId)
+    .orderBy('created_at', 'desc')
+    .limit(1)
+    .executeTakeFirst();
+  return found ?? null;
+}
+
+/** The name of the person who made a revision. */
+export async function findRevisionAuthor(db: Db, revisionId: string): Promise<string> {
+  const { name } = await db
+    .selectFrom('list_revisions')
+    .innerJoin('users', 'users.id', 'list_revisions.created_by')
+    .select('users.name')
+    .where('list_revisions.id', '=', revisionId)
+    .executeTakeFirstOrThrow();
+  return name;
+}
+
 /** Takes the right to work on an import for the length of the transaction; false if another has it. */
 export async function claimImport(trx: Db, id: string): Promise<boolean> {
   const { rows } = await sql<{ claimed: boolean }>`

@@ -6,7 +6,14 @@ const fields = z.record(z.string().min(1).max(8192), z.string().max(8192));
 const item = z.string().min(1).max(8192);
 
 export const rowEditSchema = z.discriminatedUnion('kind', [
-  z.object({ kind: z.literal('change'), item, fields }),
+  z.object({
+    kind: z.literal('change'),
+    item,
+    fields,
+    seen: fields
+      .optional()
+      .describe('What the fields held when they were edited; another value in the base is a problem'),
+  }),
   z.object({ kind: z.literal('add'), fields }),
   z.object({ kind: z.literal('remove'), item }),
 ]);

@@ -1,6 +1,9 @@
 import { type Db } from '@/db/client';
 import { childrenOf, rowsByItem } from '@/db/queries/list-rows';
+import { type ListRevision } from '@/db/queries/lists';
 import { type EditProblem, itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
+import { type ListRow } from '@/lib/contracts/list-rows';
+import { rowReader } from './row-view';
 
 /** So many names are given in a sentence; the rest are counted. */
 const NAMES_GIVEN = 5;
@@ -11,11 +14,13 @@ const NAMES_GIVEN = 5;
  */
 export async function checkEdits(
   db: Db,
-  revision: { readonly id: string; readonly number: number },
+  revision: Pick<ListRevision, 'id' | 'number' | 'declarations'>,
   edits: readonly RowEdit[],
 ): Promise<EditProblem[]> {
   const items = edits.map(itemOfEdit);
-  const there = new Set((await rowsByItem(db, revision.id, [...new Set(items)])).map(({ item }) => item));
+  const stored = await rowsByItem(db, revision.id, [...new Set(items)]);
+  const read = rowReader(revision.declarations);
+  const there = new Map(stored.map((row) => [row.item, read(row)]));
   const problems: EditProblem[] = [];
   const seen = new Set<string>();
   const say = (item: string | null, column: string | null, message: string): void => {
@@ -39,9 +44,27 @@ export async function checkEdits(
         'item',
         'The item is what a row is known by and stays. Remove the row and add one with the new item.',
       );
+    else if (edit.kind === 'change') problems.push(...overtaken(edit, there.get(item), revision.number));
     if (item !== '') seen.add(item);
   }
   return [...problems, ...(await orphans(db, revision.id, edits))];
+}
+
+/** Fields that no longer hold what the person saw who edited them. */
+function overtaken(
+  edit: Extract<RowEdit, { kind: 'change' }>,
+  row: ListRow | undefined,
+  revision: number,
+): EditProblem[] {
+  const cells: Readonly<Record<string, string | number>> = { ...row?.own, ...row?.cells };
+  return Object.entries(edit.seen ?? {}).flatMap(([column, was]) => {
+    const now = String(cells[column] ?? '');
+    if (now === was) return [];
+    const message =
+      `${column} was ${was === '' ? 'blank' : `\`${was}\``} when you edited it; in revision ${revision} it is ` +
+      `${now === '' ? 'blank' : `\`${now}\``}. Undo the edit, look at the row, and make it again.`;
+    return [{ item: edit.item, column, found: now, message }];
+  });
 }
 
 async function orphans(db: Db, revisionId: string, edits: readonly RowEdit[]): Promise<EditProblem[]> {

@@ -28,10 +28,10 @@ export async function compareRevisions(
   db: Db,
   before: Pick<ListRevision, 'id'>,
   after: Pick<ListRevision, 'id' | 'declarations'>,
-  page: { readonly offset: number; readonly limit: number },
+  page: { readonly offset: number; readonly limit: number; readonly group?: string | null },
 ): Promise<Comparison> {
   const [counts, items] = await Promise.all([
-    countChanges(db, before.id, after.id),
+    countChanges(db, before.id, after.id, page.group ?? null),
     changedItems(db, before.id, after.id, page),
   ]);
   const names = items.map(({ item }) => item);

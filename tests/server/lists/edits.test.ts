@@ -149,6 +149,24 @@ describe('Saving edits', () => {
     expect(await freshList(list.code)).toMatchObject({ last_revision: 2 });
   });
 
+  it('made from a newer revision names the fields that are no longer what was seen', async () => {
+    await save([{ kind: 'change', item: 'B-100', fields: { mass: '6' } }], 1, test.crew.weights2);
+    const edit = {
+      kind: 'change',
+      item: 'B-100',
+      fields: { mass: '7', x: '301' },
+      seen: { mass: '5.9', x: '300.3' },
+    } as const;
+    expect(await save([edit], 2)).toMatchObject({
+      status: 'problems',
+      problems: [{ item: 'B-100', column: 'mass', found: '6', message: expect.stringContaining('`5.9`') }],
+    });
+    expect(await save([{ ...edit, seen: { mass: '6', x: '300.3' } }], 2)).toEqual({
+      status: 'saved',
+      revision: 3,
+    });
+  });
+
   it('from the same revision at the same time lets one through and refuses the other', async () => {
     const both = await Promise.allSettled([
       save([{ kind: 'change', item: 'B-100', fields: { mass: '6' } }]),

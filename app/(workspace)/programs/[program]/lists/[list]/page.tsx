@@ -1,0 +1,144 @@
+import { type Metadata } from 'next';
+import { ownColumnsOf } from '@/db/queries/list-rows';
+import { findNewestImport, findRevisionAuthor } from '@/db/queries/lists';
+import { Declared } from '@/components/lists/declared';
+import { FindingsPanel } from '@/components/lists/findings-panel';
+import { GroupTable } from '@/components/lists/group-table';
+import { ListNotices } from '@/components/lists/list-notices';
+import { counted } from '@/components/lists/list-words';
+import { QueryRoot } from '@/components/lists/query-root';
+import { RowsStation } from '@/components/lists/rows-station';
+import { ButtonLink } from '@/components/ui/button';
+import { Day } from '@/components/ui/day';
+import { EmptyPlace } from '@/components/ui/empty-place';
+import { TABLE_KEYS } from '@/components/ui/key-help';
+import { PageHead, Section } from '@/components/ui/section';
+import { TextLink } from '@/components/ui/text-link';
+import { serverDb } from '@/lib/server/database';
+import { geometryOfList, reachRevision } from '@/lib/server/lists/reach-list';
+import { totalsOfRevision } from '@/lib/server/lists/row-totals';
+import { ProgramFrame } from '../../frame';
+import { orNotFound, requireList } from './list-page';
+
+type Props = PageProps<'/programs/[program]/lists/[list]'>;
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { list } = await requireList(params, 'lists.read');
+  return { title: list.title };
+}
+
+/** One revision of a list: what the checks saw, what its groups add up to, its rows. */
+export default async function ListPage({ params, searchParams }: Props) {
+  const { access, list, home, listHref, route } = await requireList(params, 'lists.read');
+  const keeps = access.can('lists.keep');
+  const above = <TextLink href={home}>Lists</TextLink>;
+  const db = serverDb();
+  const newestImport = await findNewestImport(db, list.id);
+  const upload = (
+    <ButtonLink kind="primary" href={`${listHref}/upload`}>
+      Upload a file
+    </ButtonLink>
+  );
+  if (list.last_revision === 0) {
+    return (
+      <ProgramFrame access={access} current="lists">
+        <PageHead
+          title={list.title}
+          above={above}
+          actions={
+            keeps ? <ButtonLink href={`${listHref}/declarations`}>Change declarations</ButtonLink> : null
+          }
+        />
+        <ListNotices listHref={listHref} shown={0} newest={0} import={newestImport} />
+        <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
+          <EmptyPlace title="This list has no revision yet" action={keeps ? upload : null}>
+            <p>Upload a CSV file: it is checked row by row and becomes revision 1, whole or not at all.</p>
+          </EmptyPlace>
+          <Section title="As declared">
+            <Declared declarations={list.declarations} />
+          </Section>
+        </div>
+      </ProgramFrame>
+    );
+  }
+  const asked = (await searchParams)['revision'];
+  const number = typeof asked === 'string' ? asked : String(list.last_revision);
+  const revision = await orNotFound(() => reachRevision(db, list, number));
+  const geometry = await geometryOfList(db, list);
+  const [author, totals, own] = await Promise.all([
+    findRevisionAuthor(db, revision.id),
+    totalsOfRevision(db, revision.id, list.frame_issue_id, { declarations: revision.declarations, geometry }),
+    ownColumnsOf(db, revision.id),
+  ]);
+  const here = `${listHref}?revision=${revision.number}`;
+  return (
+    <ProgramFrame access={access} current="lists" keys={TABLE_KEYS}>
+      <PageHead
+        title={list.title}
+        above={above}
+        lead={
+          <>
+            Revision {revision.number}, {counted(revision.rows, 'row')}, <Day at={revision.created_at} time />
+            , {author}: {revision.reason}
+          </>
+        }
+        actions={
+          <>
+            {keeps ? upload : null}
+            <ButtonLink href={`${listHref}/revisions`}>See all revisions</ButtonLink>
+            {keeps ? <ButtonLink href={`${listHref}/declarations`}>Change declarations</ButtonLink> : null}
+          </>
+        }
+      />
+      <ListNotices
+        listHref={listHref}
+        shown={revision.number}
+        newest={list.last_revision}
+        import={newestImport}
+      />
+      <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
+        <div className="grid min-w-0 gap-8">
+          <Section title="Findings">
+            <FindingsPanel
+              findings={revision.findings}
+              hrefOf={(rule) => `${here}&finding=${encodeURIComponent(rule)}#rows`}
+            />
+          </Section>
+          <Section title="Groups">
+            <GroupTable
+              groups={totals.groups}
+              whole={totals.whole}
+              declarations={revision.declarations}
+              hrefOf={(group) => `${here}&group=${encodeURIComponent(group)}#rows`}
+            />
+          </Section>
+        </div>
+        <Section title="As declared">
+          <Declared declarations={revision.declarations} />
+        </Section>
+      </div>
+      <div id="rows" className="grid min-w-0 gap-8">
+        <QueryRoot>
+          <RowsStation
+            key={revision.number}
+            listKey={`${access.program.code}/${list.code}`}
+            listHref={listHref}
+            listRoute={route}
+            revisionRoute={`${route}/revisions/${revision.number}`}
+            revision={revision.number}
+            newest={list.last_revision}
+            declarations={revision.declarations}
+            geometry={{ axes: geometry.axes, lateralPlane: geometry.lateralPlane }}
+            totals={totals.whole}
+            rows={revision.rows}
+            groups={totals.groups.map(({ group }) => group)}
+            findings={revision.findings.map(({ rule, message }) => ({ rule, message }))}
+            own={own}
+            file={revision.file_name}
+            mayEdit={keeps}
+          />
+        </QueryRoot>
+      </div>
+    </ProgramFrame>
+  );
+}

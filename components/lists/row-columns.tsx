@@ -1,0 +1,75 @@
+import { type CellValue, type DataColumn } from '@/components/data-table/column';
+import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
+import { type SortColumn } from '@/lib/contracts/list-view';
+import { type ListColumn } from '@/lib/ingest/mass-list/columns';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+import { unitLabel } from '@/lib/units/names';
+
+type RowColumn = DataColumn<ListRow> & { readonly id: Exclude<SortColumn, 'position'> };
+
+/** The columns of the rows of a list: figures as the list states them, its units and axes in the heads. */
+export function rowColumns({
+  massUnit,
+  lengthUnit,
+  inertiaUnit,
+  axes,
+}: ListDeclarations): readonly RowColumn[] {
+  const value =
+    (column: ListColumn) =>
+    (row: ListRow): CellValue =>
+      row.cells[column] ?? null;
+  const text = (id: RowColumn['id'], title: string, width: number): RowColumn => ({
+    id,
+    title,
+    kind: 'text',
+    width,
+    value: value(id),
+  });
+  const number = (
+    id: RowColumn['id'],
+    title: string,
+    unit: string | null,
+    decimals: number,
+    width = 112,
+  ): RowColumn => ({
+    id,
+    title,
+    ...(unit === null ? {} : { unit }),
+    kind: 'number',
+    decimals,
+    width,
+    value: value(id),
+  });
+  const [mass, length, inertia] = [unitLabel(massUnit), unitLabel(lengthUnit), unitLabel(inertiaUnit)];
+  return [
+    text('item', 'Item', 152),
+    text('description', 'Description', 224),
+    text('group', 'Group', 176),
+    text('part_number', 'Part number', 152),
+    number('quantity', 'Quantity', null, 0, 88),
+    number('mass', 'Mass', mass, 4),
+    number('x', `x ${axes[0]}`, length, 4, 120),
+    number('y', `y ${axes[1]}`, length, 4, 120),
+    number('z', `z ${axes[2]}`, length, 4, 120),
+    number('ixx', 'Ixx', inertia, 4, 144),
+    number('iyy', 'Iyy', inertia, 4, 144),
+    number('izz', 'Izz', inertia, 4, 144),
+    number('ixy', 'Ixy', inertia, 4, 144),
+    number('ixz', 'Ixz', inertia, 4, 144),
+    number('iyz', 'Iyz', inertia, 4, 144),
+    text('category', 'Category', 104),
+    text('maturity', 'Maturity', 88),
+    number('growth_percent', 'Growth', '%', 2, 96),
+  ];
+}
+
+/** What stands under the columns: sums, and the CG under the coordinates. */
+export function totalCells(totals: RowTotals): Readonly<Record<string, CellValue>> {
+  return {
+    quantity: totals.pieces,
+    mass: totals.mass,
+    x: totals.cg?.[0] ?? null,
+    y: totals.cg?.[1] ?? null,
+    z: totals.cg?.[2] ?? null,
+  };
+}

@@ -1,0 +1,53 @@
+import { OwnTensor } from '@/components/lists/own-tensor';
+import { rowFieldGroups, type RowField } from '@/components/lists/row-fields';
+import { placeInAirframe } from '@/components/lists/row-place';
+import { DefinitionList, type Definition } from '@/components/ui/definition-list';
+import { type ListRow } from '@/lib/contracts/list-rows';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+
+interface RowInspectorProps {
+  readonly row: ListRow;
+  readonly declarations: ListDeclarations;
+  readonly geometry: Pick<AirframeGeometry, 'axes' | 'lateralPlane'>;
+  /** The file that the revision was read from; null when it was made by edits. */
+  readonly file: string | null;
+}
+
+/** What one row says, in full: fields that hold something, its own tensor, its place in the airframe, where it came from. */
+export function RowInspector({ row, declarations, geometry, file }: RowInspectorProps) {
+  const own = Object.entries(row.own);
+  return (
+    <div className="grid gap-6">
+      <header className="grid gap-1">
+        <h3 className="text-lead font-semibold wrap-anywhere">{String(row.cells.item ?? '')}</h3>
+        <p className="text-note text-ink-2">
+          {file === null || row.line === null ? `Row ${row.position}` : `Line ${row.line} of ${file}`}
+        </p>
+      </header>
+      {rowFieldGroups(declarations).map(({ title, fields }) => (
+        <Fields key={title} title={title} items={fields.flatMap((field) => stated(field, row))} />
+      ))}
+      <OwnTensor row={row} declarations={declarations} />
+      <Fields title="Place in the airframe" items={placeInAirframe(row, declarations, geometry)} />
+      <Fields title="Columns of the list's own" items={own.map(([term, value]) => ({ term, value }))} />
+    </div>
+  );
+}
+
+function Fields({ title, items }: { readonly title: string; readonly items: readonly Definition[] }) {
+  if (items.length === 0) return null;
+  return (
+    <section className="grid gap-1">
+      <h4 className="font-semibold">{title}</h4>
+      <DefinitionList items={items} />
+    </section>
+  );
+}
+
+function stated({ column, label, kind, unit }: RowField, row: ListRow): Definition[] {
+  const cell = row.cells[column];
+  if (cell === undefined || column === 'item') return [];
+  const value = unit === undefined ? String(cell) : `${cell} ${unit}`;
+  return [{ term: label, value: kind === 'number' ? <span className="num">{value}</span> : value }];
+}

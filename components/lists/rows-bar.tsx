@@ -1,0 +1,83 @@
+'use client';
+
+import { useId } from 'react';
+import { type DataColumn } from '@/components/data-table/column';
+import { ColumnChoice, Find } from '@/components/data-table/toolbar';
+import { type TableView } from '@/components/data-table/view';
+import { Button } from '@/components/ui/button';
+import { buttonClass } from '@/components/ui/button-style';
+import { CONTROL_CLASS } from '@/components/ui/field';
+import { TextLink } from '@/components/ui/text-link';
+import { type ListRow } from '@/lib/contracts/list-rows';
+
+interface RowsBarProps {
+  readonly columns: readonly DataColumn<ListRow>[];
+  readonly view: TableView;
+  readonly onView: (view: TableView) => void;
+  readonly groups: readonly string[];
+  /** What the finding says whose rows alone are shown; null: no such filter. */
+  readonly finding: string | null;
+  /** The address of all rows. */
+  readonly plainHref: string;
+  readonly status: string;
+  /** The export of all rows, or of those shown. */
+  readonly exportHref: (all: boolean) => string;
+  /** Whether the view is another than the whole list in its own order. */
+  readonly differs: boolean;
+  readonly onAdd: (() => void) | null;
+}
+
+/** Find, group, columns, export, add: what changes the view of the rows, or goes with them. */
+export function RowsBar(props: RowsBarProps) {
+  const { columns, view, onView, groups, finding, plainHref, status, exportHref, differs, onAdd } = props;
+  const id = useId();
+  return (
+    <div className="no-print grid gap-2">
+      <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
+        <Find text={view.text} onText={(text) => onView({ ...view, text })} />
+        {groups.length > 1 ? (
+          <div className="grid w-52 gap-1">
+            <label htmlFor={id} className="text-note text-ink-2">
+              Group
+            </label>
+            <select
+              id={id}
+              value={view.group}
+              onChange={(event) => onView({ ...view, group: event.target.value })}
+              className={CONTROL_CLASS}
+            >
+              <option value="">All groups</option>
+              {groups.map((group) => (
+                <option key={group} value={group}>
+                  {group}
+                </option>
+              ))}
+            </select>
+          </div>
+        ) : null}
+        <ColumnChoice columns={columns} view={view} onView={onView} />
+        <p role="status" className="flex min-h-8 items-center text-ink-2">
+          {status}
+        </p>
+        <div className="ml-auto flex flex-wrap items-center gap-3">
+          {differs ? (
+            <a href={exportHref(false)} download className={buttonClass('secondary')}>
+              Export rows shown
+            </a>
+          ) : null}
+          <a href={exportHref(true)} download className={buttonClass('secondary')}>
+            Export all rows
+          </a>
+          {onAdd === null ? null : <Button onClick={onAdd}>Add row</Button>}
+        </div>
+      </div>
+      {finding === null ? null : (
+        <p className="flex flex-wrap items-baseline gap-x-3 border-y border-rule py-1">
+          <span className="text-ink-2">Only the rows of a finding:</span>
+          <span className="measure min-w-0">{finding}</span>
+          <TextLink href={plainHref}>Show all rows</TextLink>
+        </p>
+      )}
+    </div>
+  );
+}

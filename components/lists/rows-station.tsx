@@ -1,0 +1,216 @@
+'use client';
+
+import { useRouter, useSearchParams } from 'next/navigation';
+import { useMemo, useState } from 'react';
+import { Grid } from '@/components/data-table/grid';
+import { Inspector } from '@/components/data-table/inspector';
+import { useUrlView } from '@/components/data-table/use-url-view';
+import { counted } from '@/components/lists/list-words';
+import { PendingPanel } from '@/components/lists/pending-panel';
+import { rowColumns, totalCells } from '@/components/lists/row-columns';
+import { type Beside, RowBeside } from '@/components/lists/row-beside';
+import { RowsBar } from '@/components/lists/rows-bar';
+import { usePendingEdits } from '@/components/lists/use-pending-edits';
+import { rowIdOf, useRowPages, useRowTotals } from '@/components/lists/use-row-pages';
+import { Banner } from '@/components/ui/banner';
+import { Button } from '@/components/ui/button';
+import { Section } from '@/components/ui/section';
+import { type EditProblem, EDITS_AT_ONCE, itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
+import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
+import { isFiltered, listViewOf, viewQuery } from '@/lib/contracts/list-view';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type ListDeclarations } from '@/lib/mass/declarations';
+
+export interface RowsStationProps {
+  /** `program/list`: what the edits kept in the browser belong to. */
+  readonly listKey: string;
+  readonly listHref: string;
+  /** The internal routes of the list, and of this revision. */
+  readonly listRoute: string;
+  readonly revisionRoute: string;
+  readonly revision: number;
+  readonly newest: number;
+  readonly declarations: ListDeclarations;
+  readonly geometry: Pick<AirframeGeometry, 'axes' | 'lateralPlane'>;
+  readonly totals: RowTotals;
+  readonly rows: number;
+  readonly groups: readonly string[];
+  readonly findings: readonly { readonly rule: string; readonly message: string }[];
+  readonly own: readonly string[];
+  readonly file: string | null;
+  readonly mayEdit: boolean;
+}
+
+const NEW_ROW = '\u0000new';
+
+/** The rows of a revision: looked through, opened, edited; edits gather until they are saved as the next revision. */
+export function RowsStation(props: RowsStationProps) {
+  const { declarations, revision, newest, revisionRoute, findings } = props;
+  const router = useRouter();
+  const params = useSearchParams();
+  const [view, setView] = useUrlView();
+  const query = useMemo(() => {
+    const asked = new URLSearchParams(viewQuery(params));
+    for (const [key, value] of [
+      ['find', view.text],
+      ['group', view.group],
+      ['sort', view.sort ? `${view.sort.descending ? '-' : ''}${view.sort.column}` : ''],
+    ] as const) {
+      if (value) asked.set(key, value);
+      else asked.delete(key);
+    }
+    return asked.toString();
+  }, [params, view.text, view.group, view.sort]);
+  const listView = useMemo(() => listViewOf(new URLSearchParams(query)), [query]);
+  const filtered = isFiltered(listView);
+  const pages = useRowPages(revisionRoute, query);
+  const { totals, error } = useRowTotals(revisionRoute, query, props.totals, filtered);
+  const columns = useMemo(() => rowColumns(declarations), [declarations]);
+  const visible = useMemo(
+    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
+    [columns, view.hidden],
+  );
+
+  const [pending, setPending] = usePendingEdits(props.listKey);
+  const [problems, setProblems] = useState<readonly EditProblem[]>([]);
+  const [editing, setEditing] = useState<string | null>(null);
+  const [said, setSaid] = useState('');
+  const plainHref = `${props.listHref}?revision=${revision}`;
+  const mayEdit = props.mayEdit && revision === newest;
+  const edits = pending?.edits ?? [];
+  const close = () => {
+    setEditing(null);
+    setView({ ...view, open: null });
+  };
+  const beside = besideOf(view.open, editing, edits, pages.loaded);
+
+  return (
+    <>
+      {props.mayEdit && pending !== null ? (
+        <PendingPanel
+          pending={pending}
+          onChange={setPending}
+          problems={problems}
+          onProblems={setProblems}
+          onOpen={(item) => {
+            setEditing(null);
+            setView({ ...view, text: item, group: '', open: item });
+          }}
+          to={`${props.listRoute}/edits`}
+          newest={newest}
+          rows={props.rows}
+          listHref={props.listHref}
+          onSaved={(saved) => {
+            setSaid(`Revision ${saved} is saved.`);
+            router.push(`${props.listHref}?revision=${saved}`);
+            router.refresh();
+          }}
+        />
+      ) : null}
+      <Section title="Rows" {...(said === '' ? {} : { aside: <span role="status">{said}</span> })}>
+        <RowsBar
+          columns={columns}
+          view={view}
+          onView={setView}
+          groups={props.groups}
+          plainHref={plainHref}
+          finding={findings.find(({ rule }) => rule === listView.finding)?.message ?? null}
+          status={statusWords(pages.total, props.rows, filtered)}
+          exportHref={(all) => `${revisionRoute}/export${all || query === '' ? '' : `?${query}`}`}
+          differs={query !== ''}
+          onAdd={
+            mayEdit && edits.length < EDITS_AT_ONCE
+              ? () => {
+                  setView({ ...view, open: null });
+                  setEditing(NEW_ROW);
+                }
+              : null
+          }
+        />
+        {(pages.failure ?? error) ? (
+          <Banner
+            severity="blocker"
+            word="Failed"
+            live
+            title="The rows could not be loaded"
+            action={pages.failure ? <Button onClick={pages.failure.retry}>Try again</Button> : null}
+          >
+            <p>{pages.failure?.message ?? error?.message}</p>
+          </Banner>
+        ) : null}
+        <div className={beside ? 'grid min-w-0 gap-4 lg:grid-cols-[minmax(0,1fr)_384px]' : 'grid min-w-0'}>
+          <Grid<ListRow>
+            caption={`Rows of revision ${revision}`}
+            columns={visible}
+            lines={pages.lines}
+            shown={pages.loaded}
+            total={props.rows}
+            of="rows"
+            view={view}
+            onView={setView}
+            loading={pages.total === null ? 'Loading rows' : null}
+            totals={totals === null ? {} : totalCells(totals)}
+            opens
+            onPlain={() => router.push(plainHref)}
+            subject={`${revision} ${query}`}
+            onWindow={pages.onWindow}
+            onCopyTooEarly={() =>
+              setSaid('Some of these rows are not loaded yet. Scroll through them first, or export them.')
+            }
+          />
+          {beside === null ? null : (
+            <Inspector onClose={close}>
+              <RowBeside
+                key={`${beside.kind} ${editing ?? ''} ${view.open ?? ''}`}
+                beside={beside}
+                declarations={declarations}
+                geometry={props.geometry}
+                own={props.own}
+                file={props.file}
+                mayEdit={mayEdit}
+                pending={pending}
+                revision={revision}
+                problems={problems}
+                onPending={setPending}
+                onEdit={(on) => setEditing(on ? view.open : null)}
+                onClose={close}
+              />
+            </Inspector>
+          )}
+        </div>
+        <p className="measure text-note text-ink-2">{footWords(totals)}</p>
+      </Section>
+    </>
+  );
+}
+
+/** A new row, a row that is in the table, or an added one that is not yet. */
+function besideOf(
+  open: string | null,
+  editing: string | null,
+  edits: readonly RowEdit[],
+  loaded: readonly ListRow[],
+): Beside | null {
+  if (editing === NEW_ROW) return { kind: 'new', edit: null };
+  if (open === null) return null;
+  const edit = edits.find((one) => itemOfEdit(one) === open);
+  if (edit?.kind === 'add') return { kind: 'new', edit };
+  const row = loaded.find((one) => rowIdOf(one) === open);
+  return row === undefined ? null : { kind: editing === open ? 'edit' : 'look', row };
+}
+
+function statusWords(shown: number | null, all: number, filtered: boolean): string {
+  if (shown === null) return 'Loading rows';
+  return filtered ? `${shown} of ${counted(all, 'row')}` : counted(all, 'row');
+}
+
+/** What the foot of the table adds up, and what it leaves out. */
+function footWords(totals: RowTotals | null): string {
+  if (totals === null) return '';
+  const left = [
+    totals.memoRows > 0 ? `${counted(totals.memoRows, 'memo row')} shown and not summed` : '',
+    totals.waitingRows > 0 ? `${counted(totals.waitingRows, 'adjustment')} not approved and not summed` : '',
+  ].filter(Boolean);
+  const rows = `The foot sums ${counted(totals.rows, 'row')}: pieces with their mirror images, mass without growth, and the CG in list axes.`;
+  return left.length === 0 ? rows : `${rows} Left out: ${left.join('; ')}.`;
+}
