@@ -1,5 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { existsSync, mkdtempSync, readdirSync, readFileSync, rmSync, statSync } from 'node:fs';
+import { chmodSync, existsSync, mkdtempSync, readdirSync, readFileSync, rmSync, statSync } from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
@@ -55,17 +55,42 @@ function start(env: Readonly<Record<string, string>>): Start {
   return running;
 }
 
-/** Every process whose command line or environment names `folder`: all that a start on it has made. */
-function processesOf(folder: string): number[] {
-  return readdirSync('/proc')
-    .filter((name) => /^\d+$/.test(name) && Number(name) !== process.pid)
-    .filter((pid) => {
-      const read = (file: string) =>
-        existsSync(`/proc/${pid}/${file}`) ? readFileSync(`/proc/${pid}/${file}`, 'latin1') : '';
-      return read('cmdline').includes(folder) || read('environ').includes(`POLHODE_DATA=${folder}`);
-    })
-    .map(Number);
+interface Process {
+  readonly pid: number;
+  readonly parent: number;
+  readonly line: string;
 }
+
+/** The processes of this machine that live; zombies do not. */
+function processes(): Process[] {
+  const found: Process[] = [];
+  for (const pid of readdirSync('/proc').filter((name) => /^\d+$/.test(name))) {
+    try {
+      const [state, parent] =
+        readFileSync(`/proc/${pid}/stat`, 'latin1').split(') ').at(-1)?.split(' ') ?? [];
+      const line = readFileSync(`/proc/${pid}/cmdline`, 'latin1').replaceAll('\0', ' ');
+      if (state !== 'Z') found.push({ pid: Number(pid), parent: Number(parent), line });
+    } catch (error) {
+      // It ended while it was being looked at.
+      if (!['ENOENT', 'ESRCH'].includes((error as NodeJS.ErrnoException).code ?? '')) throw error;
+    }
+  }
+  return found;
+}
+
+/** All that a start has made: itself, its children and theirs, and PostgreSQL, which is nobody's child. */
+function madeBy(start: Start, folder: string): Set<number> {
+  const all = processes();
+  const made = new Set(all.filter(({ line }) => line.includes(folder)).map(({ pid }) => pid));
+  made.add(start.child.pid ?? 0);
+  for (let size = 0; size < made.size;) {
+    size = made.size;
+    for (const { pid, parent } of all) if (made.has(parent)) made.add(pid);
+  }
+  return made;
+}
+
+const left = (made: ReadonlySet<number>) => processes().filter(({ pid }) => made.has(pid));
 
 async function until(what: string, holds: () => boolean | Promise<boolean>): Promise<void> {
   const end = Date.now() + 20_000;
@@ -82,6 +107,8 @@ describe('npm start', () => {
   let port: number;
   beforeAll(async () => {
     data = mkdtempSync(path.join(os.tmpdir(), 'polhode-start-'));
+    // PostgreSQL's user has to get through to its own folder inside.
+    chmodSync(data, 0o711);
     port = await anyFreePort();
   });
   afterAll(() => rmSync(data, { recursive: true }));
@@ -129,9 +156,12 @@ describe('npm start', () => {
       mailbox,
     ];
     const ports = [port, ...addresses.map((address) => Number(new URL(address ?? '').port))];
+    const made = madeBy(first, data);
+    // At least the start, the server, both local services and PostgreSQL.
+    expect(made.size).toBeGreaterThanOrEqual(5);
     first.child.kill('SIGTERM');
     expect(await first.ended).toBe(0);
-    expect(processesOf(data)).toEqual([]);
+    expect(left(made)).toEqual([]);
     for (const one of ports) expect(await isFree(one)).toBe(true);
     expect(existsSync(path.join(data, 'local.env'))).toBe(false);
   }, 240_000);
@@ -140,14 +170,15 @@ describe('npm start', () => {
     const first = start({ POLHODE_DATA: data, PORT: String(port) });
     await first.settled;
     const before = await people();
+    const made = madeBy(first, data);
     first.child.kill('SIGKILL');
     await first.ended;
     // The database server alone outlives it, for the next start to take over.
     await until('the server and the local services have gone with it', async () => isFree(port));
-    await until('only PostgreSQL is left', () => {
-      const left = processesOf(data).map((pid) => readFileSync(`/proc/${pid}/cmdline`, 'latin1'));
-      return left.length > 0 && left.every((line) => line.includes('postgres'));
-    });
+    await until('only PostgreSQL is left', () =>
+      left(made).every(({ line }) => line.startsWith('postgres') || line.includes('/postgres -D')),
+    );
+    expect(left(made)).not.toEqual([]);
 
     const { createServer } = await import('node:net');
     const squatter = createServer().listen(port, '127.0.0.1');
@@ -158,10 +189,11 @@ describe('npm start', () => {
     expect(addressIn(said)).toMatch(/^http:\/\/127\.0\.0\.1:\d+$/);
     expect(addressIn(said)).not.toContain(`:${port}`);
     expect(await people()).toEqual(before);
+    const all = new Set([...made, ...madeBy(second, data)]);
     second.child.kill('SIGINT');
     expect(await second.ended).toBe(0);
     squatter.close();
-    expect(processesOf(data)).toEqual([]);
+    expect(left(all)).toEqual([]);
   }, 240_000);
 });
 

@@ -3,7 +3,7 @@ import { existsSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { saysReady } from './children.mjs';
 import { Failure } from './failure.mjs';
-import { DATA, ROOT } from './places.mjs';
+import { DATA } from './places.mjs';
 import { nextFreePort } from './ports.mjs';
 import { clusterAt, createCluster, isReachable, runningPort, startCluster } from './postgres.mjs';
 import { APP, createDatabase, databaseUrl, ensureRoles, OWNER, withClient } from './roles.mjs';
@@ -14,7 +14,7 @@ const INVALID_PASSWORD = '28P01';
 /** The folder of the cluster: in the clone, or where PostgreSQL's user can get to. */
 function clusterHome() {
   if (isReachable(DATA)) return path.join(DATA, 'postgres');
-  const clone = createHash('sha256').update(ROOT).digest('hex').slice(0, 12);
+  const clone = createHash('sha256').update(DATA).digest('hex').slice(0, 12);
   const home = path.join('/var/tmp', `polhode-${clone}`);
   console.log(`PostgreSQL's user cannot reach ${DATA}; the database is kept in ${home}.`);
   return home;
