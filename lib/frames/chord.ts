@@ -1,4 +1,4 @@
-import { dotVec, subVec } from '@/lib/numerics/vec3';
+import { addVec, dotVec, scaleVec, subVec } from '@/lib/numerics/vec3';
 
 import { type AxisTriple, arrow } from './axes';
 import { type AirframeVec } from './tags';
@@ -15,4 +15,9 @@ export function percentMac(
 ): number | null {
   if (!(mac > 0)) return null;
   return (100 * dotVec(arrow('aft', axes), subVec(cg, lemac))) / mac;
+}
+
+/** The point a quarter of the mean aerodynamic chord behind its leading edge, airframe components. */
+export function quarterChord(lemac: AirframeVec, mac: number, axes: AxisTriple): AirframeVec {
+  return addVec(lemac, scaleVec(mac / 4, arrow('aft', axes)));
 }

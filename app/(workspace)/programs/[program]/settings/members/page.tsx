@@ -2,6 +2,7 @@ import { type Metadata } from 'next';
 import { listMembers } from '@/db/queries/programs';
 import { MemberForm } from '@/components/people/member-form';
 import { MemberTable } from '@/components/people/member-table';
+import { SettingsNav } from '@/components/settings/settings-nav';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
@@ -23,6 +24,7 @@ export default async function MembersPage({ params }: PageProps<'/programs/[prog
         above={<TextLink href={`/programs/${program.code}`}>{program.title}</TextLink>}
         lead="Chief engineers keep members, geometry and limits. Weights engineers keep lists, rotating parts and configurations. Simulation engineers see what has been signed."
       />
+      {can('settings.read') ? <SettingsNav program={program.code} current="/members" /> : null}
       <MemberTable
         members={members}
         program={program.code}

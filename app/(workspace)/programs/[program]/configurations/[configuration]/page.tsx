@@ -1,0 +1,146 @@
+import { type Metadata } from 'next';
+import { notFound } from 'next/navigation';
+import {
+  allowancesOf,
+  conditionsOf,
+  findConfiguration,
+  latestRollUp,
+  pinnedRevisions,
+  rotorRevisionsOf,
+} from '@/db/queries/configurations';
+import { limitsOf } from '@/db/queries/settings';
+import { OneButtonForm } from '@/components/forms/one-button-form';
+import { viewAsked } from '@/components/configurations/address';
+import { changedSince } from '@/components/configurations/changed-since';
+import { MadeFrom } from '@/components/configurations/made-from';
+import { OnBoard } from '@/components/configurations/on-board';
+import { pinsOnPage } from '@/components/configurations/pins-on-page';
+import { RolledUp } from '@/components/configurations/rolled-up';
+import { Banner } from '@/components/ui/banner';
+import { Caution } from '@/components/ui/caution';
+import { Day } from '@/components/ui/day';
+import { EmptyPlace } from '@/components/ui/empty-place';
+import { PageHead, Section } from '@/components/ui/section';
+import { TextLink } from '@/components/ui/text-link';
+import { serverDb } from '@/lib/server/database';
+import { requireProgram } from '@/lib/server/http/page';
+import { ProgramFrame } from '../../frame';
+import { rollUpAction, takeRevisionAction } from '../actions';
+import { limitsOnPage } from './limits-on-page';
+
+type Props = PageProps<'/programs/[program]/configurations/[configuration]'>;
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { configuration: code, program: programCode } = await params;
+  const { program } = await requireProgram(programCode, 'configurations.read');
+  const configuration = await findConfiguration(serverDb(), program.id, code);
+  return { title: configuration?.title ?? 'Configuration' };
+}
+
+/** A configuration: what it is made from, and what its last roll-up says. */
+export default async function ConfigurationPage({ params, searchParams }: Props) {
+  const { configuration: code, program: programCode } = await params;
+  const access = await requireProgram(programCode, 'configurations.read');
+  const { program, can } = access;
+  const db = serverDb();
+  const configuration = await findConfiguration(db, program.id, code);
+  if (configuration === undefined) notFound();
+  const [pins, rotorRevisions, conditions, rollUp, allowances, limits] = await Promise.all([
+    pinnedRevisions(db, configuration.id),
+    rotorRevisionsOf(db, program.id),
+    conditionsOf(db, configuration.id),
+    latestRollUp(db, configuration.id),
+    allowancesOf(db, program.id),
+    limitsOf(db, program.id),
+  ]);
+  const station = `/programs/${program.code}/configurations`;
+  const home = `${station}/${configuration.code}`;
+  const keeps = can('configurations.keep');
+  const fields = {
+    program: program.code,
+    configuration: configuration.code,
+    version: String(configuration.version),
+  };
+  const changed =
+    rollUp === undefined
+      ? []
+      : changedSince(
+          { version: rollUp.configuration_version, allowances: rollUp.result.allowances },
+          { version: configuration.version, allowances },
+        );
+  const stale = rollUp === undefined || changed.length > 0;
+  const rollUpButton = keeps ? (
+    <OneButtonForm
+      action={rollUpAction}
+      fields={fields}
+      words="Roll up"
+      pendingWords="Rolling up"
+      kind={stale ? 'primary' : 'secondary'}
+    />
+  ) : null;
+  return (
+    <ProgramFrame access={access} current="configurations">
+      <PageHead
+        title={configuration.title}
+        above={<TextLink href={station}>Configurations</TextLink>}
+        lead={
+          <>
+            {configuration.build_title}, frame issue {configuration.frame_issue_number}
+            {rollUp === undefined ? null : (
+              <>
+                , rolled up by {rollUp.author} on <Day at={rollUp.created_at} time />
+              </>
+            )}
+          </>
+        }
+        actions={rollUpButton}
+      />
+      {changed.length > 0 ? (
+        <Banner
+          severity="warning"
+          word="Out of date"
+          title="The inputs have changed since this was rolled up."
+        >
+          <p>{changed.join(' ')} What is shown is what they said before.</p>
+        </Banner>
+      ) : null}
+      <div className="grid min-w-0 items-start gap-8 lg:grid-cols-[minmax(0,2fr)_minmax(288px,1fr)]">
+        {rollUp === undefined ? (
+          <EmptyPlace title="This configuration has not been rolled up yet" action={rollUpButton}>
+            <p>
+              Rolling up adds the subtotals of its list revisions and the items on board to mass, CG, inertia
+              and angular momentum, and keeps the result here.
+            </p>
+          </EmptyPlace>
+        ) : (
+          <RolledUp
+            home={home}
+            program={program.code}
+            view={viewAsked(await searchParams)}
+            result={rollUp.result}
+            findings={rollUp.findings}
+            limits={limitsOnPage(limits)}
+          />
+        )}
+        <aside className="grid min-w-0 gap-8 lg:order-none" aria-label="Inputs">
+          <Section
+            title="Made from"
+            aside={keeps ? <TextLink href={`${home}/inputs`}>Choose revisions</TextLink> : null}
+          >
+            <MadeFrom
+              pins={pinsOnPage(program.code, pins, configuration, rotorRevisions)}
+              take={keeps ? { action: takeRevisionAction, fields } : null}
+            />
+          </Section>
+          <Section
+            title="On board"
+            aside={keeps ? <TextLink href={`${home}/conditions`}>Change conditions</TextLink> : null}
+          >
+            <OnBoard conditions={conditions} />
+          </Section>
+        </aside>
+      </div>
+      <Caution />
+    </ProgramFrame>
+  );
+}

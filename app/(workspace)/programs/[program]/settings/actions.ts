@@ -1,0 +1,114 @@
+'use server';
+
+import { redirect } from 'next/navigation';
+import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
+import {
+  allowanceSchema,
+  buildSchema,
+  limitChoiceSchema,
+  limitSchema,
+  referencePointSchema,
+} from '@/lib/contracts/program-settings';
+import { serverDb } from '@/lib/server/database';
+import { programAction } from '@/lib/server/http/action';
+import { addBuild } from '@/lib/server/programs/add-build';
+import { addReferencePoint } from '@/lib/server/programs/add-reference-point';
+import { issueFrame } from '@/lib/server/programs/issue-frame';
+import { setAllowance } from '@/lib/server/programs/set-allowance';
+import { removeLimit, setLimit } from '@/lib/server/programs/set-limit';
+import { toSi } from '@/lib/units/convert';
+
+export const issueFrameAction = programAction(
+  'frame.keep',
+  frameIssueSchema,
+  async ({ input, person, program }) => {
+    await issueFrame(serverDb(), {
+      person,
+      programId: program.id,
+      base: input.base,
+      title: input.title,
+      geometry: geometryOfForm(input),
+      validFrom: input.valid_from,
+      reason: input.reason,
+      carryPoints: input.carry_points,
+    });
+    redirect(`/programs/${program.code}/settings?length=${input.length_unit}`);
+  },
+);
+
+export const addReferencePointAction = programAction(
+  'reference-points.keep',
+  referencePointSchema,
+  async ({ input, person, program }) => {
+    const { code, title, x, y, z } = input;
+    const metres = (value: number): number => toSi(value, input.length_unit);
+    await addReferencePoint(serverDb(), {
+      person,
+      programId: program.id,
+      code,
+      title,
+      place: [metres(x), metres(y), metres(z)],
+    });
+    return { message: `${code} is a reference point.` };
+  },
+);
+
+export const addBuildAction = programAction(
+  'builds.keep',
+  buildSchema,
+  async ({ input, person, program }) => {
+    await addBuild(serverDb(), {
+      person,
+      programId: program.id,
+      code: input.code,
+      title: input.title,
+      kind: input.kind,
+      serialFrom: input.serial_from,
+      serialTo: input.serial_to,
+      isDefault: input.is_default,
+    });
+    return { message: `${input.title} is a build.` };
+  },
+);
+
+export const setLimitAction = programAction(
+  'limits.keep',
+  limitSchema,
+  async ({ input, person, program }) => {
+    const { quantity, kind, value, source } = input;
+    await setLimit(serverDb(), {
+      person,
+      programId: program.id,
+      quantity,
+      kind,
+      value: quantity === 'mass-maximum' ? toSi(value, input.mass_unit) : value,
+      source,
+      sourceDate: input.source_date,
+    });
+    return { message: 'The limit is set. Results are judged by it from now on.' };
+  },
+);
+
+export const removeLimitAction = programAction(
+  'limits.keep',
+  limitChoiceSchema,
+  async ({ input, person, program }) => {
+    await removeLimit(serverDb(), { person, programId: program.id, quantity: input.quantity });
+  },
+);
+
+export const setAllowanceAction = programAction(
+  'allowances.keep',
+  allowanceSchema,
+  async ({ input, person, program }) => {
+    const { maturity, percent, source } = input;
+    await setAllowance(serverDb(), {
+      person,
+      programId: program.id,
+      maturity,
+      fraction: percent / 100,
+      source,
+    });
+    return { message: 'The allowance is set. It counts from the next roll-up of a configuration.' };
+  },
+);

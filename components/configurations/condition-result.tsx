@@ -1,0 +1,191 @@
+import { BalanceBar } from '@/components/mass/balance-bar';
+import { MassFigure } from '@/components/mass/mass-figure';
+import { Num } from '@/components/mass/num';
+import { sharedDecimals } from '@/components/mass/number-text';
+import { PrincipalTable } from '@/components/mass/principal-table';
+import { TensorPlate } from '@/components/mass/tensor-plate';
+import { MassMargin } from '@/components/configurations/mass-margin';
+import { Banner } from '@/components/ui/banner';
+import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { principalInclination } from '@/lib/mass/inclination';
+import { type MassProperties } from '@/lib/mass/result';
+import { type RollUp } from '@/lib/mass/roll-up';
+import { degrees, fromSi } from '@/lib/units/convert';
+import { type OutputUnits } from '@/lib/units/names';
+
+export interface ProgramLimits {
+  /** % MAC. */
+  readonly forward: number | null;
+  readonly aft: number | null;
+  /** kg. */
+  readonly mass: { readonly value: number; readonly kind: string; readonly source: string } | null;
+}
+
+interface ConditionResultProps {
+  readonly rollUp: RollUp;
+  readonly geometry: AirframeGeometry;
+  readonly limits: ProgramLimits;
+  readonly units: OutputUnits;
+}
+
+/** Mass, balance and inertia of one condition. */
+export function ConditionResultView({ rollUp, geometry, limits, units }: ConditionResultProps) {
+  const { basic, predicted } = rollUp;
+  const { properties } = basic;
+  return (
+    <div className="grid min-w-0 gap-8">
+      <div className="grid items-start gap-8 md:grid-cols-[minmax(240px,1fr)_2fr]">
+        <MassFigure label="Basic mass" mass={basic.mass} predicted={predicted.mass} unit={units.mass}>
+          {limits.mass === null ? null : (
+            <MassMargin basic={basic.mass} predicted={predicted.mass} limit={limits.mass} unit={units.mass} />
+          )}
+        </MassFigure>
+        {properties === null || properties.percentMac === null ? null : (
+          <BalanceBar cg={properties.percentMac} forwardLimit={limits.forward} aftLimit={limits.aft} />
+        )}
+      </div>
+      {properties === null ? (
+        <Banner severity="blocker" title="There is no CG and no tensor.">
+          <p>A condition whose mass is zero or less has none. Check what is on board.</p>
+        </Banner>
+      ) : (
+        <>
+          <CgTable basic={properties} predicted={predicted.properties} {...{ geometry, units }} />
+          <TensorPlate moments={properties.inertia} unit={units.inertia} />
+          <div className="grid gap-2">
+            <PrincipalTable
+              moments={properties.principal.moments}
+              axes={properties.principal.axes}
+              unit={units.inertia}
+            />
+            <p className="text-ink-2">
+              <Inclination angle={degrees(principalInclination(properties.principal))} />
+            </p>
+          </div>
+          <RadiiTable basic={properties} predicted={predicted.properties} units={units} />
+          {predicted.properties === null ? null : (
+            <details>
+              <summary className="cursor-pointer underline decoration-1 underline-offset-4">
+                Predicted tensor and principal axes, with growth
+              </summary>
+              <div className="grid gap-4 pt-4">
+                <TensorPlate
+                  moments={predicted.properties.inertia}
+                  unit={units.inertia}
+                  title="Predicted inertia about the predicted CG, body axes"
+                />
+                <PrincipalTable
+                  moments={predicted.properties.principal.moments}
+                  axes={predicted.properties.principal.axes}
+                  unit={units.inertia}
+                />
+              </div>
+            </details>
+          )}
+        </>
+      )}
+    </div>
+  );
+}
+
+interface TwoResults {
+  readonly basic: MassProperties;
+  readonly predicted: MassProperties | null;
+  readonly units: OutputUnits;
+}
+
+function CgTable({
+  basic,
+  predicted,
+  geometry,
+  units,
+}: TwoResults & { readonly geometry: AirframeGeometry }) {
+  const rows = [
+    { name: 'Basic', properties: basic },
+    ...(predicted === null ? [] : [{ name: 'Predicted', properties: predicted }]),
+  ];
+  const decimals = sharedDecimals(
+    rows.flatMap(({ properties }) => properties.cg.map((v) => fromSi(v, units.length))),
+  );
+  return (
+    <Table caption="CG in airframe axes from the datum">
+      <thead>
+        <tr>
+          <ColumnHead>CG</ColumnHead>
+          {(['x', 'y', 'z'] as const).map((letter, index) => (
+            <ColumnHead key={letter} side="right" unit={units.length}>
+              {letter} {geometry.axes[index]}
+            </ColumnHead>
+          ))}
+          <ColumnHead side="right">% MAC</ColumnHead>
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map(({ name, properties }) => (
+          <tr key={name}>
+            <RowHead>{name}</RowHead>
+            {properties.cg.map((value, index) => (
+              <Cell key={index} side="right">
+                <Num value={value} unit={units.length} decimals={decimals} />
+              </Cell>
+            ))}
+            <Cell side="right">
+              <Num value={properties.percentMac} decimals={2} />
+            </Cell>
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}
+
+function RadiiTable({ basic, predicted, units }: TwoResults) {
+  const rows = [
+    { name: 'Basic', radii: basic.radii },
+    { name: 'Predicted', radii: predicted?.radii ?? null },
+  ].flatMap(({ name, radii }) => (radii === null ? [] : [{ name, radii }]));
+  if (rows.length === 0) return null;
+  const decimals = sharedDecimals(
+    rows.flatMap(({ radii }) => [radii.x, radii.y, radii.z].map((value) => fromSi(value, units.length))),
+    [],
+    5,
+  );
+  return (
+    <Table caption="Radii of gyration about the body axes through the CG">
+      <thead>
+        <tr>
+          <ColumnHead>Radius of gyration</ColumnHead>
+          {['x', 'y', 'z'].map((letter) => (
+            <ColumnHead key={letter} side="right" unit={units.length}>
+              k<sub className="text-[0.83em]">{letter}</sub>
+            </ColumnHead>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map(({ name, radii }) => (
+          <tr key={name}>
+            <RowHead>{name}</RowHead>
+            {[radii.x, radii.y, radii.z].map((value, index) => (
+              <Cell key={index} side="right">
+                <Num value={value} unit={units.length} decimals={decimals} />
+              </Cell>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}
+
+/** The trade's inclination of the principal axis, its sense in words. */
+function Inclination({ angle }: { readonly angle: number }) {
+  return (
+    <>
+      Inclination of the principal x axis: <Num value={Math.abs(angle)} decimals={3} />°{' '}
+      {angle === 0 ? 'from body x' : angle > 0 ? 'above body x, nose up' : 'below body x, nose down'}, in the
+      plane of symmetry.
+    </>
+  );
+}

@@ -1,0 +1,87 @@
+import Link from 'next/link';
+import { Num } from '@/components/mass/num';
+import { sharedDecimals } from '@/components/mass/number-text';
+import { InertiaSymbol } from '@/components/mass/tensor-plate';
+import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
+import { LINK_CLASS } from '@/components/ui/text-link';
+import { type ConditionResult } from '@/lib/loading/configuration';
+import { fromSi } from '@/lib/units/convert';
+import { type OutputUnits, unitLabel } from '@/lib/units/names';
+
+interface ConditionTableProps {
+  readonly conditions: readonly (Pick<ConditionResult, 'code' | 'title' | 'rollUp'> & {
+    readonly href: string;
+  })[];
+  /** Code of the condition that the page shows in full. */
+  readonly shown: string;
+  readonly units: OutputUnits;
+}
+
+const SHOWN = ['ixx', 'iyy', 'izz', 'ixz'] as const;
+
+/** The conditions beside each other; each leads to its page. */
+export function ConditionTable({ conditions, shown, units }: ConditionTableProps) {
+  const masses = conditions.map(({ rollUp }) => fromSi(rollUp.basic.mass, units.mass));
+  const moments = conditions.flatMap(({ rollUp }) =>
+    SHOWN.map((name) => fromSi(rollUp.basic.properties?.inertia[name] ?? 0, units.inertia)),
+  );
+  const [massDecimals, decimals] = [sharedDecimals(masses), sharedDecimals(moments)];
+  return (
+    <Table caption="Conditions: CG behind the leading edge of the mean chord, inertia about the CG in body axes, products as positive integrals">
+      <thead>
+        <tr>
+          <ColumnHead>Condition</ColumnHead>
+          <ColumnHead side="right" unit={units.mass}>
+            Basic mass
+          </ColumnHead>
+          <ColumnHead side="right" unit={units.mass}>
+            Predicted
+          </ColumnHead>
+          <ColumnHead side="right" unit="% MAC">
+            CG
+          </ColumnHead>
+          {SHOWN.map((symbol) => (
+            <ColumnHead key={symbol} side="right" unit={unitLabel(units.inertia)}>
+              <InertiaSymbol symbol={symbol} />
+            </ColumnHead>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {conditions.map(({ code, title, rollUp, href }) => (
+          <tr key={code}>
+            <RowHead>
+              <Link
+                href={href}
+                scroll={false}
+                aria-current={code === shown ? 'page' : undefined}
+                className={code === shown ? 'font-semibold' : LINK_CLASS}
+              >
+                {title}
+              </Link>
+            </RowHead>
+            <Cell side="right">
+              <Num value={rollUp.basic.mass} unit={units.mass} decimals={massDecimals} />
+            </Cell>
+            <Cell side="right">
+              <Num value={rollUp.predicted.mass} unit={units.mass} decimals={massDecimals} />
+            </Cell>
+            <Cell side="right">
+              <Num value={rollUp.basic.properties?.percentMac ?? null} decimals={2} />
+            </Cell>
+            {SHOWN.map((symbol) => (
+              <Cell key={symbol} side="right">
+                <Num
+                  value={rollUp.basic.properties?.inertia[symbol] ?? null}
+                  unit={units.inertia}
+                  decimals={decimals}
+                  plus={symbol === 'ixz'}
+                />
+              </Cell>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}

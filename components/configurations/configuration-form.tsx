@@ -1,0 +1,53 @@
+'use client';
+
+import { useActionState } from 'react';
+import { FormAnswer } from '@/components/forms/form-answer';
+import { Actions } from '@/components/ui/actions';
+import { FieldRow, FormGrid } from '@/components/ui/form-grid';
+import { type Option, SelectField } from '@/components/ui/select-field';
+import { SubmitButton } from '@/components/ui/submit-button';
+import { TextField } from '@/components/ui/text-field';
+import { type FormAction, IDLE } from '@/lib/form-state';
+
+interface ConfigurationFormProps {
+  readonly action: FormAction;
+  readonly program: string;
+  readonly builds: readonly Option[];
+}
+
+/** Makes a configuration of a build. */
+export function ConfigurationForm({ action, program, builds }: ConfigurationFormProps) {
+  const [state, send] = useActionState(action, IDLE);
+  const field = (name: string) => ({ name, defaultValue: state.values[name], error: state.errors[name] });
+  return (
+    <form action={send}>
+      <FormGrid>
+        <FormAnswer state={state} />
+        <input type="hidden" name="program" value={program} />
+        <SelectField
+          {...field('build')}
+          label="Build"
+          options={builds}
+          defaultValue={state.values['build'] ?? builds[0]?.value ?? ''}
+          required
+        />
+        <FieldRow>
+          <TextField {...field('title')} label="Title" autoComplete="off" required />
+          <TextField
+            {...field('code')}
+            label="Code"
+            hint="Stands in its address: lower-case letters, digits, hyphens."
+            autoComplete="off"
+            mono
+            required
+          />
+        </FieldRow>
+        <Actions>
+          <SubmitButton kind="secondary" pendingWords="Making the configuration">
+            Make configuration
+          </SubmitButton>
+        </Actions>
+      </FormGrid>
+    </form>
+  );
+}

@@ -1,0 +1,74 @@
+import { SeverityWord } from '@/components/ui/severity';
+import { TextLink } from '@/components/ui/text-link';
+import { type Finding } from '@/lib/findings/finding';
+import { ruleOf } from '@/lib/findings/rules';
+
+export interface FindingLine extends Finding {
+  /** Where it was seen, e.g. "List wing, revision 3"; null where the page says it. */
+  readonly seen: string | null;
+  /** The page that shows the rows concerned. */
+  readonly href: string | null;
+}
+
+/** Findings in the order given, each with its rows one click away and its reason folded beneath. */
+export function FindingLines({ findings }: { readonly findings: readonly FindingLine[] }) {
+  if (findings.length === 0) return <p className="text-ink-2">The checks saw nothing to tell of.</p>;
+  return (
+    <ul className="grid border-t border-rule">
+      {findings.map((finding) => (
+        <li
+          key={`${finding.seen ?? ''} ${finding.rule}`}
+          className="keep-together grid gap-x-4 gap-y-1 border-b border-rule py-2 sm:grid-cols-[88px_1fr]"
+        >
+          <SeverityWord severity={finding.severity} />
+          <div className="measure grid min-w-0 gap-1 wrap-anywhere">
+            {finding.seen === null ? null : <p className="text-note text-ink-2">{finding.seen}</p>}
+            <p>{finding.message}</p>
+            <Rows finding={finding} />
+            <Why rule={finding.rule} />
+          </div>
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+const NAMED_AT_ONCE = 6;
+
+function Rows({ finding: { rows, count, href } }: { readonly finding: FindingLine }) {
+  if (rows.length === 0) return null;
+  if (href !== null)
+    return (
+      <p>
+        <TextLink href={href}>
+          {count > rows.length
+            ? `Show the first ${rows.length} of ${count} rows`
+            : `Show ${count} ${count === 1 ? 'row' : 'rows'}`}
+        </TextLink>
+      </p>
+    );
+  const more = count - Math.min(NAMED_AT_ONCE, rows.length);
+  return (
+    <p className="text-ink-2">
+      {rows.slice(0, NAMED_AT_ONCE).join(', ')}
+      {more > 0 ? ` and ${more} more` : ''}
+    </p>
+  );
+}
+
+function Why({ rule }: { readonly rule: string }) {
+  const about = ruleOf(rule);
+  if (about === null) return null;
+  return (
+    <details className="text-note text-ink-2">
+      <summary className="cursor-pointer underline decoration-1 underline-offset-4">
+        Why, and what to do
+      </summary>
+      <div className="grid gap-1 pt-1">
+        <p>{about.why}</p>
+        <p>{about.remedy}</p>
+        <p>Source: {about.source}</p>
+      </div>
+    </details>
+  );
+}

@@ -1,0 +1,55 @@
+import { MomentumTable } from '@/components/mass/momentum-table';
+import { GyroPlate } from '@/components/rotors/gyro-plate';
+import { MomentumSummary } from '@/components/rotors/momentum-summary';
+import { type AngularMomentum } from '@/lib/rotors/momentum';
+import { rpm } from '@/lib/units/convert';
+import { type AngularMomentumUnit } from '@/lib/units/table';
+
+export interface PointOnPage {
+  readonly code: string;
+  readonly title: string;
+  /** Null where a shaft has no speed. */
+  readonly momentum: AngularMomentum | null;
+  readonly href: string;
+}
+
+interface MomentumByPointProps {
+  readonly points: readonly PointOnPage[];
+  /** The point that the address asks for; the first one otherwise. */
+  readonly asked: string | null;
+  readonly unit: AngularMomentumUnit;
+}
+
+/** Angular momentum of every operating point, and one of them by rotor with its gyroscopic matrix. */
+export function MomentumByPoint({ points, asked, unit }: MomentumByPointProps) {
+  const shown = points.find(({ code }) => code === asked) ?? points[0];
+  const momentum = shown?.momentum ?? null;
+  return (
+    <div className="grid min-w-0 gap-6">
+      <MomentumSummary
+        points={points.map((point) => ({ ...point, total: point.momentum?.total ?? null }))}
+        shown={shown?.code ?? null}
+        unit={unit}
+      />
+      {shown === undefined || momentum === null ? null : (
+        <div className="grid min-w-0 items-start gap-6 lg:grid-cols-2">
+          <MomentumTable
+            operatingPoint={shown.title}
+            rotors={momentum.rotors.map((part) => ({
+              rotor: part.rotor,
+              rpm: rpm(part.speed),
+              ...named(part.momentum),
+            }))}
+            total={named(momentum.total)}
+            unit={unit}
+          />
+          <GyroPlate matrix={momentum.gyroMatrix} unit={unit} of={shown.title} />
+        </div>
+      )}
+    </div>
+  );
+}
+
+function named([hx, hy, hz]: readonly [number, number, number]) {
+  return { hx, hy, hz };
+}

@@ -1,0 +1,21 @@
+import { type Db } from '@/db/client';
+
+/** Every revision of every list of a program that lies in a frame issue: lists by code, the newest revision of each first. */
+export function revisionsInFrame(db: Db, programId: string, frameIssueId: string) {
+  return db
+    .selectFrom('list_revisions')
+    .innerJoin('lists', 'lists.id', 'list_revisions.list_id')
+    .select([
+      'lists.code as list_code',
+      'lists.title as list_title',
+      'list_revisions.number',
+      'list_revisions.reason',
+      'list_revisions.rows',
+      'list_revisions.created_at',
+    ])
+    .where('lists.program_id', '=', programId)
+    .where('lists.frame_issue_id', '=', frameIssueId)
+    .orderBy('lists.code')
+    .orderBy('list_revisions.number', 'desc')
+    .execute();
+}

@@ -1,0 +1,107 @@
+import { z } from 'zod';
+import { type OperatingPoint } from '@/lib/rotors/rotor';
+import { radiansPerSecond } from '@/lib/units/convert';
+import { INERTIA_UNITS } from '@/lib/units/table';
+import { reasonSchema } from './codes';
+import { numberField, wholeField } from './form-fields';
+import { problemSchema } from './list-imports';
+
+/** A file of rotating parts or of operating points is at most this long, bytes. */
+export const ROTOR_FILE_BYTES = 8 * 1024 ** 2;
+
+const revision = { base: wholeField(0), reason: reasonSchema };
+
+/** What goes with an uploaded file: what is in it, and the revision that the person saw (0 before the first). */
+export const rotorFileSchema = z.discriminatedUnion('content', [
+  z.object({
+    content: z.literal('rotors'),
+    inertia_unit: z.enum(INERTIA_UNITS, 'Declare the unit of the inertias: it is never guessed.'),
+    ...revision,
+  }),
+  z.object({ content: z.literal('points'), ...revision }),
+]);
+export type RotorFile = z.output<typeof rotorFileSchema>;
+
+/** What became of a file: a revision, or problems and no revision. */
+export const rotorFileAnswerSchema = z.discriminatedUnion('status', [
+  z.object({
+    status: z.literal('revised'),
+    revision: z.number().int(),
+    count: z.number().int(),
+    unread: z.array(z.string()).describe('Columns of the file that are not those of the contract'),
+  }),
+  z.object({
+    status: z.literal('problems'),
+    problems: z.array(problemSchema).describe('The first 200'),
+    total: z.number().int(),
+  }),
+]);
+export type RotorFileAnswer = z.output<typeof rotorFileAnswerSchema>;
+
+const blankOrNumber = z.union([z.literal('').transform(() => null), numberField]);
+const pointSchema = z.object({
+  code: z.string().trim().min(1, 'Give the point a code.').max(100),
+  title: z.string().trim().max(200),
+  speeds: z
+    .array(z.object({ shaft: z.string().min(1).max(200), rpm: blankOrNumber, sigma: blankOrNumber }))
+    .max(500),
+});
+
+/** The grid of operating points as its page sends it: JSON in one field, speeds as typed in rpm, '' for none. */
+export const pointsFormSchema = z.object({
+  ...revision,
+  points: z
+    .string()
+    .max(900_000)
+    .transform((text, context): unknown => {
+      try {
+        return JSON.parse(text) as unknown;
+      } catch (error) {
+        context.addIssue({ code: 'custom', message: `The grid did not arrive whole: ${String(error)}.` });
+        return z.NEVER;
+      }
+    })
+    .pipe(z.array(pointSchema).max(500))
+    .superRefine((points, context) => {
+      const seen = new Set<string>();
+      for (const [index, { code, speeds }] of points.entries()) {
+        if (seen.has(code))
+          context.addIssue({ code: 'custom', path: [index], message: `Two points have the code ${code}.` });
+        seen.add(code);
+        for (const { shaft, rpm, sigma } of speeds) {
+          if (sigma === null) continue;
+          if (rpm === null)
+            context.addIssue({
+              code: 'custom',
+              path: [index],
+              message: `${code}, ${shaft}: there is an uncertainty and no speed. Give the speed, or 0.`,
+            });
+          if (sigma < 0)
+            context.addIssue({
+              code: 'custom',
+              path: [index],
+              message: `${code}, ${shaft}: an uncertainty is zero or more.`,
+            });
+        }
+      }
+    })
+    .transform((points) => points.map(pointInSi)),
+});
+
+function pointInSi({ code, title, speeds }: z.output<typeof pointSchema>): OperatingPoint {
+  return {
+    code,
+    title: title === '' ? code : title,
+    speeds: speeds.flatMap(({ shaft, rpm, sigma }) =>
+      rpm === null
+        ? []
+        : [
+            {
+              shaft,
+              speed: radiansPerSecond(rpm),
+              sigma: sigma === null ? null : radiansPerSecond(sigma),
+            },
+          ],
+    ),
+  };
+}
