@@ -46,6 +46,8 @@ export interface Endpoint {
   readonly body?: JsonBody | CsvBody;
   /** By status. */
   readonly answers: Readonly<Record<number, Answer>>;
+  /** Statuses without a body, and what they say. */
+  readonly bare?: Readonly<Record<number, string>>;
   /** Ways to fail of its own; what every endpoint with a token can answer is added. */
   readonly problems: readonly ErrorCode[];
 }

@@ -1,3 +1,7 @@
+import { angularMomentumEndpoint } from '@/lib/contracts/api/angular-momentum';
+import { baselineConditionEndpoint } from '@/lib/contracts/api/baseline-condition';
+import { baselineEndpoint } from '@/lib/contracts/api/baseline-document';
+import { baselineListEndpoint } from '@/lib/contracts/api/baseline-list';
 import { type Endpoint } from '@/lib/contracts/api/endpoint';
 import { healthEndpoint } from '@/lib/contracts/api/health';
 import { importEndpoint } from '@/lib/contracts/api/imports';
@@ -11,6 +15,10 @@ import { rollUpEndpoint } from '@/lib/contracts/api/roll-ups';
 export const ENDPOINTS: readonly Endpoint[] = [
   rollUpEndpoint,
   programsEndpoint,
+  baselineListEndpoint,
+  baselineEndpoint,
+  baselineConditionEndpoint,
+  angularMomentumEndpoint,
   saveListEndpoint,
   addRevisionEndpoint,
   importEndpoint,

@@ -29,6 +29,9 @@ export function responsesOf(endpoint: Endpoint, book: SchemaBook): Json {
   for (const [status, answer] of Object.entries(endpoint.answers)) {
     responses[status] = answered(answer, endpoint.scope !== null, book);
   }
+  for (const [status, description] of Object.entries(endpoint.bare ?? {})) {
+    responses[status] = { description, headers: RATE_HEADERS };
+  }
   for (const [status, codes] of problemsByStatus(endpoint)) responses[String(status)] = failed(codes, book);
   return responses;
 }
