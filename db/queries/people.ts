@@ -1,6 +1,7 @@
 import { type Transaction } from 'kysely';
 import { type Db } from '../client';
 import { type Database } from '../schema/database';
+import { type MailWish } from '../schema/people';
 
 export interface PersonRow {
   readonly id: string;
@@ -26,6 +27,15 @@ export function findPersonByEmail(db: Db, email: string): Promise<PersonRow | un
 
 export function findPerson(db: Db, id: string): Promise<PersonRow | undefined> {
   return db.selectFrom('users').select(PERSON).where('id', '=', id).executeTakeFirst();
+}
+
+export async function mailWishOf(db: Db, id: string): Promise<MailWish> {
+  const { wish } = await db
+    .selectFrom('users')
+    .select('mail_wish as wish')
+    .where('id', '=', id)
+    .executeTakeFirstOrThrow();
+  return wish;
 }
 
 export interface PersonInDirectory {

@@ -60,7 +60,11 @@ export async function whatWaits(db: Db, programId: string): Promise<Waiting> {
         .as('submissions'),
     ])
     .executeTakeFirstOrThrow();
-  return { listsWithProblems: lists, configurationsToRollUp: configurations, submissionsToDecide: submissions };
+  return {
+    listsWithProblems: lists,
+    configurationsToRollUp: configurations,
+    submissionsToDecide: submissions,
+  };
 }
 
 /** The markings that lists of a program carry, each once. */

@@ -11,6 +11,7 @@ export interface AuditDetails {
   'user.signed-in': { email: string };
   'user.password-changed': { email: string };
   'user.sessions-ended': { email: string };
+  'user.mail-wish-set': { from: string; to: string };
   'token.made': { name: string; scopes: readonly string[]; expiresAt: string };
   'token.revoked': { name: string };
   'program.created': { code: string; title: string };

@@ -51,6 +51,10 @@ export const passwordChangeSchema = z
   })
   .refine(same, SAME);
 
+export const mailWishSchema = z.object({
+  wish: z.enum(['all', 'decisions', 'none'], 'Choose which mails you want.'),
+});
+
 const optionalName = z.union([z.literal('').transform(() => undefined), nameSchema]).optional();
 const userId = z.string().min(1).max(64);
 

@@ -2,13 +2,14 @@
 
 import { redirect } from 'next/navigation';
 import { z } from 'zod';
-import { passwordChangeSchema } from '@/lib/contracts/people';
+import { mailWishSchema, passwordChangeSchema } from '@/lib/contracts/people';
 import { newTokenSchema, tokenChoiceSchema } from '@/lib/contracts/token';
 import { serverDb } from '@/lib/server/database';
 import { siteAction } from '@/lib/server/http/action';
 import { beginSession, dropSession } from '@/lib/server/http/session-cookie';
 import { changePassword } from '@/lib/server/people/change-password';
 import { endAllSessions } from '@/lib/server/people/end-all-sessions';
+import { setMailWish } from '@/lib/server/people/set-mail-wish';
 import { makeToken } from '@/lib/server/tokens/make-token';
 import { revokeToken } from '@/lib/server/tokens/revoke-token';
 
@@ -26,6 +27,11 @@ export const signOutEverywhereAction = siteAction('account.keep', z.object({}), 
   await endAllSessions(serverDb(), { person, email: user.email });
   await dropSession();
   redirect('/sign-in');
+});
+
+export const setMailWishAction = siteAction('account.keep', mailWishSchema, async ({ input, person }) => {
+  await setMailWish(serverDb(), { person, wish: input.wish });
+  return { message: 'The mail wishes are saved.' };
 });
 
 export const makeTokenAction = siteAction('tokens.keep', newTokenSchema, async ({ input, person }) => {

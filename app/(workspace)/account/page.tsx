@@ -1,7 +1,9 @@
 import { type Metadata } from 'next';
+import { mailWishOf } from '@/db/queries/people';
 import { listProgramsOf } from '@/db/queries/programs';
 import { listSessions } from '@/db/queries/sessions';
 import { listTokens } from '@/db/queries/tokens';
+import { MailWishForm } from '@/components/account/mail-wish-form';
 import { PasswordForm } from '@/components/account/password-form';
 import { TokenForm } from '@/components/account/token-form';
 import { TokenTable } from '@/components/account/token-table';
@@ -15,17 +17,24 @@ import { env } from '@/lib/server/env';
 import { requireUser } from '@/lib/server/http/page';
 import { scopesWithin } from '@/lib/token-scopes';
 import { WorkspaceFrame } from '../frame';
-import { changePasswordAction, makeTokenAction, revokeTokenAction, signOutEverywhereAction } from './actions';
+import {
+  changePasswordAction,
+  makeTokenAction,
+  revokeTokenAction,
+  setMailWishAction,
+  signOutEverywhereAction,
+} from './actions';
 
 export const metadata: Metadata = { title: 'Account' };
 
 export default async function AccountPage() {
   const { user } = await requireUser('account.keep');
   const now = new Date();
-  const [programs, tokens, sessions] = await Promise.all([
+  const [programs, tokens, sessions, mailWish] = await Promise.all([
     listProgramsOf(serverDb(), user.id),
     listTokens(serverDb(), user.id),
     listSessions(serverDb(), user.id, now),
+    mailWishOf(serverDb(), user.id),
   ]);
   return (
     <WorkspaceFrame user={user}>
@@ -41,12 +50,17 @@ export default async function AccountPage() {
         ) : (
           <TokenTable tokens={tokens} now={now} revoke={revokeTokenAction} />
         )}
+      </Section>
+      <Section title="Make a token">
         <TokenForm
           action={makeTokenAction}
           scopes={scopesWithin(programs)}
           programs={programs.map(({ code, title }) => ({ code, title }))}
           appUrl={env().APP_URL}
         />
+      </Section>
+      <Section title="Mail">
+        <MailWishForm action={setMailWishAction} wish={mailWish} />
       </Section>
       <Section
         title="Password"

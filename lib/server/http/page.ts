@@ -52,7 +52,8 @@ async function signedIn(): Promise<PageAccess> {
   return { user, person: { userId: user.id, address: await currentAddress() } };
 }
 
-async function orShow<T>(ask: () => Promise<T>): Promise<T> {
+/** What was asked for; `not-found` and `forbidden` become the pages that say so. */
+export async function orShow<T>(ask: () => Promise<T>): Promise<T> {
   try {
     return await ask();
   } catch (error) {

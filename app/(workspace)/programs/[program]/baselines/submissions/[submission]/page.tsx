@@ -1,0 +1,219 @@
+import { type Metadata } from 'next';
+import { limitsOf } from '@/db/queries/settings';
+import { AnsweredFindings } from '@/components/baselines/answered-findings';
+import { ChangeTable, MomentumChangeTable } from '@/components/baselines/change-table';
+import { chosen } from '@/components/baselines/choose';
+import { ConditionChoice } from '@/components/baselines/condition-choice';
+import { ConditionSheet } from '@/components/baselines/condition-sheet';
+import { DecisionBanner } from '@/components/baselines/decision-banner';
+import { GroupChangeTable } from '@/components/baselines/group-change-table';
+import { ListChangeTable } from '@/components/baselines/list-change-table';
+import { cgLimits } from '@/components/baselines/cg-limits';
+import { rowsPath } from '@/components/baselines/paths';
+import { ReasonForm } from '@/components/baselines/reason-form';
+import { Rotors } from '@/components/baselines/rotors';
+import { shownOfResult } from '@/components/baselines/shown-condition';
+import { SignForm } from '@/components/baselines/sign-form';
+import { SourceList } from '@/components/baselines/source-list';
+import { TitleBlock } from '@/components/baselines/title-block';
+import { whereWords } from '@/components/baselines/where-words';
+import { Banner } from '@/components/ui/banner';
+import { Caution } from '@/components/ui/caution';
+import { PageHead, Section } from '@/components/ui/section';
+import { TextLink } from '@/components/ui/text-link';
+import { findingKey } from '@/lib/baselines/finding-key';
+import { loadReview } from '@/lib/server/baselines/load-review';
+import { serverDb } from '@/lib/server/database';
+import { orShow, requireProgram } from '@/lib/server/http/page';
+import { askedSystem } from '@/lib/units/choice';
+import { OUTPUT_UNITS } from '@/lib/units/names';
+import { ProgramFrame } from '../../../frame';
+import { returnSubmissionAction, signSubmissionAction } from '../../actions';
+
+export const metadata: Metadata = { title: 'Submission' };
+
+/** What was submitted, what it changes, and the decision on it. */
+export default async function SubmissionPage({
+  params,
+  searchParams,
+}: PageProps<'/programs/[program]/baselines/submissions/[submission]'>) {
+  const { program: code, submission: submissionId } = await params;
+  const access = await requireProgram(code, 'submissions.read');
+  const { program, role, user, can } = access;
+  const home = `/programs/${program.code}/baselines`;
+  const path = `${home}/submissions/${submissionId}`;
+  const [review, limits] = await Promise.all([
+    orShow(() =>
+      loadReview(serverDb(), { programId: program.id, submissionId, reader: { userId: user.id, role } }),
+    ),
+    limitsOf(serverDb(), program.id),
+  ]);
+  const { submission, state, revisions, rotors, former, newest, comparison, lists, obstacles } = review;
+  const asked = await searchParams;
+  const { result } = submission;
+  const condition = chosen(result.conditions, asked['condition']);
+  const change = comparison.conditions.find((one) => one.code === condition?.code) ?? null;
+  const system = askedSystem(asked['units']);
+  const units = OUTPUT_UNITS[system];
+  const titles = new Map([
+    ...revisions.map((one) => [one.list_code, one.list_title] as const),
+    ...result.conditions.map((one) => [one.code, one.title] as const),
+  ]);
+  const maySign = obstacles.length === 0;
+  const sides = { before: former ? `Baseline ${former.number}` : 'Before', after: 'Submitted' };
+  const rows = (narrowed: { list?: string; group?: string }) =>
+    rowsPath(home, former?.number ?? null, { submission: submissionId }, narrowed);
+  return (
+    <ProgramFrame access={access} current="baselines">
+      <PageHead
+        title={submission.title}
+        above={<TextLink href={home}>Baselines</TextLink>}
+        lead={submission.reason}
+      />
+      <DecisionBanner
+        state={state}
+        decider={submission.decider}
+        decidedAt={submission.decided_at}
+        reason={submission.decision_reason}
+        baseline={submission.baseline_number}
+        home={home}
+      />
+      {newest?.withdrawn ? (
+        <Banner
+          severity="warning"
+          title={`Baseline ${newest.number}, the newest of this build, is withdrawn`}
+        >
+          <p>There is no current baseline to compare with, and this one will supersede none.</p>
+        </Banner>
+      ) : null}
+      <ConditionChoice
+        path={path}
+        conditions={result.conditions}
+        current={condition?.code ?? null}
+        system={system}
+      />
+      <div className="grid gap-x-8 gap-y-8 lg:grid-cols-12">
+        <div className="grid min-w-0 content-start gap-8 lg:col-span-8">
+          {condition === null ? null : (
+            <ConditionSheet
+              condition={shownOfResult(condition)}
+              limits={cgLimits(limits)}
+              axes={result.geometry.axes}
+              units={units}
+            />
+          )}
+          <Section
+            title="What changes"
+            lead={
+              former === null
+                ? 'The build has no current baseline: everything is new.'
+                : `Against baseline ${former.number}, ${former.title}.`
+            }
+          >
+            {change === null ? null : <ChangeTable change={change} units={units} {...sides} />}
+            {comparison.operatingPoints.length === 0 ? null : (
+              <MomentumChangeTable points={comparison.operatingPoints} units={units} {...sides} />
+            )}
+          </Section>
+          <Rotors points={result.operatingPoints} unit={units.angularMomentum} />
+        </div>
+        <div className="grid min-w-0 content-start gap-8 lg:col-span-4">
+          <Section title="Changed by list revision">
+            <ListChangeTable
+              lists={lists.map(({ list, title, before, after, counts }) => ({
+                list,
+                title,
+                before: before?.number ?? null,
+                after: after?.number ?? null,
+                counts,
+              }))}
+              rowsHref={(list) => rows({ list })}
+            />
+          </Section>
+          <Section title="Changed by group" aside={condition?.title ?? null}>
+            <GroupChangeTable
+              groups={change?.groups ?? []}
+              unit={units.mass}
+              rowsHref={(group) => rows({ group })}
+              accountHref={null}
+            />
+          </Section>
+          <Section title="Findings and answers">
+            <AnsweredFindings
+              findings={submission.findings.map((finding) => ({
+                severity: finding.severity,
+                message: finding.message,
+                where: whereWords(finding.where, titles),
+                answer: submission.answers[findingKey(finding)] ?? null,
+              }))}
+            />
+          </Section>
+          <Section title="Sources">
+            <SourceList
+              sources={revisions.map((one) => ({
+                list: one.list_code,
+                revision: one.number,
+                rows: one.rows,
+                sha256: one.content_sha256,
+                fileSha256: one.file_sha256,
+                author: one.author,
+                marking: one.marking,
+              }))}
+            />
+            {rotors === null ? null : (
+              <p>
+                Rotating parts, revision {rotors.number}, by {rotors.author}
+              </p>
+            )}
+          </Section>
+          <TitleBlock
+            program={program.title}
+            build={submission.build_title}
+            title={submission.title}
+            number={submission.baseline_number}
+            preparedBy={[...new Set([...revisions, ...(rotors ? [rotors] : [])].map((one) => one.author))]}
+            submitted={{ by: submission.submitter, at: submission.submitted_at }}
+            approved={
+              state === 'approved' && submission.decided_at !== null
+                ? { by: submission.decider ?? '', at: submission.decided_at }
+                : null
+            }
+            supersedes={former?.number ?? null}
+            digest={null}
+            {...(state === 'submitted'
+              ? {
+                  decision: maySign ? (
+                    <SignForm
+                      action={signSubmissionAction}
+                      program={program.code}
+                      submission={submissionId}
+                      number={review.nextNumber}
+                    />
+                  ) : (
+                    <ul className="grid gap-1 py-1">
+                      {obstacles.map((obstacle) => (
+                        <li key={obstacle}>{obstacle}</li>
+                      ))}
+                    </ul>
+                  ),
+                }
+              : {})}
+          />
+          {state === 'submitted' && can('baselines.decide') ? (
+            <section aria-label="Return the submission" className="no-print border-t border-ink-2 pt-3">
+              <ReasonForm
+                action={returnSubmissionAction}
+                fields={{ program: program.code, submission: submissionId }}
+                label="Reasons to return it"
+                hint="Whoever submitted it reads them: what has to change before it can be signed."
+                words="Return with reasons"
+                pendingWords="Returning"
+              />
+            </section>
+          ) : null}
+          <Caution />
+        </div>
+      </div>
+    </ProgramFrame>
+  );
+}

@@ -1,0 +1,78 @@
+import { BalanceBar } from '@/components/mass/balance-bar';
+import { MassFigure } from '@/components/mass/mass-figure';
+import { Num } from '@/components/mass/num';
+import { PrincipalTable } from '@/components/mass/principal-table';
+import { TensorPlate } from '@/components/mass/tensor-plate';
+import { inclinationWords } from '@/components/baselines/inclination-words';
+import { type Moments } from '@/lib/frames/products';
+import { principalInclination } from '@/lib/mass/inclination';
+import { type Vec3 } from '@/lib/numerics/vec3';
+import { unitLabel, type OutputUnits } from '@/lib/units/names';
+
+/** One condition as it was stored. SI; CG in airframe components, inertia about it in body axes, products positive. */
+export interface ShownCondition {
+  readonly title: string;
+  readonly mass: number;
+  readonly predictedMass: number;
+  /** Null for a mass of zero or less. */
+  readonly properties: {
+    readonly cg: Vec3;
+    readonly percentMac: number | null;
+    readonly inertia: Moments;
+    readonly principal: { readonly moments: Vec3; readonly axes: readonly [Vec3, Vec3, Vec3] };
+  } | null;
+}
+
+export interface CgLimits {
+  readonly forward: number | null;
+  readonly aft: number | null;
+}
+
+interface ConditionSheetProps {
+  readonly condition: ShownCondition;
+  readonly limits: CgLimits;
+  readonly axes: readonly [string, string, string];
+  readonly units: OutputUnits;
+}
+
+/** Mass, balance and inertia of one condition. */
+export function ConditionSheet({ condition, limits, axes, units }: ConditionSheetProps) {
+  const { title, mass, predictedMass, properties } = condition;
+  return (
+    <div className="grid gap-6">
+      <MassFigure label={`${title}, basic mass`} mass={mass} predicted={predictedMass} unit={units.mass} />
+      {properties === null ? (
+        <p>A mass of zero or less has no CG and no inertia about it.</p>
+      ) : (
+        <>
+          <div className="grid gap-2">
+            {properties.percentMac === null ? null : (
+              <BalanceBar cg={properties.percentMac} forwardLimit={limits.forward} aftLimit={limits.aft} />
+            )}
+            <p className="flex flex-wrap gap-x-6 gap-y-1">
+              <span className="text-ink-2">CG from the datum, {unitLabel(units.length)}</span>
+              {(['x', 'y', 'z'] as const).map((letter, index) => (
+                <span key={letter}>
+                  {letter} <span className="text-ink-2">{axes[index]}</span>{' '}
+                  <Num value={properties.cg[index] ?? null} unit={units.length} />
+                </span>
+              ))}
+            </p>
+          </div>
+          <TensorPlate moments={properties.inertia} unit={units.inertia} />
+          <div className="grid gap-2">
+            <PrincipalTable
+              moments={properties.principal.moments}
+              axes={properties.principal.axes}
+              unit={units.inertia}
+            />
+            <p>
+              The principal axis nearest x is inclined by{' '}
+              {inclinationWords(principalInclination(properties.principal))}.
+            </p>
+          </div>
+        </>
+      )}
+    </div>
+  );
+}
