@@ -18,6 +18,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/account/page.tsx': { page: 'site account.keep' },
   'app/(workspace)/account/actions.ts': {
     changePasswordAction: 'site account.keep',
+    setMailWishAction: 'site account.keep',
     signOutEverywhereAction: 'site account.keep',
     makeTokenAction: 'site tokens.keep',
     revokeTokenAction: 'site tokens.keep',
@@ -33,11 +34,63 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/admin/programs/[program]/page.tsx': { page: 'site people.keep, program members.keep' },
 
   'app/(workspace)/programs/[program]/page.tsx': { page: 'program program.read' },
+  'app/(workspace)/programs/[program]/baselines/page.tsx': { page: 'program baselines.read' },
+  'app/(workspace)/programs/[program]/baselines/[baseline]/page.tsx': { page: 'program baselines.read' },
+  'app/(workspace)/programs/[program]/baselines/account/page.tsx': { page: 'program baselines.read' },
+  'app/(workspace)/programs/[program]/baselines/rows/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/baselines/submissions/[submission]/page.tsx': {
+    page: 'program submissions.read',
+  },
+  'app/(workspace)/programs/[program]/baselines/submit/page.tsx': { page: 'program baselines.submit' },
+  'app/(workspace)/programs/[program]/baselines/actions.ts': {
+    submitConfigurationAction: 'program baselines.submit',
+    signSubmissionAction: 'program baselines.decide',
+    returnSubmissionAction: 'program baselines.decide',
+    withdrawBaselineAction: 'program baselines.withdraw',
+  },
+  'app/(workspace)/programs/[program]/trail/page.tsx': { page: 'program trail.read' },
+
   'app/(workspace)/programs/[program]/settings/members/page.tsx': { page: 'program members.read' },
   'app/(workspace)/programs/[program]/settings/members/actions.ts': {
     addMemberAction: 'program members.keep',
     changeMemberRoleAction: 'program members.keep',
     removeMemberAction: 'program members.keep',
+  },
+
+  'app/(workspace)/programs/[program]/settings/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/frame-issue/page.tsx': { page: 'program frame.keep' },
+  'app/(workspace)/programs/[program]/settings/reference-points/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/builds/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/limits/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/actions.ts': {
+    issueFrameAction: 'program frame.keep',
+    addReferencePointAction: 'program reference-points.keep',
+    addBuildAction: 'program builds.keep',
+    setLimitAction: 'program limits.keep',
+    removeLimitAction: 'program limits.keep',
+    setAllowanceAction: 'program allowances.keep',
+  },
+  'app/(workspace)/programs/[program]/rotating-parts/page.tsx': { page: 'program rotors.read' },
+  'app/(workspace)/programs/[program]/rotating-parts/upload/page.tsx': { page: 'program rotors.keep' },
+  'app/(workspace)/programs/[program]/rotating-parts/actions.ts': { savePointsAction: 'program rotors.keep' },
+  'app/api/internal/programs/[program]/rotors/revisions/route.ts': { POST: 'program rotors.keep' },
+  'app/(workspace)/programs/[program]/configurations/page.tsx': { page: 'program configurations.read' },
+  'app/(workspace)/programs/[program]/configurations/[configuration]/page.tsx': {
+    page: 'program configurations.read',
+  },
+  'app/(workspace)/programs/[program]/configurations/[configuration]/inputs/page.tsx': {
+    page: 'program configurations.keep',
+  },
+  'app/(workspace)/programs/[program]/configurations/[configuration]/conditions/page.tsx': {
+    page: 'program configurations.keep',
+  },
+  'app/(workspace)/programs/[program]/configurations/actions.ts': {
+    createConfigurationAction: 'program configurations.keep',
+    rollUpAction: 'program configurations.keep',
+    takeRevisionAction: 'program configurations.keep',
+    pinRevisionsAction: 'program configurations.keep',
+    saveConditionAction: 'program configurations.keep',
+    removeConditionAction: 'program configurations.keep',
   },
 
   'app/api/internal/programs/[program]/lists/example/route.ts': { GET: 'program lists.read' },
