@@ -7,10 +7,7 @@ import { openObject } from '@/lib/server/storage/open-object';
 
 const payloadSchema = z.object({ importId: z.string() });
 
-/**
- * Reads the file of one import into its list. A failure of the store or the database is tried again by the queue; after the last
- * try the import is given up, so that its page says so.
- */
+/** Reads the file of one import into its list. A failure of the store or the database is tried again by the queue. */
 export const importListTask: Task = async (payload, { job }) => {
   const { importId } = payloadSchema.parse(payload);
   try {
