@@ -61,6 +61,7 @@ export function TokenTable({ tokens, now, revoke }: TokenTableProps) {
             <Cell>
               {token.revokedAt === null && token.expiresAt > now ? (
                 <OneButtonForm
+                  inRow
                   action={revoke}
                   fields={{ id: token.id }}
                   words="Revoke token"

@@ -2,6 +2,7 @@
 
 import { useActionState } from 'react';
 import { type ButtonKind } from '@/components/ui/button-style';
+import { classes } from '@/components/ui/classes';
 import { FieldError } from '@/components/ui/field';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { type FormAction, IDLE } from '@/lib/form-state';
@@ -13,13 +14,16 @@ interface OneButtonFormProps {
   readonly words: string;
   readonly pendingWords: string;
   readonly kind?: ButtonKind;
+  /** In a row of a table, which it must not make taller. */
+  readonly inRow?: boolean;
 }
 
-/** A button that does one thing to one row, and says beneath it what went wrong. */
-export function OneButtonForm({ action, fields, words, pendingWords, kind = 'quiet' }: OneButtonFormProps) {
+/** A button that does one thing, and says beneath it what came of it. */
+export function OneButtonForm(props: OneButtonFormProps) {
+  const { action, fields, words, pendingWords, kind = 'quiet', inRow = false } = props;
   const [state, send] = useActionState(action, IDLE);
   return (
-    <form action={send} className="grid justify-items-start gap-1">
+    <form action={send} className={classes('grid justify-items-start', inRow && '-my-1.5')}>
       {Object.entries(fields).map(([name, value]) => (
         <input key={name} type="hidden" name={name} value={value} />
       ))}
@@ -28,10 +32,12 @@ export function OneButtonForm({ action, fields, words, pendingWords, kind = 'qui
       </SubmitButton>
       <div role="status">
         {state.status === 'failed' && state.message !== null ? (
-          <FieldError id={`${words}-${Object.values(fields).join('-')}`} text={state.message} />
+          <div className="py-1">
+            <FieldError id={`${words}-${Object.values(fields).join('-')}`} text={state.message} />
+          </div>
         ) : null}
         {state.status === 'done' && state.message !== null ? (
-          <p className="text-note text-pass">{state.message}</p>
+          <p className="py-1 text-note text-pass">{state.message}</p>
         ) : null}
       </div>
     </form>

@@ -36,7 +36,7 @@ export function MemberTable({ members, program, actions }: MemberTableProps) {
           <ColumnHead>Member since</ColumnHead>
           {actions ? (
             <ColumnHead>
-              <span className="sr-only">Remove</span>
+              <span className="sr-only">Change</span>
             </ColumnHead>
           ) : null}
         </tr>
@@ -46,36 +46,50 @@ export function MemberTable({ members, program, actions }: MemberTableProps) {
           <tr key={member.userId}>
             <RowHead>{member.name}</RowHead>
             <Cell>{member.email}</Cell>
-            <Cell>
-              {actions ? (
-                <RoleForm action={actions.changeRole} program={program} member={member} key={member.role} />
-              ) : (
-                ROLE_NAMES[member.role]
-              )}
-            </Cell>
+            <Cell>{ROLE_NAMES[member.role]}</Cell>
             <Cell>{member.disabled ? 'Disabled' : member.joined ? 'Joined' : 'Invited'}</Cell>
             <Cell>
               <Day at={member.addedAt} />
             </Cell>
             {actions ? (
               <Cell>
-                <DialogButton words="Remove member" kind="quiet" title={`Remove ${member.name}?`} asks>
-                  <p className="measure">
-                    {member.name} no longer sees this program. What they made in it stays, under their name.
-                  </p>
-                  <OneButtonForm
-                    action={actions.remove}
-                    fields={{ program, userId: member.userId }}
-                    words={`Remove ${member.name}`}
-                    pendingWords="Removing"
-                    kind="danger"
-                  />
-                </DialogButton>
+                <MemberButtons member={member} program={program} actions={actions} key={member.role} />
               </Cell>
             ) : null}
           </tr>
         ))}
       </tbody>
     </Table>
+  );
+}
+
+/** Keyed by the role, so that a changed one closes its dialog. */
+function MemberButtons({
+  member,
+  program,
+  actions,
+}: {
+  readonly member: MemberLine;
+  readonly program: string;
+  readonly actions: NonNullable<MemberTableProps['actions']>;
+}) {
+  return (
+    <div className="-my-1.5 flex gap-x-4 whitespace-nowrap">
+      <DialogButton words="Change role" kind="quiet" title={`Role of ${member.name}`}>
+        <RoleForm action={actions.changeRole} program={program} member={member} />
+      </DialogButton>
+      <DialogButton words="Remove member" kind="quiet" title={`Remove ${member.name}?`} asks>
+        <p className="measure">
+          {member.name} no longer sees this program. What they made in it stays, under their name.
+        </p>
+        <OneButtonForm
+          action={actions.remove}
+          fields={{ program, userId: member.userId }}
+          words={`Remove ${member.name}`}
+          pendingWords="Removing"
+          kind="danger"
+        />
+      </DialogButton>
+    </div>
   );
 }

@@ -54,9 +54,10 @@ export function PeopleTable({ people, ownId, actions }: PeopleTableProps) {
             </Cell>
             <Cell>{person.lastSeen === null ? null : <Day at={person.lastSeen} time />}</Cell>
             <Cell>
-              <div className="flex flex-wrap gap-x-4">
+              <div className="flex gap-x-4 whitespace-nowrap">
                 {person.joined || person.disabledAt !== null ? null : (
                   <OneButtonForm
+                    inRow
                     action={actions.resend}
                     fields={{ userId: person.id }}
                     words="Send invitation again"
@@ -65,6 +66,7 @@ export function PeopleTable({ people, ownId, actions }: PeopleTableProps) {
                 )}
                 {person.id === ownId ? null : (
                   <OneButtonForm
+                    inRow
                     action={person.disabledAt === null ? actions.disable : actions.enable}
                     fields={{ userId: person.id }}
                     words={person.disabledAt === null ? 'Disable account' : 'Enable account'}

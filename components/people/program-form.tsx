@@ -14,11 +14,17 @@ export function ProgramForm({ action }: { readonly action: FormAction }) {
     <form action={send} className="grid max-w-160 gap-4">
       <FormAnswer state={state} />
       <div className="grid items-start gap-4 sm:grid-cols-2">
-        <TextField {...field('title')} label="Title" autoComplete="off" required />
+        <TextField
+          {...field('title')}
+          label="Title"
+          hint="As it is read on every page."
+          autoComplete="off"
+          required
+        />
         <TextField
           {...field('code')}
           label="Code"
-          hint="Stands in every address and cannot be changed: lower-case letters, digits, hyphens."
+          hint="Part of every address, for good: a-z, 0-9, hyphens."
           autoComplete="off"
           mono
           required

@@ -66,6 +66,8 @@ export default async function AdminPage() {
             </tbody>
           </Table>
         )}
+      </Section>
+      <Section title="Make a program">
         <ProgramForm action={createProgramAction} />
       </Section>
       <Section title="People" aside={String(people.length)}>
@@ -78,6 +80,8 @@ export default async function AdminPage() {
             enable: enablePersonAction,
           }}
         />
+      </Section>
+      <Section title="Invite a person">
         <InviteForm action={invitePersonAction} />
       </Section>
     </WorkspaceFrame>

@@ -19,7 +19,10 @@ export async function signIn(
   const found = await findPersonByEmail(db, email);
   const matches = await verifyPassword(found?.passwordHash ?? null, password);
   if (!found || !matches || found.disabledAt !== null) {
-    throw new AppError('invalid-input', 'No account has this address with this password.');
+    throw new AppError(
+      'invalid-input',
+      'No account has this address with this password. Check both, or set a new password by mail.',
+    );
   }
   await giveBack(db, RATE_POLICIES.signInAddress, address);
   await giveBack(db, RATE_POLICIES.signInAccount, email);

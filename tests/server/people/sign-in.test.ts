@@ -48,7 +48,7 @@ describe('sign-in', () => {
     for (const error of refused) {
       expect(error).toMatchObject({
         code: 'invalid-input',
-        message: 'No account has this address with this password.',
+        message: 'No account has this address with this password. Check both, or set a new password by mail.',
         errors: [],
       });
     }

@@ -33,6 +33,8 @@ export default async function ProgramPeoplePage({ params }: PageProps<'/admin/pr
           program={program.code}
           actions={{ changeRole: changeMemberRoleAction, remove: removeMemberAction }}
         />
+      </Section>
+      <Section title="Add a member">
         <MemberForm action={addMemberAction} program={program.code} />
       </Section>
     </WorkspaceFrame>
