@@ -1,7 +1,7 @@
 import coreWebVitals from 'eslint-config-next/core-web-vitals';
 import typescript from 'eslint-config-next/typescript';
 
-export default [
+const config = [
   { ignores: ['.next/**', '.data/**', '.test-data/**', 'node_modules/**', 'public/**', 'next-env.d.ts'] },
   ...coreWebVitals,
   ...typescript,
@@ -17,3 +17,5 @@ export default [
     },
   },
 ];
+
+export default config;

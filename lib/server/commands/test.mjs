@@ -86,11 +86,11 @@ async function vitest(name, projects) {
       'node_modules/vitest/vitest.mjs',
       'run',
       ...projects.flatMap((project) => ['--project', project]),
-      '--reporter=dot',
+      '--reporter=default',
       '--reporter=json',
       `--outputFile.json=${report}`,
     ],
-    env: process.env,
+    env: process.stdout.isTTY ? process.env : { ...process.env, NO_COLOR: '1' },
   };
   let failure = null;
   try {
