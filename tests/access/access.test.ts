@@ -17,8 +17,8 @@ const SOURCES = ['app', 'components', 'lib'].flatMap((folder) =>
     .map((file) => path.posix.join(folder, file)),
 );
 
-const pages = SOURCES.filter((file) => /^app\/.*page\.tsx?$/.test(file));
-const routes = SOURCES.filter((file) => /^app\/.*route\.tsx?$/.test(file));
+const pages = SOURCES.filter((file) => /^app\/(.*\/)?page\.tsx?$/.test(file));
+const routes = SOURCES.filter((file) => /^app\/(.*\/)?route\.tsx?$/.test(file));
 const actions = SOURCES.filter(isActionModule);
 const reachable = [...pages, ...routes, ...actions].sort();
 

@@ -9,6 +9,8 @@ const GUARDS: Readonly<Record<string, string>> = {
   siteAction: 'site',
   siteRoute: 'site',
   requireProgram: 'program',
+  // Of the pages of a list: `requireProgram`, then the list.
+  requireList: 'program',
   programAction: 'program',
   programRoute: 'program',
   apiRoute: 'token',
@@ -40,16 +42,28 @@ function visitAll(node: ts.Node, visit: (each: ts.Node) => void): void {
   ts.forEachChild(node, (child) => visitAll(child, visit));
 }
 
-/** The guards called in a node, in their order; `unguarded` without any. */
+/** The guards called in a node, also through a constant of the same file, in their order; `unguarded` without any. */
 function asked(node: ts.Node): string {
   const found: string[] = [];
-  visitAll(node, (each) => {
+  const followed = new Set<ts.Node>([node]);
+  const visit = (each: ts.Node): void => {
     if (!ts.isCallExpression(each) || !ts.isIdentifier(each.expression)) return;
-    const kind = GUARDS[each.expression.text];
+    const name = each.expression.text;
+    const kind = GUARDS[name];
     if (kind !== undefined) found.push([kind, ...actionOf(each)].join(' '));
-  });
+    const local = constantsOf(node.getSourceFile()).find((one) => one.name.getText() === name);
+    if (local === undefined || followed.has(local)) return;
+    followed.add(local);
+    visitAll(local, visit);
+  };
+  visitAll(node, visit);
   return found.length === 0 ? 'unguarded' : found.join(', ');
 }
+
+const constantsOf = (source: ts.SourceFile): ts.VariableDeclaration[] =>
+  source.statements
+    .filter(ts.isVariableStatement)
+    .flatMap(({ declarationList }) => declarationList.declarations);
 
 /** The action that a guard is given: a text among its arguments, or `action` of an object among them. */
 function actionOf(call: ts.CallExpression): string[] {

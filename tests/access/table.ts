@@ -18,8 +18,8 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/account/page.tsx': { page: 'site account.keep' },
   'app/(workspace)/account/actions.ts': {
     changePasswordAction: 'site account.keep',
-    setMailWishAction: 'site account.keep',
     signOutEverywhereAction: 'site account.keep',
+    setMailWishAction: 'site account.keep',
     makeTokenAction: 'site tokens.keep',
     revokeTokenAction: 'site tokens.keep',
   },
@@ -93,6 +93,19 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
     removeConditionAction: 'program configurations.keep',
   },
 
+  'app/(workspace)/programs/[program]/lists/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/lists/actions.ts': {
+    addListAction: 'program lists.keep',
+    declareListAction: 'program lists.keep',
+  },
+  'app/(workspace)/programs/[program]/lists/new/page.tsx': { page: 'program lists.keep' },
+  'app/(workspace)/programs/[program]/lists/[list]/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/lists/[list]/changes/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/lists/[list]/declarations/page.tsx': { page: 'program lists.keep' },
+  'app/(workspace)/programs/[program]/lists/[list]/imports/[import]/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/lists/[list]/revisions/page.tsx': { page: 'program lists.read' },
+  'app/(workspace)/programs/[program]/lists/[list]/upload/page.tsx': { page: 'program lists.keep' },
+
   'app/api/internal/programs/[program]/lists/example/route.ts': { GET: 'program lists.read' },
   'app/api/internal/programs/[program]/lists/[list]/edits/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': { GET: 'program lists.read' },
@@ -128,6 +141,14 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/api/v1/roll-ups/route.ts': { POST: 'token' },
   'app/api/v1/programs/route.ts': { GET: 'token' },
   'app/api/v1/imports/[id]/route.ts': { GET: 'token' },
+  'app/api/v1/programs/[program]/baselines/route.ts': { GET: 'token baselines.read' },
+  'app/api/v1/programs/[program]/baselines/[number]/route.ts': { GET: 'token baselines.read' },
+  'app/api/v1/programs/[program]/baselines/[number]/conditions/[condition]/route.ts': {
+    GET: 'token baselines.read',
+  },
+  'app/api/v1/programs/[program]/baselines/[number]/angular-momentum/route.ts': {
+    GET: 'token baselines.read',
+  },
   'app/api/v1/programs/[program]/lists/[list]/route.ts': { PUT: 'token lists.keep' },
   'app/api/v1/programs/[program]/lists/[list]/revisions/route.ts': { POST: 'token lists.keep' },
 };
