@@ -1,10 +1,10 @@
 import { listToAirframe, placeFrom } from '@/lib/frames/pose';
-import { tensorOf } from '@/lib/frames/products';
+import { type Moments, tensorOf } from '@/lib/frames/products';
 import { lateralIndex, mirrorPlace, mirrorSym } from '@/lib/frames/reflection';
-import { type AirframeVec } from '@/lib/frames/tags';
-import { multiply } from '@/lib/numerics/mat3';
+import { type AirframeVec, type In } from '@/lib/frames/tags';
+import { type Mat3, multiply } from '@/lib/numerics/mat3';
 import { rotation } from '@/lib/numerics/rotation';
-import { ZERO_SYM, congruence, halfTraceMinus, scaleSym } from '@/lib/numerics/sym3';
+import { type Sym3, ZERO_SYM, congruence, halfTraceMinus, scaleSym } from '@/lib/numerics/sym3';
 
 import { type Account, accountOfBody, addAccounts } from './account';
 import { type Component } from './component';
@@ -29,21 +29,38 @@ export function piecesOf(
 
 /** What the rows of one list need to be placed in one airframe: made once, used for every row. */
 export class Placement {
-  readonly #matrix;
-  readonly #lateral;
+  /** R P: from list components to airframe components. */
+  readonly toAirframe: Mat3;
+  /** Which airframe component changes sign in the mirror. */
+  readonly lateral: 0 | 1 | 2;
 
   constructor(
     readonly declarations: ListDeclarations,
     readonly geometry: AirframeGeometry,
   ) {
-    this.#matrix = listToAirframe(declarations.axes, declarations.pose, geometry.axes);
-    this.#lateral = lateralIndex(geometry.axes);
+    this.toAirframe = listToAirframe(declarations.axes, declarations.pose, geometry.axes);
+    this.lateral = lateralIndex(geometry.axes);
   }
 
   /** The CG of a row's pieces as seen from the geometry's reference point r0, m. */
   place(component: Pick<Component, 'position'>): AirframeVec {
     const { reference } = this.geometry;
-    return placeFrom(reference, this.#matrix, this.declarations.pose.origin, component.position);
+    return placeFrom(reference, this.toAirframe, this.declarations.pose.origin, component.position);
+  }
+
+  /** Lateral coordinate, from r0, of the plane of symmetry, m. */
+  get plane(): number {
+    const { reference, lateralPlane } = this.geometry;
+    return lateralPlane - reference[this.lateral];
+  }
+
+  /** R S Rᵀ: the second moment, in airframe components, of moments stated in the axes of a row. */
+  own({ orientation }: Pick<Component, 'orientation'>, moments: Moments): In<'airframe', Sym3> {
+    const { yaw, pitch, roll } = orientation;
+    return congruence(
+      multiply(this.toAirframe, rotation(yaw, pitch, roll)),
+      halfTraceMinus(tensorOf(moments)),
+    );
   }
 
   /**
@@ -51,17 +68,13 @@ export class Placement {
    * Growth is not in it; a memo row has an account like any other, and it is the caller who does not sum it.
    */
   account(component: Placed): Account {
-    const { mass, moments, orientation, quantity } = component;
+    const { mass, moments, quantity } = component;
     const place = this.place(component);
-    const { yaw, pitch, roll } = orientation;
-    const own = hasOwnMoments(moments)
-      ? congruence(multiply(this.#matrix, rotation(yaw, pitch, roll)), halfTraceMinus(tensorOf(moments)))
-      : ZERO_SYM;
+    const own = hasOwnMoments(moments) ? this.own(component, moments) : ZERO_SYM;
     const pieces = accountOfBody(quantity * mass, place, scaleSym(quantity, own));
     if (!isMirrored(component, this.declarations)) return pieces;
-    const { reference, lateralPlane } = this.geometry;
-    const across = mirrorPlace(place, this.#lateral, lateralPlane - reference[this.#lateral]);
-    const image = mirrorSym(own, this.#lateral);
+    const across = mirrorPlace(place, this.lateral, this.plane);
+    const image = mirrorSym(own, this.lateral);
     return addAccounts(pieces, accountOfBody(quantity * mass, across, scaleSym(quantity, image)));
   }
 }

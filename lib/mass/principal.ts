@@ -6,14 +6,17 @@ import { type Vec3, addVec, scaleVec } from '@/lib/numerics/vec3';
 
 /**
  * Principal moments (kg.m2) in the order of the body axes that their axes are nearest to; row i of `axes` is principal axis i in
- * body components. The three rows are right-handed.
+ * body components. The three rows are right-handed. `pairingTies` tells where the order is a matter of choice.
  */
 export interface Principal {
   readonly moments: Vec3;
   readonly axes: readonly [BodyVec, BodyVec, BodyVec];
 }
 
-const ORDERS: readonly (readonly [0 | 1 | 2, 0 | 1 | 2, 0 | 1 | 2])[] = [
+type Order = readonly [0 | 1 | 2, 0 | 1 | 2, 0 | 1 | 2];
+
+/** Which vector stands with body x, y and z. Where several are equally near the first counts: the smaller moment, the earlier axis. */
+const ORDERS: readonly Order[] = [
   [0, 1, 2],
   [0, 2, 1],
   [1, 0, 2],
@@ -23,7 +26,15 @@ const ORDERS: readonly (readonly [0 | 1 | 2, 0 | 1 | 2, 0 | 1 | 2])[] = [
 ];
 
 /** Moments closer than this share of the largest are equal: any pair of axes in their plane is principal. */
-const EQUAL = 1e-12;
+export const EQUAL_MOMENTS = 1e-12;
+
+/** Orders whose nearness differs by less are equally near, so that rounding does not choose between them. */
+export const TIE = 1e-9;
+
+/** How near vectors in some order stand to the body axes: Σ cos² of the three angles, 3 at best. */
+export function nearnessOf(vectors: readonly [Vec3, Vec3, Vec3], [a, b, c]: Order): number {
+  return vectors[a][0] ** 2 + vectors[b][1] ** 2 + vectors[c][2] ** 2;
+}
 
 /** Each axis along, not against, the body axis it is paired with; then the one that says least is turned if the set is left-handed. */
 function rightHanded(axes: readonly [Vec3, Vec3, Vec3]): [Vec3, Vec3, Vec3] {
@@ -51,11 +62,11 @@ function settle(axes: [Vec3, Vec3, Vec3], i: 0 | 1 | 2, j: 0 | 1 | 2): void {
 /** Principal moments and axes of an inertia tensor in body axes. */
 export function principalOf(tensor: In<'body', Sym3>): Principal {
   const { values, vectors } = eigenSym(tensor);
-  const nearness = (order: readonly [0 | 1 | 2, 0 | 1 | 2, 0 | 1 | 2]): number =>
-    vectors[order[0]][0] ** 2 + vectors[order[1]][1] ** 2 + vectors[order[2]][2] ** 2;
-  const [a, b, c] = ORDERS.reduce((best, order) => (nearness(order) > nearness(best) ? order : best));
+  const [a, b, c] = ORDERS.reduce((best, order) =>
+    nearnessOf(vectors, order) > nearnessOf(vectors, best) + TIE ? order : best,
+  );
   const moments: Vec3 = [values[a], values[b], values[c]];
-  const scale = EQUAL * Math.max(...values.map(Math.abs));
+  const scale = EQUAL_MOMENTS * Math.max(...values.map(Math.abs));
   if (Math.abs(values[2] - values[0]) <= scale)
     return {
       moments,

@@ -52,6 +52,9 @@ export interface RollUp {
   readonly basic: MassResult;
   /** The same with growth. */
   readonly predicted: MassResult;
+  /** The accounts behind these two. */
+  readonly basicAccount: Account;
+  readonly predictedAccount: Account;
   /** In the order of their paths. */
   readonly groups: readonly GroupTotal[];
   /** The items on board alone; mass 0 without any. */
@@ -139,7 +142,10 @@ export function rollUp(
   for (const item of items) onBoard.add(accountOfItem(item, geometry));
   whole.basic.add(onBoard.account);
   whole.predicted.add(onBoard.account);
-  const { rows, pieces, memoRows, basic, predicted } = whole.total('', geometry);
+  const { rows, pieces, memoRows, basic, predicted, basicAccount, predictedAccount } = whole.total(
+    '',
+    geometry,
+  );
   return {
     rows,
     pieces,
@@ -147,6 +153,8 @@ export function rollUp(
     ungrownMass: ungrown.value,
     basic,
     predicted,
+    basicAccount,
+    predictedAccount,
     groups: [...groups].map(([group, tally]) => tally.total(group, geometry)).sort(byPath),
     onBoard: resultOf(onBoard.account, geometry),
   };

@@ -6,6 +6,12 @@ import { type AirframeGeometry, bareGeometry } from './geometry';
 import { Placement } from './place';
 import { NO_GROWTH, type RollUp, rollUp } from './roll-up';
 import { SubtotalBook } from './subtotals';
+import { UncertaintyBook } from './uncertainty/book';
+import { type CombinedUncertainty, combineUncertainty } from './uncertainty/combine';
+
+function booksAt(placement: Placement) {
+  return { subtotals: new SubtotalBook(placement), uncertainty: new UncertaintyBook(placement) };
+}
 
 /**
  * A roll-up of one list that belongs to no program: the airframe frame has the list's axis words, there is no chord, growth is
@@ -13,24 +19,30 @@ import { SubtotalBook } from './subtotals';
  */
 export class StatelessRollUp {
   readonly #declarations;
-  #book: SubtotalBook | null = null;
+  #books: { readonly subtotals: SubtotalBook; readonly uncertainty: UncertaintyBook } | null = null;
 
   constructor(declarations: ListDeclarations) {
     this.#declarations = declarations;
   }
 
   add(component: Component): void {
-    this.#book ??= new SubtotalBook(new Placement(this.#declarations, this.#geometryAt(component)));
-    this.#book.add(component);
+    this.#books ??= booksAt(new Placement(this.#declarations, this.#geometryAt(component)));
+    this.#books.subtotals.add(component);
+    this.#books.uncertainty.add(component);
   }
 
   /** The geometry in use; before the first row, r0 is the datum. */
   get geometry(): AirframeGeometry {
-    return this.#book?.placement.geometry ?? bareGeometry(this.#declarations.axes, [0, 0, 0]);
+    return this.#books?.subtotals.placement.geometry ?? bareGeometry(this.#declarations.axes, [0, 0, 0]);
   }
 
   result(): RollUp {
-    return rollUp(this.#book?.subtotals() ?? [], [], this.geometry, NO_GROWTH);
+    return rollUp(this.#books?.subtotals.subtotals() ?? [], [], this.geometry, NO_GROWTH);
+  }
+
+  /** How uncertain the basic and the predicted account of `result` are. */
+  uncertainty(): CombinedUncertainty {
+    return combineUncertainty(this.#books?.uncertainty.sums() ?? [], [], NO_GROWTH);
   }
 
   #geometryAt({ position }: Component): AirframeGeometry {

@@ -40,3 +40,30 @@ export class CompensatedSum {
     return this.#sum + this.#lost;
   }
 }
+
+/** The same for several running sums that always grow together: `length` numbers at a time. */
+export class CompensatedSums {
+  readonly #sums;
+  readonly #lost;
+
+  constructor(length: number) {
+    this.#sums = new Float64Array(length);
+    this.#lost = new Float64Array(length);
+  }
+
+  /** Adds k times each term; the product is rounded. */
+  add(terms: ArrayLike<number>, k = 1): void {
+    const [sums, lost] = [this.#sums, this.#lost];
+    for (let i = 0; i < sums.length; i += 1) {
+      const before = sums[i] ?? NaN;
+      const term = k * (terms[i] ?? NaN);
+      const sum = before + term;
+      lost[i] = (lost[i] ?? NaN) + sumError(before, term, sum);
+      sums[i] = sum;
+    }
+  }
+
+  get values(): number[] {
+    return Array.from(this.#sums, (sum, i) => sum + (this.#lost[i] ?? NaN));
+  }
+}

@@ -35,6 +35,18 @@ export function outer(v: Vec3): Sym3 {
   return { xx: x * x, yy: y * y, zz: z * z, xy: x * y, xz: x * z, yz: y * z };
 }
 
+/** u vᵀ + v uᵀ. */
+export function symmetricProduct(u: Vec3, v: Vec3): Sym3 {
+  return {
+    xx: 2 * u[0] * v[0],
+    yy: 2 * u[1] * v[1],
+    zz: 2 * u[2] * v[2],
+    xy: u[0] * v[1] + u[1] * v[0],
+    xz: u[0] * v[2] + u[2] * v[0],
+    yz: u[1] * v[2] + u[2] * v[1],
+  };
+}
+
 export function trace(a: Sym3): number {
   return a.xx + a.yy + a.zz;
 }

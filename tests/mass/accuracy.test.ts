@@ -11,16 +11,8 @@ import { SubtotalBook } from '@/lib/mass/subtotals';
 import { congruence, traceMinus } from '@/lib/numerics/sym3';
 import { type Vec3 } from '@/lib/numerics/vec3';
 import { aComponent, declarations, geometry, properties } from '@/tests/support/mass';
+import { randomNumbers } from '@/tests/support/random';
 import { Rational, ZERO } from '@/tests/support/rational';
-
-/** Park and Miller's minimal standard generator: the same rows on every run. */
-function randomNumbers(seed: number): () => number {
-  let state = seed;
-  return () => {
-    state = (state * 48271) % 2147483647;
-    return state / 2147483647;
-  };
-}
 
 /** Rows of an aircraft 40 m long: masses over five decades, full tensors, a tenth of them removals, some pieces several. */
 function randomRows(count: number, datum: Vec3, seed: number): Component[] {
