@@ -57,7 +57,13 @@ export function ConditionForm(props: ConditionFormProps) {
       {condition === null ? <input type="hidden" name="is_new" value="on" /> : null}
       <FormGrid>
         <FieldRow>
-          <TextField {...field('title')} label="Title" autoComplete="off" required />
+          <TextField
+            {...field('title')}
+            label="Title"
+            hint="What people call it."
+            autoComplete="off"
+            required
+          />
           <TextField
             {...field('code')}
             label="Code"

@@ -1,7 +1,10 @@
 import Link from 'next/link';
+import { type ProgramLimits } from '@/components/configurations/condition-result';
+import { balanceVerdict } from '@/components/mass/balance-scale';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
 import { InertiaSymbol } from '@/components/mass/tensor-plate';
+import { SeverityMark } from '@/components/ui/severity';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { LINK_CLASS } from '@/components/ui/text-link';
 import { type ConditionResult } from '@/lib/loading/configuration';
@@ -15,12 +18,13 @@ interface ConditionTableProps {
   /** Code of the condition that the page shows in full. */
   readonly shown: string;
   readonly units: OutputUnits;
+  readonly limits: Pick<ProgramLimits, 'forward' | 'aft'>;
 }
 
 const SHOWN = ['ixx', 'iyy', 'izz', 'ixz'] as const;
 
 /** The conditions beside each other; each leads to its page. */
-export function ConditionTable({ conditions, shown, units }: ConditionTableProps) {
+export function ConditionTable({ conditions, shown, units, limits }: ConditionTableProps) {
   const masses = conditions.map(({ rollUp }) => fromSi(rollUp.basic.mass, units.mass));
   const moments = conditions.flatMap(({ rollUp }) =>
     SHOWN.map((name) => fromSi(rollUp.basic.properties?.inertia[name] ?? 0, units.inertia)),
@@ -67,7 +71,7 @@ export function ConditionTable({ conditions, shown, units }: ConditionTableProps
               <Num value={rollUp.predicted.mass} unit={units.mass} decimals={massDecimals} />
             </Cell>
             <Cell side="right">
-              <Num value={rollUp.basic.properties?.percentMac ?? null} decimals={2} />
+              <BalanceFigure cg={rollUp.basic.properties?.percentMac ?? null} limits={limits} />
             </Cell>
             {SHOWN.map((symbol) => (
               <Cell key={symbol} side="right">
@@ -83,5 +87,18 @@ export function ConditionTable({ conditions, shown, units }: ConditionTableProps
         ))}
       </tbody>
     </Table>
+  );
+}
+
+/** % MAC; beyond a limit with its mark, and in words for whoever does not see it. */
+function BalanceFigure({ cg, limits }: { readonly cg: number | null } & Pick<ConditionTableProps, 'limits'>) {
+  const verdict = cg === null ? null : balanceVerdict(cg, limits.forward, limits.aft);
+  if (verdict === null || verdict.inside) return <Num value={cg} decimals={2} />;
+  return (
+    <span className="inline-flex items-center gap-1.5 text-limit" title={`${verdict.words}.`}>
+      <SeverityMark severity="blocker" />
+      <Num value={cg} decimals={2} />
+      <span className="sr-only">outside the limits</span>
+    </span>
   );
 }

@@ -32,7 +32,13 @@ export function ConfigurationForm({ action, program, builds }: ConfigurationForm
           required
         />
         <FieldRow>
-          <TextField {...field('title')} label="Title" autoComplete="off" required />
+          <TextField
+            {...field('title')}
+            label="Title"
+            hint="What people call it."
+            autoComplete="off"
+            required
+          />
           <TextField
             {...field('code')}
             label="Code"

@@ -1,6 +1,7 @@
 import { CATEGORY_WORDS } from '@/components/configurations/category-words';
 import { Num } from '@/components/mass/num';
 import { type Category } from '@/lib/mass/component';
+import { type MassUnit } from '@/lib/units/table';
 
 interface OnBoardProps {
   readonly conditions: readonly {
@@ -9,10 +10,11 @@ interface OnBoardProps {
     readonly categories: readonly Category[];
     readonly items: readonly { readonly mass: number }[];
   }[];
+  readonly massUnit: MassUnit;
 }
 
 /** What each condition has on board, in a line. */
-export function OnBoard({ conditions }: OnBoardProps) {
+export function OnBoard({ conditions, massUnit }: OnBoardProps) {
   return (
     <ul className="grid border-t border-rule">
       {conditions.map(({ code, title, categories, items }) => {
@@ -27,7 +29,7 @@ export function OnBoard({ conditions }: OnBoardProps) {
               {items.length === 0 ? null : (
                 <>
                   ; {items.length} {items.length === 1 ? 'item' : 'items'},{' '}
-                  <Num value={mass} unit="kg" decimals={1} showUnit />
+                  <Num value={mass} unit={massUnit} decimals={1} showUnit />
                 </>
               )}
             </span>

@@ -27,5 +27,5 @@ function rowsHref({ rule, where }: PlacedFinding, program: string): string | nul
   if (where.kind === 'condition') return null;
   if (where.kind === 'rotors') return `/programs/${program}/rotating-parts?revision=${where.revision}`;
   const query = new URLSearchParams({ revision: String(where.revision), finding: rule });
-  return `/programs/${program}/lists/${where.code}?${query.toString()}`;
+  return `/programs/${program}/lists/${where.code}?${query.toString()}#rows`;
 }

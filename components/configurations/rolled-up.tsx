@@ -2,28 +2,22 @@ import { type ConfigurationView, viewHref } from '@/components/configurations/ad
 import { ConditionResultView, type ProgramLimits } from '@/components/configurations/condition-result';
 import { ConditionTable } from '@/components/configurations/condition-table';
 import { GroupTable } from '@/components/configurations/group-table';
-import { placedFindings } from '@/components/configurations/placed-findings';
-import { FindingLines } from '@/components/findings/finding-lines';
 import { MomentumByPoint } from '@/components/rotors/momentum-by-point';
 import { ChoiceLinks } from '@/components/ui/choice-links';
 import { Section } from '@/components/ui/section';
-import { type PlacedFinding } from '@/lib/findings/finding';
 import { type ConfigurationResult } from '@/lib/loading/configuration';
 import { OUTPUT_UNITS, UNIT_SYSTEMS } from '@/lib/units/names';
 
 interface RolledUpProps {
   /** Address of the configuration. */
   readonly home: string;
-  /** Code of the program. */
-  readonly program: string;
   readonly view: ConfigurationView;
   readonly result: ConfigurationResult;
-  readonly findings: readonly PlacedFinding[];
   readonly limits: ProgramLimits;
 }
 
-/** What a roll-up says: the conditions beside each other, one of them in full, the rotors, the findings. */
-export function RolledUp({ home, program, view, result, findings, limits }: RolledUpProps) {
+/** What a roll-up says: the conditions beside each other, one of them in full, the rotors. */
+export function RolledUp({ home, view, result, limits }: RolledUpProps) {
   const units = OUTPUT_UNITS[view.units];
   const { conditions, geometry, operatingPoints } = result;
   const shown = conditions.find(({ code }) => code === view.condition) ?? conditions[0];
@@ -51,6 +45,7 @@ export function RolledUp({ home, program, view, result, findings, limits }: Roll
           }))}
           shown={shown.code}
           units={units}
+          limits={limits}
         />
       </Section>
       <Section title={shown.title}>
@@ -81,11 +76,9 @@ export function RolledUp({ home, program, view, result, findings, limits }: Roll
             points={operatingPoints.map((point) => ({ ...point, href: to({ point: point.code }) }))}
             asked={view.point}
             unit={units.angularMomentum}
+            stacked
           />
         )}
-      </Section>
-      <Section title="Findings">
-        <FindingLines findings={placedFindings(findings, program, conditions)} />
       </Section>
     </div>
   );

@@ -1,6 +1,7 @@
 import { MomentumTable } from '@/components/mass/momentum-table';
 import { GyroPlate } from '@/components/rotors/gyro-plate';
 import { MomentumSummary } from '@/components/rotors/momentum-summary';
+import { classes } from '@/components/ui/classes';
 import { type AngularMomentum } from '@/lib/rotors/momentum';
 import { rpm } from '@/lib/units/convert';
 import { type AngularMomentumUnit } from '@/lib/units/table';
@@ -18,10 +19,12 @@ interface MomentumByPointProps {
   /** The point that the address asks for; the first one otherwise. */
   readonly asked: string | null;
   readonly unit: AngularMomentumUnit;
+  /** The matrix beneath the table, where the page gives them less than its width. */
+  readonly stacked?: boolean;
 }
 
 /** Angular momentum of every operating point, and one of them by rotor with its gyroscopic matrix. */
-export function MomentumByPoint({ points, asked, unit }: MomentumByPointProps) {
+export function MomentumByPoint({ points, asked, unit, stacked = false }: MomentumByPointProps) {
   const shown = points.find(({ code }) => code === asked) ?? points[0];
   const momentum = shown?.momentum ?? null;
   return (
@@ -32,7 +35,7 @@ export function MomentumByPoint({ points, asked, unit }: MomentumByPointProps) {
         unit={unit}
       />
       {shown === undefined || momentum === null ? null : (
-        <div className="grid min-w-0 items-start gap-6 lg:grid-cols-2">
+        <div className={classes('grid min-w-0 items-start gap-6', !stacked && 'lg:grid-cols-2')}>
           <MomentumTable
             operatingPoint={shown.title}
             rotors={momentum.rotors.map((part) => ({

@@ -3,7 +3,7 @@ import { CATEGORIES } from '@/lib/mass/component';
 import { toSi } from '@/lib/units/convert';
 import { LENGTH_UNITS, MASS_UNITS } from '@/lib/units/table';
 import { codeSchema, titleSchema } from './codes';
-import { numberField, wholeField } from './form-fields';
+import { blankOr, numberField, wholeField } from './form-fields';
 
 export const newConfigurationSchema = z.object({
   build: z.string('Choose a build.').min(1, 'Choose a build.'),
@@ -16,11 +16,11 @@ const seen = { configuration: codeSchema, version: wholeField(1) };
 
 export const configurationSeenSchema = z.object(seen);
 
-const revisionChoice = z.union([z.literal('').transform(() => null), wholeField(1)]);
+const revisionChoice = blankOr(wholeField(1));
 
 /** Pins as the form sends them: `list:CODE` -> revision number, '' for a list that is not part; `rotors` alike. */
 export const pinsFormSchema = z
-  .object({ ...seen, rotors: revisionChoice.optional().transform((value) => value ?? null) })
+  .object({ ...seen, rotors: revisionChoice })
   .catchall(z.unknown())
   .transform((form, context) => {
     const revisions: Record<string, number> = {};

@@ -20,14 +20,18 @@ export const numberField = z
 
 export const positiveField = numberField.refine((value) => value > 0, 'It must be greater than 0.');
 
-/** Blank is null. */
-export const optionalNumberField = z.union([
+/** `field`, or null when it is left blank. Says what `field` says of a text that is neither. */
+export const blankOr = <T>(field: z.ZodType<T, string>) =>
   z
-    .literal('')
+    .string()
     .optional()
-    .transform(() => null),
-  numberField,
-]);
+    .transform((text = '', context): T | null => {
+      if (text.trim() === '') return null;
+      const read = field.safeParse(text);
+      if (read.success) return read.data;
+      for (const { message } of read.error.issues) context.addIssue({ code: 'custom', message });
+      return z.NEVER;
+    });
 
 /** A whole number of at least `least`, as a person typed it or as a hidden field has it. */
 export const wholeField = (least: number) =>

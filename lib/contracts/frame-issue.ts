@@ -5,14 +5,7 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { radians, toSi } from '@/lib/units/convert';
 import { LENGTH_UNITS } from '@/lib/units/table';
 import { reasonSchema, titleSchema } from './codes';
-import {
-  dateField,
-  numberField,
-  optionalNumberField,
-  positiveField,
-  tickField,
-  wholeField,
-} from './form-fields';
+import { blankOr, dateField, numberField, positiveField, tickField, wholeField } from './form-fields';
 
 const direction = z.enum(DIRECTIONS, 'Choose where this axis points.');
 
@@ -34,9 +27,9 @@ export const frameIssueSchema = z
     length: positiveField,
     lateral_plane: numberField,
     incidence: numberField.refine((value) => Math.abs(value) < 45, 'It must be between -45 and 45 degrees.'),
-    reference_x: optionalNumberField,
-    reference_y: optionalNumberField,
-    reference_z: optionalNumberField,
+    reference_x: blankOr(numberField),
+    reference_y: blankOr(numberField),
+    reference_z: blankOr(numberField),
     valid_from: dateField,
     reason: reasonSchema,
     carry_points: tickField,

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { MATURITIES } from '@/lib/mass/component';
 import { LENGTH_UNITS, MASS_UNITS } from '@/lib/units/table';
 import { codeSchema, titleSchema } from './codes';
-import { dateField, numberField, sourceField, tickField, wholeField } from './form-fields';
+import { blankOr, dateField, numberField, sourceField, tickField, wholeField } from './form-fields';
 
 export const BUILD_KINDS = ['design', 'as-built', 'as-weighed'] as const;
 export const LIMIT_QUANTITIES = ['cg-forward-percent-mac', 'cg-aft-percent-mac', 'mass-maximum'] as const;
@@ -24,13 +24,7 @@ export const referencePointSchema = z.object({
   z: numberField,
 });
 
-const serialField = z.union([
-  z
-    .literal('')
-    .optional()
-    .transform(() => null),
-  wholeField(1),
-]);
+const serialField = blankOr(wholeField(1));
 
 export const buildSchema = z
   .object({

@@ -1,9 +1,9 @@
 import { z } from 'zod';
-import { type OperatingPoint } from '@/lib/rotors/rotor';
+import { type OperatingPoint, type ShaftSpeed } from '@/lib/rotors/rotor';
 import { radiansPerSecond } from '@/lib/units/convert';
 import { INERTIA_UNITS } from '@/lib/units/table';
 import { reasonSchema } from './codes';
-import { numberField, wholeField } from './form-fields';
+import { blankOr, numberField, wholeField } from './form-fields';
 import { problemSchema } from './list-imports';
 
 /** A file of rotating parts or of operating points is at most this long, bytes. */
@@ -38,12 +38,11 @@ export const rotorFileAnswerSchema = z.discriminatedUnion('status', [
 ]);
 export type RotorFileAnswer = z.output<typeof rotorFileAnswerSchema>;
 
-const blankOrNumber = z.union([z.literal('').transform(() => null), numberField]);
 const pointSchema = z.object({
-  code: z.string().trim().min(1, 'Give the point a code.').max(100),
+  code: z.string().trim().min(1, 'Give every point a code.').max(100),
   title: z.string().trim().max(200),
   speeds: z
-    .array(z.object({ shaft: z.string().min(1).max(200), rpm: blankOrNumber, sigma: blankOrNumber }))
+    .array(z.object({ shaft: z.string().min(1).max(200), rpm: z.string(), sigma: z.string() }))
     .max(500),
 });
 
@@ -62,46 +61,37 @@ export const pointsFormSchema = z.object({
       }
     })
     .pipe(z.array(pointSchema).max(500))
-    .superRefine((points, context) => {
-      const seen = new Set<string>();
-      for (const [index, { code, speeds }] of points.entries()) {
-        if (seen.has(code))
-          context.addIssue({ code: 'custom', path: [index], message: `Two points have the code ${code}.` });
-        seen.add(code);
-        for (const { shaft, rpm, sigma } of speeds) {
-          if (sigma === null) continue;
-          if (rpm === null)
-            context.addIssue({
-              code: 'custom',
-              path: [index],
-              message: `${code}, ${shaft}: there is an uncertainty and no speed. Give the speed, or 0.`,
-            });
-          if (sigma < 0)
-            context.addIssue({
-              code: 'custom',
-              path: [index],
-              message: `${code}, ${shaft}: an uncertainty is zero or more.`,
-            });
-        }
-      }
-    })
-    .transform((points) => points.map(pointInSi)),
+    .transform((points, context): OperatingPoint[] => {
+      const say = (message: string) => context.addIssue({ code: 'custom', message });
+      const codes = points.map(({ code }) => code);
+      const twice = codes.find((code, index) => codes.indexOf(code) !== index);
+      if (twice !== undefined) say(`Two points have the code ${twice}.`);
+      return points.map(({ code, title, speeds }) => ({
+        code,
+        title: title === '' ? code : title,
+        speeds: speeds.flatMap((speed) =>
+          readSpeed(speed, (fault) => say(`${code}, ${speed.shaft}: ${fault}`)),
+        ),
+      }));
+    }),
 });
 
-function pointInSi({ code, title, speeds }: z.output<typeof pointSchema>): OperatingPoint {
-  return {
-    code,
-    title: title === '' ? code : title,
-    speeds: speeds.flatMap(({ shaft, rpm, sigma }) =>
-      rpm === null
-        ? []
-        : [
-            {
-              shaft,
-              speed: radiansPerSecond(rpm),
-              sigma: sigma === null ? null : radiansPerSecond(sigma),
-            },
-          ],
-    ),
-  };
+const figure = blankOr(numberField);
+
+/** One cell of the grid in rad/s; nothing for a blank one. */
+function readSpeed(
+  { shaft, rpm, sigma }: { readonly shaft: string; readonly rpm: string; readonly sigma: string },
+  say: (fault: string) => void,
+): ShaftSpeed[] {
+  const [speed, spread] = [rpm, sigma].map((text) => {
+    const read = figure.safeParse(text);
+    if (!read.success) say(read.error.issues.map(({ message }) => message).join(' '));
+    return read.success ? read.data : undefined;
+  });
+  if (speed === null && typeof spread === 'number')
+    say('there is an uncertainty and no speed. Give the speed, or 0.');
+  if (typeof spread === 'number' && spread < 0) say('an uncertainty is zero or more.');
+  if (typeof speed !== 'number' || spread === undefined) return [];
+  const inSi = { shaft, speed: radiansPerSecond(speed) };
+  return [{ ...inSi, sigma: spread === null ? null : radiansPerSecond(spread) }];
 }

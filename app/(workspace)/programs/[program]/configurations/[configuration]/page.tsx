@@ -14,9 +14,14 @@ import { viewAsked } from '@/components/configurations/address';
 import { changedSince } from '@/components/configurations/changed-since';
 import { MadeFrom } from '@/components/configurations/made-from';
 import { OnBoard } from '@/components/configurations/on-board';
+import { placedFindings } from '@/components/configurations/placed-findings';
 import { pinsOnPage } from '@/components/configurations/pins-on-page';
+import { programLimits } from '@/components/configurations/program-limits';
 import { RolledUp } from '@/components/configurations/rolled-up';
+import { FindingLines } from '@/components/findings/finding-lines';
+import { FindingCounts } from '@/components/lists/finding-counts';
 import { Banner } from '@/components/ui/banner';
+import { ButtonLink } from '@/components/ui/button';
 import { Caution } from '@/components/ui/caution';
 import { Day } from '@/components/ui/day';
 import { EmptyPlace } from '@/components/ui/empty-place';
@@ -24,9 +29,9 @@ import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
+import { OUTPUT_UNITS } from '@/lib/units/names';
 import { ProgramFrame } from '../../frame';
 import { rollUpAction, takeRevisionAction } from '../actions';
-import { limitsOnPage } from './limits-on-page';
 
 type Props = PageProps<'/programs/[program]/configurations/[configuration]'>;
 
@@ -55,6 +60,7 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
   ]);
   const station = `/programs/${program.code}/configurations`;
   const home = `${station}/${configuration.code}`;
+  const view = viewAsked(await searchParams);
   const keeps = can('configurations.keep');
   const fields = {
     program: program.code,
@@ -93,7 +99,19 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
             )}
           </>
         }
-        actions={rollUpButton}
+        actions={
+          <>
+            {rollUpButton}
+            {!stale && can('baselines.submit') ? (
+              <ButtonLink
+                kind="primary"
+                href={`/programs/${program.code}/baselines/submit?configuration=${configuration.code}`}
+              >
+                Submit for approval
+              </ButtonLink>
+            ) : null}
+          </>
+        }
       />
       {changed.length > 0 ? (
         <Banner
@@ -113,16 +131,9 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
             </p>
           </EmptyPlace>
         ) : (
-          <RolledUp
-            home={home}
-            program={program.code}
-            view={viewAsked(await searchParams)}
-            result={rollUp.result}
-            findings={rollUp.findings}
-            limits={limitsOnPage(limits)}
-          />
+          <RolledUp home={home} view={view} result={rollUp.result} limits={programLimits(limits)} />
         )}
-        <aside className="grid min-w-0 gap-8 lg:order-none" aria-label="Inputs">
+        <aside className="grid min-w-0 gap-8" aria-label="Inputs and findings">
           <Section
             title="Made from"
             aside={keeps ? <TextLink href={`${home}/inputs`}>Choose revisions</TextLink> : null}
@@ -136,8 +147,15 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
             title="On board"
             aside={keeps ? <TextLink href={`${home}/conditions`}>Change conditions</TextLink> : null}
           >
-            <OnBoard conditions={conditions} />
+            <OnBoard conditions={conditions} massUnit={OUTPUT_UNITS[view.units].mass} />
           </Section>
+          {rollUp === undefined ? null : (
+            <Section title="Findings" aside={<FindingCounts findings={rollUp.findings} />}>
+              <FindingLines
+                findings={placedFindings(rollUp.findings, program.code, rollUp.result.conditions)}
+              />
+            </Section>
+          )}
         </aside>
       </div>
       <Caution />

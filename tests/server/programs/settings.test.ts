@@ -1,0 +1,216 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { currentFrameIssue, geometryOf } from '@/db/queries/frames';
+import { buildsOf, growthAllowancesOf, limitsOf, referencePointsOf } from '@/db/queries/settings';
+import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
+import { type ProgramAction } from '@/lib/permissions';
+import { requireProgramAction } from '@/lib/server/http/access';
+import { addBuild } from '@/lib/server/programs/add-build';
+import { addReferencePoint } from '@/lib/server/programs/add-reference-point';
+import { issueFrame } from '@/lib/server/programs/issue-frame';
+import { setAllowance } from '@/lib/server/programs/set-allowance';
+import { removeLimit, setLimit } from '@/lib/server/programs/set-limit';
+import { addPerson, type ProgramUnderTest, programUnderTest } from '@/tests/support/program';
+
+let test: ProgramUnderTest;
+beforeAll(async () => {
+  test = await programUnderTest();
+});
+afterAll(() => test.close());
+
+const trail = async () => {
+  const rows = await test.db
+    .selectFrom('audit_events')
+    .select(['kind', 'detail'])
+    .where('scope', '=', test.program.id)
+    .orderBy('number')
+    .execute();
+  return rows;
+};
+const here = () => ({ person: test.crew.chief, programId: test.program.id });
+
+const FORM = {
+  base: '1',
+  title: 'Second issue',
+  axis_x: 'aft',
+  axis_y: 'left',
+  axis_z: 'up',
+  length_unit: 'in',
+  lemac_x: '100',
+  lemac_y: '0',
+  lemac_z: '10',
+  mac: '40',
+  span: '400',
+  length: '300',
+  lateral_plane: '0',
+  incidence: '-1.5',
+  reference_x: '',
+  reference_y: '',
+  reference_z: '',
+  valid_from: '2026-06-01',
+  reason: 'stations renumbered',
+} as const;
+
+describe('reference points', () => {
+  it('lie in the frame issue in force, each code once', async () => {
+    const point = { ...here(), code: 'MRC', title: 'Moment reference', place: [6.5, 0, 1] } as const;
+    await addReferencePoint(test.db, point);
+    await expect(addReferencePoint(test.db, point)).rejects.toMatchObject({ code: 'invalid-input' });
+    const points = await referencePointsOf(test.db, test.frameIssueId);
+    expect(points.map(({ code, place }) => ({ code, place }))).toEqual([{ code: 'MRC', place: [6.5, 0, 1] }]);
+  });
+});
+
+describe('a frame issue', () => {
+  it('is refused when another was made since the person looked, and when its axes do not span space', async () => {
+    const form = frameIssueSchema.parse(FORM);
+    const input = {
+      ...here(),
+      title: form.title,
+      geometry: geometryOfForm(form),
+      validFrom: form.valid_from,
+      reason: form.reason,
+      carryPoints: false,
+    };
+    await expect(issueFrame(test.db, { ...input, base: 0 })).rejects.toMatchObject({ code: 'conflict' });
+    await expect(issueFrame(test.db, { ...input, base: 1, validFrom: '2026-01-04' })).rejects.toMatchObject({
+      code: 'invalid-input',
+    });
+    expect((await currentFrameIssue(test.db, test.program.id))?.number).toBe(1);
+    const flat = frameIssueSchema.safeParse({ ...FORM, axis_z: 'right' });
+    expect(flat.error?.issues.map(({ path }) => path)).toEqual([['axis_x']]);
+  });
+
+  it('is the next number, in SI to the last digit, about the quarter chord unless said otherwise; the one before stays', async () => {
+    const form = frameIssueSchema.parse({ ...FORM, carry_points: 'on' });
+    const number = await issueFrame(test.db, {
+      ...here(),
+      base: form.base,
+      title: form.title,
+      geometry: geometryOfForm(form),
+      validFrom: form.valid_from,
+      reason: form.reason,
+      carryPoints: form.carry_points,
+    });
+    expect(number).toBe(2);
+    const issue = await currentFrameIssue(test.db, test.program.id);
+    if (issue === undefined) throw new Error('there is an issue');
+    const geometry = geometryOf(issue);
+    expect(geometry.axes).toEqual(['aft', 'left', 'up']);
+    // 1 in = 0.0254 m, exact (NIST SP 811).
+    expect(geometry.lemac).toEqual([2.54, 0, 0.254]);
+    expect(geometry.mac).toBe(1.016);
+    expect(geometry.reference[0]).toBeCloseTo(110 * 0.0254, 14);
+    expect(geometry.incidence).toBeCloseTo((-1.5 * Math.PI) / 180, 15);
+    const carried = await referencePointsOf(test.db, issue.id);
+    expect(carried.map(({ code }) => code)).toEqual(['MRC']);
+    const issues = await test.db.selectFrom('frame_issues').select('number').orderBy('number').execute();
+    expect(issues).toEqual([{ number: 1 }, { number: 2 }]);
+    const kinds = (await trail()).map(({ kind }) => kind);
+    expect(kinds.slice(-2)).toEqual(['frame.issued', 'reference-point.added']);
+  });
+
+  it('cannot be altered or taken away by the application, by the word of PostgreSQL', async () => {
+    const denied = { message: expect.stringContaining('permission denied') as string };
+    await expect(test.db.updateTable('frame_issues').set({ mac: 9 }).execute()).rejects.toMatchObject(denied);
+    await expect(test.db.deleteFrom('reference_points').execute()).rejects.toMatchObject(denied);
+  });
+});
+
+describe('builds', () => {
+  it('have one default at a time', async () => {
+    const build = {
+      ...here(),
+      code: 'serial-1',
+      title: 'Serial 1',
+      kind: 'as-built',
+      serialFrom: 1,
+      serialTo: 3,
+      isDefault: true,
+    } as const;
+    await addBuild(test.db, build);
+    const builds = await buildsOf(test.db, test.program.id);
+    expect(builds.map(({ code, is_default }) => [code, is_default])).toEqual([
+      ['serial-1', true],
+      ['design', false],
+    ]);
+    await expect(addBuild(test.db, build)).rejects.toMatchObject({ code: 'invalid-input' });
+    expect((await buildsOf(test.db, test.program.id)).filter((one) => one.is_default)).toHaveLength(1);
+  });
+});
+
+describe('limits', () => {
+  const limit = (quantity: 'cg-forward-percent-mac' | 'cg-aft-percent-mac', value: number) =>
+    setLimit(test.db, {
+      ...here(),
+      quantity,
+      kind: 'specification',
+      value,
+      source: 'a document',
+      sourceDate: '2026-02-03',
+    });
+
+  it('leave something between them, and the trail says what they were before', async () => {
+    await limit('cg-forward-percent-mac', 15);
+    await limit('cg-aft-percent-mac', 35);
+    await limit('cg-forward-percent-mac', 16);
+    await expect(limit('cg-forward-percent-mac', 35)).rejects.toMatchObject({ code: 'invalid-input' });
+    await removeLimit(test.db, { ...here(), quantity: 'cg-aft-percent-mac' });
+    await expect(removeLimit(test.db, { ...here(), quantity: 'cg-aft-percent-mac' })).rejects.toMatchObject({
+      code: 'not-found',
+    });
+    const stands = await limitsOf(test.db, test.program.id);
+    expect(stands.map(({ quantity, value }) => [quantity, value])).toEqual([['cg-forward-percent-mac', 16]]);
+    const told = (await trail()).filter(({ kind }) => kind.startsWith('limit.')).map(({ detail }) => detail);
+    expect(told).toMatchObject([
+      { value: 15, before: null },
+      { value: 35, before: null },
+      { value: 16, before: 15 },
+      { before: 35 },
+    ]);
+  });
+});
+
+describe('growth allowances', () => {
+  it('are set per maturity, the trail keeps the one before', async () => {
+    const allowance = (fraction: number) =>
+      setAllowance(test.db, { ...here(), maturity: 'E', fraction, source: 'a plan' });
+    await allowance(0.08);
+    await allowance(0.05);
+    const stands = await growthAllowancesOf(test.db, test.program.id);
+    expect(stands.map(({ maturity, fraction }) => [maturity, fraction])).toEqual([['E', 0.05]]);
+    expect((await trail()).at(-1)?.detail).toEqual({ maturity: 'E', fraction: 0.05, before: 0.08 });
+  });
+});
+
+describe('who may', () => {
+  const ask = (userId: string, action: ProgramAction) =>
+    requireProgramAction(test.db, { id: userId, admin: false }, { code: test.program.code }, action);
+  const KEPT_BY_CHIEFS = [
+    'frame.keep',
+    'reference-points.keep',
+    'builds.keep',
+    'limits.keep',
+    'allowances.keep',
+  ] as const;
+
+  it.each(KEPT_BY_CHIEFS)('%s: chief engineers; weights engineers read', async (action) => {
+    await expect(ask(test.crew.chief.userId, action)).resolves.toMatchObject({ role: 'chief' });
+    await expect(ask(test.crew.weights.userId, action)).rejects.toMatchObject({ code: 'forbidden' });
+    await expect(ask(test.crew.weights.userId, 'settings.read')).resolves.toMatchObject({ role: 'weights' });
+  });
+
+  it.each(['rotors.keep', 'configurations.keep'] as const)(
+    '%s: weights engineers; chief engineers read, simulation engineers see neither',
+    async (action) => {
+      await expect(ask(test.crew.weights.userId, action)).resolves.toMatchObject({ role: 'weights' });
+      await expect(ask(test.crew.chief.userId, action)).rejects.toMatchObject({ code: 'forbidden' });
+      const read = action === 'rotors.keep' ? 'rotors.read' : 'configurations.read';
+      await expect(ask(test.crew.simulation.userId, read)).rejects.toMatchObject({ code: 'forbidden' });
+    },
+  );
+
+  it('to people outside the program it does not exist', async () => {
+    const outsider = await addPerson(test.db, 'outsider', false);
+    await expect(ask(outsider.userId, 'configurations.read')).rejects.toMatchObject({ code: 'not-found' });
+  });
+});
