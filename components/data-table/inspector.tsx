@@ -11,7 +11,10 @@ export function Inspector({
   readonly onClose: () => void;
   readonly children: ReactNode;
 }) {
+  const box = useRef<HTMLElement>(null);
   const close = useRef(onClose);
+  // Below the table on a narrow page it would open out of sight.
+  useEffect(() => box.current?.scrollIntoView({ block: 'nearest' }), []);
   useEffect(() => {
     close.current = onClose;
   });
@@ -24,8 +27,9 @@ export function Inspector({
   }, []);
   return (
     <aside
+      ref={box}
       aria-label="Row"
-      className="grid max-h-[70vh] content-start gap-3 overflow-y-auto border-t border-ink-2 pt-2 lg:border-l lg:border-t-0 lg:pt-0 lg:pl-4"
+      className="relative grid content-start gap-3 lg:max-h-[70vh] lg:overflow-y-auto border-t border-ink-2 pt-2 lg:border-l lg:border-t-0 lg:pt-0 lg:pl-4"
     >
       <div className="flex justify-end">
         <Button kind="quiet" onClick={onClose}>

@@ -23,7 +23,7 @@ export function AxesFields({ values, error }: AxesFieldsProps) {
             key={name}
             name={name}
             label={`+${name.slice(-1)} points`}
-            value={axes[index] ?? ''}
+            defaultValue={values[name] ?? ''}
             onChange={(event) => setAxes(axes.map((word, at) => (at === index ? event.target.value : word)))}
             placeholder="Choose"
             options={DIRECTIONS.map((word) => ({ value: word, label: word }))}

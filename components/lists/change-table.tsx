@@ -1,3 +1,4 @@
+import { Num } from '@/components/mass/num';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { TextLink } from '@/components/ui/text-link';
 
@@ -32,6 +33,7 @@ export function ChangeTable({ rows, hrefOf }: ChangeTableProps) {
           <ColumnHead>Column</ColumnHead>
           <ColumnHead side="right">Before</ColumnHead>
           <ColumnHead side="right">After</ColumnHead>
+          <ColumnHead side="right">Difference</ColumnHead>
         </tr>
       </thead>
       <tbody>{rows.map((row) => lines(row, hrefOf(row.item, row.kind)))}</tbody>
@@ -53,14 +55,23 @@ function lines(row: RowChangeLine, href: string) {
       </RowHead>
       <Cell>{index === 0 ? KIND_WORDS[row.kind] : null}</Cell>
       <Cell className="font-mono whitespace-nowrap">{field.column}</Cell>
-      <Cell side="right" className="num max-w-90 min-w-24 whitespace-normal wrap-anywhere">
-        {field.before}
-      </Cell>
-      <Cell side="right" className="num max-w-90 min-w-24 whitespace-normal wrap-anywhere">
-        {field.after}
+      <Value value={field.before} />
+      <Value value={field.after} />
+      <Cell side="right">
+        {typeof field.before === 'number' && typeof field.after === 'number' ? (
+          <Num value={field.after - field.before} digits={4} plus />
+        ) : null}
       </Cell>
     </tr>
   ));
+}
+
+function Value({ value }: { readonly value: CellValue }) {
+  return (
+    <Cell side="right" className={typeof value === 'number' ? 'num' : 'max-w-90 min-w-32 wrap-anywhere'}>
+      {value === null ? <span className="text-ink-2">blank</span> : value}
+    </Cell>
+  );
 }
 
 const TOLD: readonly string[] = ['description', 'group', 'quantity', 'mass', 'x', 'y', 'z'];

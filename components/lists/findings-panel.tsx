@@ -1,4 +1,5 @@
 import { counted } from '@/components/lists/list-words';
+import { Quoted } from '@/components/lists/quoted';
 import { SeverityWord } from '@/components/ui/severity';
 import { TextLink } from '@/components/ui/text-link';
 import { type Finding } from '@/lib/findings/finding';
@@ -22,7 +23,9 @@ export function FindingsPanel({ findings, hrefOf }: FindingsPanelProps) {
         >
           <SeverityWord severity={finding.severity} />
           <div className="measure grid min-w-0 gap-1 wrap-anywhere">
-            <p>{finding.message}</p>
+            <p>
+              <Quoted text={finding.message} />
+            </p>
             {finding.rows.length > 0 ? (
               <p>
                 <TextLink href={hrefOf(finding.rule)}>

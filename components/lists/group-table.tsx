@@ -17,7 +17,7 @@ interface GroupTableProps {
 /** What each group adds up to, with all that is below it; its name leads to its rows. */
 export function GroupTable({ groups, whole, declarations, hrefOf }: GroupTableProps) {
   const { massUnit, lengthUnit, axes } = declarations;
-  const decimals = sharedDecimals([whole.mass], [], 7);
+  const decimals = sharedDecimals([whole.mass], [], 6);
   const sums = (totals: RowTotals) => (
     <>
       <Cell side="right" className="num">

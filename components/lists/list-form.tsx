@@ -3,13 +3,7 @@
 import { useActionState } from 'react';
 import { FormAnswer } from '@/components/forms/form-answer';
 import { AxesFields } from '@/components/lists/axes-fields';
-import {
-  EXTENT_WORDS,
-  KIND_WORDS,
-  PRODUCT_MEANING,
-  PRODUCT_WORDS,
-  UNCERTAINTY_WORDS,
-} from '@/components/lists/list-words';
+import { EXTENT_WORDS, KIND_WORDS, PRODUCT_MEANING, UNCERTAINTY_WORDS } from '@/components/lists/list-words';
 import { Actions } from '@/components/ui/actions';
 import { ButtonLink } from '@/components/ui/button';
 import { RadioGroup } from '@/components/ui/choice';
@@ -74,7 +68,7 @@ export function ListForm({ action, program, list, values, cancelHref }: ListForm
           required
           options={PRODUCT_SIGNS.map((sign) => ({
             value: sign,
-            label: <span className="first-letter:uppercase">{PRODUCT_WORDS[sign]}</span>,
+            label: SIGN_LABELS[sign],
             hint: PRODUCT_MEANING[sign],
           }))}
         />
@@ -111,6 +105,8 @@ export function ListForm({ action, program, list, values, cancelHref }: ListForm
     </form>
   );
 }
+
+const SIGN_LABELS = { positive: 'Positive integral', negative: 'Negative integral' } as const;
 
 const KIND_HINTS = {
   components: 'Parts with their masses.',

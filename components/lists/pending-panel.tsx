@@ -4,6 +4,7 @@ import { type FormEvent, useState } from 'react';
 import { ask, AskFailed } from '@/components/lists/ask';
 import { type PendingEdits } from '@/components/lists/edits';
 import { counted, countWords } from '@/components/lists/list-words';
+import { Quoted } from '@/components/lists/quoted';
 import { Actions } from '@/components/ui/actions';
 import { Banner } from '@/components/ui/banner';
 import { Button } from '@/components/ui/button';
@@ -147,7 +148,7 @@ function Problems({ problems }: { readonly problems: readonly EditProblem[] }) {
                 {column === null ? ': ' : `, column ${column}: `}
               </>
             )}
-            {message}
+            <Quoted text={message} />
           </li>
         ))}
       </ul>

@@ -1,3 +1,4 @@
+import { Quoted } from '@/components/lists/quoted';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { type ImportView } from '@/lib/contracts/list-imports';
 
@@ -21,7 +22,9 @@ export function ProblemTable({ problems }: { readonly problems: ImportView['prob
             </RowHead>
             <Cell className="font-mono whitespace-nowrap">{problem.column}</Cell>
             <Cell className="max-w-60 font-mono wrap-anywhere">{problem.found}</Cell>
-            <Cell className="min-w-72">{problem.message}</Cell>
+            <Cell className="min-w-72">
+              <Quoted text={problem.message} />
+            </Cell>
           </tr>
         ))}
       </tbody>

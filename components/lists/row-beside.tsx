@@ -32,6 +32,7 @@ interface RowBesideProps {
   readonly onPending: (pending: PendingEdits | null) => void;
   readonly onEdit: (editing: boolean) => void;
   readonly onClose: () => void;
+  readonly onTyped: () => void;
 }
 
 /** One row beside the table, and what can be done to it. */
@@ -57,6 +58,7 @@ export function RowBeside(props: RowBesideProps) {
           onClose();
         }}
         onLeave={onClose}
+        onTyped={props.onTyped}
       />
     );
   }
@@ -75,6 +77,7 @@ export function RowBeside(props: RowBesideProps) {
           onEdit(false);
         }}
         onLeave={() => onEdit(false)}
+        onTyped={props.onTyped}
       />
     );
   }

@@ -1,6 +1,6 @@
 'use client';
 
-import { type FormEvent } from 'react';
+import { type FormEvent, type ReactNode, useId } from 'react';
 import { rowFieldGroups, type RowField } from '@/components/lists/row-fields';
 import { Actions } from '@/components/ui/actions';
 import { Button } from '@/components/ui/button';
@@ -20,10 +20,21 @@ interface RowFormProps {
   readonly problems: readonly EditProblem[];
   readonly onDone: (form: Readonly<Record<string, string>>) => void;
   readonly onLeave: () => void;
+  /** Told at the first letter that is typed. */
+  readonly onTyped: () => void;
 }
 
 /** The fields of one row in the units of its list. What is typed is read and checked when the edits are saved. */
-export function RowForm({ declarations, texts, own, isNew, problems, onDone, onLeave }: RowFormProps) {
+export function RowForm({
+  declarations,
+  texts,
+  own,
+  isNew,
+  problems,
+  onDone,
+  onLeave,
+  onTyped,
+}: RowFormProps) {
   const done = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();
     const form = Object.fromEntries(
@@ -37,11 +48,10 @@ export function RowForm({ declarations, texts, own, isNew, problems, onDone, onL
   const wrong = (column: string) =>
     problems.filter((problem) => problem.column === column).map(({ message }) => message);
   return (
-    <form onSubmit={done} className="grid gap-6">
+    <form onSubmit={done} onInput={onTyped} className="grid gap-6">
       <h3 className="text-lead font-semibold wrap-anywhere">{isNew ? 'New row' : (texts['item'] ?? '')}</h3>
       {rowFieldGroups(declarations).map(({ title, fields }) => (
-        <fieldset key={title} className="grid gap-3">
-          <legend className="mb-1 border-t border-rule pt-2 font-semibold">{title}</legend>
+        <FieldGroup key={title} title={title}>
           <div className="grid grid-cols-2 items-start gap-3">
             {fields.map((field) => (
               <div key={field.column} className={field.kind === 'text' ? 'col-span-2' : ''}>
@@ -54,13 +64,10 @@ export function RowForm({ declarations, texts, own, isNew, problems, onDone, onL
               </div>
             ))}
           </div>
-        </fieldset>
+        </FieldGroup>
       ))}
       {own.length === 0 ? null : (
-        <fieldset className="grid gap-3">
-          <legend className="mb-1 border-t border-rule pt-2 font-semibold">
-            Columns of the list&apos;s own
-          </legend>
+        <FieldGroup title="Columns of the list's own">
           {own.map((name) => (
             <TextField
               key={name}
@@ -70,7 +77,7 @@ export function RowForm({ declarations, texts, own, isNew, problems, onDone, onL
               error={wrong(name)}
             />
           ))}
-        </fieldset>
+        </FieldGroup>
       )}
       <Actions>
         <Button kind="secondary" type="submit">
@@ -81,6 +88,18 @@ export function RowForm({ declarations, texts, own, isNew, problems, onDone, onL
         </Button>
       </Actions>
     </form>
+  );
+}
+
+function FieldGroup({ title, children }: { readonly title: string; readonly children: ReactNode }) {
+  const id = useId();
+  return (
+    <div role="group" aria-labelledby={id} className="grid gap-3 border-t border-rule pt-3">
+      <h4 id={id} className="text-lead">
+        {title}
+      </h4>
+      {children}
+    </div>
   );
 }
 

@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter, useSearchParams } from 'next/navigation';
-import { useMemo, useState } from 'react';
+import { useMemo, useRef, useState } from 'react';
 import { Grid } from '@/components/data-table/grid';
 import { Inspector } from '@/components/data-table/inspector';
 import { useUrlView } from '@/components/data-table/use-url-view';
@@ -78,8 +78,20 @@ export function RowsStation(props: RowsStationProps) {
   const plainHref = `${props.listHref}?revision=${revision}`;
   const mayEdit = props.mayEdit && revision === newest;
   const edits = pending?.edits ?? [];
+  const typed = useRef(false);
+  /** Goes elsewhere, unless that would lose what has been typed. */
+  const leaving = (go: () => void) => {
+    if (typed.current)
+      setSaid('Keep the edit or leave without it first: nothing that is typed is lost unasked.');
+    else go();
+  };
+  const edit = (item: string | null) => {
+    typed.current = false;
+    setSaid('');
+    setEditing(item);
+  };
   const close = () => {
-    setEditing(null);
+    edit(null);
     setView({ ...view, open: null });
   };
   const beside = besideOf(view.open, editing, edits, pages.loaded);
@@ -92,10 +104,12 @@ export function RowsStation(props: RowsStationProps) {
           onChange={setPending}
           problems={problems}
           onProblems={setProblems}
-          onOpen={(item) => {
-            setEditing(null);
-            setView({ ...view, text: item, group: '', open: item });
-          }}
+          onOpen={(item) =>
+            leaving(() => {
+              edit(null);
+              setView({ ...view, text: item, group: '', open: item });
+            })
+          }
           to={`${props.listRoute}/edits`}
           newest={newest}
           rows={props.rows}
@@ -120,10 +134,11 @@ export function RowsStation(props: RowsStationProps) {
           differs={query !== ''}
           onAdd={
             mayEdit && edits.length < EDITS_AT_ONCE
-              ? () => {
-                  setView({ ...view, open: null });
-                  setEditing(NEW_ROW);
-                }
+              ? () =>
+                  leaving(() => {
+                    setView({ ...view, open: null });
+                    edit(NEW_ROW);
+                  })
               : null
           }
         />
@@ -147,7 +162,7 @@ export function RowsStation(props: RowsStationProps) {
             total={props.rows}
             of="rows"
             view={view}
-            onView={setView}
+            onView={(next) => (next.open === view.open ? setView(next) : leaving(() => setView(next)))}
             loading={pages.total === null ? 'Loading rows' : null}
             totals={totals === null ? {} : totalCells(totals)}
             opens
@@ -159,7 +174,7 @@ export function RowsStation(props: RowsStationProps) {
             }
           />
           {beside === null ? null : (
-            <Inspector onClose={close}>
+            <Inspector onClose={() => leaving(close)}>
               <RowBeside
                 key={`${beside.kind} ${editing ?? ''} ${view.open ?? ''}`}
                 beside={beside}
@@ -172,8 +187,11 @@ export function RowsStation(props: RowsStationProps) {
                 revision={revision}
                 problems={problems}
                 onPending={setPending}
-                onEdit={(on) => setEditing(on ? view.open : null)}
+                onEdit={(on) => edit(on ? view.open : null)}
                 onClose={close}
+                onTyped={() => {
+                  typed.current = true;
+                }}
               />
             </Inspector>
           )}

@@ -15,7 +15,7 @@ const typedNumber = z
     if (Number.isFinite(value)) return value;
     context.addIssue({
       code: 'custom',
-      message: `\`${text}\` is not a number. Write it with a decimal point.`,
+      message: `"${text}" is not a number. Write it with a decimal point.`,
     });
     return z.NEVER;
   });

@@ -97,22 +97,12 @@ export default async function ListPage({ params, searchParams }: Props) {
         import={newestImport}
       />
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
-        <div className="grid min-w-0 gap-8">
-          <Section title="Findings">
-            <FindingsPanel
-              findings={revision.findings}
-              hrefOf={(rule) => `${here}&finding=${encodeURIComponent(rule)}#rows`}
-            />
-          </Section>
-          <Section title="Groups">
-            <GroupTable
-              groups={totals.groups}
-              whole={totals.whole}
-              declarations={revision.declarations}
-              hrefOf={(group) => `${here}&group=${encodeURIComponent(group)}#rows`}
-            />
-          </Section>
-        </div>
+        <Section title="Findings">
+          <FindingsPanel
+            findings={revision.findings}
+            hrefOf={(rule) => `${here}&finding=${encodeURIComponent(rule)}#rows`}
+          />
+        </Section>
         <Section title="As declared">
           <Declared declarations={revision.declarations} />
         </Section>
@@ -139,6 +129,14 @@ export default async function ListPage({ params, searchParams }: Props) {
           />
         </QueryRoot>
       </div>
+      <Section title="Groups">
+        <GroupTable
+          groups={totals.groups}
+          whole={totals.whole}
+          declarations={revision.declarations}
+          hrefOf={(group) => `${here}&group=${encodeURIComponent(group)}#rows`}
+        />
+      </Section>
     </ProgramFrame>
   );
 }
