@@ -126,10 +126,9 @@ function Changes({
       <thead>
         <tr>
           <ColumnHead>Quantity</ColumnHead>
-          <ColumnHead>Unit</ColumnHead>
+          <ColumnHead side="right">Change</ColumnHead>
           <ColumnHead side="right">{before}</ColumnHead>
           <ColumnHead side="right">{after}</ColumnHead>
-          <ColumnHead side="right">Change</ColumnHead>
         </tr>
       </thead>
       <tbody>
@@ -138,14 +137,8 @@ function Changes({
           return (
             <tr key={key}>
               <RowHead>
-                <span className="whitespace-nowrap">{name}</span>
+                {name} <span className="text-ink-2">{unit}</span>
               </RowHead>
-              <Cell className="whitespace-nowrap text-ink-2">{unit}</Cell>
-              {[change.before, change.after].map((value, side) => (
-                <Cell key={side} side="right" className="whitespace-nowrap">
-                  <Signed value={value} signs={signs} shown={shown} />
-                </Cell>
-              ))}
               <Cell side="right" className="whitespace-nowrap">
                 {change.delta === 0 ? (
                   <span className="text-ink-2">no change</span>
@@ -153,6 +146,11 @@ function Changes({
                   <Signed value={change.delta} signs={signs} shown={{ ...shown, plus: true }} />
                 )}
               </Cell>
+              {[change.before, change.after].map((value, side) => (
+                <Cell key={side} side="right" className="whitespace-nowrap">
+                  <Signed value={value} signs={signs} shown={shown} />
+                </Cell>
+              ))}
             </tr>
           );
         })}

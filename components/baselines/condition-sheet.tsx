@@ -1,12 +1,14 @@
 import { BalanceBar } from '@/components/mass/balance-bar';
 import { MassFigure } from '@/components/mass/mass-figure';
 import { Num } from '@/components/mass/num';
+import { sharedDecimals } from '@/components/mass/number-text';
 import { PrincipalTable } from '@/components/mass/principal-table';
 import { TensorPlate } from '@/components/mass/tensor-plate';
 import { inclinationWords } from '@/components/baselines/inclination-words';
 import { type Moments } from '@/lib/frames/products';
 import { principalInclination } from '@/lib/mass/inclination';
 import { type Vec3 } from '@/lib/numerics/vec3';
+import { fromSi } from '@/lib/units/convert';
 import { unitLabel, type OutputUnits } from '@/lib/units/names';
 
 /** One condition as it was stored. SI; CG in airframe components, inertia about it in body axes, products positive. */
@@ -38,6 +40,7 @@ interface ConditionSheetProps {
 /** Mass, balance and inertia of one condition. */
 export function ConditionSheet({ condition, limits, axes, units }: ConditionSheetProps) {
   const { title, mass, predictedMass, properties } = condition;
+  const cgDecimals = sharedDecimals((properties?.cg ?? []).map((place) => fromSi(place, units.length)));
   return (
     <div className="grid gap-6">
       <MassFigure label={`${title}, basic mass`} mass={mass} predicted={predictedMass} unit={units.mass} />
@@ -54,7 +57,7 @@ export function ConditionSheet({ condition, limits, axes, units }: ConditionShee
               {(['x', 'y', 'z'] as const).map((letter, index) => (
                 <span key={letter}>
                   {letter} <span className="text-ink-2">{axes[index]}</span>{' '}
-                  <Num value={properties.cg[index] ?? null} unit={units.length} />
+                  <Num value={properties.cg[index] ?? null} unit={units.length} decimals={cgDecimals} />
                 </span>
               ))}
             </p>

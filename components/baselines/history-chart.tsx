@@ -17,7 +17,7 @@ interface HistoryChartProps {
   readonly limit: number | null;
 }
 
-const [TOP, HEIGHT, FOOT] = [24, 200, 32];
+const [TOP, HEIGHT, FOOT] = [24, 200, 48];
 /** Okabe and Ito's colours for those who see some alike; the build's name stands at its line. */
 const COLOURS = ['#0072b2', '#e69f00', '#009e73', '#cc79a7', '#56b4e9', '#d55e00'];
 const percent = (share: number): string => `${100 * share}%`;
@@ -75,7 +75,7 @@ export function HistoryChart({ label, unit, points, limit }: HistoryChartProps) 
         <text
           key={point.number}
           x={percent(x(index))}
-          y={TOP + HEIGHT + 20}
+          y={TOP + HEIGHT + 40}
           textAnchor="middle"
           className="num fill-ink text-note"
         >

@@ -1,21 +1,25 @@
+import { type ReactNode } from 'react';
 import { MomentumTable, type RotorMomentum } from '@/components/mass/momentum-table';
 import { Section } from '@/components/ui/section';
 import { type PointResult } from '@/lib/loading/configuration';
 import { rpm } from '@/lib/units/convert';
 import { type AngularMomentumUnit } from '@/lib/units/table';
 
-/** Angular momentum of the rotors at each operating point, as it was submitted. */
+/** Angular momentum of the rotors at one operating point, as it was submitted; `choice` leads to the other points. */
 export function Rotors({
-  points,
+  point,
+  choice,
   unit,
 }: {
-  readonly points: readonly PointResult[];
+  readonly point: PointResult | null;
+  readonly choice: ReactNode;
   readonly unit: AngularMomentumUnit;
 }) {
   return (
     <RotorSection
       unit={unit}
-      points={points.map(({ title, momentum }) => ({
+      choice={choice}
+      points={(point === null ? [] : [point]).map(({ title, momentum }) => ({
         title,
         rotors: momentum.rotors.map(({ rotor, speed, momentum: [hx, hy, hz] }) => ({
           rotor,
@@ -39,7 +43,9 @@ export interface ShownPoint {
 export function RotorSection({
   points,
   unit,
+  choice,
 }: {
+  readonly choice?: ReactNode;
   readonly points: readonly ShownPoint[];
   readonly unit: AngularMomentumUnit;
 }) {
@@ -47,8 +53,9 @@ export function RotorSection({
   return (
     <Section
       title="Rotor momenta"
-      lead="The tensor counts each rotor as if it stood still; this is the extra, at each operating point."
+      lead="The tensor counts each rotor as if it stood still; this is the extra."
     >
+      {choice}
       {points.map((point) => (
         <MomentumTable
           key={point.title}

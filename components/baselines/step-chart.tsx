@@ -26,6 +26,8 @@ interface StepChartProps {
 
 const HEAD = 40;
 const ROW = 44;
+/** Words keep a rim of paper, so that a line that passes behind them does not strike them out. */
+const RIM = { paintOrder: 'stroke', stroke: 'var(--paper)', strokeWidth: 5 } as const;
 const percent = (share: number): string => `${100 * share}%`;
 
 /** From one value to another a step at a time, each on its own line, tied to the next by a plumb line. Drawn to the ruled scale. */
@@ -197,11 +199,12 @@ function Words({
       <text
         x="0"
         y={y + 15}
+        style={RIM}
         className={`text-body ${linked ? 'fill-spin underline underline-offset-2' : 'fill-ink'} ${strong ? 'font-semibold' : ''}`}
       >
         {name}
       </text>
-      <text x="100%" y={y + 15} textAnchor="end" className="num fill-ink text-body">
+      <text x="100%" y={y + 15} textAnchor="end" style={RIM} className="num fill-ink text-body">
         {value.replace(/^-/, '\u2212')}
       </text>
     </>

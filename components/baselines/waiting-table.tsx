@@ -21,13 +21,10 @@ export interface WaitingLine {
 /** Decisions that wait, the oldest first, each with what it would change. */
 export function WaitingTable({ lines }: { readonly lines: readonly WaitingLine[] }) {
   return (
-    <Table caption="Change of mass, CG and inertia in the first condition of each, against the current baseline of its build">
+    <Table caption="Changes of mass, CG and inertia in the first condition of each, against the current baseline of its build">
       <thead>
         <tr>
           <ColumnHead>Submission</ColumnHead>
-          <ColumnHead>Build</ColumnHead>
-          <ColumnHead>Submitted</ColumnHead>
-          <ColumnHead>Against</ColumnHead>
           <ColumnHead side="right" unit="kg">
             Mass
           </ColumnHead>
@@ -37,6 +34,9 @@ export function WaitingTable({ lines }: { readonly lines: readonly WaitingLine[]
           <ColumnHead side="right" unit="kg·m²">
             Largest of the tensor
           </ColumnHead>
+          <ColumnHead>Against</ColumnHead>
+          <ColumnHead>Build</ColumnHead>
+          <ColumnHead>Submitted</ColumnHead>
         </tr>
       </thead>
       <tbody>
@@ -45,17 +45,6 @@ export function WaitingTable({ lines }: { readonly lines: readonly WaitingLine[]
             <RowHead>
               <TextLink href={line.href}>{line.title}</TextLink>
             </RowHead>
-            <Cell>{line.build}</Cell>
-            <Cell>
-              <Day at={line.submittedAt} /> {line.submitter}
-            </Cell>
-            <Cell className="whitespace-nowrap">
-              {line.against === null ? (
-                <span className="text-ink-2">no current baseline</span>
-              ) : (
-                `Baseline ${line.against}`
-              )}
-            </Cell>
             <Cell side="right">
               <Num value={line.change?.mass.delta ?? null} decimals={2} plus />
             </Cell>
@@ -64,6 +53,17 @@ export function WaitingTable({ lines }: { readonly lines: readonly WaitingLine[]
             </Cell>
             <Cell side="right" className="whitespace-nowrap">
               <Largest change={line.change} />
+            </Cell>
+            <Cell className="whitespace-nowrap">
+              {line.against === null ? (
+                <span className="text-ink-2">no current baseline</span>
+              ) : (
+                `Baseline ${line.against}`
+              )}
+            </Cell>
+            <Cell>{line.build}</Cell>
+            <Cell>
+              <Day at={line.submittedAt} /> {line.submitter}
             </Cell>
           </tr>
         ))}

@@ -21,9 +21,9 @@ export function TrailTable({ events }: { readonly events: readonly TrailLine[] }
       <thead>
         <tr>
           <ColumnHead>Event</ColumnHead>
-          <ColumnHead>When</ColumnHead>
-          <ColumnHead>Who</ColumnHead>
           <ColumnHead>What</ColumnHead>
+          <ColumnHead>Who</ColumnHead>
+          <ColumnHead>When</ColumnHead>
           <ColumnHead>From</ColumnHead>
           <ColumnHead>Hash begins</ColumnHead>
         </tr>
@@ -34,15 +34,15 @@ export function TrailTable({ events }: { readonly events: readonly TrailLine[] }
             <RowHead>
               <span className="num">{event.number}</span>
             </RowHead>
-            <Cell className="whitespace-nowrap">
-              <Day at={event.at} time />
-            </Cell>
-            <Cell className="whitespace-nowrap">{event.person ?? 'the system'}</Cell>
             <Cell className="min-w-64 wrap-anywhere">
               <span className="font-semibold">{event.kind}</span>
               <span className="text-ink-2"> {event.subject}</span>
               <br />
               {event.words}
+            </Cell>
+            <Cell className="whitespace-nowrap">{event.person ?? 'the system'}</Cell>
+            <Cell className="whitespace-nowrap">
+              <Day at={event.at} time />
             </Cell>
             <Cell className="font-mono whitespace-nowrap">{event.address}</Cell>
             <Cell className="font-mono" title={event.hash}>

@@ -23,6 +23,9 @@ export type AccountQuantity = (typeof ACCOUNT_QUANTITIES)[number];
 /** The items on board of a condition stand last, as a group of their own that no list can have. */
 export const ON_BOARD = '';
 
+/** A step no greater than this share of the quantity is what rounding leaves, not a change. */
+const ROUNDING = 1e-13;
+
 export interface AccountSide {
   readonly geometry: AirframeGeometry;
   readonly condition: ConditionResult;
@@ -43,7 +46,7 @@ export interface MassAccount {
   readonly after: number;
   /** Each begins where the one before it ended; the first begins at `before`, the last ends at `after`. */
   readonly steps: readonly AccountStep[];
-  /** Groups whose ten numbers are the same on both sides. */
+  /** Groups that do not change the quantity. */
   readonly unchanged: number;
 }
 
@@ -72,7 +75,8 @@ export function massAccount(
   const branches = branchesOf(leaves, within);
   const steps = branches
     .filter(({ changed }) => changed)
-    .map(({ group, deeper, first, end }) => ({ group, deeper, from: levelAt(first), to: levelAt(end) }));
+    .map(({ group, deeper, first, end }) => ({ group, deeper, from: levelAt(first), to: levelAt(end) }))
+    .filter(({ from, to }) => Math.abs(to - from) > ROUNDING * Math.max(Math.abs(from), Math.abs(to)));
   const ends = {
     before: levelAt(branches[0]?.first ?? 0),
     after: levelAt(branches.at(-1)?.end ?? leaves.length),
@@ -80,7 +84,7 @@ export function massAccount(
   return {
     ...ends,
     steps: joinedUp(steps, ends),
-    unchanged: branches.filter(({ changed }) => !changed).length,
+    unchanged: branches.length - steps.length,
   };
 }
 

@@ -3,6 +3,7 @@ import { findBaseline, findSubmission, revisionsOfSubmission } from '@/db/querie
 import { resultOfSubmission, rotorsOfSubmission } from '@/db/queries/baseline-history';
 import { type GroupChange, groupChanges } from '@/lib/baselines/compare';
 import { readStoredDocument } from '@/lib/baselines/stored-document';
+import { whereWords } from '@/lib/findings/where-words';
 import { AppError } from '@/lib/errors';
 
 /**
@@ -28,6 +29,10 @@ export async function loadSigned(db: Db, programId: string, number: string) {
       result.conditions.find(({ code }) => code === condition)?.rollUp.groups ?? [];
     return formerResult === undefined ? [] : groupChanges(groups(formerResult), groups(submission.result));
   };
+  const titles = new Map([
+    ...revisions.map((one) => [one.list_code, one.list_title] as const),
+    ...submission.result.conditions.map((one) => [one.code, one.title] as const),
+  ]);
   return {
     baseline,
     submission,
@@ -36,6 +41,11 @@ export async function loadSigned(db: Db, programId: string, number: string) {
     rotors,
     markings: new Map(revisions.map((one) => [one.list_code, one.marking] as const)),
     changesOf,
+    /** Where the finding at that place of the document was seen: the document keeps the order in which they were submitted. */
+    whereOf: (index: number): string | null => {
+      const finding = submission.findings[index];
+      return finding === undefined ? null : whereWords(finding.where, titles);
+    },
     pointTitles: new Map(submission.result.operatingPoints.map(({ code, title }) => [code, title] as const)),
   };
 }

@@ -127,7 +127,7 @@ export default async function BaselinePage({
             }))}
           />
         </div>
-        <div className="grid min-w-0 content-start gap-8 lg:col-span-4">
+        <div className="flex min-w-0 flex-col gap-8 lg:col-span-4">
           <Section
             title="Changed by group"
             aside={supersedes === null ? null : `from baseline ${supersedes}`}
@@ -149,10 +149,10 @@ export default async function BaselinePage({
           </Section>
           <Section title="Findings answered">
             <AnsweredFindings
-              findings={document.findings.map(({ severity, message, answer }) => ({
+              findings={document.findings.map(({ severity, message, answer }, index) => ({
                 severity,
                 message,
-                where: null,
+                where: signed.whereOf(index),
                 answer: answer ?? null,
               }))}
             />
@@ -176,17 +176,19 @@ export default async function BaselinePage({
               ) : null}
             </p>
           </Section>
-          <TitleBlock
-            program={program.title}
-            build={baseline.build_title}
-            title={document.title}
-            number={document.baseline}
-            preparedBy={signed.preparedBy}
-            submitted={{ by: document.submitted.by, at: new Date(document.submitted.at) }}
-            approved={{ by: document.approved.by, at: new Date(document.approved.at) }}
-            supersedes={document.supersedes}
-            digest={baseline.digest}
-          />
+          <div className="mt-auto">
+            <TitleBlock
+              program={program.title}
+              build={baseline.build_title}
+              title={document.title}
+              number={document.baseline}
+              preparedBy={signed.preparedBy}
+              submitted={{ by: document.submitted.by, at: new Date(document.submitted.at) }}
+              approved={{ by: document.approved.by, at: new Date(document.approved.at) }}
+              supersedes={document.supersedes}
+              digest={baseline.digest}
+            />
+          </div>
           <Caution />
         </div>
       </div>

@@ -5,7 +5,7 @@ import { lastSubmissionOf, leftOutOf } from '@/db/queries/baseline-history';
 import { LeftOutTable } from '@/components/baselines/left-out-table';
 import { SubmitForm } from '@/components/baselines/submit-form';
 import { SubmittedConditions } from '@/components/baselines/submitted-conditions';
-import { whereWords } from '@/components/baselines/where-words';
+import { whereWords } from '@/lib/findings/where-words';
 import { Banner } from '@/components/ui/banner';
 import { ButtonLink } from '@/components/ui/button';
 import { Caution } from '@/components/ui/caution';

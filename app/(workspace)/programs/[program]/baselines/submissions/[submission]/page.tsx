@@ -9,15 +9,16 @@ import { DecisionBanner } from '@/components/baselines/decision-banner';
 import { GroupChangeTable } from '@/components/baselines/group-change-table';
 import { ListChangeTable } from '@/components/baselines/list-change-table';
 import { cgLimits } from '@/components/baselines/cg-limits';
-import { rowsPath } from '@/components/baselines/paths';
+import { pathWith, rowsPath } from '@/components/baselines/paths';
 import { ReasonForm } from '@/components/baselines/reason-form';
 import { Rotors } from '@/components/baselines/rotors';
 import { shownOfResult } from '@/components/baselines/shown-condition';
 import { SignForm } from '@/components/baselines/sign-form';
 import { SourceList } from '@/components/baselines/source-list';
 import { TitleBlock } from '@/components/baselines/title-block';
-import { whereWords } from '@/components/baselines/where-words';
+import { whereWords } from '@/lib/findings/where-words';
 import { Banner } from '@/components/ui/banner';
+import { ChoiceLinks } from '@/components/ui/choice-links';
 import { Caution } from '@/components/ui/caution';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
@@ -52,6 +53,7 @@ export default async function SubmissionPage({
   const asked = await searchParams;
   const { result } = submission;
   const condition = chosen(result.conditions, asked['condition']);
+  const point = chosen(result.operatingPoints, asked['point']);
   const change = comparison.conditions.find((one) => one.code === condition?.code) ?? null;
   const system = askedSystem(asked['units']);
   const units = OUTPUT_UNITS[system];
@@ -88,6 +90,7 @@ export default async function SubmissionPage({
       ) : null}
       <ConditionChoice
         path={path}
+        keep={{ point: point?.code ?? null }}
         conditions={result.conditions}
         current={condition?.code ?? null}
         system={system}
@@ -115,9 +118,26 @@ export default async function SubmissionPage({
               <MomentumChangeTable points={comparison.operatingPoints} units={units} {...sides} />
             )}
           </Section>
-          <Rotors points={result.operatingPoints} unit={units.angularMomentum} />
+          <Rotors
+            point={point}
+            unit={units.angularMomentum}
+            choice={
+              <ChoiceLinks
+                label="Operating point"
+                options={result.operatingPoints.map((one) => ({
+                  href: pathWith(path, {
+                    condition: condition?.code ?? null,
+                    units: system === 'si' ? null : system,
+                    point: one.code,
+                  }),
+                  words: one.title,
+                  current: one.code === point?.code,
+                }))}
+              />
+            }
+          />
         </div>
-        <div className="grid min-w-0 content-start gap-8 lg:col-span-4">
+        <div className="flex min-w-0 flex-col gap-8 lg:col-span-4">
           <Section title="Changed by list revision">
             <ListChangeTable
               lists={lists.map(({ list, title, before, after, counts }) => ({
@@ -166,39 +186,41 @@ export default async function SubmissionPage({
               </p>
             )}
           </Section>
-          <TitleBlock
-            program={program.title}
-            build={submission.build_title}
-            title={submission.title}
-            number={submission.baseline_number}
-            preparedBy={[...new Set([...revisions, ...(rotors ? [rotors] : [])].map((one) => one.author))]}
-            submitted={{ by: submission.submitter, at: submission.submitted_at }}
-            approved={
-              state === 'approved' && submission.decided_at !== null
-                ? { by: submission.decider ?? '', at: submission.decided_at }
-                : null
-            }
-            supersedes={former?.number ?? null}
-            digest={null}
-            {...(state === 'submitted'
-              ? {
-                  decision: maySign ? (
-                    <SignForm
-                      action={signSubmissionAction}
-                      program={program.code}
-                      submission={submissionId}
-                      number={review.nextNumber}
-                    />
-                  ) : (
-                    <ul className="grid gap-1 py-1">
-                      {obstacles.map((obstacle) => (
-                        <li key={obstacle}>{obstacle}</li>
-                      ))}
-                    </ul>
-                  ),
-                }
-              : {})}
-          />
+          <div className="mt-auto">
+            <TitleBlock
+              program={program.title}
+              build={submission.build_title}
+              title={submission.title}
+              number={submission.baseline_number}
+              preparedBy={[...new Set([...revisions, ...(rotors ? [rotors] : [])].map((one) => one.author))]}
+              submitted={{ by: submission.submitter, at: submission.submitted_at }}
+              approved={
+                state === 'approved' && submission.decided_at !== null
+                  ? { by: submission.decider ?? '', at: submission.decided_at }
+                  : null
+              }
+              supersedes={former?.number ?? null}
+              digest={null}
+              {...(state === 'submitted'
+                ? {
+                    decision: maySign ? (
+                      <SignForm
+                        action={signSubmissionAction}
+                        program={program.code}
+                        submission={submissionId}
+                        number={review.nextNumber}
+                      />
+                    ) : (
+                      <ul className="grid gap-1 py-1">
+                        {obstacles.map((obstacle) => (
+                          <li key={obstacle}>{obstacle}</li>
+                        ))}
+                      </ul>
+                    ),
+                  }
+                : {})}
+            />
+          </div>
           {state === 'submitted' && can('baselines.decide') ? (
             <section aria-label="Return the submission" className="no-print border-t border-ink-2 pt-3">
               <ReasonForm
