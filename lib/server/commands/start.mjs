@@ -102,11 +102,17 @@ async function startLocal() {
   if (!dev && !isBuilt) await ensureBuild(children, '.next', log('build'));
   await serve(all, '127.0.0.1', port);
 
-  console.log(`\nPolhode is at      ${all.APP_URL}`);
-  console.log(`Mail it sends is at ${mailbox}`);
-  console.log(`Demo sign-ins, all with the password ${secrets.demo} :`);
-  for (const { email, role } of DEMO_PEOPLE) console.log(`  ${email.padEnd(28)} ${role}`);
-  console.log(`The data stay in ${path.relative('', DATA)}. Ctrl-C stops everything.`);
+  const people = DEMO_PEOPLE.map(({ email, role }) => `  ${email.padEnd(28)} ${role}`);
+  // In one piece, so that the server's own lines do not fall between.
+  console.log(
+    [
+      `\nPolhode is at       ${all.APP_URL}`,
+      `Mail it sends is at ${mailbox}`,
+      `Demo sign-ins, all with the password ${secrets.demo} :`,
+      ...people,
+      `The data stay in ${path.relative('', DATA)}. Ctrl-C stops everything.`,
+    ].join('\n'),
+  );
 }
 
 try {
