@@ -47,9 +47,9 @@ export function PointsGrid({ action, program, base, shafts, points }: PointsGrid
     });
   const changed = edits !== NO_EDITS;
   return (
-    <form action={send} className="grid gap-4">
+    <form action={send} className="grid min-w-0 gap-4">
       <FormAnswer state={state} />
-      {state.status === 'failed' ? (
+      {state.status === 'failed' && Object.keys(state.errors).length === 0 ? (
         <div>
           <Button onClick={() => router.refresh()}>Put my changes on the newest revision</Button>
         </div>
@@ -84,7 +84,7 @@ export function PointsGrid({ action, program, base, shafts, points }: PointsGrid
         <tbody>
           {grid.map((point) => (
             <tr key={point.code}>
-              <th scope="row" className="text-left font-normal whitespace-nowrap">
+              <th scope="row" className="text-left leading-7 font-normal whitespace-nowrap">
                 {point.code}
               </th>
               <Cell>
@@ -118,7 +118,7 @@ export function PointsGrid({ action, program, base, shafts, points }: PointsGrid
                 </Cell>
               ))}
               <Cell>
-                <Button kind="quiet" className="-my-1.5" onClick={() => remove(point.code)}>
+                <Button kind="quiet" onClick={() => remove(point.code)}>
                   Remove
                 </Button>
               </Cell>
@@ -253,7 +253,7 @@ export function PointsTable({ shafts, points }: Pick<PointsGridProps, 'shafts' |
       <tbody>
         {points.map((point) => (
           <tr key={point.code}>
-            <th scope="row" className="text-left font-normal whitespace-nowrap">
+            <th scope="row" className="text-left leading-7 font-normal whitespace-nowrap">
               {point.code}
             </th>
             <Cell>{point.title}</Cell>

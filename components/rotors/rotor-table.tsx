@@ -84,5 +84,7 @@ function Carrier({ component, program }: { readonly component: string; readonly 
   const at = component.indexOf('/');
   const [list, item] = [component.slice(0, at), component.slice(at + 1)];
   const query = new URLSearchParams({ find: item });
-  return <TextLink href={`/programs/${program}/lists/${list}?${query.toString()}#rows`}>{component}</TextLink>;
+  return (
+    <TextLink href={`/programs/${program}/lists/${list}?${query.toString()}#rows`}>{component}</TextLink>
+  );
 }

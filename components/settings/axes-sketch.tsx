@@ -2,7 +2,7 @@ import { type AxisTriple, type Direction, handedness } from '@/lib/frames/axes';
 
 type Point = readonly [number, number];
 
-/** Where a metre in each direction goes on the sheet: seen from above, off the left side of the nose. */
+/** Where a metre in each direction goes on the sheet: seen from above, ahead and to the left. */
 const GROUND: Readonly<Record<Direction, Point>> = {
   forward: [-0.78, 0.36],
   aft: [0.78, -0.36],
@@ -57,7 +57,7 @@ export function AxesSketch({ axes }: { readonly axes: AxisTriple }) {
         <circle cx={origin[0]} cy={origin[1]} r="2.5" className="fill-spin" />
       </svg>
       <figcaption className="text-note text-ink-2">
-        Directions only, seen from above the left of the nose.{' '}
+        Directions only, seen from above, ahead and to the left.{' '}
         {hand === 'right-handed' ? 'Right-handed' : 'Left-handed'}.
       </figcaption>
     </figure>

@@ -17,11 +17,15 @@ export function Table({ caption, captionHidden = false, children, tall = false }
       role="region"
       aria-label={caption}
       tabIndex={0}
-      className={classes('print-whole overflow-x-auto', tall && 'max-h-[70vh] overflow-y-auto')}
+      className={classes('print-whole relative overflow-x-auto', tall && 'max-h-[70vh] overflow-y-auto')}
     >
       <table className="ruled w-full border-separate border-spacing-0">
         <caption className={captionHidden ? 'sr-only' : 'pb-2 text-left text-note text-ink-2'}>
-          {caption}
+          {captionHidden ? (
+            caption
+          ) : (
+            <span className="sticky left-0 block w-fit max-w-[calc(100vw-32px)]">{caption}</span>
+          )}
         </caption>
         {children}
       </table>
