@@ -3,7 +3,7 @@ import { headers } from 'next/headers';
 import { redirect, unstable_rethrow } from 'next/navigation';
 import { z } from 'zod';
 import { type AppError } from '@/lib/errors';
-import { type FormState } from '@/lib/form-state';
+import { type FormAction, type FormState } from '@/lib/form-state';
 import { type ProgramAction, type SiteAction } from '@/lib/permissions';
 import { type Person } from '@/lib/server/actor';
 import { type SignedIn } from '@/lib/server/auth/session';
@@ -15,8 +15,6 @@ import { requireOwnOrigin } from './guards';
 import { currentAddress, currentUser } from './page';
 import { failureOf } from './problem';
 import { inputErrorOf } from './read-json';
-
-type FormAction<T> = (state: FormState<T>, form: FormData) => Promise<FormState<T>>;
 
 interface PublicCall<S extends z.ZodType> {
   readonly input: z.output<S>;

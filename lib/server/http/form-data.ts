@@ -1,16 +1,15 @@
 const SECRET_FIELD = /password|token|secret/i;
 const FRAMEWORK_FIELD = /^\$ACTION/;
 
-/** A form as an object: text trimmed, except passwords; a field sent more than once is an array; empty text is left out. */
+/** A form as an object: text trimmed, except passwords; a field sent more than once is an array. */
 export function readForm(form: FormData): Record<string, unknown> {
   const read: Record<string, unknown> = {};
   for (const name of new Set(form.keys())) {
     if (FRAMEWORK_FIELD.test(name)) continue;
     const values = form
       .getAll(name)
-      .map((value) => (typeof value === 'string' && !SECRET_FIELD.test(name) ? value.trim() : value))
-      .filter((value) => value !== '');
-    if (values.length > 0) read[name] = values.length === 1 ? values[0] : values;
+      .map((value) => (typeof value === 'string' && !SECRET_FIELD.test(name) ? value.trim() : value));
+    read[name] = values.length === 1 ? values[0] : values;
   }
   return read;
 }
