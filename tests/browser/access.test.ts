@@ -29,7 +29,8 @@ function addressOf(file: string, program: string): string {
   return `${url}/${segments.join('/')}`;
 }
 
-const deeper = (file: string): boolean => /\[(?!program\])/.test(file);
+/** Whether what a page shows is named deeper in its address, or in its query: it is not there then, to those who may see it. */
+const deeper = (file: string): boolean => /\[(?!program\])|baselines\/(submit|rows)\//.test(file);
 const standingOf = (role: Role, inside: boolean): Standing => ({
   admin: role === 'admin',
   role: !inside || role === 'admin' || role === 'outsider' ? null : role,

@@ -9,7 +9,7 @@ import { ROLE_NAMES } from '@/lib/permissions';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { ProgramFrame } from './frame';
-import { ConfigurationsHere, ListsHere, RotatingPartsHere } from './stations-here';
+import { BaselinesHere, ConfigurationsHere, ListsHere, RotatingPartsHere } from './stations-here';
 
 export async function generateMetadata({ params }: PageProps<'/programs/[program]'>): Promise<Metadata> {
   const { program } = await requireProgram((await params).program, 'program.read');
@@ -25,6 +25,8 @@ export default async function ProgramPage({ params }: PageProps<'/programs/[prog
     currentFrameIssue(serverDb(), program.id),
     listMembers(serverDb(), program.id),
   ]);
+  // Who decides sees what waits for a decision first, who only reads sees nothing else.
+  const baselinesFirst = (frame !== undefined && can('baselines.decide')) || !can('lists.read');
   const chiefs = members.filter((member) => member.role === 'chief').map((member) => member.name);
   return (
     <ProgramFrame access={access}>
@@ -51,17 +53,11 @@ export default async function ProgramPage({ params }: PageProps<'/programs/[prog
           </p>
         </EmptyPlace>
       ) : null}
+      {baselinesFirst ? <BaselinesHere access={access} /> : null}
       {frame !== undefined && can('lists.read') ? <ListsHere access={access} /> : null}
       {frame !== undefined && can('rotors.read') ? <RotatingPartsHere access={access} /> : null}
       {frame !== undefined && can('configurations.read') ? <ConfigurationsHere access={access} /> : null}
-      {can('lists.read') ? null : (
-        <EmptyPlace title="No baseline has been signed yet">
-          <p>
-            Simulation engineers see what has been signed. Until then, your{' '}
-            <TextLink href="/account">account</TextLink> is where tokens for the API are made.
-          </p>
-        </EmptyPlace>
-      )}
+      {frame === undefined || baselinesFirst ? null : <BaselinesHere access={access} />}
       <Section
         title="People"
         aside={<TextLink href={`${home}/settings/members`}>{`All ${members.length} members`}</TextLink>}

@@ -1,5 +1,7 @@
+import { baselinesOfProgram, submissionsOfProgram } from '@/db/queries/baselines';
 import { configurationsOfProgram, rotorRevisionsOf } from '@/db/queries/configurations';
 import { listsOfProgram } from '@/db/queries/lists';
+import { counted } from '@/components/lists/list-words';
 import { StationSummary } from '@/components/programs/station-summary';
 import { ButtonLink } from '@/components/ui/button';
 import { Day } from '@/components/ui/day';
@@ -24,7 +26,8 @@ export async function ListsHere({ access: { program, can } }: HereProps) {
         'No revision yet'
       ) : (
         <>
-          Revision {list.number}, {list.rows} rows, <Day at={list.revised_at} />, {list.author}
+          Revision {list.number}, {counted(list.rows ?? 0, 'row')}, <Day at={list.revised_at} />,{' '}
+          {list.author}
         </>
       ),
     waits: importWords(list.import_state),
@@ -73,8 +76,8 @@ export async function RotatingPartsHere({ access: { program, can } }: HereProps)
               title: `Revision ${newest.number}`,
               facts: (
                 <>
-                  {newest.rotors.length} rotors, {newest.points.length} operating points,{' '}
-                  <Day at={newest.created_at} />, {newest.author}
+                  {counted(newest.rotors.length, 'rotor')}, {counted(newest.points.length, 'operating point')}
+                  , <Day at={newest.created_at} />, {newest.author}
                 </>
               ),
               waits: null,
@@ -117,6 +120,56 @@ export async function ConfigurationsHere({ access: { program, can } }: HereProps
       ) : (
         <StationSummary
           lines={[...lines].sort((a, b) => Number(b.waits !== null) - Number(a.waits !== null))}
+        />
+      )}
+    </Section>
+  );
+}
+
+/** What waits for a decision, oldest first, then the newest signed baseline of each build. */
+export async function BaselinesHere({ access: { program, can } }: HereProps) {
+  const home = `/programs/${program.code}/baselines`;
+  const [signed, submissions] = await Promise.all([
+    baselinesOfProgram(serverDb(), program.id),
+    can('submissions.read') ? submissionsOfProgram(serverDb(), program.id) : [],
+  ]);
+  const waiting = submissions.filter(({ decision }) => decision === null).reverse();
+  const newest = signed.filter(
+    (one, at) => signed.findIndex((other) => other.build_id === one.build_id) === at,
+  );
+  return (
+    <Section title="Baselines">
+      {waiting.length + newest.length === 0 ? (
+        <EmptyPlace title="No baseline has been signed yet">
+          <p>
+            Weights engineers submit a configuration; a chief engineer signs it. Simulation engineers then
+            find it here.
+          </p>
+        </EmptyPlace>
+      ) : (
+        <StationSummary
+          lines={[
+            ...waiting.map((one) => ({
+              href: `${home}/submissions/${one.id}`,
+              title: one.title,
+              facts: (
+                <>
+                  {one.build_title}, submitted <Day at={one.submitted_at} />, {one.submitter}
+                </>
+              ),
+              waits: 'To decide',
+            })),
+            ...newest.map((one) => ({
+              href: `${home}/${one.number}`,
+              title: `Baseline ${one.number}, ${one.title}`,
+              facts: (
+                <>
+                  {one.build_title}, signed <Day at={one.signed_at} />, {one.signer}
+                </>
+              ),
+              waits: one.state === 'withdrawn' ? 'Withdrawn' : null,
+            })),
+          ]}
         />
       )}
     </Section>
