@@ -6,7 +6,7 @@ import { ColumnChoice, Find } from '@/components/data-table/toolbar';
 import { type TableView } from '@/components/data-table/view';
 import { Button } from '@/components/ui/button';
 import { buttonClass } from '@/components/ui/button-style';
-import { CONTROL_CLASS } from '@/components/ui/field';
+import { SelectControl } from '@/components/ui/select-control';
 import { TextLink } from '@/components/ui/text-link';
 import { type ListRow } from '@/lib/contracts/list-rows';
 
@@ -40,11 +40,10 @@ export function RowsBar(props: RowsBarProps) {
             <label htmlFor={id} className="text-note text-ink-2">
               Group
             </label>
-            <select
+            <SelectControl
               id={id}
               value={view.group}
               onChange={(event) => onView({ ...view, group: event.target.value })}
-              className={CONTROL_CLASS}
             >
               <option value="">All groups</option>
               {groups.map((group) => (
@@ -52,7 +51,7 @@ export function RowsBar(props: RowsBarProps) {
                   {group}
                 </option>
               ))}
-            </select>
+            </SelectControl>
           </div>
         ) : null}
         <ColumnChoice columns={columns} view={view} onView={onView} />
