@@ -96,6 +96,9 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       basic double precision[] not null check (cardinality(basic) = 10),
       stated_predicted double precision[] not null check (cardinality(stated_predicted) = 10),
       unstated_basic double precision[] not null check (cardinality(unstated_basic) = 10),
+      basic_uncertainty double precision[] not null check (cardinality(basic_uncertainty) = 57),
+      stated_predicted_uncertainty double precision[] not null check (cardinality(stated_predicted_uncertainty) = 57),
+      unstated_basic_uncertainty double precision[] not null check (cardinality(unstated_basic_uncertainty) = 57),
       primary key (revision_id, frame_issue_id, group_path, category, maturity, status)
     );
 

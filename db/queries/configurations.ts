@@ -8,6 +8,8 @@ import {
 import { fromNumbers } from '@/lib/mass/account';
 import { type GrowthAllowances, NO_GROWTH } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
+import { type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
+import { fromNumbers as uncertaintyFrom } from '@/lib/mass/uncertainty/sums';
 
 export type Configuration = Selectable<ConfigurationsTable>;
 export type RotorRevision = Selectable<RotorRevisionsTable>;
@@ -95,7 +97,7 @@ export async function subtotalsOf(
   db: Db,
   revisionIds: readonly string[],
   frameIssueId: string,
-): Promise<(Subtotal & { readonly revisionId: string })[]> {
+): Promise<(Subtotal & { readonly revisionId: string; readonly uncertainty: UncertaintySubtotal })[]> {
   if (revisionIds.length === 0) return [];
   const rows = await db
     .selectFrom('revision_subtotals')
@@ -108,19 +110,30 @@ export async function subtotalsOf(
     .orderBy('maturity')
     .orderBy('status')
     .execute();
-  return rows.map((row) => ({
-    revisionId: row.revision_id,
-    group: row.group_path,
-    category: row.category,
-    maturity: row.maturity === '' ? null : row.maturity,
-    status: row.status,
-    rows: row.rows,
-    pieces: row.pieces,
-    memoRows: row.memo_rows,
-    basic: fromNumbers(row.basic),
-    statedPredicted: fromNumbers(row.stated_predicted),
-    unstatedBasic: fromNumbers(row.unstated_basic),
-  }));
+  return rows.map((row) => {
+    const key = {
+      group: row.group_path,
+      category: row.category,
+      maturity: row.maturity === '' ? null : row.maturity,
+      status: row.status,
+    };
+    return {
+      revisionId: row.revision_id,
+      ...key,
+      rows: row.rows,
+      pieces: row.pieces,
+      memoRows: row.memo_rows,
+      basic: fromNumbers(row.basic),
+      statedPredicted: fromNumbers(row.stated_predicted),
+      unstatedBasic: fromNumbers(row.unstated_basic),
+      uncertainty: {
+        ...key,
+        basic: uncertaintyFrom(row.basic_uncertainty),
+        statedPredicted: uncertaintyFrom(row.stated_predicted_uncertainty),
+        unstatedBasic: uncertaintyFrom(row.unstated_basic_uncertainty),
+      },
+    };
+  });
 }
 
 /** The conditions of a configuration in their order, each with its items. */

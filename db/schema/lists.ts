@@ -101,6 +101,10 @@ export interface RevisionSubtotalsTable {
   basic: number[];
   stated_predicted: number[];
   unstated_basic: number[];
+  /** Of each account above: mass, mass with a known σ, and the covariance of the ten numbers (55, its lower triangle). */
+  basic_uncertainty: number[];
+  stated_predicted_uncertainty: number[];
+  unstated_basic_uncertainty: number[];
 }
 
 export type ImportState = 'waiting' | 'running' | 'done' | 'failed';

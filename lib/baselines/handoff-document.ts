@@ -4,6 +4,7 @@ import { conventionsOf, rollUpMembers } from '@/lib/contracts/condition-members'
 import { type PlacedFinding } from '@/lib/findings/finding';
 import { airframeToBody } from '@/lib/frames/body';
 import { type ConfigurationResult, type PointResult } from '@/lib/loading/configuration';
+import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type Vec3 } from '@/lib/numerics/vec3';
 import { degreesAsTyped, rpm } from '@/lib/units/convert';
 
@@ -63,12 +64,16 @@ export function handoffDocument(input: HandoffInput) {
       code,
       airframe: { x, y, z },
     })),
-    conditions: result.conditions.map(({ code, title, rollUp }) => ({
+    conditions: result.conditions.map(({ code, title, rollUp, uncertainty }) => ({
       code,
       title,
       ...rollUpMembers(rollUp, 'si'),
+      ...sigmaMember(uncertainty.basic),
     })),
-    operatingPoints: result.operatingPoints.map(pointMember),
+    operatingPoints: result.operatingPoints.map((point) => ({
+      ...pointMember(point),
+      ...sigmaOfPoint(point),
+    })),
     findings: input.findings.map((finding) => {
       const answer = input.answers[findingKey(finding)];
       return {
@@ -105,4 +110,22 @@ export function pointMember({ code, momentum }: Pick<PointResult, 'code' | 'mome
       hz: part.momentum[2],
     })),
   };
+}
+
+/**
+ * One standard deviation of the basic mass, CG (airframe axes) and moments (body axes, products as positive integrals), with the
+ * share of the mass, 0 to 1, that states one. Absent where no row states any: zero would read as certain.
+ */
+function sigmaMember({ mass, massShare, properties }: MassUncertainty) {
+  if (properties === null || massShare === null || massShare === 0) return {};
+  const { x, y, z } = properties.cg;
+  const { ixx, iyy, izz, ixy, ixz, iyz } = properties.inertia;
+  return { sigma: { mass, cg: { x, y, z }, inertia: { ixx, iyy, izz, ixy, ixz, iyz }, massShare } };
+}
+
+/** One standard deviation of h; absent where no polar inertia and no speed states any. */
+function sigmaOfPoint({ uncertainty, momentum }: Pick<PointResult, 'uncertainty' | 'momentum'>) {
+  const [hx, hy, hz] = uncertainty.sigma;
+  const stated = momentum.rotors.length > uncertainty.rotorsWithoutSigma.length || hx + hy + hz > 0;
+  return stated ? { sigma: { hx, hy, hz } } : {};
 }

@@ -28,7 +28,7 @@ const ROUNDING = 1e-13;
 
 export interface AccountSide {
   readonly geometry: AirframeGeometry;
-  readonly condition: ConditionResult;
+  readonly condition: Omit<ConditionResult, 'uncertainty'>;
 }
 
 export interface AccountStep {

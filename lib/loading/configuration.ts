@@ -2,8 +2,12 @@ import { type Category } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type GrowthAllowances, type OnBoardItem, type RollUp, rollUp } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
+import { type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
+import { combineUncertainty } from '@/lib/mass/uncertainty/combine';
+import { type MassUncertainty, uncertaintyOf } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type AngularMomentum, angularMomentum, shaftsWithoutSpeed } from '@/lib/rotors/momentum';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
+import { type MomentumUncertainty, momentumUncertainty } from '@/lib/rotors/uncertainty';
 
 /** One loading: the list rows of some categories, and named items. */
 export interface Condition {
@@ -17,7 +21,7 @@ export interface ConfigurationInput {
   readonly geometry: AirframeGeometry;
   readonly allowances: GrowthAllowances;
   /** The subtotals of every pinned list revision, about the geometry's reference point. */
-  readonly subtotals: readonly Subtotal[];
+  readonly subtotals: readonly (Subtotal & { readonly uncertainty: UncertaintySubtotal })[];
   readonly conditions: readonly Condition[];
   readonly rotors: readonly Rotor[];
   readonly points: readonly OperatingPoint[];
@@ -29,12 +33,14 @@ export interface ConditionResult {
   readonly categories: readonly Category[];
   readonly items: readonly OnBoardItem[];
   readonly rollUp: RollUp;
+  readonly uncertainty: { readonly basic: MassUncertainty; readonly predicted: MassUncertainty };
 }
 
 export interface PointResult {
   readonly code: string;
   readonly title: string;
   readonly momentum: AngularMomentum;
+  readonly uncertainty: MomentumUncertainty;
 }
 
 /** Everything a configuration says: SI, CG in airframe components, inertia and angular momentum in body axes. */
@@ -54,16 +60,36 @@ export function evaluateConfiguration(input: ConfigurationInput): ConfigurationR
   return {
     geometry,
     allowances,
-    conditions: conditions.map((condition) => ({
-      ...condition,
-      rollUp: rollUp(subtotals, condition.items, geometry, allowances, { categories: condition.categories }),
-    })),
+    conditions: conditions.map((condition) => evaluateCondition(condition, input)),
     operatingPoints: points
       .filter((point) => shaftsWithoutSpeed(rotors, point).length === 0)
       .map((point) => ({
         code: point.code,
         title: point.title,
         momentum: angularMomentum(rotors, point, geometry),
+        uncertainty: momentumUncertainty(rotors, point, geometry),
       })),
+  };
+}
+
+function evaluateCondition(
+  condition: Condition,
+  { subtotals, geometry, allowances }: Pick<ConfigurationInput, 'subtotals' | 'geometry' | 'allowances'>,
+): ConditionResult {
+  const options = { categories: condition.categories };
+  const total = rollUp(subtotals, condition.items, geometry, allowances, options);
+  const { basic, predicted } = combineUncertainty(
+    subtotals.map(({ uncertainty }) => uncertainty),
+    condition.items,
+    allowances,
+    options,
+  );
+  return {
+    ...condition,
+    rollUp: total,
+    uncertainty: {
+      basic: uncertaintyOf(basic, total.basicAccount, geometry),
+      predicted: uncertaintyOf(predicted, total.predictedAccount, geometry),
+    },
   };
 }

@@ -19,8 +19,33 @@ import documentExample from './baseline-example.json';
 
 export const baselineQuery = z.strictObject({ build: buildParameter, units: unitsParameter });
 
+const sigmaSchema = z
+  .object({
+    mass: z.number(),
+    cg: z.object({ x: z.number(), y: z.number(), z: z.number() }).describe('Airframe axes; unit of length'),
+    inertia: z
+      .object({
+        ixx: z.number(),
+        iyy: z.number(),
+        izz: z.number(),
+        ixy: z.number(),
+        ixz: z.number(),
+        iyz: z.number(),
+      })
+      .describe('Body axes; unit of inertia'),
+    massShare: z
+      .number()
+      .describe('Share of the mass, 0 to 1, whose rows state an uncertainty; the rest counts as certain'),
+  })
+  .describe('One standard deviation of the basic results, to first order. Absent where no row states any');
+
 export const conditionSchema = z
-  .object({ code: z.string(), title: z.string(), ...conditionMembers })
+  .object({
+    code: z.string(),
+    title: z.string(),
+    ...conditionMembers,
+    sigma: sigmaSchema.optional(),
+  })
   .meta({ id: 'Condition', description: 'One loading of the configuration' });
 
 /** What every answer made from a baseline says of it. */
@@ -58,7 +83,16 @@ export const baselineDocumentSchema = z
     conventions: documentConventions,
     referencePoints: z.array(z.object({ code: z.string(), airframe: placeSchema })),
     conditions: z.array(conditionSchema),
-    operatingPoints: z.array(z.object({ code: z.string(), ...momentumMembers })),
+    operatingPoints: z.array(
+      z.object({
+        code: z.string(),
+        ...momentumMembers,
+        sigma: z
+          .object({ hx: z.number(), hy: z.number(), hz: z.number() })
+          .optional()
+          .describe('One standard deviation of the angular momentum; absent where nothing states any'),
+      }),
+    ),
     findings: z.array(
       z.object({
         rule: z.string(),

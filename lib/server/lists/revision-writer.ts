@@ -11,6 +11,8 @@ import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { Placement } from '@/lib/mass/place';
 import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
+import { UncertaintyBook, type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
+import { toNumbers as uncertaintyNumbers } from '@/lib/mass/uncertainty/sums';
 import { RowCopy } from './copy-rows';
 import { copyLine, rowValues } from './row-codec';
 
@@ -30,6 +32,7 @@ export interface RevisionContent {
 export class RevisionWriter {
   #copy: RowCopy | null = null;
   readonly #book: SubtotalBook;
+  readonly #uncertainty: UncertaintyBook;
   readonly #rules: RowChecks;
   readonly #hash;
   #rows = 0;
@@ -40,7 +43,9 @@ export class RevisionWriter {
     private readonly frame: { readonly id: string; readonly geometry: AirframeGeometry },
     declarations: ListDeclarations,
   ) {
-    this.#book = new SubtotalBook(new Placement(declarations, frame.geometry));
+    const placement = new Placement(declarations, frame.geometry);
+    this.#book = new SubtotalBook(placement);
+    this.#uncertainty = new UncertaintyBook(placement);
     this.#rules = new RowChecks(declarations);
     this.#hash = createHash('sha256').update(contentHead(declarations));
   }
@@ -56,6 +61,7 @@ export class RevisionWriter {
     const values = rowValues(component, this.#rows, line);
     this.#hash.update(contentLine(component));
     this.#book.add(component);
+    this.#uncertainty.add(component);
     this.#rules.see(component);
     await this.#copy.write(copyLine(values));
   }
@@ -64,10 +70,22 @@ export class RevisionWriter {
   async finish(trx: Transaction<Database>): Promise<RevisionContent> {
     await this.#copy?.end();
     const subtotals = this.#book.subtotals();
+    const uncertainties = this.#uncertainty.sums();
     if (subtotals.length > 0) {
       await trx
         .insertInto('revision_subtotals')
-        .values(subtotals.map((subtotal) => subtotalValues(this.revisionId, this.frame.id, subtotal)))
+        .values(
+          subtotals.map((subtotal, index) => {
+            const uncertainty = uncertainties[index];
+            if (uncertainty === undefined) throw new Error('a subtotal without its uncertainty');
+            return {
+              revision_id: this.revisionId,
+              frame_issue_id: this.frame.id,
+              ...subtotalValues(subtotal),
+              ...uncertaintyValues(uncertainty),
+            };
+          }),
+        )
         .execute();
     }
     const total = (count: (subtotal: Subtotal) => number): number =>
@@ -95,10 +113,8 @@ export function contentLine(component: Component): string {
   return `${canonicalize(component) ?? ''}\n`;
 }
 
-function subtotalValues(revisionId: string, frameIssueId: string, subtotal: Subtotal) {
+function subtotalValues(subtotal: Subtotal) {
   return {
-    revision_id: revisionId,
-    frame_issue_id: frameIssueId,
     group_path: subtotal.group,
     category: subtotal.category,
     maturity: subtotal.maturity ?? ('' as const),
@@ -109,5 +125,13 @@ function subtotalValues(revisionId: string, frameIssueId: string, subtotal: Subt
     basic: [...toNumbers(subtotal.basic)],
     stated_predicted: [...toNumbers(subtotal.statedPredicted)],
     unstated_basic: [...toNumbers(subtotal.unstatedBasic)],
+  };
+}
+
+function uncertaintyValues(uncertainty: UncertaintySubtotal) {
+  return {
+    basic_uncertainty: uncertaintyNumbers(uncertainty.basic),
+    stated_predicted_uncertainty: uncertaintyNumbers(uncertainty.statedPredicted),
+    unstated_basic_uncertainty: uncertaintyNumbers(uncertainty.unstatedBasic),
   };
 }
