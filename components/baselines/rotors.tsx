@@ -57,13 +57,9 @@ export function RotorSection({
     >
       {choice}
       {points.map((point) => (
-        <MomentumTable
-          key={point.title}
-          operatingPoint={point.title}
-          rotors={point.rotors}
-          total={point.total}
-          unit={unit}
-        />
+        <div key={point.title} className="keep-together">
+          <MomentumTable operatingPoint={point.title} rotors={point.rotors} total={point.total} unit={unit} />
+        </div>
       ))}
     </Section>
   );

@@ -29,57 +29,60 @@ export function TitleBlock(props: TitleBlockProps) {
   const { program, build, title, number, preparedBy, submitted, approved, supersedes, digest, decision } =
     props;
   return (
-    <section
-      aria-label="Title block"
-      className="keep-together grid grid-cols-2 border-t border-l border-ink bg-sheet"
-    >
-      <BlockCell label="Program" value={program} />
-      <BlockCell label="Build" value={build} />
-      <BlockCell label="Title" value={title} wide strong />
-      <BlockCell label="Prepared" value={preparedBy.join(', ')} wide />
-      <BlockCell label="Submitted" value={<Signed signature={submitted} />} wide={decision !== undefined} />
-      {decision === undefined ? (
+    <section aria-label="Title block" className="keep-together print:ml-auto print:w-3/5">
+      <div className="grid grid-cols-2 border-t border-l border-ink bg-sheet">
+        <BlockCell label="Program" value={program} />
+        <BlockCell label="Build" value={build} />
+        <BlockCell label="Title" value={title} wide strong />
+        <BlockCell label="Prepared" value={preparedBy.join(', ')} wide />
+        <BlockCell label="Submitted" value={<Signed signature={submitted} />} wide={decision !== undefined} />
+        {decision === undefined ? (
+          <BlockCell
+            label="Approved"
+            value={
+              approved === null ? (
+                <span className="text-ink-2">not signed</span>
+              ) : (
+                <Signed signature={approved} />
+              )
+            }
+          />
+        ) : (
+          <BlockCell label="Approved" value={decision} wide />
+        )}
         <BlockCell
-          label="Approved"
+          label="Baseline"
           value={
-            approved === null ? (
-              <span className="text-ink-2">not signed</span>
+            number === null ? (
+              <span className="text-ink-2">no number yet</span>
             ) : (
-              <Signed signature={approved} />
+              <BlockNumber number={number} />
             )
           }
         />
-      ) : (
-        <BlockCell label="Approved" value={decision} wide />
-      )}
-      <BlockCell
-        label="Baseline"
-        value={
-          number === null ? (
-            <span className="text-ink-2">no number yet</span>
-          ) : (
-            <BlockNumber number={number} />
-          )
-        }
-      />
-      <BlockCell
-        label="Supersedes"
-        value={
-          supersedes === null ? <span className="text-ink-2">none</span> : <BlockNumber number={supersedes} />
-        }
-      />
-      {digest === null ? null : (
         <BlockCell
-          label="Digest"
-          wide
+          label="Supersedes"
           value={
-            <span className="grid">
-              <span className="font-mono text-note wrap-anywhere">{digest}</span>
-              <CopyButton words="Copy digest" text={digest} />
-            </span>
+            supersedes === null ? (
+              <span className="text-ink-2">none</span>
+            ) : (
+              <BlockNumber number={supersedes} />
+            )
           }
         />
-      )}
+        {digest === null ? null : (
+          <BlockCell
+            label="Digest"
+            wide
+            value={
+              <span className="grid">
+                <span className="font-mono text-note wrap-anywhere">{digest}</span>
+                <CopyButton words="Copy digest" text={digest} />
+              </span>
+            }
+          />
+        )}
+      </div>
     </section>
   );
 }

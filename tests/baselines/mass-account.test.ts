@@ -44,7 +44,7 @@ function side(
   const rolled = rollUp(subtotals, items, frame, NO_GROWTH);
   return {
     geometry: frame,
-    condition: { code: 'empty', title: 'Empty', categories: ['empty'], items, rollUp: rolled },
+    condition: { items, rollUp: rolled },
   };
 }
 

@@ -1,5 +1,5 @@
 import { type Db } from '@/db/client';
-import { submissionsOfProgram } from '@/db/queries/baselines';
+import { type submissionsOfProgram } from '@/db/queries/baselines';
 import { baselineBefore, resultOfSubmission } from '@/db/queries/baseline-history';
 import { compareResults } from '@/lib/baselines/compare';
 

@@ -122,6 +122,10 @@ export default async function AccountPage({
             {quantity === 'mass'
               ? ' Masses simply add, so that their order does not matter.'
               : ' The size of a step of CG or inertia depends on that order, their sum does not.'}
+            {quantity.startsWith('i')
+              ? ' Inertia is about the CG in body axes, products are positive integrals.'
+              : null}
+            {quantity.startsWith('cg') ? ' The CG is in airframe axes, from the datum.' : null}
           </p>
         }
       >
