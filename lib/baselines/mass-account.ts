@@ -28,7 +28,7 @@ const ROUNDING = 1e-13;
 
 export interface AccountSide {
   readonly geometry: AirframeGeometry;
-  readonly condition: Omit<ConditionResult, 'uncertainty'>;
+  readonly condition: Pick<ConditionResult, 'items' | 'rollUp'>;
 }
 
 export interface AccountStep {
