@@ -23,6 +23,14 @@ export interface ShownCondition {
     readonly inertia: Moments;
     readonly principal: { readonly moments: Vec3; readonly axes: readonly [Vec3, Vec3, Vec3] };
   } | null;
+  /** One standard deviation of each, where rows state theirs. */
+  readonly sigma: {
+    readonly mass: number;
+    readonly percentMac: number | null;
+    readonly inertia: Moments;
+    /** The share of the mass, 0 to 1, whose standard deviation is stated. */
+    readonly massShare: number;
+  } | null;
 }
 
 export interface CgLimits {
@@ -39,18 +47,36 @@ interface ConditionSheetProps {
 
 /** Mass, balance and inertia of one condition. */
 export function ConditionSheet({ condition, limits, axes, units }: ConditionSheetProps) {
-  const { title, mass, predictedMass, properties } = condition;
+  const { title, mass, predictedMass, properties, sigma } = condition;
   const cgDecimals = sharedDecimals((properties?.cg ?? []).map((place) => fromSi(place, units.length)));
   return (
     <div className="grid gap-6">
-      <MassFigure label={`${title}, basic mass`} mass={mass} predicted={predictedMass} unit={units.mass} />
+      <MassFigure
+        label={`${title}, basic mass`}
+        mass={mass}
+        predicted={predictedMass}
+        unit={units.mass}
+        {...(sigma === null ? {} : { sigma: sigma.mass })}
+      >
+        {sigma === null ? null : (
+          <p className="text-ink-2">
+            ± is 1 sigma, stated for <Num value={100 * sigma.massShare} decimals={0} /> % of the mass; the
+            rest counts as certain.
+          </p>
+        )}
+      </MassFigure>
       {properties === null ? (
         <p>A mass of zero or less has no CG and no inertia about it.</p>
       ) : (
         <>
           <div className="grid gap-2">
             {properties.percentMac === null ? null : (
-              <BalanceBar cg={properties.percentMac} forwardLimit={limits.forward} aftLimit={limits.aft} />
+              <BalanceBar
+                cg={properties.percentMac}
+                forwardLimit={limits.forward}
+                aftLimit={limits.aft}
+                {...(sigma?.percentMac ? { sigma: sigma.percentMac } : {})}
+              />
             )}
             <p className="flex flex-wrap gap-x-6 gap-y-1">
               <span className="text-ink-2">CG from the datum, {unitLabel(units.length)}</span>
@@ -62,7 +88,11 @@ export function ConditionSheet({ condition, limits, axes, units }: ConditionShee
               ))}
             </p>
           </div>
-          <TensorPlate moments={properties.inertia} unit={units.inertia} />
+          <TensorPlate
+            moments={properties.inertia}
+            unit={units.inertia}
+            {...(sigma === null ? {} : { sigma: sigma.inertia })}
+          />
           <div className="grid gap-2">
             <PrincipalTable
               moments={properties.principal.moments}

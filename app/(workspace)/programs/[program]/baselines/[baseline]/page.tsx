@@ -112,7 +112,10 @@ export default async function BaselinePage({
         <div className="grid min-w-0 content-start gap-8 lg:col-span-8">
           {condition === null ? null : (
             <ConditionSheet
-              condition={shownOfDocument(condition)}
+              condition={shownOfDocument(
+                condition,
+                submission.result.conditions.find((one) => one.code === condition.code),
+              )}
               limits={cgLimits(limits)}
               axes={[x, y, z]}
               units={units}
