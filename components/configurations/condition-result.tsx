@@ -11,6 +11,7 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { principalInclination } from '@/lib/mass/inclination';
 import { type MassProperties } from '@/lib/mass/result';
 import { type RollUp } from '@/lib/mass/roll-up';
+import { type MassUncertainty, type PropertiesUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { degrees, fromSi } from '@/lib/units/convert';
 import { type OutputUnits } from '@/lib/units/names';
 
@@ -24,25 +25,41 @@ export interface ProgramLimits {
 
 interface ConditionResultProps {
   readonly rollUp: RollUp;
+  readonly uncertainty: { readonly basic: MassUncertainty; readonly predicted: MassUncertainty };
   readonly geometry: AirframeGeometry;
   readonly limits: ProgramLimits;
   readonly units: OutputUnits;
 }
 
 /** Mass, balance and inertia of one condition. */
-export function ConditionResultView({ rollUp, geometry, limits, units }: ConditionResultProps) {
+export function ConditionResultView({ rollUp, uncertainty, geometry, limits, units }: ConditionResultProps) {
   const { basic, predicted } = rollUp;
   const { properties } = basic;
+  // Where no row states a σ there is nothing to show: zero would read as certain.
+  const stated = (uncertainty.basic.massShare ?? 0) > 0;
+  const sigma = stated ? uncertainty.basic.properties : null;
+  const predictedSigma = stated ? uncertainty.predicted.properties : null;
   return (
     <div className="grid min-w-0 gap-8">
       <div className="grid items-start gap-8 md:grid-cols-[minmax(240px,1fr)_2fr]">
-        <MassFigure label="Basic mass" mass={basic.mass} predicted={predicted.mass} unit={units.mass}>
+        <MassFigure
+          label="Basic mass"
+          mass={basic.mass}
+          predicted={predicted.mass}
+          unit={units.mass}
+          {...(stated ? { sigma: uncertainty.basic.mass } : {})}
+        >
           {limits.mass === null ? null : (
             <MassMargin basic={basic.mass} predicted={predicted.mass} limit={limits.mass} unit={units.mass} />
           )}
         </MassFigure>
         {properties === null || properties.percentMac === null ? null : (
-          <BalanceBar cg={properties.percentMac} forwardLimit={limits.forward} aftLimit={limits.aft} />
+          <BalanceBar
+            cg={properties.percentMac}
+            forwardLimit={limits.forward}
+            aftLimit={limits.aft}
+            {...(typeof sigma?.percentMac === 'number' ? { sigma: sigma.percentMac } : {})}
+          />
         )}
       </div>
       {properties === null ? (
@@ -51,8 +68,13 @@ export function ConditionResultView({ rollUp, geometry, limits, units }: Conditi
         </Banner>
       ) : (
         <>
-          <CgTable basic={properties} predicted={predicted.properties} {...{ geometry, units }} />
-          <TensorPlate moments={properties.inertia} unit={units.inertia} />
+          <CgTable basic={properties} predicted={predicted.properties} {...{ sigma, geometry, units }} />
+          <TensorPlate
+            moments={properties.inertia}
+            unit={units.inertia}
+            {...(sigma === null ? {} : { sigma: sigma.inertia })}
+          />
+          <SigmaNote share={uncertainty.basic.massShare} />
           <div className="grid gap-2">
             <PrincipalTable
               moments={properties.principal.moments}
@@ -74,6 +96,7 @@ export function ConditionResultView({ rollUp, geometry, limits, units }: Conditi
                   moments={predicted.properties.inertia}
                   unit={units.inertia}
                   title="Predicted inertia about the predicted CG, body axes"
+                  {...(predictedSigma === null ? {} : { sigma: predictedSigma.inertia })}
                 />
                 <PrincipalTable
                   moments={predicted.properties.principal.moments}
@@ -95,12 +118,31 @@ interface TwoResults {
   readonly units: OutputUnits;
 }
 
+/** What the ± beside the figures is, and how much of the aircraft it knows. */
+function SigmaNote({ share }: { readonly share: number | null }) {
+  const percent = 100 * (share ?? 0);
+  return (
+    <p className="text-note text-ink-2">
+      {percent > 0 ? (
+        <>
+          ± is one standard deviation, to first order.{' '}
+          <Num value={percent} decimals={percent > 99.9 || percent < 1 ? 2 : 0} /> % of the mass states one;
+          the rest counts as certain.
+        </>
+      ) : (
+        'No row states an uncertainty, so none is shown.'
+      )}
+    </p>
+  );
+}
+
 function CgTable({
   basic,
   predicted,
+  sigma,
   geometry,
   units,
-}: TwoResults & { readonly geometry: AirframeGeometry }) {
+}: TwoResults & { readonly sigma: PropertiesUncertainty | null; readonly geometry: AirframeGeometry }) {
   const rows = [
     { name: 'Basic', properties: basic },
     ...(predicted === null ? [] : [{ name: 'Predicted', properties: predicted }]),
@@ -135,6 +177,19 @@ function CgTable({
             </Cell>
           </tr>
         ))}
+        {sigma === null ? null : (
+          <tr>
+            <RowHead>± of the basic CG</RowHead>
+            {[sigma.cg.x, sigma.cg.y, sigma.cg.z].map((value, index) => (
+              <Cell key={index} side="right">
+                <Num value={value} unit={units.length} decimals={decimals} />
+              </Cell>
+            ))}
+            <Cell side="right">
+              <Num value={sigma.percentMac} decimals={2} />
+            </Cell>
+          </tr>
+        )}
       </tbody>
     </Table>
   );

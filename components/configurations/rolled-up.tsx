@@ -49,7 +49,11 @@ export function RolledUp({ home, view, result, limits }: RolledUpProps) {
         />
       </Section>
       <Section title={shown.title}>
-        <ConditionResultView rollUp={shown.rollUp} {...{ geometry, limits, units }} />
+        <ConditionResultView
+          rollUp={shown.rollUp}
+          uncertainty={shown.uncertainty}
+          {...{ geometry, limits, units }}
+        />
       </Section>
       <Section
         title="Groups"
