@@ -14,6 +14,14 @@ const distDir = process.env.NEXT_DIST_DIR ?? '.next';
 const typescript =
   distDir === '.next' ? {} : { ignoreBuildErrors: true, tsconfigPath: '.test-data/tsconfig.json' };
 
+// Endings that a path segment of the file tree cannot have.
+const rewrites = [
+  {
+    source: '/api/v1/programs/:program/baselines/:number([^/.]+).csv',
+    destination: '/api/v1/programs/:program/baselines/:number/csv',
+  },
+];
+
 /** @type {import('next').NextConfig} */
 const config = {
   distDir,
@@ -27,5 +35,6 @@ const config = {
     { source: '/:path*', headers },
     { source: '/api/:path*', headers: apiHeaders },
   ],
+  rewrites: async () => rewrites,
 };
 export default config;

@@ -124,7 +124,7 @@ function sigmaMember({ mass, massShare, properties }: MassUncertainty) {
 }
 
 /** One standard deviation of h; absent where no polar inertia and no speed states any. */
-function sigmaOfPoint({ uncertainty, momentum }: Pick<PointResult, 'uncertainty' | 'momentum'>) {
+export function sigmaOfPoint({ uncertainty, momentum }: Pick<PointResult, 'uncertainty' | 'momentum'>) {
   const [hx, hy, hz] = uncertainty.sigma;
   const stated = momentum.rotors.length > uncertainty.rotorsWithoutSigma.length || hx + hy + hz > 0;
   return stated ? { sigma: { hx, hy, hz } } : {};

@@ -143,6 +143,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/api/v1/imports/[id]/route.ts': { GET: 'token' },
   'app/api/v1/programs/[program]/baselines/route.ts': { GET: 'token baselines.read' },
   'app/api/v1/programs/[program]/baselines/[number]/route.ts': { GET: 'token baselines.read' },
+  'app/api/v1/programs/[program]/baselines/[number]/csv/route.ts': { GET: 'token baselines.read' },
   'app/api/v1/programs/[program]/baselines/[number]/conditions/[condition]/route.ts': {
     GET: 'token baselines.read',
   },

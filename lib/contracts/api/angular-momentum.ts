@@ -1,7 +1,13 @@
 import { z } from 'zod';
 import { documentConventions, headMembers } from '@/lib/contracts/api/baseline-document';
 import documentExample from '@/lib/contracts/api/baseline-example.json';
-import { baselinePath, buildParameter } from '@/lib/contracts/api/baseline-parameters';
+import {
+  baselinePath,
+  buildParameter,
+  ETAG,
+  ifNoneMatch,
+  NOT_MODIFIED,
+} from '@/lib/contracts/api/baseline-parameters';
 import { type Endpoint } from '@/lib/contracts/api/endpoint';
 import { unitsParameter } from '@/lib/contracts/api/members';
 import { momentumMembers } from '@/lib/contracts/api/momentum-members';
@@ -20,7 +26,7 @@ export const momentumQuery = z
     units: unitsParameter,
     point: z.string().optional().describe('Code of an operating point of the baseline'),
     'shaft.NAME': z
-      .never()
+      .string()
       .optional()
       .describe(
         'Instead of `point`: the speed in rpm of the shaft NAME, once for every shaft of the baseline',
@@ -61,6 +67,7 @@ export const angularMomentumEndpoint = {
   scope: 'baselines:read',
   pathParameters: baselinePath,
   query: momentumQuery,
+  headers: ifNoneMatch,
   answers: {
     200: {
       description: 'h and G',
@@ -78,7 +85,9 @@ export const angularMomentumEndpoint = {
         operatingPoint: code,
         ...momentum,
       },
+      headers: ETAG,
     },
   },
+  bare: NOT_MODIFIED,
   problems: ['not-found', 'forbidden', 'gone', 'invalid-input'],
 } as const satisfies Endpoint;

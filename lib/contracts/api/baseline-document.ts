@@ -83,21 +83,12 @@ export const baselineDocumentSchema = z
     conventions: documentConventions,
     referencePoints: z.array(z.object({ code: z.string(), airframe: placeSchema })),
     conditions: z.array(conditionSchema),
-    operatingPoints: z.array(
-      z.object({
-        code: z.string(),
-        ...momentumMembers,
-        sigma: z
-          .object({ hx: z.number(), hy: z.number(), hz: z.number() })
-          .optional()
-          .describe('One standard deviation of the angular momentum; absent where nothing states any'),
-      }),
-    ),
+    operatingPoints: z.array(z.object({ code: z.string(), ...momentumMembers })),
     findings: z.array(
       z.object({
         rule: z.string(),
         severity: z.enum(['warning', 'note']),
-        message: z.string(),
+        message: z.string().describe('What was seen, in a sentence; figures in it are SI, with any `units`'),
         answer: z.string().optional().describe("The submitter's answer to a warning"),
       }),
     ),

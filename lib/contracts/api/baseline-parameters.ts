@@ -19,5 +19,5 @@ export const ifNoneMatch = z.object({
     .describe('The ETag of the answer at hand: 304 if nothing has changed'),
 });
 
-export const ETAG = { ETag: 'Strong: over the digest, the state and the units of the answer' } as const;
+export const ETAG = { ETag: 'Strong: over the digest, the state, what was asked for and its units' } as const;
 export const NOT_MODIFIED = { 304: 'Nothing has changed since the answer with that ETag' } as const;

@@ -22,6 +22,8 @@ export interface Answer {
   readonly description: string;
   readonly schema: z.ZodType;
   readonly example: unknown;
+  /** JSON unless said; the schema of another type is that of its text. */
+  readonly type?: 'text/csv';
   /** Headers of its own and what they say. */
   readonly headers?: Readonly<Record<string, string>>;
 }

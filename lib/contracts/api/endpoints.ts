@@ -1,5 +1,6 @@
 import { angularMomentumEndpoint } from '@/lib/contracts/api/angular-momentum';
 import { baselineConditionEndpoint } from '@/lib/contracts/api/baseline-condition';
+import { baselineCsvEndpoint } from '@/lib/contracts/api/baseline-csv';
 import { baselineEndpoint } from '@/lib/contracts/api/baseline-document';
 import { baselineListEndpoint } from '@/lib/contracts/api/baseline-list';
 import { type Endpoint } from '@/lib/contracts/api/endpoint';
@@ -18,6 +19,7 @@ export const ENDPOINTS: readonly Endpoint[] = [
   baselineListEndpoint,
   baselineEndpoint,
   baselineConditionEndpoint,
+  baselineCsvEndpoint,
   angularMomentumEndpoint,
   saveListEndpoint,
   addRevisionEndpoint,

@@ -13,6 +13,10 @@ export const momentumMembers = {
     .array(z.array(z.number()).length(3))
     .length(3)
     .describe('G with G w = h × w: [[0, -hz, hy], [hz, 0, -hx], [-hy, hx, 0]]; unit of angular momentum'),
+  sigma: z
+    .object({ hx: z.number(), hy: z.number(), hz: z.number() })
+    .optional()
+    .describe('One standard deviation of the angular momentum; absent where nothing states any'),
   rotors: z.array(
     z.object({
       rotor: z.string(),

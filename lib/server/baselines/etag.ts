@@ -10,9 +10,12 @@ export function etagOf(
   return `"${createHash('sha256').update(text).digest('base64url')}"`;
 }
 
+/** Opaque tags with their quotes (RFC 9110, 8.8.3); a weak one without its `W/`. */
+const TAGS = /"[\x21\x23-\x7e\x80-\xff]*"/g;
+
 /** Whether If-None-Match names this ETag (RFC 9110, 13.1.2: weak comparison, a list, or `*`). */
 export function matches(ifNoneMatch: string | null, etag: string): boolean {
   if (ifNoneMatch === null) return false;
-  const named = ifNoneMatch.split(',').map((one) => one.trim().replace(/^W\//, ''));
-  return named.includes('*') || named.includes(etag);
+  const named: readonly string[] = ifNoneMatch.match(TAGS) ?? [];
+  return ifNoneMatch.trim() === '*' || named.includes(etag);
 }

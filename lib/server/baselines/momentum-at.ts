@@ -1,17 +1,18 @@
 import { type Db } from '@/db/client';
-import { pointMember } from '@/lib/baselines/handoff-document';
+import { pointMember, sigmaOfPoint } from '@/lib/baselines/handoff-document';
+import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { rpmSchema, shaftOf } from '@/lib/contracts/api/angular-momentum';
 import { type InputError } from '@/lib/errors';
 import { angularMomentum, shaftsWithoutSpeed } from '@/lib/rotors/momentum';
 import { type ShaftSpeed } from '@/lib/rotors/rotor';
+import { momentumUncertainty } from '@/lib/rotors/uncertainty';
 import { parametersWrong } from '@/lib/server/api/read-query';
 import { radiansPerSecond } from '@/lib/units/convert';
-import { documentOf } from './answer';
 import { type SignedBaseline } from './reach-baseline';
 
 /**
  * h and G of a baseline's rotating parts: at one of its operating points as it was signed, or at the speeds of `shaft.NAME=rpm`
- * parameters, computed from the frozen rotors.
+ * parameters, computed from the frozen rotors; such a speed counts as certain.
  * @throws AppError invalid-input for both or neither, for an unknown point or shaft, and for a shaft without a speed.
  */
 export async function momentumAt(
@@ -33,7 +34,7 @@ export async function momentumAt(
 }
 
 function atPoint(baseline: SignedBaseline, code: string) {
-  const { operatingPoints } = documentOf(baseline);
+  const { operatingPoints } = readStoredDocument(baseline.document);
   const found = operatingPoints.find((one) => one.code === code);
   if (found === undefined) {
     const known = operatingPoints.map((one) => one.code).join(', ') || 'none';
@@ -46,7 +47,7 @@ function atPoint(baseline: SignedBaseline, code: string) {
 async function atSpeeds(
   db: Db,
   baseline: SignedBaseline,
-  given: readonly { readonly name: string; readonly shaft: string; readonly value: string }[],
+  asked: readonly { readonly name: string; readonly shaft: string; readonly value: string }[],
 ) {
   const { result, rotors } = await db
     .selectFrom('submissions')
@@ -57,7 +58,7 @@ async function atSpeeds(
   const parts = rotors ?? [];
   const shafts = new Set(parts.map(({ shaft }) => shaft));
   const errors: InputError[] = [];
-  const speeds: ShaftSpeed[] = given.flatMap(({ name, shaft, value }) => {
+  const speeds: ShaftSpeed[] = asked.flatMap(({ name, shaft, value }) => {
     const rpm = rpmSchema.safeParse(value);
     if (!shafts.has(shaft))
       errors.push({ parameter: name, message: `Shafts: ${[...shafts].join(', ') || 'none'}.` });
@@ -66,9 +67,8 @@ async function atSpeeds(
     else return [{ shaft, speed: radiansPerSecond(rpm.data), sigma: null }];
     return [];
   });
-  for (const shaft of shaftsWithoutSpeed(parts, {
-    speeds: given.map((one) => ({ ...one, speed: 0, sigma: null })),
-  }))
+  const named = asked.map(({ shaft }) => ({ shaft, speed: 0, sigma: null }));
+  for (const shaft of shaftsWithoutSpeed(parts, { speeds: named }))
     errors.push({
       parameter: `shaft.${shaft}`,
       message: 'Give the speed of this shaft in rpm, or name a point instead.',
@@ -76,9 +76,9 @@ async function atSpeeds(
   if (parts.length === 0)
     errors.push({ parameter: 'point', message: 'This baseline has no rotating parts.' });
   if (errors.length > 0) throw parametersWrong(errors);
-  const { code: _, ...momentum } = pointMember({
-    code: '',
-    momentum: angularMomentum(parts, { code: 'given', speeds }, result.geometry),
-  });
-  return { operatingPoint: null, ...momentum };
+  const given = { code: 'given', speeds };
+  const momentum = angularMomentum(parts, given, result.geometry);
+  const uncertainty = momentumUncertainty(parts, given, result.geometry);
+  const { code: _, ...members } = pointMember({ code: given.code, momentum });
+  return { operatingPoint: null, ...members, ...sigmaOfPoint({ momentum, uncertainty }) };
 }

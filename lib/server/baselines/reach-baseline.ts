@@ -17,8 +17,13 @@ export async function reachBaseline(
   const baseline = /^[1-9]\d{0,8}$/.test(named.number)
     ? await findBaseline(db, programId, Number(named.number))
     : undefined;
-  if (baseline === undefined || (named.build !== undefined && named.build !== baseline.build_code))
-    throw new AppError('not-found', 'There is no such baseline.');
+  if (baseline === undefined)
+    throw new AppError('not-found', 'There is no such baseline. Name a number, or current.');
+  if (named.build !== undefined && named.build !== baseline.build_code)
+    throw new AppError(
+      'not-found',
+      `Baseline ${baseline.number} is of the build ${baseline.build_code}, not of ${named.build}.`,
+    );
   return baseline;
 }
 

@@ -21,7 +21,9 @@ interface Call {
 export interface Answered {
   readonly status: number;
   readonly headers: Headers;
+  /** Empty where the answer is no JSON. */
   readonly body: Record<string, unknown>;
+  readonly text: string;
 }
 
 type Route<P> = (request: Request, context: { params: Promise<P> }) => Promise<Response>;
@@ -36,10 +38,12 @@ export function callerOfEndpoint<P>(endpoint: Endpoint, route: Route<P>) {
     const response = await route(requestOf(endpoint, said), {
       params: Promise.resolve((said.params ?? {}) as P),
     });
-    const body = (await response.json()) as Record<string, unknown>;
-    expectDocumented(endpoint, response, body);
+    const text = await response.text();
+    const isJson = response.headers.get('content-type')?.includes('json') === true;
+    const body = isJson ? (JSON.parse(text) as Record<string, unknown>) : {};
+    expectDocumented(endpoint, response, isJson ? body : text);
     seen.add(response.status);
-    return { status: response.status, headers: response.headers, body };
+    return { status: response.status, headers: response.headers, body, text };
   };
   return { call, seen };
 }
@@ -47,7 +51,7 @@ export function callerOfEndpoint<P>(endpoint: Endpoint, route: Route<P>) {
 /** Statuses that the endpoint documents; 500 is of faults that are not known. */
 export function documentedStatuses(endpoint: Endpoint): number[] {
   const failures = problemCodesOf(endpoint).map((code) => ERROR_CODES[code].status);
-  const all = new Set([...Object.keys(endpoint.answers).map(Number), ...failures]);
+  const all = new Set([...Object.keys({ ...endpoint.answers, ...endpoint.bare }).map(Number), ...failures]);
   return [...all].filter((status) => status !== 500).sort((a, b) => a - b);
 }
 
@@ -74,8 +78,14 @@ function requestOf(endpoint: Endpoint, { params = {}, query, token, body, header
 function expectDocumented(endpoint: Endpoint, response: Response, body: unknown): void {
   const answer = endpoint.answers[response.status];
   if (answer) {
-    expect(response.headers.get('content-type')).toMatch(/^application\/json/);
+    const type = response.headers.get('content-type')?.split(';')[0];
+    expect(type).toBe(answer.type ?? 'application/json');
     expect(answer.schema.parse(body)).toEqual(body);
+    for (const name of Object.keys(answer.headers ?? {})) expect(response.headers.get(name), name).not.toBeNull();
+    return;
+  }
+  if (endpoint.bare?.[response.status] !== undefined) {
+    expect([body, response.headers.get('content-type')]).toEqual(['', null]);
     return;
   }
   expect(response.headers.get('content-type')).toBe('application/problem+json');

@@ -37,7 +37,7 @@ export function responsesOf(endpoint: Endpoint, book: SchemaBook): Json {
 }
 
 function answered(
-  { description, schema, example, headers = {} }: Answer,
+  { description, schema, example, type, headers = {} }: Answer,
   metered: boolean,
   book: SchemaBook,
 ): Json {
@@ -48,7 +48,7 @@ function answered(
   return {
     description,
     headers: { ...(metered ? RATE_HEADERS : {}), ...Object.fromEntries(own) },
-    content: { 'application/json': { schema: book.of(schema, 'output'), example } },
+    content: { [type ?? 'application/json']: { schema: book.of(schema, 'output'), example } },
   };
 }
 

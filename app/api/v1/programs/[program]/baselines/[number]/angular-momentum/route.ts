@@ -1,13 +1,8 @@
 import { inUnits } from '@/lib/baselines/document-units';
-import {
-  angularMomentumEndpoint,
-  angularMomentumSchema,
-  momentumQuery,
-  shaftOf,
-} from '@/lib/contracts/api/angular-momentum';
+import { readStoredDocument } from '@/lib/baselines/stored-document';
+import { angularMomentumEndpoint, momentumQuery, shaftOf } from '@/lib/contracts/api/angular-momentum';
 import { parametersWrong, readQuery } from '@/lib/server/api/read-query';
-import { respond } from '@/lib/server/api/respond';
-import { documentOf, headOf } from '@/lib/server/baselines/answer';
+import { headOf, keepable } from '@/lib/server/baselines/answer';
 import { momentumAt } from '@/lib/server/baselines/momentum-at';
 import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
@@ -28,7 +23,10 @@ export const GET = apiProgramRoute<{ program: string; number: string }>(
     const { build, units, ...rest } = query;
     const baseline = await reachBaseline(serverDb(), program.id, { number: params.number, build });
     const momentum = await momentumAt(serverDb(), baseline, rest);
-    const answer = { ...headOf(baseline, documentOf(baseline)), ...momentum };
-    return respond(angularMomentumEndpoint, 200, angularMomentumSchema.parse(inUnits(answer, units)));
+    const speeds = JSON.stringify(Object.entries(rest).sort(([a], [b]) => (a < b ? -1 : 1)));
+    return keepable(request, baseline, `angular momentum ${units} ${speeds}`, () => {
+      const head = headOf(baseline, readStoredDocument(baseline.document));
+      return JSON.stringify(inUnits({ ...head, ...momentum }, units));
+    });
   },
 );

@@ -1,9 +1,10 @@
 import { inUnits } from '@/lib/baselines/document-units';
+import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { baselineConditionEndpoint } from '@/lib/contracts/api/baseline-condition';
 import { baselineQuery } from '@/lib/contracts/api/baseline-document';
 import { AppError } from '@/lib/errors';
 import { readQuery } from '@/lib/server/api/read-query';
-import { documentOf, headOf, keepable } from '@/lib/server/baselines/answer';
+import { headOf, keepable } from '@/lib/server/baselines/answer';
 import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
@@ -15,7 +16,7 @@ export const GET = apiProgramRoute<{ program: string; number: string; condition:
   async ({ request, params, program }) => {
     const { build, units } = readQuery(request, baselineQuery);
     const baseline = await reachBaseline(serverDb(), program.id, { number: params.number, build });
-    const document = documentOf(baseline);
+    const document = readStoredDocument(baseline.document);
     const condition = document.conditions.find(({ code }) => code === params.condition);
     if (condition === undefined)
       throw new AppError(
