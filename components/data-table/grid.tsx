@@ -54,7 +54,9 @@ export function Grid<Row>(props: GridProps<Row>) {
   const first = printing ? 0 : rowWindow.first;
   const last = printing ? body.length : rowWindow.last;
   const { onWindow } = props;
-  useEffect(() => onWindow?.(first, last), [onWindow, first, last]);
+  useEffect(() => {
+    onWindow?.(first, last);
+  }, [onWindow, first, last]);
   const width = useMemo(() => columns.reduce((sum, column) => sum + columnWidth(column), 0), [columns]);
 
   const go = (next: Selection) => {

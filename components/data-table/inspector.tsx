@@ -14,7 +14,9 @@ export function Inspector({
   const box = useRef<HTMLElement>(null);
   const close = useRef(onClose);
   // Below the table on a narrow page it would open out of sight.
-  useEffect(() => box.current?.scrollIntoView({ block: 'nearest' }), []);
+  useEffect(() => {
+    void box.current?.scrollIntoView({ block: 'nearest' });
+  }, []);
   useEffect(() => {
     close.current = onClose;
   });
