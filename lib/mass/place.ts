@@ -1,12 +1,13 @@
-import { listToAirframe, placeFrom } from '@/lib/frames/pose';
-import { type Moments, tensorOf } from '@/lib/frames/products';
-import { lateralIndex, mirrorPlace, mirrorSym } from '@/lib/frames/reflection';
-import { type AirframeVec, type In } from '@/lib/frames/tags';
+import { type AirframeTwice, exactPlaceFrom, listToAirframe, placeFrom } from '@/lib/frames/pose';
+import { tensorOf } from '@/lib/frames/products';
+import { lateralIndex, mirrorSym } from '@/lib/frames/reflection';
+import { type AirframeVec } from '@/lib/frames/tags';
 import { type Mat3, multiply } from '@/lib/numerics/mat3';
 import { rotation } from '@/lib/numerics/rotation';
-import { type Sym3, ZERO_SYM, congruence, halfTraceMinus, scaleSym } from '@/lib/numerics/sym3';
+import { ZERO_SYM, congruence, halfTraceMinus } from '@/lib/numerics/sym3';
+import { type Twice, addTwice, minusTwice, timesTwice } from '@/lib/numerics/twice';
 
-import { type Account, accountOfBody, addAccounts } from './account';
+import { type Account, accountAt, addAccounts, scaleAccount } from './account';
 import { type Component } from './component';
 import { type ListDeclarations } from './declarations';
 import { type AirframeGeometry } from './geometry';
@@ -49,18 +50,15 @@ export class Placement {
   }
 
   /** Lateral coordinate, from r0, of the plane of symmetry, m. */
-  get plane(): number {
+  get plane(): Twice {
     const { reference, lateralPlane } = this.geometry;
-    return lateralPlane - reference[this.lateral];
+    return addTwice([lateralPlane, 0], [-reference[this.lateral], 0]);
   }
 
-  /** R S Rᵀ: the second moment, in airframe components, of moments stated in the axes of a row. */
-  own({ orientation }: Pick<Component, 'orientation'>, moments: Moments): In<'airframe', Sym3> {
-    const { yaw, pitch, roll } = orientation;
-    return congruence(
-      multiply(this.toAirframe, rotation(yaw, pitch, roll)),
-      halfTraceMinus(tensorOf(moments)),
-    );
+  /** The matrix from a row's own axes to airframe components. */
+  ownAxes({ orientation: { yaw, pitch, roll } }: Pick<Component, 'orientation'>): Mat3 {
+    if (yaw === 0 && pitch === 0 && roll === 0) return this.toAirframe;
+    return multiply(this.toAirframe, rotation(yaw, pitch, roll));
   }
 
   /**
@@ -69,13 +67,24 @@ export class Placement {
    */
   account(component: Placed): Account {
     const { mass, moments, quantity } = component;
-    const place = this.place(component);
-    const own = hasOwnMoments(moments) ? this.own(component, moments) : ZERO_SYM;
-    const pieces = accountOfBody(quantity * mass, place, scaleSym(quantity, own));
-    if (!isMirrored(component, this.declarations)) return pieces;
-    const across = mirrorPlace(place, this.lateral, this.plane);
-    const image = mirrorSym(own, this.lateral);
-    return addAccounts(pieces, accountOfBody(quantity * mass, across, scaleSym(quantity, image)));
+    const { reference } = this.geometry;
+    const { origin } = this.declarations.pose;
+    const place = exactPlaceFrom(reference, this.toAirframe, origin, component.position);
+    const own = hasOwnMoments(moments)
+      ? congruence(this.ownAxes(component), halfTraceMinus(tensorOf(moments)))
+      : ZERO_SYM;
+    const piece = accountAt(mass, place, own);
+    if (!isMirrored(component, this.declarations))
+      return quantity === 1 ? piece : scaleAccount(quantity, piece);
+    const image = accountAt(mass, this.#mirrored(place), mirrorSym(own, this.lateral));
+    return scaleAccount(quantity, addAccounts(piece, image));
+  }
+
+  #mirrored(place: AirframeTwice): AirframeTwice {
+    const twicePlane = timesTwice([2, 0], this.plane);
+    const across = (k: 0 | 1 | 2): Twice =>
+      k === this.lateral ? addTwice(twicePlane, minusTwice(place[k])) : place[k];
+    return [across(0), across(1), across(2)];
   }
 }
 

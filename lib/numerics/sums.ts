@@ -1,5 +1,5 @@
 /** a + b = sum + error exactly (Knuth, TAOCP vol. 2, 4.2.2). */
-function sumError(a: number, b: number, sum: number): number {
+export function sumError(a: number, b: number, sum: number): number {
   const bRounded = sum - a;
   return a - (sum - bRounded) + (b - bRounded);
 }
@@ -8,7 +8,7 @@ function sumError(a: number, b: number, sum: number): number {
 const SPLITTER = 134217729;
 
 /** a b = product + error exactly (Dekker 1971), as long as no term over- or underflows. */
-function productError(a: number, b: number, product: number): number {
+export function productError(a: number, b: number, product: number): number {
   const aShift = SPLITTER * a;
   const aHigh = aShift - (aShift - a);
   const aLow = a - aHigh;
@@ -39,6 +39,11 @@ export class CompensatedSum {
   get value(): number {
     return this.#sum + this.#lost;
   }
+
+  /** What `value` leaves out: value and rest are the sum to twice the precision. */
+  get rest(): number {
+    return sumError(this.#sum, this.#lost, this.value);
+  }
 }
 
 /** The same for several running sums that always grow together: `length` numbers at a time. */
@@ -51,19 +56,30 @@ export class CompensatedSums {
     this.#lost = new Float64Array(length);
   }
 
-  /** Adds k times each term; the product is rounded. */
-  add(terms: ArrayLike<number>, k = 1): void {
+  /** Adds k times each term without rounding the product; `rest` is what rounding left out of the terms. */
+  add(terms: ArrayLike<number>, k = 1, rest?: ArrayLike<number>): void {
     const [sums, lost] = [this.#sums, this.#lost];
     for (let i = 0; i < sums.length; i += 1) {
-      const before = sums[i] ?? NaN;
-      const term = k * (terms[i] ?? NaN);
+      const [before, factor] = [sums[i] ?? NaN, terms[i] ?? NaN];
+      const term = k * factor;
       const sum = before + term;
-      lost[i] = (lost[i] ?? NaN) + sumError(before, term, sum);
+      let error = sumError(before, term, sum);
+      if (k !== 1) error += productError(k, factor, term);
+      if (rest !== undefined) error += k * (rest[i] ?? NaN);
+      lost[i] = (lost[i] ?? NaN) + error;
       sums[i] = sum;
     }
   }
 
   get values(): number[] {
     return Array.from(this.#sums, (sum, i) => sum + (this.#lost[i] ?? NaN));
+  }
+
+  /** What `values` leave out: values and rests are the sums to twice the precision. */
+  get rests(): number[] {
+    return Array.from(this.#sums, (sum, i) => {
+      const lost = this.#lost[i] ?? NaN;
+      return sumError(sum, lost, sum + lost);
+    });
   }
 }

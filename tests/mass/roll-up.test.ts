@@ -1,7 +1,15 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
-import { type Account, AccountSum, fromNumbers, scaleAccount, toNumbers } from '@/lib/mass/account';
+import {
+  type Account,
+  AccountSum,
+  fromNumbers,
+  scaleAccount,
+  toNumbers,
+  toNumbersWithRest,
+  NOTHING,
+} from '@/lib/mass/account';
 import { type Component } from '@/lib/mass/component';
 import { Placement, piecesOf } from '@/lib/mass/place';
 import { resultOf } from '@/lib/mass/result';
@@ -67,9 +75,10 @@ describe('the subtotals of a list', () => {
     expect(subtotals.map(({ rows }) => rows)).toEqual([2, 1, 1, 1, 1]);
   });
 
-  it('come back from storage as the ten numbers they were', () => {
+  it('come back from storage as the ten numbers they were, and what rounding left out of them', () => {
     for (const { basic } of booked([aComponent({ mass: 3.3, position: [1, 2, 3] })]))
-      expect(fromNumbers(JSON.parse(JSON.stringify(toNumbers(basic))))).toEqual(basic);
+      expect(fromNumbers(JSON.parse(JSON.stringify(toNumbersWithRest(basic))))).toEqual(basic);
+    expect(toNumbersWithRest(fromNumbers(toNumbers(NOTHING)))).toHaveLength(10);
     expect(() => fromNumbers([1, 2, 3])).toThrow(/ten finite numbers/);
   });
 });

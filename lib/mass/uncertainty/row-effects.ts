@@ -1,11 +1,19 @@
-import { type Moments, NO_MOMENTS } from '@/lib/frames/products';
+import { type Moments, NO_MOMENTS, tensorOf } from '@/lib/frames/products';
 import { mirrorSym } from '@/lib/frames/reflection';
 import { type AirframeVec } from '@/lib/frames/tags';
-import { type Account, accountOfBody, addAccounts, scaleAccount } from '@/lib/mass/account';
+import { type Account, toNumbers } from '@/lib/mass/account';
 import { type Component, type ComponentSigma } from '@/lib/mass/component';
 import { type Placement, isMirrored } from '@/lib/mass/place';
-import { addSym, outer, scaleSym, symmetricProduct } from '@/lib/numerics/sym3';
-import { addVec, scaleVec } from '@/lib/numerics/vec3';
+import {
+  type Sym3,
+  addSym,
+  congruence,
+  halfTraceMinus,
+  outer,
+  scaleSym,
+  symmetricProduct,
+} from '@/lib/numerics/sym3';
+import { ZERO_VEC, addVec, scaleVec } from '@/lib/numerics/vec3';
 
 type Uncertain = Pick<
   Component,
@@ -30,11 +38,14 @@ function scalingWithMass({ mass, moments }: Uncertain, sigma: ComponentSigma): M
   };
 }
 
+/** A change of an account, or an account, of which rounding is of no interest. */
+type Change = Omit<Account, 'rest'>;
+
 /**
  * The mirror image, across lateral = `plane` (m, from r0), of an account, or of a change of one: places are r' = F r + 2 L n, so
  * p' = F p + 2 L m n and Q' = F Q F + 2 L (n (F p)ᵀ + F p nᵀ) + 4 L² m n nᵀ.
  */
-function mirrored(a: Account, lateral: 0 | 1 | 2, plane: number): Account {
+function mirrored(a: Change, lateral: 0 | 1 | 2, plane: number): Change {
   const across = (k: 0 | 1 | 2): number => (k === lateral ? -a.first[k] : a.first[k]);
   const flipped: AirframeVec = [across(0), across(1), across(2)];
   const n: AirframeVec = [lateral === 0 ? 1 : 0, lateral === 1 ? 1 : 0, lateral === 2 ? 1 : 0];
@@ -47,28 +58,32 @@ function mirrored(a: Account, lateral: 0 | 1 | 2, plane: number): Account {
 }
 
 /**
- * For each value of a row that has a σ, what one σ of it does to the row's account about r0, to first order: σ ∂(m, p, Q)/∂value. The
- * values are mass, the coordinates in list axes and the own moments in component axes. Each error is shared by all pieces and by the
- * mirror image, so their changes are added before anything is squared.
+ * For each value of a row that has a σ, what one σ of it does to the ten numbers of the row's account about r0, to first order:
+ * σ ∂(m, p, Q)/∂value. The values are mass, the coordinates in list axes and the own moments in component axes. Each error is shared by
+ * all pieces and by the mirror image, so their changes are added before anything is squared.
  */
-export function effectsOf(component: Uncertain, placement: Placement): Account[] {
+export function effectsOf(component: Uncertain, placement: Placement): number[][] {
   const { mass, sigma, quantity } = component;
   if (sigma === null) return [];
-  const effects: Account[] = [];
+  const effects: number[][] = [];
   const place = placement.place(component);
-  const allPieces = (one: Account): Account =>
-    isMirrored(component, placement.declarations)
-      ? addAccounts(one, mirrored(one, placement.lateral, placement.plane))
-      : one;
-  const note = (deviation: number | null, derivative: () => Account): void => {
+  const ownAxes = placement.ownAxes(component);
+  const own = (moments: Moments): Sym3 => congruence(ownAxes, halfTraceMinus(tensorOf(moments)));
+  const both = isMirrored(component, placement.declarations);
+  const note = (deviation: number | null, derivative: () => Change): void => {
     if (deviation === null || deviation === 0) return;
-    effects.push(scaleAccount(quantity * deviation, allPieces(derivative())));
+    const piece = derivative();
+    const one = toNumbers(piece);
+    const image = both ? toNumbers(mirrored(piece, placement.lateral, placement.plane[0])) : null;
+    const k = quantity * deviation;
+    effects.push(one.map((part, i) => k * (part + (image?.[i] ?? 0))));
   };
 
-  note(sigma.mass, () => {
-    const moments = scalingWithMass(component, sigma);
-    return accountOfBody(1, place, placement.own(component, moments));
-  });
+  note(sigma.mass, () => ({
+    mass: 1,
+    first: place,
+    second: addSym(own(scalingWithMass(component, sigma)), outer(place)),
+  }));
   COORDINATES.forEach((coordinate, k) =>
     note(sigma[coordinate], () => {
       const [x, y, z] = placement.toAirframe;
@@ -83,8 +98,8 @@ export function effectsOf(component: Uncertain, placement: Placement): Account[]
   for (const element of ELEMENTS)
     note(sigma[element], () => ({
       mass: 0,
-      first: [0, 0, 0],
-      second: placement.own(component, { ...NO_MOMENTS, [element]: 1 }),
+      first: ZERO_VEC,
+      second: own({ ...NO_MOMENTS, [element]: 1 }),
     }));
   return effects;
 }

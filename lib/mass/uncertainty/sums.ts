@@ -1,4 +1,3 @@
-import { type Account, toNumbers as accountNumbers } from '@/lib/mass/account';
 import { CompensatedSums } from '@/lib/numerics/sums';
 
 /** Numbers of an account, and rows of its covariance matrix. */
@@ -24,23 +23,30 @@ export interface AccountUncertainty {
   readonly covariance: readonly number[];
 }
 
+/** The same, as it may be added. */
+type Summand = Omit<AccountUncertainty, 'covariance'> & { readonly covariance: ArrayLike<number> };
+
 export const CERTAIN: AccountUncertainty = {
   mass: 0,
   massWithSigma: 0,
   covariance: Array.from({ length: TRIANGLE }, () => 0),
 };
 
-/** Upper triangle by rows of Σ a aᵀ over some changes of an account. */
-export function covarianceOf(effects: readonly Account[]): number[] {
-  const triangle = Array.from({ length: TRIANGLE }, () => 0);
-  for (const effect of effects) {
-    const a = accountNumbers(effect);
-    let at = 0;
-    for (let i = 0; i < ACCOUNT_LENGTH; i += 1)
-      for (let j = i; j < ACCOUNT_LENGTH; j += 1) {
-        triangle[at] = (triangle[at] ?? NaN) + (a[i] ?? NaN) * (a[j] ?? NaN);
-        at += 1;
-      }
+/** Upper triangle by rows of Σ a aᵀ over some changes of an account's numbers. */
+export function covarianceOf(effects: readonly (readonly number[])[]): Float64Array {
+  const triangle = new Float64Array(TRIANGLE);
+  for (const a of effects) {
+    let row = 0;
+    for (let i = 0; i < ACCOUNT_LENGTH; i += 1) {
+      const left = a[i] ?? NaN;
+      // Own moments move nothing but Q, places no mass.
+      if (left !== 0)
+        for (let j = i; j < ACCOUNT_LENGTH; j += 1) {
+          const at = row + j - i;
+          triangle[at] = (triangle[at] ?? NaN) + left * (a[j] ?? NaN);
+        }
+      row += ACCOUNT_LENGTH - i;
+    }
   }
   return triangle;
 }
@@ -85,7 +91,7 @@ export class UncertaintySum {
   readonly #covariance = new CompensatedSums(TRIANGLE);
 
   /** Adds that of k times an account, as growth makes it: masses with k, variances with k². */
-  add({ mass, massWithSigma, covariance }: AccountUncertainty, k = 1): void {
+  add({ mass, massWithSigma, covariance }: Summand, k = 1): void {
     this.#masses.add([mass, massWithSigma], Math.abs(k));
     this.#covariance.add(covariance, k * k);
   }
