@@ -56,7 +56,7 @@ export interface ConfigurationResult {
  * has no angular momentum and is left out: the findings name it.
  */
 export function evaluateConfiguration(input: ConfigurationInput): ConfigurationResult {
-  const { geometry, allowances, subtotals, conditions, rotors, points } = input;
+  const { geometry, allowances, conditions, rotors, points } = input;
   return {
     geometry,
     allowances,

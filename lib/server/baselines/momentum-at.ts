@@ -79,6 +79,12 @@ async function atSpeeds(
   const given = { code: 'given', speeds };
   const momentum = angularMomentum(parts, given, result.geometry);
   const uncertainty = momentumUncertainty(parts, given, result.geometry);
-  const { code: _, ...members } = pointMember({ code: given.code, momentum });
-  return { operatingPoint: null, ...members, ...sigmaOfPoint({ momentum, uncertainty }) };
+  const { angularMomentum: h, gyroMatrix, rotors: each } = pointMember({ code: given.code, momentum });
+  return {
+    operatingPoint: null,
+    angularMomentum: h,
+    gyroMatrix,
+    rotors: each,
+    ...sigmaOfPoint({ momentum, uncertainty }),
+  };
 }

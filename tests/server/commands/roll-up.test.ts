@@ -6,10 +6,10 @@ const ROOT = path.join(import.meta.dirname, '../../..');
 
 /** Runs the command with an environment that names no service at all. */
 function rollUp(...words: string[]) {
-  const { PATH = '' } = process.env;
+  const env: NodeJS.ProcessEnv = { NODE_ENV: 'production', PATH: process.env['PATH'] };
   return spawnSync(process.execPath, ['--import', 'tsx', 'lib/server/commands/roll-up.ts', ...words], {
     cwd: ROOT,
-    env: { PATH },
+    env,
     encoding: 'utf8',
   });
 }
