@@ -1,4 +1,5 @@
 import { type CellValue, type DataColumn } from '@/components/data-table/column';
+import { itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
 import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
 import { type SortColumn } from '@/lib/contracts/list-view';
 import { type ListColumn } from '@/lib/ingest/mass-list/columns';
@@ -7,13 +8,12 @@ import { unitLabel } from '@/lib/units/names';
 
 type RowColumn = DataColumn<ListRow> & { readonly id: Exclude<SortColumn, 'position'> };
 
-/** The columns of the rows of a list: figures as the list states them, its units and axes in the heads. */
-export function rowColumns({
-  massUnit,
-  lengthUnit,
-  inertiaUnit,
-  axes,
-}: ListDeclarations): readonly RowColumn[] {
+/** The columns of the rows of a list: figures as the list states them, its units and axes in the heads, edited rows marked. */
+export function rowColumns(
+  { massUnit, lengthUnit, inertiaUnit, axes }: ListDeclarations,
+  edits: readonly RowEdit[],
+): readonly RowColumn[] {
+  const edited = new Map(edits.map((edit) => [itemOfEdit(edit), edit.kind]));
   const value =
     (column: ListColumn) =>
     (row: ListRow): CellValue =>
@@ -42,7 +42,7 @@ export function rowColumns({
   });
   const [mass, length, inertia] = [unitLabel(massUnit), unitLabel(lengthUnit), unitLabel(inertiaUnit)];
   return [
-    text('item', 'Item', 152),
+    { ...text('item', 'Item', 152), cell: (row) => <ItemCell row={row} edited={edited} /> },
     text('description', 'Description', 224),
     text('group', 'Group', 176),
     text('part_number', 'Part number', 152),
@@ -61,6 +61,25 @@ export function rowColumns({
     text('maturity', 'Maturity', 88),
     number('growth_percent', 'Growth', '%', 2, 96),
   ];
+}
+
+function ItemCell({
+  row,
+  edited,
+}: {
+  readonly row: ListRow;
+  readonly edited: ReadonlyMap<string, RowEdit['kind']>;
+}) {
+  const item = String(row.cells.item ?? '');
+  const edit = edited.get(item);
+  return (
+    <span className="flex items-baseline gap-2" title={item}>
+      <span className={edit === 'remove' ? 'truncate line-through' : 'truncate'}>{item}</span>
+      {edit === undefined ? null : (
+        <span className="ml-auto text-note text-caution">{edit === 'remove' ? 'goes' : 'edited'}</span>
+      )}
+    </span>
+  );
 }
 
 /** What stands under the columns: sums, and the CG under the coordinates. */

@@ -79,14 +79,16 @@ export function RowForm({
           ))}
         </FieldGroup>
       )}
-      <Actions>
-        <Button kind="secondary" type="submit">
-          {isNew ? 'Add to the edits' : 'Keep the edit'}
-        </Button>
-        <Button kind="quiet" onClick={onLeave}>
-          Leave without
-        </Button>
-      </Actions>
+      <div className="sticky bottom-0 z-10 border-t border-ink-2 bg-paper py-2">
+        <Actions>
+          <Button kind="secondary" type="submit">
+            {isNew ? 'Add to the edits' : 'Keep the edit'}
+          </Button>
+          <Button kind="quiet" onClick={onLeave}>
+            Leave without
+          </Button>
+        </Actions>
+      </div>
     </form>
   );
 }

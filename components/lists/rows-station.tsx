@@ -41,6 +41,7 @@ export interface RowsStationProps {
   readonly mayEdit: boolean;
 }
 
+const NO_EDITS: readonly RowEdit[] = [];
 const NEW_ROW = '\u0000new';
 
 /** The rows of a revision: looked through, opened, edited; edits gather until they are saved as the next revision. */
@@ -65,11 +66,6 @@ export function RowsStation(props: RowsStationProps) {
   const filtered = isFiltered(listView);
   const pages = useRowPages(revisionRoute, query);
   const { totals, error } = useRowTotals(revisionRoute, query, props.totals, filtered);
-  const columns = useMemo(() => rowColumns(declarations), [declarations]);
-  const visible = useMemo(
-    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
-    [columns, view.hidden],
-  );
 
   const [pending, setPending] = usePendingEdits(props.listKey);
   const [problems, setProblems] = useState<readonly EditProblem[]>([]);
@@ -77,7 +73,12 @@ export function RowsStation(props: RowsStationProps) {
   const [said, setSaid] = useState('');
   const plainHref = `${props.listHref}?revision=${revision}`;
   const mayEdit = props.mayEdit && revision === newest;
-  const edits = pending?.edits ?? [];
+  const edits = pending?.edits ?? NO_EDITS;
+  const columns = useMemo(() => rowColumns(declarations, edits), [declarations, edits]);
+  const visible = useMemo(
+    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
+    [columns, view.hidden],
+  );
   const typed = useRef(false);
   /** Goes elsewhere, unless that would lose what has been typed. */
   const leaving = (go: () => void) => {

@@ -35,7 +35,7 @@ export default async function ListPage({ params, searchParams }: Props) {
   const db = serverDb();
   const newestImport = await findNewestImport(db, list.id);
   const upload = (
-    <ButtonLink kind="primary" href={`${listHref}/upload`}>
+    <ButtonLink kind={list.last_revision === 0 ? 'primary' : 'secondary'} href={`${listHref}/upload`}>
       Upload a file
     </ButtonLink>
   );
