@@ -84,11 +84,7 @@ function columnsOf({ document, units, digest, state }: BaselineFile): Column[] {
   ];
 }
 
-const xyz = (
-  name: string,
-  unit: string,
-  of: (condition: Condition) => Xyz | undefined,
-): readonly Column[] =>
+const xyz = (name: string, unit: string, of: (condition: Condition) => Xyz | undefined): readonly Column[] =>
   XYZ.map((axis): Column => [`${name}${axis}_${unit}`, (condition) => of(condition)?.[axis] ?? null]);
 
 const moments = (

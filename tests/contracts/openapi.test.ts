@@ -52,8 +52,7 @@ const ROUTES = path.join(import.meta.dirname, '../../app/api/v1');
 
 /** The path by which a place in the file tree is reached: some endings are rewrites. */
 function reachedAs(template: string, rewritten: readonly { source: string; destination: string }[]): string {
-  const named = (pattern: string) =>
-    pattern.slice('/api/v1'.length).replace(/:(\w+)(\([^)]*\))?/g, '{$1}');
+  const named = (pattern: string) => pattern.slice('/api/v1'.length).replace(/:(\w+)(\([^)]*\))?/g, '{$1}');
   const rewrite = rewritten.find(({ destination }) => named(destination) === template);
   return rewrite === undefined ? template : named(rewrite.source);
 }

@@ -81,7 +81,8 @@ function expectDocumented(endpoint: Endpoint, response: Response, body: unknown)
     const type = response.headers.get('content-type')?.split(';')[0];
     expect(type).toBe(answer.type ?? 'application/json');
     expect(answer.schema.parse(body)).toEqual(body);
-    for (const name of Object.keys(answer.headers ?? {})) expect(response.headers.get(name), name).not.toBeNull();
+    for (const name of Object.keys(answer.headers ?? {}))
+      expect(response.headers.get(name), name).not.toBeNull();
     return;
   }
   if (endpoint.bare?.[response.status] !== undefined) {

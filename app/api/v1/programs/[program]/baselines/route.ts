@@ -13,7 +13,10 @@ export const GET = apiProgramRoute({ scope, action: 'baselines.read' }, async ({
   const builds = await buildsOf(serverDb(), program.id);
   if (build !== undefined && !builds.some(({ code }) => code === build))
     throw parametersWrong([
-      { parameter: 'build', message: `Builds of this program: ${builds.map(({ code }) => code).join(', ')}.` },
+      {
+        parameter: 'build',
+        message: `Builds of this program: ${builds.map(({ code }) => code).join(', ')}.`,
+      },
     ]);
   const baselines = await baselinesOfProgram(serverDb(), program.id);
   return respond(baselineListEndpoint, 200, {
