@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
-import { CompensatedSum } from '@/lib/numerics/sums';
+import { CompensatedSum, CompensatedSums } from '@/lib/numerics/sums';
 import { Rational, ZERO } from '@/tests/support/rational';
 
 const term = fc.double({ min: -1e12, max: 1e12, noNaN: true });
@@ -45,6 +45,28 @@ describe('a compensated sum', () => {
         const error = Math.abs(Rational.of(sum.value).minus(exact).toNumber());
         expect(error).toBeLessThanOrEqual(
           Number.EPSILON * Math.abs(exact.toNumber()) + 2 * pairs.length * Number.EPSILON ** 2 * size,
+        );
+      }),
+    );
+  });
+});
+
+describe('compensated sums side by side', () => {
+  it('with their rests are the exact sums of products, to the square of a rounding', () => {
+    const small = fc.double({ min: -1, max: 1, noNaN: true });
+    fc.assert(
+      fc.property(fc.array(fc.tuple(term, small, small), { minLength: 1, maxLength: 60 }), (terms) => {
+        const sums = new CompensatedSums(2);
+        for (const [value, k, rest] of terms) sums.add([value, 1], k, [Number.EPSILON * rest, 0]);
+        const exact = terms.reduce(
+          (total, [value, k, rest]) =>
+            total.plus(Rational.of(k).times(Rational.of(value).plus(Rational.of(Number.EPSILON * rest)))),
+          ZERO,
+        );
+        const whole = Rational.of(sums.values[0] ?? NaN).plus(Rational.of(sums.rests[0] ?? NaN));
+        const size = terms.reduce((total, [value]) => total + Math.abs(value) + 1, 0);
+        expect(Math.abs(whole.minus(exact).toNumber())).toBeLessThanOrEqual(
+          terms.length * Number.EPSILON ** 2 * size,
         );
       }),
     );
