@@ -5,7 +5,7 @@ import { readNumber } from '@/lib/ingest/table/number-text';
 describe('a number in a cell', () => {
   it('is what JavaScript reads from the same decimal text', () => {
     fc.assert(
-      fc.property(fc.double({ noNaN: true, min: -1e60, max: 1e60 }), (value) => {
+      fc.property(fc.double({ noNaN: true, min: -1e40, max: 1e40 }), (value) => {
         expect(readNumber(String(value), false)).toBe(value === 0 ? 0 : value);
         expect(readNumber(value.toExponential(), false)).toBe(value === 0 ? 0 : value);
       }),

@@ -14,8 +14,8 @@ const NUMBER_AND_UNIT = /^[+-]?[\d.,]+ ?[%°A-Za-z]/u;
 /** A decimal point that could also be a thousands separator: 1.234, 12.500. */
 export const POINT_OR_THOUSANDS = /^[+-]?[1-9]\d{0,2}\.\d{3}$/u;
 
-/** Products of five such numbers are still finite, whatever the units: nothing that is computed from them overflows. */
-const LARGEST = 1e60;
+/** Squares of products of three such numbers, the variance of a moment, are finite in any units: nothing computed from them overflows. */
+const LARGEST = 1e40;
 
 /** A finite number from a trimmed text; a decimal comma where `decimalComma` says so. Minus zero reads as zero. */
 export function readNumber(text: string, decimalComma: boolean): number | NumberFault {
@@ -25,7 +25,7 @@ export function readNumber(text: string, decimalComma: boolean): number | Number
   if (Math.abs(value) <= LARGEST) return value === 0 ? 0 : value;
   return {
     kind: 'not-finite',
-    message: `\`${shorten(text)}\` is too large. No quantity of an aircraft exceeds 1e60.`,
+    message: `\`${shorten(text)}\` is too large. No quantity of an aircraft exceeds 1e40.`,
   };
 }
 

@@ -310,6 +310,19 @@ describe('subtotals of uncertainty', () => {
     expect(variance({ statuses: ['approved', 'pending'] })).toBe(27);
   });
 
+  it('are finite for the largest numbers that a list can hold', () => {
+    const large = sigmas({ mass: 1e40, x: 1e40, y: 1e40, z: 1e40, ixy: 1e40 });
+    const row = aComponent({
+      mass: 1e40,
+      position: [1e40, -1e40, 1e40],
+      quantity: 1e6,
+      pair: true,
+      sigma: large,
+    });
+    for (const { basic } of booked([row], declarations(), geometry()).sums)
+      expect(toNumbers(basic).every(Number.isFinite)).toBe(true);
+  });
+
   it('come back from 57 numbers as they were', () => {
     const [, setting] = SETTINGS;
     if (!setting) throw new Error('There is a second setting.');
