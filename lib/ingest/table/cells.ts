@@ -1,7 +1,7 @@
 import { restoreFormula } from '@/lib/export/formula-text';
 import { type CsvRecord, misplacedQuoteProblem } from '@/lib/ingest/csv/splitter';
 import { type Header } from '@/lib/ingest/table/header';
-import { COMMA, POINT_OR_THOUSANDS, readNumber } from '@/lib/ingest/table/number-text';
+import { MARK_OR_THOUSANDS, readNumber } from '@/lib/ingest/table/number-text';
 import { type ProblemLog, shorten } from '@/lib/ingest/problem-log';
 
 const LARGEST_COUNT = 1_000_000;
@@ -12,12 +12,23 @@ interface Place {
   readonly found: string;
 }
 
+type DecimalMark = ',' | '.';
+
+const MARK_NAMES: Readonly<Record<DecimalMark, string>> = { ',': 'comma', '.': 'point' };
+
+/** Where a decimal mark stands first, and where it first could separate thousands instead. */
+interface MarkSeen {
+  first: Place | null;
+  doubtful: Place | null;
+}
+
+const newMark = (): MarkSeen => ({ first: null, doubtful: null });
+
 /** The cells of one record at a time, by column name. What is wrong in them goes to the log. */
 export class Cells<C extends string> {
   private fields: readonly string[] = [];
   private readonly decimalComma: boolean;
-  private firstComma: Place | null = null;
-  private firstAmbiguous: Place | null = null;
+  private readonly marks = { ',': newMark(), '.': newMark() };
   line = 0;
 
   constructor(
@@ -165,27 +176,34 @@ export class Cells<C extends string> {
     return `\`${shorten(this.raw(column))}\``;
   }
 
-  /** To be called after the last record: a file with decimal commas must not use points that may be thousands separators. */
+  /** To be called after the last record: in a file with both decimal marks, neither may also be a thousands separator. */
   finish(): void {
-    if (this.firstComma === null || this.firstAmbiguous === null) return;
-    const { line, column, found } = this.firstAmbiguous;
-    const comma = this.firstComma;
+    this.refuseMixed('.', ',');
+    this.refuseMixed(',', '.');
+  }
+
+  private refuseMixed(doubtful: DecimalMark, other: DecimalMark): void {
+    const { doubtful: place } = this.marks[doubtful];
+    const { first } = this.marks[other];
+    if (place === null || first === null) return;
+    // Where both marks are in doubt, one problem says it.
+    if (doubtful === ',' && this.marks['.'].doubtful !== null) return;
     this.log.add({
       kind: 'mixed-decimal-marks',
-      line,
-      column,
-      found,
+      ...place,
       message:
-        `\`${found}\` may have a decimal point or a thousands separator, for line ${comma.line} has a decimal comma ` +
-        `(\`${comma.found}\`). Use one decimal mark in the whole file, and no thousands separators.`,
+        `\`${place.found}\` may have a decimal ${MARK_NAMES[doubtful]} or a thousands separator, for line ${first.line} has a ` +
+        `decimal ${MARK_NAMES[other]} (\`${first.found}\`). Use one decimal mark in the whole file, and no thousands separators.`,
     });
   }
 
   private noteDecimalMark(column: C, text: string): void {
-    if (this.firstComma === null && COMMA.test(text))
-      this.firstComma = { line: this.line, column, found: text };
-    if (this.firstAmbiguous === null && POINT_OR_THOUSANDS.test(text)) {
-      this.firstAmbiguous = { line: this.line, column, found: text };
+    const mark = text.includes(',') ? ',' : text.includes('.') ? '.' : null;
+    if (mark === null) return;
+    const seen = this.marks[mark];
+    seen.first ??= { line: this.line, column, found: text };
+    if (seen.doubtful === null && MARK_OR_THOUSANDS.test(text)) {
+      seen.doubtful = { line: this.line, column, found: text };
     }
   }
 }

@@ -70,7 +70,7 @@ export function readHeader<C extends string>(
   });
   for (const column of contract.needed) {
     if (positions.has(column)) continue;
-    const message = `The column ${column} is missing. Add it, or map one of the file's columns to it.`;
+    const message = `The column ${column} is missing. Add it, or give the file's own column for it this name.`;
     problem('missing-column', column, null, message);
   }
   contract.check(positions, problem);

@@ -7,12 +7,12 @@ export interface NumberFault {
 }
 
 const POINT = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?$/u;
-export const COMMA = /^[+-]?(?:\d+,\d*|,\d+)(?:[eE][+-]?\d+)?$/u;
+const COMMA = /^[+-]?(?:\d+,\d*|,\d+)(?:[eE][+-]?\d+)?$/u;
 const THOUSANDS = /^[+-]?\d{1,3}([.,'’ \u00A0\u202F])\d{3}(?:\1\d{3})*(?:[.,]\d+)?$/u;
 const NUMBER_AND_UNIT = /^[+-]?[\d.,]+ ?[%°A-Za-z]/u;
 
-/** A decimal point that could also be a thousands separator: 1.234, 12.500. */
-export const POINT_OR_THOUSANDS = /^[+-]?[1-9]\d{0,2}\.\d{3}$/u;
+/** A decimal mark that could also be a thousands separator: 1.234, 12,500. */
+export const MARK_OR_THOUSANDS = /^[+-]?[1-9]\d{0,2}[.,]\d{3}$/u;
 
 /** Squares of products of three such numbers, the variance of a moment, are finite in any units: nothing computed from them overflows. */
 const LARGEST = 1e40;
