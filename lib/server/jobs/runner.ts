@@ -58,12 +58,12 @@ export async function startRunner(options: {
   return { stop: () => stop(runner, timer, lease, utils) };
 }
 
-/** Registers each worker before it takes a job, so that a job is never locked by a worker that nobody knows. */
+/** Registers the pool of workers as it is made: jobs are locked by its name, and nobody may lock one whom nobody knows. */
 function registering(db: Db, lease: Lease): WorkerEvents {
   const events: WorkerEvents = new EventEmitter();
-  events.on('worker:create', ({ worker }) => {
-    registerWorker(db, worker.workerId, lease.number).catch((error: unknown) =>
-      log.error({ err: error }, 'could not register a worker'),
+  events.on('pool:create', ({ workerPool }) => {
+    registerWorker(db, workerPool.id, lease.number).catch((error: unknown) =>
+      log.error({ err: error }, 'could not register the workers'),
     );
   });
   return events;

@@ -61,7 +61,7 @@ describe('An import', () => {
       const rows = 60_000;
       const list = await newList();
       const id = await upload(test, test.crew.weights, list, longList(rows));
-      const first = startJobProcess(test);
+      const first = startJobProcess(test, 'stall');
       processes.push(first);
       const middle = await waitForImport(test, id, ({ rows_done }) => rows_done > 0);
       await first.kill();

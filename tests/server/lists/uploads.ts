@@ -42,11 +42,14 @@ export async function waitForImport(
 
 export const settled = ({ state }: Pick<Import, 'state'>): boolean => state === 'done' || state === 'failed';
 
-/** A process of its own that runs the queue of this test's database. */
-export function startJobProcess(test: ProgramUnderTest): { readonly kill: () => Promise<void> } {
+/** A process of its own that runs the queue of this test's database; with `stall` its store stops in the middle of a file. */
+export function startJobProcess(
+  test: ProgramUnderTest,
+  ...how: 'stall'[]
+): { readonly kill: () => Promise<void> } {
   const child: ChildProcess = spawn(
     process.execPath,
-    ['--import', 'tsx', path.join(import.meta.dirname, 'run-jobs.ts')],
+    ['--import', 'tsx', path.join(import.meta.dirname, 'run-jobs.ts'), ...how],
     { env: { ...process.env, DATABASE_URL: test.appUrl }, stdio: ['ignore', 'inherit', 'inherit'] },
   );
   return {
