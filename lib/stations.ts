@@ -6,6 +6,7 @@ export const STATIONS = [
   { code: 'rotating-parts', title: 'Rotating parts', action: 'rotors.read' },
   { code: 'configurations', title: 'Configurations', action: 'configurations.read' },
   { code: 'baselines', title: 'Baselines', action: 'baselines.read' },
+  { code: 'hand-off', title: 'Hand-off', action: 'baselines.read' },
 ] as const satisfies readonly { code: string; title: string; action: ProgramAction }[];
 
 export type StationCode = (typeof STATIONS)[number]['code'];

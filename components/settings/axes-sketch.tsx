@@ -37,7 +37,13 @@ const AIRFRAME = [
 ];
 
 /** The directions of +x, +y, +z drawn on an airframe. The place of the datum is not drawn to scale. */
-export function AxesSketch({ axes }: { readonly axes: AxisTriple }) {
+export function AxesSketch({
+  axes,
+  of = 'Airframe axes',
+}: {
+  readonly axes: AxisTriple;
+  readonly of?: string;
+}) {
   const hand = handedness(axes) === 1 ? 'right-handed' : 'left-handed';
   const origin = onSheet(40, 0, 0);
   return (
@@ -45,7 +51,7 @@ export function AxesSketch({ axes }: { readonly axes: AxisTriple }) {
       <svg
         viewBox={`-28 40 284 ${axes.includes('down') ? 164 : 116}`}
         role="img"
-        aria-label={`Airframe axes: x ${axes[0]}, y ${axes[1]}, z ${axes[2]}; ${hand}`}
+        aria-label={`${of}: x ${axes[0]}, y ${axes[1]}, z ${axes[2]}; ${hand}`}
         className="block w-full max-w-72 overflow-visible"
       >
         {AIRFRAME.map((line) => (

@@ -36,6 +36,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/programs/[program]/page.tsx': { page: 'program program.read' },
   'app/(workspace)/programs/[program]/baselines/page.tsx': { page: 'program baselines.read' },
   'app/(workspace)/programs/[program]/baselines/[baseline]/page.tsx': { page: 'program baselines.read' },
+  'app/(workspace)/programs/[program]/baselines/[baseline]/views/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/baselines/account/page.tsx': { page: 'program baselines.read' },
   'app/(workspace)/programs/[program]/baselines/rows/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/baselines/submissions/[submission]/page.tsx': {
@@ -47,6 +48,13 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
     signSubmissionAction: 'program baselines.decide',
     returnSubmissionAction: 'program baselines.decide',
     withdrawBaselineAction: 'program baselines.withdraw',
+  },
+  'app/(workspace)/programs/[program]/hand-off/page.tsx': { page: 'program baselines.read' },
+  'app/api/internal/programs/[program]/baselines/[number]/document/route.ts': {
+    GET: 'program baselines.read',
+  },
+  'app/api/internal/programs/[program]/baselines/[number]/conditions/route.ts': {
+    GET: 'program baselines.read',
   },
   'app/(workspace)/programs/[program]/trail/page.tsx': { page: 'program trail.read' },
 
@@ -83,6 +91,9 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   },
   'app/(workspace)/programs/[program]/configurations/[configuration]/conditions/page.tsx': {
     page: 'program configurations.keep',
+  },
+  'app/(workspace)/programs/[program]/configurations/[configuration]/views/page.tsx': {
+    page: 'program configurations.read',
   },
   'app/(workspace)/programs/[program]/configurations/actions.ts': {
     createConfigurationAction: 'program configurations.keep',

@@ -9,6 +9,7 @@ import { ROLE_NAMES } from '@/lib/permissions';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { ProgramFrame } from './frame';
+import { HandOffHere } from './hand-off-here';
 import { BaselinesHere, ConfigurationsHere, ListsHere, RotatingPartsHere } from './stations-here';
 
 export async function generateMetadata({ params }: PageProps<'/programs/[program]'>): Promise<Metadata> {
@@ -25,7 +26,8 @@ export default async function ProgramPage({ params }: PageProps<'/programs/[prog
     currentFrameIssue(serverDb(), program.id),
     listMembers(serverDb(), program.id),
   ]);
-  // Who decides sees what waits for a decision first, who only reads sees nothing else.
+  const handOffFirst = can('baselines.read') && !can('lists.read');
+  // Who decides sees what waits for a decision first, who only reads sees what to take, then which baselines there are.
   const baselinesFirst = (frame !== undefined && can('baselines.decide')) || !can('lists.read');
   const chiefs = members.filter((member) => member.role === 'chief').map((member) => member.name);
   return (
@@ -53,6 +55,7 @@ export default async function ProgramPage({ params }: PageProps<'/programs/[prog
           </p>
         </EmptyPlace>
       ) : null}
+      {handOffFirst ? <HandOffHere access={access} /> : null}
       {baselinesFirst ? <BaselinesHere access={access} /> : null}
       {frame !== undefined && can('lists.read') ? <ListsHere access={access} /> : null}
       {frame !== undefined && can('rotors.read') ? <RotatingPartsHere access={access} /> : null}
