@@ -134,10 +134,10 @@ export async function findRevisionAuthor(db: Db, revisionId: string): Promise<st
   return name;
 }
 
-/** Takes the right to work on an import for the length of the transaction; false if another has it. */
-export async function claimImport(trx: Db, id: string): Promise<boolean> {
-  const { rows } = await sql<{ claimed: boolean }>`
-    select pg_try_advisory_xact_lock(hashtextextended(${`import:${id}`}, 0)) as claimed
-  `.execute(trx);
-  return rows[0]?.claimed === true;
+/**
+ * Waits for the right to work on an import, for the length of the transaction. Whoever held it has finished, or is dead and its
+ * transaction gone; giving up at once would take the last breath of a dead process for work under way.
+ */
+export async function claimImport(trx: Db, id: string): Promise<void> {
+  await sql`select pg_advisory_xact_lock(hashtextextended(${`import:${id}`}, 0))`.execute(trx);
 }

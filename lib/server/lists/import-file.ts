@@ -63,7 +63,8 @@ export async function importFile(services: ImportServices, importId: string): Pr
         author,
       },
       async (writer, trx) => {
-        if (!(await claimImport(trx, importId)) || !(await isOpen(trx, importId))) throw new AlreadyHandled();
+        await claimImport(trx, importId);
+        if (!(await isOpen(trx, importId))) throw new AlreadyHandled();
         await readInto(services, found, list.declarations, writer);
         return writer.rows;
       },
