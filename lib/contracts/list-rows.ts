@@ -38,3 +38,11 @@ export const rowPageSchema = z.object({
 export type RowPage = z.output<typeof rowPageSchema>;
 
 export const ROWS_PER_PAGE = 200;
+
+const LAST_OFFSET = 1_000_000_000;
+
+/** How many rows of a view stand before a page, from a query: a whole number, 0 where it names none. */
+export function offsetOf(text: string | null): number {
+  const asked = Math.trunc(Number(text ?? 0));
+  return Number.isNaN(asked) ? 0 : Math.min(Math.max(0, asked), LAST_OFFSET);
+}

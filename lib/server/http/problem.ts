@@ -8,11 +8,20 @@ export interface Failure {
   readonly id: string | null;
 }
 
+/** What PostgreSQL answers to a text with a NUL character, which it keeps nowhere: `invalid byte sequence`, and the same within JSON. */
+const NUL_CODES: readonly unknown[] = ['22021', '22P05'];
+
+const isNulText = (thrown: unknown): boolean =>
+  thrown instanceof Error && 'code' in thrown && NUL_CODES.includes(thrown.code);
+
 /** What is told of anything thrown. A fault of ours is logged under an id, and only the id is told. */
 export function failureOf(thrown: unknown, where: string): Failure {
   if (thrown instanceof AppError && thrown.code !== 'internal') {
     if (thrown.cause !== undefined) log.warn({ err: thrown.cause, where }, thrown.message);
     return { error: thrown, id: null };
+  }
+  if (isNulText(thrown)) {
+    return { error: new AppError('invalid-request', 'A text holds a NUL character. Leave it out.'), id: null };
   }
   const id = randomUUID();
   log.error({ err: thrown, where, errorId: id }, 'unexpected error');

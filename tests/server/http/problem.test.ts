@@ -1,8 +1,10 @@
+import { sql } from 'kysely';
 import { expect, it } from 'vitest';
 import { z } from 'zod';
 import { AppError, ERROR_CODES, problemType } from '@/lib/errors';
 import { failureOf, problemResponse } from '@/lib/server/http/problem';
 import { readJson } from '@/lib/server/http/read-json';
+import { peopleUnderTest } from '../../support/people';
 
 it('is a problem document of RFC 9457 with a type that never changes', async () => {
   const error = new AppError('invalid-input', 'Two lines are wrong.', {
@@ -28,6 +30,15 @@ it('tells nothing of a fault of ours but an id to look it up by', async () => {
   expect(JSON.stringify(body)).not.toContain('hush');
   expect(body).toMatchObject({ type: problemType('internal') });
   expect(body.instance).toMatch(/^urn:uuid:[0-9a-f-]{36}$/);
+});
+
+it('blames a NUL character on the request that holds it', async () => {
+  const test = await peopleUnderTest();
+  for (const query of [sql`select ${'a\0'}::text`, sql`select ${'{"a":"\\u0000"}'}::jsonb`]) {
+    const refused = await query.execute(test.db).catch((error: unknown) => error);
+    expect(failureOf(refused, 'test')).toMatchObject({ id: null, error: { code: 'invalid-request' } });
+  }
+  await test.close();
 });
 
 it('says when to come back', () => {

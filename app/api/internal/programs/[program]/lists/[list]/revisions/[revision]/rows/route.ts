@@ -1,5 +1,5 @@
 import { countRows, rowsOfView } from '@/db/queries/list-rows';
-import { type RowPage, ROWS_PER_PAGE } from '@/lib/contracts/list-rows';
+import { offsetOf, type RowPage, ROWS_PER_PAGE } from '@/lib/contracts/list-rows';
 import { listViewOf } from '@/lib/contracts/list-view';
 import { serverDb } from '@/lib/server/database';
 import { programRoute } from '@/lib/server/http/internal-route';
@@ -15,7 +15,7 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
   const revision = await reachRevision(db, await reachList(db, program.id, params.list), params.revision);
   const view = listViewOf(query);
   const filter = filterOf(view, revision.findings);
-  const offset = Math.max(0, Math.trunc(Number(query.get('offset') ?? 0)) || 0);
+  const offset = offsetOf(query.get('offset'));
   const [total, rows] = await Promise.all([
     countRows(db, revision.id, filter),
     rowsOfView(db, revision.id, filter, orderOf(view, revision.declarations), {
