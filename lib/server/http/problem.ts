@@ -21,7 +21,10 @@ export function failureOf(thrown: unknown, where: string): Failure {
     return { error: thrown, id: null };
   }
   if (isNulText(thrown)) {
-    return { error: new AppError('invalid-request', 'A text holds a NUL character. Leave it out.'), id: null };
+    return {
+      error: new AppError('invalid-request', 'A text holds a NUL character. Leave it out.'),
+      id: null,
+    };
   }
   const id = randomUUID();
   log.error({ err: thrown, where, errorId: id }, 'unexpected error');
