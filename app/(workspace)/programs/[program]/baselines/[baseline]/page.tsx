@@ -14,6 +14,7 @@ import { SourceList } from '@/components/baselines/source-list';
 import { StateBanner } from '@/components/baselines/state-banner';
 import { StateWord } from '@/components/baselines/state-word';
 import { TitleBlock } from '@/components/baselines/title-block';
+import { ButtonLink } from '@/components/ui/button';
 import { Caution } from '@/components/ui/caution';
 import { DialogButton } from '@/components/ui/dialog-button';
 import { PageHead, Section } from '@/components/ui/section';
@@ -61,6 +62,9 @@ export default async function BaselinePage({
         actions={
           <>
             <StateWord state={baseline.state} />
+            {can('lists.read') ? (
+              <ButtonLink href={`${home}/${baseline.number}/views`}>See three views</ButtonLink>
+            ) : null}
             {can('baselines.withdraw') && baseline.state !== 'withdrawn' ? (
               <DialogButton
                 words={`Withdraw baseline ${baseline.number}`}

@@ -101,6 +101,7 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
         }
         actions={
           <>
+            <ButtonLink href={`${home}/views`}>See three views</ButtonLink>
             {rollUpButton}
             {!stale && can('baselines.submit') ? (
               <ButtonLink
