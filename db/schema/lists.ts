@@ -86,7 +86,7 @@ export interface MassRowsTable {
   extra: Json<Record<string, string>> | null;
 }
 
-/** Accounts of ten numbers about the frame issue's reference: mass, first moment (3), second moment (6). Insert-only. */
+/** Accounts about the frame issue's reference: mass, first moment (3), second moment (6), then what rounding left out of each. Insert-only. */
 export interface RevisionSubtotalsTable {
   revision_id: string;
   frame_issue_id: string;

@@ -5,7 +5,7 @@ import { type Transaction } from 'kysely';
 import { type Database } from '@/db/schema/database';
 import { type Finding } from '@/lib/findings/finding';
 import { RowChecks } from '@/lib/findings/look';
-import { toNumbers } from '@/lib/mass/account';
+import { toNumbersWithRest } from '@/lib/mass/account';
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
@@ -122,9 +122,9 @@ function subtotalValues(subtotal: Subtotal) {
     rows: subtotal.rows,
     pieces: subtotal.pieces,
     memo_rows: subtotal.memoRows,
-    basic: [...toNumbers(subtotal.basic)],
-    stated_predicted: [...toNumbers(subtotal.statedPredicted)],
-    unstated_basic: [...toNumbers(subtotal.unstatedBasic)],
+    basic: [...toNumbersWithRest(subtotal.basic)],
+    stated_predicted: [...toNumbersWithRest(subtotal.statedPredicted)],
+    unstated_basic: [...toNumbersWithRest(subtotal.unstatedBasic)],
   };
 }
 
