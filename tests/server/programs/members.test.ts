@@ -57,7 +57,11 @@ describe('a new program', () => {
 
   it('has nothing that waits and no marking', async () => {
     const id = await newProgram('empty');
-    expect(await whatWaits(test.db, id)).toEqual({ listsWithProblems: 0, configurationsToRollUp: 0 });
+    expect(await whatWaits(test.db, id)).toEqual({
+      listsWithProblems: 0,
+      configurationsToRollUp: 0,
+      submissionsToDecide: 0,
+    });
     expect(await markingsOf(test.db, id)).toEqual([]);
   });
 });
