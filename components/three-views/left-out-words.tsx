@@ -12,7 +12,7 @@ export function LeftOutWords({ picture, units }: { readonly picture: Picture; re
   const beyond = piecesOf(rows).filter(({ place }) => !isWithin(place, bounds)).length;
   const removals = rows.filter(({ mass }) => mass < 0).length;
   const lines = [
-    'Each mark stands at the CG of a row and holds the mass of all its pieces there, without growth; rows of pairs and of half lists have a mark on either side.',
+    'Each mark stands at the CG of a row and holds the mass of all its pieces there, without growth; rows of pairs and of half lists have a mark on either side. The CG is that of the whole condition, also without growth.',
     removals > 0 ? `Hollow marks take mass away: ${counted(removals, 'row')}.` : null,
     beyond > 0
       ? `${counted(beyond, 'mark lies', 'marks lie')} far beyond the airframe and off the views; the table holds ${beyond === 1 ? 'it' : 'them'}.`

@@ -98,7 +98,7 @@ export function OneView(props: OneViewProps) {
           {unitLabel(unit)}
         </span>
       </figcaption>
-      <div className="col-start-1 row-start-2">
+      <div className="relative col-start-1 row-start-2">
         <LeftEdge {...edge} />
       </div>
       <svg

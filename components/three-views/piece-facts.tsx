@@ -1,6 +1,6 @@
 import { Num } from '@/components/mass/num';
-import { topGroup } from '@/lib/three-views/group-key';
-import { ON_BOARD, type Picture, type Piece } from '@/lib/three-views/picture';
+import { ON_BOARD } from '@/lib/three-views/group-key';
+import { type Picture, type Piece } from '@/lib/three-views/picture';
 import { type OutputUnits, unitLabel } from '@/lib/units/names';
 
 /** What the pointer is on. */
@@ -28,9 +28,7 @@ export function PieceFacts({
         {row.description === null ? null : ` ${row.description}`}
         {image ? <span className="text-ink-2">, mirror image</span> : null}
       </p>
-      <p className="truncate text-ink-2">
-        {topGroup(row.group) === topGroup(ON_BOARD) ? 'On board' : row.group}
-      </p>
+      <p className="truncate text-ink-2">{row.group === ON_BOARD ? 'On board' : row.group}</p>
       <p className="flex flex-wrap gap-x-4">
         <Num value={mass} unit={units.mass} showUnit digits={5} />
         {axes.map((direction, k) => (

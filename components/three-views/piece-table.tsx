@@ -1,5 +1,6 @@
 'use client';
 
+import { ON_BOARD } from '@/lib/three-views/group-key';
 import { useMemo } from 'react';
 import { type DataColumn } from '@/components/data-table/column';
 import { DataTable } from '@/components/data-table/data-table';
@@ -7,7 +8,7 @@ import { useUrlView } from '@/components/data-table/use-url-view';
 import { CATEGORY_WORDS } from '@/components/configurations/category-words';
 import { type CellValue } from '@/components/data-table/column';
 import { TextLink } from '@/components/ui/text-link';
-import { type Picture, ON_BOARD, type Piece } from '@/lib/three-views/picture';
+import { type Picture, type Piece } from '@/lib/three-views/picture';
 import { sumsOf } from '@/lib/three-views/sums';
 import { fromSi } from '@/lib/units/convert';
 import { type OutputUnits, unitLabel } from '@/lib/units/names';

@@ -87,7 +87,7 @@ export function LowerEdge({ sheet, bounds, axes, unit }: EdgeProps) {
 export function LeftEdge({ sheet, bounds, unit }: EdgeProps) {
   const { ticks, share } = edgeTicks(sheet, 'upward', bounds, unit);
   return (
-    <svg width="100%" height="100%" aria-hidden="true" className="block overflow-visible">
+    <svg width="100%" height="100%" aria-hidden="true" className="absolute inset-0 overflow-visible">
       <line x1="100%" x2="100%" y1="0" y2="100%" className="tick" />
       {ticks.between.map((tick) => (
         <svg

@@ -73,6 +73,9 @@ export function useBrush({ sheet, region, onDraft, onDrawn, onPass }: BrushOptio
       start.current = null;
       onDraft(null);
     },
-    onPointerLeave: () => onPass(null, 0),
+    // A finger leaves as it lifts; what it touched stays read.
+    onPointerLeave: (event: PointerEvent<SVGSVGElement>) => {
+      if (event.pointerType === 'mouse') onPass(null, 0);
+    },
   };
 }

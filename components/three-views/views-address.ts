@@ -8,7 +8,7 @@ export interface ViewsAddress {
   readonly condition: string | null;
   readonly units: UnitSystem;
   readonly points: boolean;
-  /** A list's code, or `on-board`. */
+  /** A list's code, or ON_BOARD_LIST. */
   readonly list: string | null;
   /** A group path. */
   readonly within: string;
@@ -16,8 +16,6 @@ export interface ViewsAddress {
   /** x, y, z as `from..to`, m. */
   readonly region: readonly [string | null, string | null, string | null];
 }
-
-export const ON_BOARD_LIST = 'on-board';
 
 type Asked = Readonly<Record<string, string | string[] | undefined>>;
 

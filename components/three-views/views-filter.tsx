@@ -1,14 +1,10 @@
 import { CATEGORY_WORDS } from '@/components/configurations/category-words';
-import {
-  ON_BOARD_LIST,
-  type ViewsAddress,
-  viewsFields,
-  viewsHref,
-} from '@/components/three-views/views-address';
+import { type ViewsAddress, viewsFields, viewsHref } from '@/components/three-views/views-address';
 import { Button } from '@/components/ui/button';
 import { SelectField } from '@/components/ui/select-field';
 import { TextLink } from '@/components/ui/text-link';
 import { type Category } from '@/lib/mass/component';
+import { ON_BOARD_LIST } from '@/lib/three-views/group-key';
 
 interface ViewsFilterProps {
   readonly path: string;

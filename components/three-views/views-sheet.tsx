@@ -1,12 +1,12 @@
 import { LeftOutWords } from '@/components/three-views/left-out-words';
 import { ThreeViews } from '@/components/three-views/three-views';
-import { ON_BOARD_LIST, type ViewsAddress, viewsHref } from '@/components/three-views/views-address';
+import { type ViewsAddress, viewsHref } from '@/components/three-views/views-address';
 import { ViewsFilter } from '@/components/three-views/views-filter';
 import { ChoiceLinks } from '@/components/ui/choice-links';
 import { EmptyPlace } from '@/components/ui/empty-place';
 import { type Category } from '@/lib/mass/component';
-import { topGroup } from '@/lib/three-views/group-key';
-import { ON_BOARD, type Picture } from '@/lib/three-views/picture';
+import { ON_BOARD, ON_BOARD_LIST, topGroup } from '@/lib/three-views/group-key';
+import { type Picture } from '@/lib/three-views/picture';
 import { OUTPUT_UNITS, UNIT_SYSTEMS } from '@/lib/units/names';
 
 interface ViewsSheetProps {

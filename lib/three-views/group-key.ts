@@ -1,6 +1,12 @@
 /** How many groups have a colour of their own: Okabe and Ito's eight without the yellow, which paper does not carry. */
 export const SERIES = 7;
 
+/** The group that items on board stand in; no list has it, for blanks around a path are dropped when it is read. */
+export const ON_BOARD = ' on board';
+
+/** What stands for them among the codes of lists in an address; a code has no point. */
+export const ON_BOARD_LIST = '.on-board';
+
 /** How the marks of one top group are told apart. */
 export interface GroupKey {
   /** First level of the group paths. */

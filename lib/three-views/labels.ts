@@ -41,7 +41,7 @@ export function placeLabels(
     const choices: readonly (readonly [PlacedLabel['anchor'], number, number])[] = [
       ['start', x + gap, y + 4],
       ['end', x - gap, y + 4],
-      ['middle', x, y - gap],
+      ['middle', x, y - gap - 1],
       ['middle', x, y + gap + 9],
     ];
     for (const [anchor, at, base] of choices) {

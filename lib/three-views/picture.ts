@@ -4,9 +4,6 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type Bounds } from './bounds';
 import { type GroupKey } from './group-key';
 
-/** The path that items on board stand under, which no list row can have: a path of a list has no empty level. */
-export const ON_BOARD = '/on board';
-
 /** A row of a list, an item on board, or the small rows of a cell taken together. */
 export interface PictureRow {
   readonly item: string;

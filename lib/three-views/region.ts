@@ -17,7 +17,10 @@ export function holds(region: Region, place: AirframeVec): boolean {
   });
 }
 
-/** The region between two corners on a sheet (m); the coordinate along the line of sight is that of `kept`. */
+/**
+ * The region between two corners on a sheet (m). Within `kept`: it keeps that one's range along the line of sight, and of its other
+ * ranges what both share, or the drawn one where they share nothing.
+ */
 export function regionBetween(
   [u1, v1]: readonly [number, number],
   [u2, v2]: readonly [number, number],
@@ -30,18 +33,24 @@ export function regionBetween(
     return p < q ? [p, q] : [q, p];
   };
   const along = (k: 0 | 1 | 2): Range | null => {
-    if (k === across.index) return range(across.sign * u1, across.sign * u2);
-    return k === upward.index ? range(upward.sign * v1, upward.sign * v2) : kept[k];
+    if (k === across.index) return shared(range(across.sign * u1, across.sign * u2), kept[k]);
+    return k === upward.index ? shared(range(upward.sign * v1, upward.sign * v2), kept[k]) : kept[k];
   };
   return [along(0), along(1), along(2)];
+}
+
+function shared(drawn: Range, kept: Range | null): Range {
+  if (kept === null) return drawn;
+  const [low, high] = [Math.max(drawn[0], kept[0]), Math.min(drawn[1], kept[1])];
+  return low <= high ? [low, high] : drawn;
 }
 
 const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
 
 /** `2.5..4`, `2.5..` or `..4` as a range in either order of its ends; null when it says nothing that can be read. */
 export function rangeOf(text: string | null): Range | null {
-  const [low = '', high = '', ...rest] = (text ?? '').split('..').map((part) => part.trim());
-  if (rest.length > 0 || (low === '' && high === '')) return null;
+  const [low, high, ...rest] = (text ?? '').split('..').map((part) => part.trim());
+  if (low === undefined || high === undefined || rest.length > 0 || low + high === '') return null;
   if (![low, high].every((part) => part === '' || NUMBER.test(part))) return null;
   const from = low === '' ? -Infinity : Number(low);
   const to = high === '' ? Infinity : Number(high);

@@ -3,9 +3,9 @@ import { type PlacedFilter, largestRows, restByCells } from '@/db/queries/placed
 import { type Category } from '@/lib/mass/component';
 import { Placement } from '@/lib/mass/place';
 import { pictureBounds } from '@/lib/three-views/bounds';
-import { groupKeys, topGroup } from '@/lib/three-views/group-key';
+import { ON_BOARD, groupKeys, topGroup } from '@/lib/three-views/group-key';
 import { markRadius, radiusOfOne } from '@/lib/three-views/mark-size';
-import { type LeftOut, ON_BOARD, type Picture, type PictureRow, piecesOf } from '@/lib/three-views/picture';
+import { type LeftOut, type Picture, type PictureRow, piecesOf } from '@/lib/three-views/picture';
 import { placesOf } from '@/lib/three-views/places';
 import { type SourceCondition, type ViewsSource } from './sources';
 
@@ -167,7 +167,7 @@ function keysOf({ subtotals }: ViewsSource, { items }: SourceCondition): Picture
   const keys = groupKeys(masses);
   if (items.length === 0) return keys;
   const mass = items.reduce((sum, item) => sum + item.mass, 0);
-  return [...keys, { group: ON_BOARD, title: 'Items on board', letter: 'o', series: null, mass }];
+  return [...keys, { group: ON_BOARD, title: 'Items on board', letter: 'i', series: null, mass }];
 }
 
 function uncounted(

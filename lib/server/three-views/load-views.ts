@@ -1,12 +1,13 @@
+import { ON_BOARD, ON_BOARD_LIST } from '@/lib/three-views/group-key';
 import { type Db } from '@/db/client';
 import { type Category } from '@/lib/mass/component';
-import { ON_BOARD, type Picture } from '@/lib/three-views/picture';
+import { type Picture } from '@/lib/three-views/picture';
 import { loadPicture } from './load-picture';
 import { type SourceCondition, type ViewsSource } from './sources';
 
 interface Asked {
   readonly condition: string | null;
-  /** A list's code, or `on-board`. */
+  /** A list's code, or ON_BOARD_LIST. */
   readonly list: string | null;
   readonly within: string;
   readonly category: Category | null;
@@ -26,7 +27,7 @@ export async function loadViews(db: Db, source: ViewsSource, asked: Asked): Prom
   const condition = conditions.find(({ code }) => code === asked.condition) ?? conditions[0];
   if (condition === undefined || revisions.length === 0) return null;
   const picture = await loadPicture(db, source, condition, {
-    list: asked.list === 'on-board' ? ON_BOARD : asked.list,
+    list: asked.list === ON_BOARD_LIST ? ON_BOARD : asked.list,
     group: asked.within,
     category: asked.category,
   });
