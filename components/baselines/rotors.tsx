@@ -53,7 +53,7 @@ export function RotorSection({
   return (
     <Section
       title="Rotor momenta"
-      lead="The tensor counts each rotor as if it stood still; this is the extra."
+      lead="The tensor counts each rotor as if locked to the airframe; this is the extra."
     >
       {choice}
       {points.map((point) => (
