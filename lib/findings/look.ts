@@ -1,12 +1,15 @@
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
-import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type AirframeGeometry, bareGeometry } from '@/lib/mass/geometry';
+import { Placement } from '@/lib/mass/place';
 import { type RollUp } from '@/lib/mass/roll-up';
 
+import { type RowContext } from './context';
 import { type Finding, type Severity } from './finding';
 import { RowFacts } from './row-facts';
 import { type RotatingParts, type Rule, type Sighting } from './rule';
 import { ROTOR_RULES, ROW_RULES, WHOLE_RULES } from './rules';
+import { SharedBooks } from './shared-books';
 
 const ORDER: Readonly<Record<Severity, number>> = { blocker: 0, warning: 1, note: 2 };
 
@@ -25,12 +28,22 @@ function findingsOf(seen: readonly (readonly [Rule, Sighting | null])[]): Findin
 
 /** Shows every row of one list to every row rule, one row at a time. */
 export class RowChecks {
-  readonly #watches = ROW_RULES.map((rule) => [rule, rule.watch()] as const);
+  readonly #placement: Placement;
+  readonly #watches;
 
-  constructor(readonly declarations: ListDeclarations) {}
+  constructor(
+    readonly declarations: ListDeclarations,
+    context: RowContext = {},
+  ) {
+    const geometry = context.geometry ?? bareGeometry(declarations.axes, [0, 0, 0]);
+    const placement = new Placement(declarations, geometry);
+    const books = new SharedBooks();
+    this.#placement = placement;
+    this.#watches = ROW_RULES.map((rule) => [rule, rule.watch({ ...context, placement, books })] as const);
+  }
 
   see(component: Component): void {
-    const row = new RowFacts(component, this.declarations);
+    const row = new RowFacts(component, this.#placement);
     for (const [, watch] of this.#watches) watch.see(row);
   }
 

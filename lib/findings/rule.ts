@@ -1,9 +1,13 @@
-import { type RollUp } from '@/lib/mass/roll-up';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type Placement } from '@/lib/mass/place';
+import { type RollUp } from '@/lib/mass/roll-up';
+import { type Sym3 } from '@/lib/numerics/sym3';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 
+import { type RowContext } from './context';
 import { type Severity } from './finding';
 import { type RowFacts } from './row-facts';
+import { type SharedBooks } from './shared-books';
 
 /** What a rule says about itself, for screens and for whoever has to answer its findings. */
 export interface Rule {
@@ -34,7 +38,13 @@ export interface Watch {
 /** A rule about rows. It sees each row once; `keeps` says what stays in memory between rows, which must not grow with their number. */
 export interface RowRule extends Rule {
   readonly keeps: string;
-  readonly watch: () => Watch;
+  readonly watch: (list: WatchedList) => Watch;
+}
+
+/** What a watch can know of the list before its first row. Without a program `placement` is in the list's own axis words. */
+export interface WatchedList extends RowContext {
+  readonly placement: Placement;
+  readonly books: SharedBooks;
 }
 
 /** A rule about a rolled-up condition. */
@@ -45,6 +55,13 @@ export interface WholeRule extends Rule {
 export interface RotatingParts {
   readonly rotors: readonly Rotor[];
   readonly points: readonly OperatingPoint[];
+  /** The airframe; without it only shafts given by angles have a direction. */
+  readonly geometry?: AirframeGeometry | undefined;
+  /**
+   * The list rows that rotors name (`list/item`) and that exist: the inertia tensor of one piece about its own CG, airframe components,
+   * kg.m2. Without it no rotor is held against its row.
+   */
+  readonly carriers?: ReadonlyMap<string, Sym3> | undefined;
 }
 
 /** A rule about the rotating parts of a configuration and their operating points. */

@@ -1,10 +1,32 @@
-import { shaftWithoutSpeed, twoBlades } from './rotors/rules';
+import { axisWithoutTwin } from './rotors/axis';
+import { carrierMissing, polarBeyondCarrier, withoutCarrier } from './rotors/carrier';
+import { neverTurns, shaftWithoutSpeed, twoBlades } from './rotors/rules';
+import { assemblyNotCounted, assemblyTotalDiffers, parentCountedWithChildren } from './rows/assemblies';
+import {
+  actualWithGrowth,
+  adjustmentsLeftOut,
+  estimatedWithoutGrowth,
+  sigmaBeyondValue,
+  withoutGroup,
+  withoutMaturity,
+} from './rows/bookkeeping';
 import { memoRows, pairInHalfList } from './rows/counting';
+import { duplicateRow, nearDuplicate, pairEnteredTwice, sameMassAndPlace } from './rows/duplicates';
+import { listLengthSlip, listMassSlip, massJump } from './rows/former';
 import { heavyPoint, masslessRow, masslessTensor, negativeMassOutsideAdjustments } from './rows/mass';
+import { inertiaScale, outsideGroup, placeSlip } from './rows/neighbours';
+import { omittedInertia } from './rows/omitted';
+import { farOutside, onDatum, outsideAircraft } from './rows/place';
+import { axesMirrored, halfOnOtherSide, mirroredOnPlane, sideAgainstName } from './rows/sides';
+import { denserThanMetal, largerThanAircraft, momentsAboutDatum } from './rows/size';
 import { impossibleTensor, productBounds, tensorWithinRounding } from './rows/tensor';
+import { inertiaUnitSlip, massUnitSlip, mirrorProducts, samePartDiffers } from './rows/twins';
 import { type RotorRule, type RowRule, type Rule, type WholeRule } from './rule';
 import { groupWithoutMass, growthUnknown, massNotPositive } from './whole/mass';
-import { impossibleTotal, totalWithinRounding } from './whole/tensor';
+import { beyondSpanOrLength, radiiOutsideClass, totalAboutDatum, totalUnitSlip } from './whole/radii';
+import { flatness, izzNotLargest } from './whole/shape';
+import { ixzAgainstLayout, ixzNegative, lateralCg, lateralProducts } from './whole/symmetry';
+import { impossibleGroup, impossibleTotal, totalWithinRounding } from './whole/tensor';
 
 /*
  * All rules, in the order in which findings of equal severity are shown. To add one, write it beside its kind (rows/, whole/,
@@ -14,24 +36,77 @@ import { impossibleTotal, totalWithinRounding } from './whole/tensor';
 export const ROW_RULES: readonly RowRule[] = [
   impossibleTensor,
   productBounds,
+  largerThanAircraft,
   masslessTensor,
+  farOutside,
   negativeMassOutsideAdjustments,
   heavyPoint,
+  denserThanMetal,
+  momentsAboutDatum,
+  massUnitSlip,
+  inertiaUnitSlip,
+  inertiaScale,
+  listMassSlip,
+  listLengthSlip,
+  massJump,
+  axesMirrored,
+  sideAgainstName,
+  mirrorProducts,
+  outsideAircraft,
+  onDatum,
+  placeSlip,
   pairInHalfList,
+  mirroredOnPlane,
+  pairEnteredTwice,
+  duplicateRow,
+  parentCountedWithChildren,
+  assemblyNotCounted,
+  sigmaBeyondValue,
   tensorWithinRounding,
   masslessRow,
+  omittedInertia,
+  outsideGroup,
+  sameMassAndPlace,
+  nearDuplicate,
+  samePartDiffers,
+  halfOnOtherSide,
   memoRows,
+  assemblyTotalDiffers,
+  withoutMaturity,
+  withoutGroup,
+  actualWithGrowth,
+  estimatedWithoutGrowth,
+  adjustmentsLeftOut,
 ];
 
 export const WHOLE_RULES: readonly WholeRule[] = [
   massNotPositive,
   impossibleTotal,
+  beyondSpanOrLength,
+  impossibleGroup,
+  izzNotLargest,
+  flatness,
+  totalUnitSlip,
+  totalAboutDatum,
   totalWithinRounding,
+  radiiOutsideClass,
+  ixzNegative,
+  ixzAgainstLayout,
+  lateralCg,
+  lateralProducts,
   groupWithoutMass,
   growthUnknown,
 ];
 
-export const ROTOR_RULES: readonly RotorRule[] = [shaftWithoutSpeed, twoBlades];
+export const ROTOR_RULES: readonly RotorRule[] = [
+  shaftWithoutSpeed,
+  polarBeyondCarrier,
+  carrierMissing,
+  neverTurns,
+  withoutCarrier,
+  axisWithoutTwin,
+  twoBlades,
+];
 
 const ALL: readonly Rule[] = [...ROW_RULES, ...WHOLE_RULES, ...ROTOR_RULES];
 

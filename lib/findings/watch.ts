@@ -1,6 +1,9 @@
+import { fromSi } from '@/lib/units/convert';
+import { type Unit } from '@/lib/units/table';
+
 import { ROWS_NAMED } from './finding';
 import { type RowFacts } from './row-facts';
-import { type Watch } from './rule';
+import { type Sighting, type Watch, type WatchedList } from './rule';
 
 /** What `eachRow` keeps, in the words of a rule. */
 export const FIRST_ROWS = `The names of the first ${ROWS_NAMED} rows, their count, and the first one's detail.`;
@@ -15,30 +18,49 @@ export function shown(value: number): string {
   return String(Number(value.toPrecision(4)));
 }
 
+/** An SI value in a unit, for a sentence. */
+export function inUnit(value: number, unit: Unit): string {
+  return `${shown(fromSi(value, unit))} ${unit}`;
+}
+
+/** The rows that a watch has seen something in: the names of the first, their count, the first one's detail. */
+export class Seen {
+  readonly #rows: string[] = [];
+  #first = '';
+  count = 0;
+
+  /** `detail` says what is wrong with the row `item`. */
+  add(item: string, detail: string): void {
+    this.count += 1;
+    if (this.#rows.length < ROWS_NAMED) this.#rows.push(item);
+    if (this.count === 1) this.#first = `${item}: ${detail}`;
+  }
+
+  /** `headline` begins the message, which ends with the first row's detail; null when nothing was seen. */
+  report(headline: (count: number) => string): Sighting | null {
+    const { count } = this;
+    if (count === 0) return null;
+    const first = count === 1 ? this.#first : `First, ${this.#first}`;
+    return { message: `${headline(count)}. ${first}.`, rows: this.#rows, count };
+  }
+}
+
 /**
  * A watch that judges each row by itself. `detail` says what is wrong with a row, or null; `headline` begins the message, which
  * ends with the first row's detail.
  */
 export function eachRow(
-  detail: (row: RowFacts) => string | null,
+  detail: (row: RowFacts, list: WatchedList) => string | null,
   headline: (count: number) => string,
-): () => Watch {
-  return () => {
-    const rows: string[] = [];
-    let count = 0;
-    let first = '';
+): (list: WatchedList) => Watch {
+  return (list) => {
+    const seen = new Seen();
     return {
       see: (row) => {
-        const what = detail(row);
-        if (what === null) return;
-        count += 1;
-        if (rows.length < ROWS_NAMED) rows.push(row.component.item);
-        if (count === 1) first = `${row.component.item}: ${what}`;
+        const what = detail(row, list);
+        if (what !== null) seen.add(row.component.item, what);
       },
-      report: () =>
-        count === 0
-          ? null
-          : { message: `${headline(count)}. ${count === 1 ? '' : 'First, '}${first}.`, rows, count },
+      report: () => seen.report(headline),
     };
   };
 }

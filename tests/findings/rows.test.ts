@@ -1,28 +1,13 @@
 import { describe, expect, it } from 'vitest';
 
 import { ROWS_NAMED, type Finding } from '@/lib/findings/finding';
-import { RowChecks } from '@/lib/findings/look';
-import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { toSi } from '@/lib/units/convert';
 import { IMPOSSIBLE, PUBLISHED } from '@/tests/references/aircraft';
 import { rocket } from '@/tests/references/nesc';
 import { solidCylinder } from '@/tests/references/solids';
-import { aComponent, declarations, diagonal } from '@/tests/support/mass';
-
-function found(rows: readonly Partial<Component>[], list: Partial<ListDeclarations> = {}): Finding[] {
-  const checks = new RowChecks(declarations(list));
-  rows.forEach((row, i) => checks.see(aComponent({ item: `R${i + 1}`, ...row })));
-  return checks.findings();
-}
-
-const ruled = (findings: readonly Finding[], rule: string): Finding | undefined =>
-  findings.find((finding) => finding.rule === rule);
-
-const ids = (findings: readonly Finding[]): string[] => findings.map(({ rule }) => rule);
-
-/** A light row with moments: nothing to find. */
-const SOUND = { mass: 10, moments: diagonal([1, 1, 1]) };
+import { diagonal } from '@/tests/support/mass';
+import { SOUND, found, ids, ruled } from './support';
 
 const slugs = toSi(1, 'slug.ft2');
 
@@ -163,7 +148,7 @@ describe('findings on counting', () => {
   });
 
   it('warn of a pair in a half list', () => {
-    const pair = { ...SOUND, pair: true };
+    const pair = { ...SOUND, pair: true, position: [3, -1, 0] } as const;
     expect(ids(found([pair], { extent: 'left-half' }))).toEqual(['pair-in-half-list']);
     expect(found([pair])).toEqual([]);
   });

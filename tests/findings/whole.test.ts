@@ -129,7 +129,7 @@ describe('findings on rotating parts', () => {
     axis: { kind: 'angles', yaw: 0, pitch: 0, sense: 'cw' },
     gearRatio: 1,
     shaft: 'P1',
-    component: null,
+    component: 'plant/P1',
     blades: 4,
     polarInertiaSigma: null,
     group: null,

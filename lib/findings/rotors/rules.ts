@@ -46,3 +46,26 @@ export const shaftWithoutSpeed: RotorRule = {
     };
   },
 };
+
+export const neverTurns: RotorRule = {
+  id: 'rotor-never-turns',
+  severity: 'warning',
+  sees: 'A rotor whose speed is zero at every operating point.',
+  why: 'It adds no angular momentum anywhere: its speeds are missing, or stand at another shaft.',
+  remedy: 'Give the speeds of its shaft, or take the rotor out.',
+  source: 'Common practice, no source',
+  look: ({ rotors, points }) => {
+    const turning = new Set(
+      points.flatMap(({ speeds }) => speeds.filter(({ speed }) => speed !== 0).map(({ shaft }) => shaft)),
+    );
+    const stated = new Set(points.flatMap(({ speeds }) => speeds.map(({ shaft }) => shaft)));
+    const found = rotors.filter(({ shaft }) => stated.has(shaft) && !turning.has(shaft));
+    const [first] = found;
+    if (first === undefined) return null;
+    return {
+      message: `${counted(found.length, 'rotor stands still', 'rotors stand still')} at every operating point. First, ${first.rotor}, shaft ${first.shaft}.`,
+      rows: found.slice(0, ROWS_NAMED).map(({ rotor }) => rotor),
+      count: found.length,
+    };
+  },
+};

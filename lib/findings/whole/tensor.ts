@@ -2,8 +2,9 @@ import { type MassResult } from '@/lib/mass/result';
 import { type Physicality, checkSecondMoment } from '@/lib/mass/physical';
 import { halfTraceMinus } from '@/lib/numerics/sym3';
 
+import { ROWS_NAMED } from '../finding';
 import { type Sighting, type WholeRule } from '../rule';
-import { shown } from '../watch';
+import { counted, shown } from '../watch';
 
 const SOURCE =
   'First principles: what remains of a body after removals is a body (positive semidefinite S; Wensing, Kim and Slotine 2018)';
@@ -47,4 +48,32 @@ export const totalWithinRounding: WholeRule = {
   remedy: 'Check that the list is complete and its coordinates are not all in one plane.',
   source: SOURCE,
   look: (whole) => look('within-rounding', whole),
+};
+
+export const impossibleGroup: WholeRule = {
+  id: 'impossible-group',
+  severity: 'warning',
+  sees: 'A group with mass whose tensor no body can have.',
+  why: 'A removal took more from this group, or from another place, than there was: the part stands in another group, or the figures of the removal are not those of the part.',
+  remedy: 'Compare each removal with the row that it removes: group, place, mass and moments.',
+  source: SOURCE,
+  look: ({ groups }) => {
+    const found = groups.flatMap(({ group, basic: { properties } }) => {
+      if (properties === null) return [];
+      const { verdict, least } = checkSecondMoment(halfTraceMinus(properties.tensor));
+      return verdict === 'impossible' ? [{ group, least }] : [];
+    });
+    const [first] = found;
+    if (first === undefined) return null;
+    const headline = counted(
+      found.length,
+      'group is not a body that can be',
+      'groups are not bodies that can be',
+    );
+    return {
+      message: `${headline}. First, ${first.group}: least principal second moment ${shown(first.least)} kg.m2.`,
+      rows: found.slice(0, ROWS_NAMED).map(({ group }) => group),
+      count: found.length,
+    };
+  },
 };

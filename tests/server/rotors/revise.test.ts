@@ -165,6 +165,7 @@ describe('a revision with something missing', () => {
     const [newest] = await revisions();
     expect(newest?.findings.map(({ rule, severity }) => [rule, severity])).toEqual([
       ['shaft-without-speed', 'blocker'],
+      ['rotor-without-component', 'note'],
     ]);
   });
 });

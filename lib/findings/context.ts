@@ -1,0 +1,13 @@
+import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type Subtotal } from '@/lib/mass/subtotals';
+
+/** What the revision before this one held of a group: its subtotals, kept about the same reference point. */
+export type FormerSubtotal = Pick<Subtotal, 'group' | 'rows' | 'basic'>;
+
+/** What the rules on rows can know beyond the list itself. A rule that needs what is not given says nothing. */
+export interface RowContext {
+  /** The airframe of the program; absent for a list that belongs to no program. */
+  readonly geometry?: AirframeGeometry | undefined;
+  /** The list's revision before this one; absent for a first revision. */
+  readonly former?: readonly FormerSubtotal[] | undefined;
+}

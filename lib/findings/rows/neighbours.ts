@@ -1,0 +1,242 @@
+import { type Component } from '@/lib/mass/component';
+import { type Vec3 } from '@/lib/numerics/vec3';
+import { fromSi } from '@/lib/units/convert';
+import { INERTIA_UNITS, LENGTH_UNITS } from '@/lib/units/table';
+
+import { BoundedMap } from '../bounded-map';
+import { type RowFacts } from '../row-facts';
+import { type RowRule, type Watch, type WatchedList } from '../rule';
+import { Scatter, outside } from '../scatter';
+import { Book } from '../shared-books';
+import { slipWords, unitSlips } from '../unit-slips';
+import { Seen, counted, inUnit, shown } from '../watch';
+import { leastTrace } from './size';
+
+/*
+ * Rows against their neighbours, the other rows of their group: where the three lowest and the three highest of a quantity are set
+ * aside, what remains is the group's core.
+ */
+
+/** Groups that are watched; a list with more has its later groups unwatched. */
+const GROUPS = 1000;
+const KEEPS = `For each of the first ${GROUPS} groups the four lowest and four highest rows of each quantity.`;
+
+type Axis = 0 | 1 | 2;
+const AXES: readonly Axis[] = [0, 1, 2];
+const NAMES = ['x', 'y', 'z'] as const;
+
+type Placed = Pick<Component, 'item' | 'position'>;
+type Spread = readonly [Scatter<Placed>, Scatter<Placed>, Scatter<Placed>];
+
+/** Outside the core by this many times its width, and by this much at least, m, a row is not where its group is. */
+const WIDTHS = 4;
+const LEAST = 1;
+
+interface Stray {
+  readonly row: Placed;
+  readonly axis: Axis;
+  readonly cores: readonly [Core, Core, Core];
+}
+type Core = readonly [number, number];
+
+function limitOf([low, high]: Core): number {
+  return Math.max(WIDTHS * (high - low), LEAST);
+}
+
+function straysOf(spread: Spread): Stray[] {
+  const [x, y, z] = [spread[0].core, spread[1].core, spread[2].core];
+  if (x === null || y === null || z === null) return [];
+  const cores = [x, y, z] as const;
+  const found = new Map<string, Stray>();
+  for (const axis of AXES)
+    for (const { value, of } of spread[axis].ends)
+      if (outside(value, cores[axis]) > limitOf(cores[axis]) && !found.has(of.item))
+        found.set(of.item, { row: of, axis, cores });
+  return [...found.values()];
+}
+
+/** True where a place is in the group's core or no farther from it than the core is wide. */
+function fits(position: Vec3, cores: Stray['cores']): boolean {
+  return AXES.every((k) => {
+    const [low, high] = cores[k];
+    return outside(position[k], cores[k]) <= Math.max(high - low, LEAST / 4);
+  });
+}
+
+const withAxis = (position: Vec3, axis: Axis, value: number): Vec3 => [
+  axis === 0 ? value : position[0],
+  axis === 1 ? value : position[1],
+  axis === 2 ? value : position[2],
+];
+
+/** What single slip would put a stray where its group is, in words; null when none does. */
+function slipOf({ row: { position }, axis, cores }: Stray, list: WatchedList): string | null {
+  const { lengthUnit, axes } = list.placement.declarations;
+  const isLateral = axes[axis] === 'left' || axes[axis] === 'right';
+  if (!isLateral && fits(withAxis(position, axis, -position[axis]), cores))
+    return `with the other sign of ${NAMES[axis]} it is where they are`;
+  for (const slip of unitSlips(lengthUnit, LENGTH_UNITS)) {
+    const scaled: Vec3 = [position[0] / slip.factor, position[1] / slip.factor, position[2] / slip.factor];
+    if (fits(scaled, cores)) return `its place looks ${slipWords(slip)}`;
+    if (fits(withAxis(position, axis, scaled[axis]), cores))
+      return `its ${NAMES[axis]} looks ${slipWords(slip)}`;
+  }
+  return null;
+}
+
+function strayWords({ row, axis, cores }: Stray, list: WatchedList): string {
+  const { lengthUnit } = list.placement.declarations;
+  const [low, high] = cores[axis];
+  return `${NAMES[axis]} ${inUnit(row.position[axis], lengthUnit)}, most of its group ${shown(fromSi(low, lengthUnit))} to ${inUnit(high, lengthUnit)}`;
+}
+
+/** Where the rows of each group are. */
+class PlaceBook extends Book<Spread | null> {
+  readonly groups = new BoundedMap<Spread>(GROUPS);
+
+  protected take({ isCounted, component: { item, group, position, mass } }: RowFacts): Spread | null {
+    if (!isCounted || mass === 0) return null;
+    const spread: Spread = this.groups.get(group) ?? [new Scatter(), new Scatter(), new Scatter()];
+    this.groups.set(group, spread);
+    for (const axis of AXES) spread[axis].add(position[axis], { item, position });
+    return spread;
+  }
+}
+
+/** Watches where the rows of each group are; `words` says of a stray what is to be said, or null. */
+function watchPlaces(
+  words: (stray: Stray, list: WatchedList) => string | null,
+  headline: (count: number) => string,
+): (list: WatchedList) => Watch {
+  return (list) => {
+    const book = list.books.of(PlaceBook);
+    return {
+      see: (row) => {
+        book.enter(row);
+      },
+      report: () => {
+        const seen = new Seen();
+        for (const [, spread] of book.groups.entries())
+          for (const stray of straysOf(spread)) {
+            const what = words(stray, list);
+            if (what !== null) seen.add(stray.row.item, what);
+          }
+        return seen.report(headline);
+      },
+    };
+  };
+}
+
+export const placeSlip: RowRule = {
+  id: 'place-slip',
+  severity: 'warning',
+  sees: 'A counted row far from its group that the other sign of a coordinate, or another length unit (25.4, 12, 3.2808, 1000 ...), puts where its group is. Groups of ten rows and more; the lateral sign is judged by names.',
+  why: 'One slip explains the place, and its neighbours contradict it.',
+  remedy: 'Check the sign and the unit of the coordinate against the source.',
+  source: 'Common practice, no source; factors from NIST SP 811 (2008), appendix B',
+  keeps: KEEPS,
+  watch: watchPlaces(
+    (stray, list) => {
+      const slip = slipOf(stray, list);
+      return slip === null ? null : `${strayWords(stray, list)}; ${slip}`;
+    },
+    (count) =>
+      counted(
+        count,
+        'row is away from its group by a sign or a unit',
+        'rows are away from their groups by a sign or a unit',
+      ),
+  ),
+};
+
+export const outsideGroup: RowRule = {
+  id: 'outside-group',
+  severity: 'note',
+  sees: 'A counted row farther from its group than four times the width that most of the group takes, and than 1 m. Groups of ten rows and more.',
+  why: 'Its coordinate may be wrong, or its group.',
+  remedy: 'Check the place and the group of the row.',
+  source: 'Common practice, no source',
+  keeps: KEEPS,
+  watch: watchPlaces(
+    (stray, list) => (slipOf(stray, list) === null ? strayWords(stray, list) : null),
+    (count) => counted(count, 'row is far from its group', 'rows are far from their groups'),
+  ),
+};
+
+/** Radii of gyration outside the core by less than this factor are nothing to speak of. */
+const FAR_RADIUS = 2.5;
+/** As dense as a solid ball of titanium: what is denser than that is small beyond doubt. */
+const SMALL_BODY = 3;
+
+interface Sized {
+  readonly item: string;
+  readonly mass: number;
+  readonly radius: number;
+}
+
+/** Half the diagonal of the box that holds the CGs of a group, m. */
+function reachOf(spread: Spread): number {
+  const sides = spread.map(({ ends }) => {
+    const values = ends.map(({ value }) => value);
+    return Math.max(...values) - Math.min(...values);
+  });
+  return Math.hypot(...sides) / 2;
+}
+
+export const inertiaScale: RowRule = {
+  id: 'inertia-scale',
+  severity: 'warning',
+  sees: 'A counted row whose radius of gyration is in the range of its group in another inertia unit (32.174, 144, 12, 4633.06, 1e6 ...), and as stated is 2.5 times outside it: larger than the whole group reaches, or as small as a solid ball of metal. Groups of ten rows with moments and more.',
+  why: 'No part is larger than its group reaches. The moments, or the mass, are probably in another unit than the list declares.',
+  remedy:
+    'Check the moments and the mass against their source and put them into the units that the list declares.',
+  source: 'Common practice, no source; factors from NIST SP 811 (2008), appendix B',
+  keeps: KEEPS,
+  watch: (list) => {
+    const groups = new BoundedMap<Scatter<Sized>>(GROUPS);
+    const places = list.books.of(PlaceBook);
+    const { inertiaUnit, lengthUnit } = list.placement.declarations;
+    const slips = unitSlips(inertiaUnit, INERTIA_UNITS, FAR_RADIUS ** 2).filter(({ isTwice }) => !isTwice);
+    const isAbsurd = ({ mass, radius }: Sized, spread: Spread, [, high]: Core): boolean =>
+      Math.log(radius) > high
+        ? radius > reachOf(spread)
+        : Math.abs(mass) * radius ** 2 < SMALL_BODY * leastTrace(Math.abs(mass));
+    const wordsOf = (of: Sized, core: Core, spread: Spread): string | null => {
+      const value = Math.log(of.radius);
+      if (outside(value, core) <= Math.log(FAR_RADIUS) || !isAbsurd(of, spread, core)) return null;
+      const slip = slips.find(({ factor }) => outside(value - Math.log(factor) / 2, core) === 0);
+      if (slip === undefined) return null;
+      const [low, high] = [fromSi(Math.exp(core[0]), lengthUnit), Math.exp(core[1])];
+      return `radius of gyration ${inUnit(of.radius, lengthUnit)}, most of its group ${shown(low)} to ${inUnit(high, lengthUnit)}; the moments look ${slipWords(slip)}`;
+    };
+    return {
+      see: (row) => {
+        places.enter(row);
+        const { item, group, mass } = row.component;
+        const { radius } = row;
+        if (!row.isCounted || radius === null) return;
+        const scatter = groups.get(group) ?? new Scatter<Sized>();
+        groups.set(group, scatter);
+        scatter.add(Math.log(radius), { item, mass, radius });
+      },
+      report: () => {
+        const seen = new Seen();
+        for (const [group, { core, ends }] of groups.entries()) {
+          const spread = places.groups.get(group);
+          if (core === null || spread === undefined) continue;
+          for (const { of } of ends) {
+            const what = wordsOf(of, core, spread);
+            if (what !== null) seen.add(of.item, what);
+          }
+        }
+        return seen.report((count) =>
+          counted(
+            count,
+            'row has moments of another size than its group',
+            'rows have moments of another size than their groups',
+          ),
+        );
+      },
+    };
+  },
+};

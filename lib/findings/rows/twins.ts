@@ -1,0 +1,247 @@
+import { tensorOf } from '@/lib/frames/products';
+import { type Component } from '@/lib/mass/component';
+import { type Placement } from '@/lib/mass/place';
+import { type Sym3, congruence, halfTraceMinus } from '@/lib/numerics/sym3';
+import { INERTIA_UNITS, MASS_UNITS } from '@/lib/units/table';
+
+import { BoundedMap, KEPT } from '../bounded-map';
+import { withoutSide } from '../named-side';
+import { type RowFacts } from '../row-facts';
+import { type RowRule, type Watch, type WatchedList } from '../rule';
+import { Book } from '../shared-books';
+import { slipOfTwo, slipWords, unitSlips } from '../unit-slips';
+import { Seen, counted, inUnit } from '../watch';
+
+/*
+ * Rows that should be alike: those of one part number, and the left and the right one of a pair by their names.
+ */
+
+/** What is kept of the first of two rows that should be alike. */
+interface Twin {
+  readonly item: string;
+  readonly side: RowFacts['side'];
+  readonly right: number;
+  readonly mass: number;
+  readonly own: Component['moments'];
+  readonly orientation: Component['orientation'];
+}
+
+const KEEPS = `Mass, moments and side of the first ${KEPT} part numbers or names, and the first 200 rows concerned.`;
+
+function twinOf(row: RowFacts): Twin {
+  const { item, mass, moments, orientation } = row.component;
+  return { item, side: row.side, right: row.right, mass, own: moments, orientation };
+}
+
+const sumOf = ({ own }: Twin): number => own.ixx + own.iyy + own.izz;
+
+/** S of a row in airframe components, kg.m2. */
+function secondOf(twin: Twin, placement: Placement): Sym3 {
+  return congruence(placement.ownAxes(twin), halfTraceMinus(tensorOf(twin.own)));
+}
+
+/** False where a row's own axes are the list's, the list's are the airframe's but for their words, and no product is stated. */
+function canHaveProducts({ own, orientation }: Twin, { declarations: { pose } }: Placement): boolean {
+  const turns = [orientation.yaw, orientation.pitch, orientation.roll, pose.yaw, pose.pitch, pose.roll];
+  return own.ixy !== 0 || own.ixz !== 0 || own.iyz !== 0 || turns.some((turn) => turn !== 0);
+}
+
+/** The row as it is kept, and the first of its part number, and of its name without the side; undefined where there is none. */
+interface Twins {
+  readonly now: Twin;
+  readonly byNumber: Twin | undefined;
+  readonly byName: Twin | undefined;
+}
+
+class TwinBook extends Book<Twins | null> {
+  readonly #numbers = new BoundedMap<Twin>();
+  readonly #names = new BoundedMap<Twin>();
+
+  protected take(row: RowFacts): Twins | null {
+    const { partNumber, partRevision, group, mass } = row.component;
+    if (!row.isCounted || mass === 0 || (partNumber === null && row.side === null)) return null;
+    const now = twinOf(row);
+    const first = (known: BoundedMap<Twin>, key: string): Twin | undefined => {
+      const before = known.get(key);
+      if (before === undefined) known.set(key, now);
+      return before;
+    };
+    return {
+      now,
+      byNumber:
+        partNumber === null ? undefined : first(this.#numbers, `${partNumber}\n${partRevision ?? ''}`),
+      byName: row.side === null ? undefined : first(this.#names, `${group}\n${withoutSide(row.name)}`),
+    };
+  }
+}
+
+/** Shows `judge` each counted row with mass together with the first of its part number, then with its twin by name. */
+function watchTwins(
+  by: readonly ('byNumber' | 'byName')[],
+  judgeOf: (list: WatchedList) => (now: Twin, before: Twin) => string | null,
+  headline: (count: number) => string,
+): (list: WatchedList) => Watch {
+  return (list) => {
+    const seen = new Seen();
+    const book = list.books.of(TwinBook);
+    const judge = judgeOf(list);
+    return {
+      see: (row) => {
+        const twins = book.enter(row);
+        if (twins === null) return;
+        let what: string | null = null;
+        for (const kind of by) {
+          const before = twins[kind];
+          if (before !== undefined) what ??= judge(twins.now, before);
+        }
+        if (what !== null) seen.add(row.component.item, what);
+      },
+      report: () => seen.report(headline),
+    };
+  };
+}
+
+/** Two figures for one thing agree with a factor of the table within this share. */
+const AT_FACTOR = 0.005;
+/** Moments are compared where the masses are the same within this share. */
+const SAME_MASS = 0.02;
+
+export const massUnitSlip: RowRule = {
+  id: 'mass-unit-slip',
+  severity: 'warning',
+  sees: 'A counted row whose mass is off by the factor of a unit (lb to kg, g to kg, slug to lb ...), within 0.5 %, against a row of the same part number or against its twin on the other side.',
+  why: 'Alike parts weigh the same: one of the two figures is probably in another unit than the list declares.',
+  remedy: 'Check both masses against their source and put them into the unit that the list declares.',
+  source: 'NIST SP 811 (2008), appendix B, for the factors',
+  keeps: KEEPS,
+  watch: watchTwins(
+    ['byNumber', 'byName'],
+    ({ placement: { declarations } }) => {
+      const { massUnit } = declarations;
+      const slips = unitSlips(massUnit, MASS_UNITS);
+      return (now, before) => {
+        const found = slipOfTwo(now.mass / before.mass, slips, AT_FACTOR);
+        if (found === null) return null;
+        const whose = found.of === 'now' ? 'this one looks' : `${before.item} looks`;
+        return `${inUnit(now.mass, massUnit)}, ${before.item} ${inUnit(before.mass, massUnit)}: ${whose} ${slipWords(found.slip)}`;
+      };
+    },
+    (count) =>
+      counted(
+        count,
+        'row is off in mass by the factor of a unit',
+        'rows are off in mass by the factor of a unit',
+      ),
+  ),
+};
+
+export const inertiaUnitSlip: RowRule = {
+  id: 'inertia-unit-slip',
+  severity: 'warning',
+  sees: 'A counted row whose moments are off by the factor of an inertia unit (32.174, 144, 12, 4633.06 ...), within 0.5 %, against a row of the same part number and mass or against its twin on the other side.',
+  why: 'Alike parts have the same inertia: one of the two figures is probably in another unit than the list declares.',
+  remedy:
+    'Check both sets of moments against their source and put them into the unit that the list declares.',
+  source: 'NIST SP 811 (2008), appendix B, for the factors',
+  keeps: KEEPS,
+  watch: watchTwins(
+    ['byNumber', 'byName'],
+    ({ placement: { declarations } }) => {
+      const { inertiaUnit } = declarations;
+      const slips = unitSlips(inertiaUnit, INERTIA_UNITS, 1.2);
+      return (now, before) => {
+        const [sum, former] = [sumOf(now), sumOf(before)];
+        if (Math.abs(now.mass / before.mass - 1) > SAME_MASS || sum === 0 || former === 0) return null;
+        const found = slipOfTwo(sum / former, slips, AT_FACTOR);
+        if (found === null) return null;
+        const whose = found.of === 'now' ? 'these look' : `those of ${before.item} look`;
+        return `Ixx + Iyy + Izz ${inUnit(sum, inertiaUnit)}, of ${before.item} ${inUnit(former, inertiaUnit)}: ${whose} ${slipWords(found.slip)}`;
+      };
+    },
+    (count) =>
+      counted(
+        count,
+        'row is off in inertia by the factor of a unit',
+        'rows are off in inertia by the factor of a unit',
+      ),
+  ),
+};
+
+/** Masses of one part number may differ by this share: tolerances and weighings. */
+const SAME_PART = 0.1;
+
+export const samePartDiffers: RowRule = {
+  id: 'same-part-differs',
+  severity: 'note',
+  sees: 'A counted row whose mass differs by more than 10 % from that of the first row of the same part number and revision.',
+  why: 'One part number is one drawing: one of the figures is old, or of another part.',
+  remedy: 'Check both masses against their source.',
+  source: 'Common practice, no source',
+  keeps: KEEPS,
+  watch: watchTwins(
+    ['byNumber'],
+    ({
+      placement: {
+        declarations: { massUnit },
+      },
+    }) =>
+      (now, before) => {
+        if (now.mass * before.mass < 0 || Math.abs(now.mass / before.mass - 1) <= SAME_PART) return null;
+        return `${inUnit(now.mass, massUnit)}, ${before.item} ${inUnit(before.mass, massUnit)}`;
+      },
+    (count) =>
+      counted(
+        count,
+        'row weighs otherwise than its part number elsewhere',
+        'rows weigh otherwise than their part number elsewhere',
+      ),
+  ),
+};
+
+/** A product smaller than this share of tr S says nothing about its sign. */
+const SMALL = 0.01;
+/** Twins have products of one size within this share. */
+const ALIKE = 0.2;
+
+/** The products that change sign in the mirror, by the lateral axis, with their names in airframe axes. */
+const LATERAL = {
+  0: ['xy', 'xz'],
+  1: ['xy', 'yz'],
+  2: ['xz', 'yz'],
+} as const;
+
+export const mirrorProducts: RowRule = {
+  id: 'twin-products-same-sign',
+  severity: 'warning',
+  sees: 'The left and the right one of a pair, by their names and places, with the same sign of a product of inertia that a mirror image turns: those with the lateral axis, Ixy and Iyz where y is lateral.',
+  why: 'In a mirror image ∫xy dm and ∫yz dm change sign. Two equal signs add up where they should cancel, and show an asymmetry that is not there.',
+  remedy:
+    'Check the signs of the two rows’ products and the sign convention of each source; the row’s own axes count too.',
+  source: 'First principles: F S Fᵀ with F the reflection across the plane of symmetry',
+  keeps: KEEPS,
+  watch: watchTwins(
+    ['byName'],
+    ({ placement }) =>
+      (now, before) => {
+        if (now.side === before.side || now.right * before.right >= 0) return null;
+        if (!canHaveProducts(now, placement) || !canHaveProducts(before, placement)) return null;
+        if (Math.abs(now.mass / before.mass - 1) > ALIKE) return null;
+        const [one, other] = [secondOf(now, placement), secondOf(before, placement)];
+        for (const key of LATERAL[placement.lateral]) {
+          const [a, b] = [one[key], other[key]];
+          const least = (SMALL * Math.min(sumOf(now), sumOf(before))) / 2;
+          if (Math.min(Math.abs(a), Math.abs(b)) <= least || a * b < 0) continue;
+          if (Math.abs(a - b) > ALIKE * Math.max(Math.abs(a), Math.abs(b))) continue;
+          const { inertiaUnit } = placement.declarations;
+          return `I${key} ${inUnit(a, inertiaUnit)} and, of ${before.item} on the other side, ${inUnit(b, inertiaUnit)} (airframe axes, positive integral)`;
+        }
+        return null;
+      },
+    (count) =>
+      counted(
+        count,
+        'row has a product of the same sign as its twin on the other side',
+        'rows have a product of the same sign as their twins on the other side',
+      ),
+  ),
+};
