@@ -63,7 +63,11 @@ export default async function ProgramPage({ params }: PageProps<'/programs/[prog
       {frame === undefined || baselinesFirst ? null : <BaselinesHere access={access} />}
       <Section
         title="People"
-        aside={<TextLink href={`${home}/settings/members`}>{`All ${members.length} members`}</TextLink>}
+        aside={
+          <TextLink href={`${home}/settings/members`}>
+            {members.length === 1 ? 'Its only member' : `All ${members.length} members`}
+          </TextLink>
+        }
       >
         <p>
           {chiefs.length === 1 ? 'Chief engineer: ' : 'Chief engineers: '}

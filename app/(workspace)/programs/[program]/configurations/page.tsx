@@ -6,6 +6,7 @@ import { ConfigurationForm } from '@/components/configurations/configuration-for
 import { ConfigurationTable } from '@/components/configurations/configuration-table';
 import { EmptyPlace } from '@/components/ui/empty-place';
 import { PageHead, Section } from '@/components/ui/section';
+import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { ProgramFrame } from '../frame';
@@ -38,7 +39,10 @@ export default async function ConfigurationsPage({
             aircraft as its one condition.
           </p>
           {issue === undefined ? (
-            <p>The airframe frame comes first: every configuration stands in one.</p>
+            <p>
+              The <TextLink href={`/programs/${program.code}/settings`}>airframe frame</TextLink> comes first:
+              every configuration stands in one.
+            </p>
           ) : null}
         </EmptyPlace>
       ) : (

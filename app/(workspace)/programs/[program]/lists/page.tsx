@@ -5,6 +5,7 @@ import { ListTable } from '@/components/lists/list-table';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyPlace } from '@/components/ui/empty-place';
 import { PageHead } from '@/components/ui/section';
+import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { lineOf } from '@/lib/server/lists/list-line';
@@ -64,8 +65,18 @@ export default async function ListsPage({ params }: PageProps<'/programs/[progra
             products; then its files are uploaded.
           </p>
           {frame === undefined ? (
-            <p>A chief engineer has to issue the airframe frame in the settings before the first list.</p>
-          ) : null}
+            <p>
+              A chief engineer has to issue the{' '}
+              <TextLink href={`/programs/${program.code}/settings`}>airframe frame</TextLink> before the first
+              list.
+            </p>
+          ) : can('lists.keep') ? null : (
+            <p>
+              Weights engineers add lists; the{' '}
+              <TextLink href={`/programs/${program.code}/settings/members`}>members</TextLink> say who they
+              are.
+            </p>
+          )}
           <p>
             The example holds nine rows of the invented Dunlin 40, in kg and m with positive products, axes
             aft, right, up.

@@ -43,7 +43,12 @@ export default async function RotatingPartsPage({
     return (
       <ProgramFrame access={access} current="rotating-parts">
         <PageHead title="Rotating parts" />
-        <NothingYet home={home} framed={issue !== undefined} keeps={can('rotors.keep')} />
+        <NothingYet
+          home={home}
+          settings={`/programs/${program.code}/settings`}
+          framed={issue !== undefined}
+          keeps={can('rotors.keep')}
+        />
       </ProgramFrame>
     );
   const system = askedSystem(asked['units']);
@@ -159,10 +164,12 @@ export default async function RotatingPartsPage({
 
 function NothingYet({
   home,
+  settings,
   framed,
   keeps,
 }: {
   readonly home: string;
+  readonly settings: string;
   readonly framed: boolean;
   readonly keeps: boolean;
 }) {
@@ -181,7 +188,12 @@ function NothingYet({
         Propellers, spools, wheels of gears: everything that spins, with its polar inertia, the axis of its
         shaft and the sense of its turn. Then the operating points, which give every shaft its speed.
       </p>
-      {framed ? null : <p>Shafts are given in airframe axes, so the airframe frame comes first.</p>}
+      {framed ? null : (
+        <p>
+          Shafts are given in airframe axes, so the <TextLink href={settings}>airframe frame</TextLink> comes
+          first.
+        </p>
+      )}
     </EmptyPlace>
   );
 }
