@@ -37,7 +37,8 @@ class WrongEdits extends Error {
 /**
  * Makes the next revision of a list from a stated one and a set of edits. The whole list goes through the checks of an import;
  * rows that were not edited are stored as they were, to the last bit. The revision keeps what its base declares, so that figures
- * mean what they meant when they were edited; only the marking is the list's present one.
+ * mean what they meant when they were edited; only the marking is the list's present one. `pool` must not be the one that `db`
+ * draws on: a revision being written holds a connection of the first while it reads by the second.
  * @throws AppError conflict, naming who made it, when the list has a newer revision than the stated one.
  */
 export async function editRows(services: { pool: pg.Pool; db: Db }, input: EditRows): Promise<SavedEdits> {

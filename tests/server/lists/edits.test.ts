@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { createDb, createPool } from '@/db/client';
 import { findList, findRevision, type List } from '@/db/queries/lists';
 import { type RowEdit } from '@/lib/contracts/list-edits';
 import { type Person } from '@/lib/server/actor';
@@ -284,4 +285,26 @@ describe('Comparing two revisions', () => {
       { column: 'note', before: null, after: 'lighter bolt' },
     ]);
   });
+});
+
+it('ends for everyone when more people save at once than there are connections: one wins, the rest are told', async () => {
+  const writers = createPool(test.appUrl, 2, () => undefined);
+  const readers = createPool(test.appUrl, 1, () => undefined);
+  const services = { pool: writers, db: createDb(readers) };
+  const edit = { kind: 'remove', item: 'B-100' } as const;
+  const saves = Array.from({ length: 6 }, () =>
+    editRows(services, {
+      person: test.crew.weights,
+      list,
+      baseRevision: 1,
+      reason: 'all at once',
+      edits: [edit],
+    }),
+  );
+  const ends = await Promise.allSettled(saves);
+  expect(ends.filter(({ status }) => status === 'fulfilled')).toHaveLength(1);
+  for (const end of ends)
+    if (end.status === 'rejected') expect(end.reason).toMatchObject({ code: 'conflict' });
+  await writers.end();
+  await readers.end();
 });

@@ -1,6 +1,6 @@
 import { type Task } from 'graphile-worker';
 import { z } from 'zod';
-import { serverDb, serverPool } from '@/lib/server/database';
+import { serverDb, writerPool } from '@/lib/server/database';
 import { giveUpImport } from '@/lib/server/lists/give-up-import';
 import { importFile } from '@/lib/server/lists/import-file';
 import { openObject } from '@/lib/server/storage/open-object';
@@ -12,7 +12,7 @@ export const importListTask: Task = async (payload, { job }) => {
   const { importId } = payloadSchema.parse(payload);
   try {
     await importFile(
-      { pool: serverPool(), db: serverDb(), openObject: (sha256) => openObject(sha256) },
+      { pool: writerPool(), db: serverDb(), openObject: (sha256) => openObject(sha256) },
       importId,
     );
   } catch (error) {

@@ -1,5 +1,5 @@
 import { saveEditsSchema, savedEditsSchema } from '@/lib/contracts/list-edits';
-import { serverDb, serverPool } from '@/lib/server/database';
+import { serverDb, writerPool } from '@/lib/server/database';
 import { programRoute } from '@/lib/server/http/internal-route';
 import { readJson } from '@/lib/server/http/read-json';
 import { editRows } from '@/lib/server/lists/edit-rows';
@@ -11,6 +11,6 @@ type Params = { program: string; list: string };
 export const POST = programRoute<Params>('lists.keep', async ({ request, params, person, program }) => {
   const input = await readJson(request, saveEditsSchema);
   const list = await reachList(serverDb(), program.id, params.list);
-  const saved = await editRows({ pool: serverPool(), db: serverDb() }, { person, list, ...input });
+  const saved = await editRows({ pool: writerPool(), db: serverDb() }, { person, list, ...input });
   return Response.json(savedEditsSchema.parse(saved));
 });
