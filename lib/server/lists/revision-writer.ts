@@ -46,7 +46,7 @@ export class RevisionWriter {
     const placement = new Placement(declarations, frame.geometry);
     this.#book = new SubtotalBook(placement);
     this.#uncertainty = new UncertaintyBook(placement);
-    this.#rules = new RowChecks(declarations);
+    this.#rules = new RowChecks(declarations, { geometry: frame.geometry });
     this.#hash = createHash('sha256').update(contentHead(declarations));
   }
 
