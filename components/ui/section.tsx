@@ -12,7 +12,10 @@ interface SectionProps {
 export function Section({ title, aside, lead, children }: SectionProps) {
   const id = useId();
   return (
-    <section aria-labelledby={id} className="grid min-w-0 grid-cols-1 content-start gap-4 border-t border-ink-2 pt-3">
+    <section
+      aria-labelledby={id}
+      className="grid min-w-0 grid-cols-1 content-start gap-4 border-t border-ink-2 pt-3"
+    >
       <div className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1">
         <h2 id={id} className="text-section font-semibold">
           {title}

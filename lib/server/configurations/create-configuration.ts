@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import { type Db } from '@/db/client';
 import { currentFrameIssue } from '@/db/queries/frames';
 import { AppError } from '@/lib/errors';
@@ -81,7 +82,9 @@ export async function createConfiguration(db: Db, input: CreateConfiguration): P
             'list_revisions.id as revision_id',
           ])
           .where('lists.program_id', '=', input.programId)
-          .where('lists.frame_issue_id', '=', issue.id),
+          .where('lists.frame_issue_id', '=', issue.id)
+          // Adjustments are changes against something; a person chooses which configuration they belong to.
+          .where(sql<string>`list_revisions.declarations ->> 'kind'`, '=', 'components'),
       )
       .execute();
     await trx
