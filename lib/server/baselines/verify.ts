@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { type Db } from '@/db/client';
 import { digestOf, canonicalText } from './digest';
+import { verifyAgainstTrail } from './verify-against-trail';
 import { verifyTrail } from '@/lib/server/audit/verify-trail';
 import { hashRevision } from '@/lib/server/lists/hash-revision';
 
@@ -19,14 +20,15 @@ export interface Verification {
 
 /**
  * Recomputes every digest from what is stored: each baseline's document, the content of every list revision that a
- * submission holds against its content hash and against the sources its baseline names, and the chain of the trail.
+ * submission holds against its content hash and against the sources its baseline names, and the chain of the trail. What the trail says was
+ * decided must be what is stored. Call it on one snapshot: steps taken meanwhile would look like breaches.
  */
 export async function verifyEverything(db: Db): Promise<Verification> {
   const breaches: Breach[] = [];
   const baselines = await verifyBaselines(db, breaches);
   const revisions = await verifyRevisions(db, breaches);
   const trail = await verifyTrail(db);
-  breaches.push(...trail.breaches);
+  breaches.push(...trail.breaches, ...(await verifyAgainstTrail(db)));
   return { baselines, revisions, auditEvents: trail.events, breaches };
 }
 
@@ -40,7 +42,15 @@ async function verifyBaselines(db: Db, breaches: Breach[]): Promise<number> {
   const rows = await db
     .selectFrom('baselines')
     .innerJoin('programs', 'programs.id', 'baselines.program_id')
-    .select(['programs.code', 'programs.id as program_id', 'number', 'submission_id', 'document', 'digest'])
+    .select([
+      'programs.code',
+      'number',
+      'baselines.title',
+      'supersedes',
+      'submission_id',
+      'document',
+      'digest',
+    ])
     .orderBy('programs.code')
     .orderBy('number')
     .execute();
@@ -58,7 +68,9 @@ async function verifyBaselines(db: Db, breaches: Breach[]): Promise<number> {
     const parsed = parse(row.document);
     if (parsed === null || canonicalText(parsed) !== row.document)
       breaches.push({ what, detail: 'the document is not the canonical JSON of its content' });
-    if (parsed !== null) breaches.push(...(await compareSources(db, what, row.submission_id, parsed)));
+    if (parsed === null) continue;
+    breaches.push(...compareHead(what, row, parsed));
+    breaches.push(...(await compareSources(db, what, row.submission_id, parsed)));
   }
   return rows.length;
 }
@@ -72,6 +84,23 @@ function parse(text: string): object | null {
     if (error instanceof SyntaxError) return null;
     throw error;
   }
+}
+
+/** What lists of baselines show without opening the document. */
+function compareHead(
+  what: string,
+  { number, title, supersedes }: { number: number; title: string; supersedes: number | null },
+  document: object,
+): Breach[] {
+  const read = document as {
+    readonly baseline?: unknown;
+    readonly title?: unknown;
+    readonly supersedes?: unknown;
+  };
+  const same = read.baseline === number && read.title === title && read.supersedes === supersedes;
+  return same
+    ? []
+    : [{ what, detail: 'its number, title or what it supersedes is not as its document says' }];
 }
 
 async function compareSources(

@@ -3,7 +3,10 @@ import { verifyEverything } from '@/lib/server/baselines/verify';
 import { findLocalServices } from './local-env';
 
 findLocalServices();
-const { baselines, revisions, auditEvents, breaches } = await verifyEverything(serverDb());
+const { baselines, revisions, auditEvents, breaches } = await serverDb()
+  .transaction()
+  .setIsolationLevel('repeatable read')
+  .execute(verifyEverything);
 await serverDb().destroy();
 for (const { what, detail } of breaches) console.log(`does not hold: ${what}: ${detail}`);
 console.log(
