@@ -12,16 +12,20 @@ interface SignFormProps {
   readonly submission: string;
   /** The number that this signature gives. */
   readonly number: number;
+  /** The baseline that it supersedes, against which the page shows what changes. */
+  readonly supersedes: number | null;
 }
 
 /** Signs a submission: the password again, and the one primary button. */
-export function SignForm({ action, program, submission, number }: SignFormProps) {
+export function SignForm({ action, program, submission, number, supersedes }: SignFormProps) {
   const [state, send] = useActionState(action, IDLE);
   return (
     <form action={send} className="grid gap-3 py-1">
       {state.errors['password'] ? null : <FormAnswer state={state} />}
       <input type="hidden" name="program" value={program} />
       <input type="hidden" name="submission" value={submission} />
+      <input type="hidden" name="number" value={number} />
+      <input type="hidden" name="supersedes" value={supersedes ?? ''} />
       <TextField
         name="password"
         type="password"

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { codeSchema, reasonSchema, titleSchema } from './codes';
-import { wholeField } from './form-fields';
+import { blankOr, wholeField } from './form-fields';
 
 const idField = z.string().min(1).max(64);
 
@@ -49,8 +49,11 @@ function answersOf(form: Readonly<Record<string, unknown>>): GivenAnswer[] {
 /** An answer is one or a few sentences. */
 export const ANSWER_LENGTH = 1000;
 
+/** With the submission goes what its page said that the signature does: which number it gives, which baseline it supersedes. */
 export const signFormSchema = z.object({
   submission: idField,
+  number: wholeField(1),
+  supersedes: blankOr(wholeField(1)),
   password: z.string('Enter your password.').min(1, 'Enter your password.').max(200),
 });
 

@@ -2,6 +2,7 @@ import { type Db } from '@/db/client';
 import { findSubmission, revisionsOfSubmission, submissionState } from '@/db/queries/baselines';
 import {
   baselineBefore,
+  leftOutOf,
   nextBaselineNumber,
   resultOfSubmission,
   rotorsOfSubmission,
@@ -35,8 +36,13 @@ export async function loadReview(
     nextBaselineNumber(db, programId),
   ]);
   const former = newest !== null && !newest.withdrawn ? newest : null;
-  const [formerResult, lists] = await Promise.all([
+  const [formerResult, leftOut, lists] = await Promise.all([
     former && resultOfSubmission(db, former.submission_id),
+    leftOutOf(
+      db,
+      revisions.map((revision) => revision.revision_id),
+      submission.frame_issue_id,
+    ),
     revisionPairs(db, former?.submission_id ?? null, submissionId).then((pairs) => countPairs(db, pairs)),
   ]);
   const state = submissionState(submission);
@@ -45,6 +51,7 @@ export async function loadReview(
     state,
     revisions,
     rotors,
+    leftOut,
     /** The build's newest baseline; withdrawn, it is nothing to compare with. */
     newest,
     former,

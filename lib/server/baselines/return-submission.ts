@@ -4,7 +4,7 @@ import { AppError } from '@/lib/errors';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { mailPeople } from './mail-people';
 import { refusalOf } from './refusals';
-import { type SignSubmission } from './sign-submission';
+import { type DecideSubmission } from './sign-submission';
 
 /**
  * Returns a submission to whoever submitted it, with the reasons.
@@ -12,7 +12,7 @@ import { type SignSubmission } from './sign-submission';
  */
 export async function returnSubmission(
   db: Db,
-  input: SignSubmission & { readonly reason: string },
+  input: DecideSubmission & { readonly reason: string },
 ): Promise<void> {
   const { person, program, submissionId, reason } = input;
   try {

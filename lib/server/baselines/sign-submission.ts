@@ -12,10 +12,15 @@ import { canonicalText, digestOf } from './digest';
 import { mailPeople } from './mail-people';
 import { refusalOf } from './refusals';
 
-export interface SignSubmission {
+export interface DecideSubmission {
   readonly person: Person;
   readonly program: { readonly id: string; readonly code: string; readonly title: string };
   readonly submissionId: string;
+}
+
+export interface SignSubmission extends DecideSubmission {
+  /** What the signer was shown that the signature does; absent where nobody was shown anything. */
+  readonly seen?: { readonly number: number; readonly supersedes: number | null };
 }
 
 type SubmissionFound = NonNullable<Awaited<ReturnType<typeof findSubmission>>>;
@@ -23,7 +28,7 @@ type SubmissionFound = NonNullable<Awaited<ReturnType<typeof findSubmission>>>;
 /**
  * Signs a submission: decision, number, document, digest, supersession, trail and mails in one transaction. The caller has just
  * checked the signer's password.
- * @throws AppError conflict when it is decided already, forbidden for one's own submission or revisions.
+ * @throws AppError conflict when it is decided already or would do other than was seen, forbidden for one's own submission or revisions.
  */
 export async function signSubmission(
   db: Db,
@@ -40,7 +45,7 @@ async function sign(
   trx: Transaction<Database>,
   input: SignSubmission,
 ): Promise<{ number: number; digest: string }> {
-  const { person, program, submissionId } = input;
+  const { person, program, submissionId, seen } = input;
   await lockBaselines(trx, program.id);
   const submission = await findSubmission(trx, program.id, submissionId);
   if (submission === undefined) throw new AppError('not-found', 'There is no such submission.');
@@ -49,6 +54,15 @@ async function sign(
       'conflict',
       `This submission was ${submission.decision === 'approved' ? 'signed' : 'returned'} by ${submission.decider ?? 'someone'} already.`,
     );
+  const number = (await lastNumber(trx, program.id)) + 1;
+  const former = await newestBaseline(trx, submission.build_id);
+  const supersedes = former && former.state === 'current' ? former.number : null;
+  if (seen && (seen.number !== number || seen.supersedes !== supersedes))
+    throw new AppError(
+      'conflict',
+      `Baselines were signed or withdrawn since this page was loaded: this would be baseline ${number} now and supersede ` +
+        `${supersedes === null ? 'none' : `baseline ${supersedes}`}. Nothing was signed. Load the page again and look at what changes.`,
+    );
   const clock = await sql<{ at: Date }>`select date_trunc('milliseconds', now()) as at`.execute(trx);
   const at = clock.rows[0]?.at;
   if (at === undefined) throw new Error('the database told no time');
@@ -56,9 +70,6 @@ async function sign(
     .insertInto('decisions')
     .values({ submission_id: submissionId, decision: 'approved', decided_by: person.userId, decided_at: at })
     .execute();
-  const number = (await lastNumber(trx, program.id)) + 1;
-  const former = await newestBaseline(trx, submission.build_id);
-  const supersedes = former && former.state === 'current' ? former.number : null;
   const text = canonicalText(
     await documentOf(trx, program.code, submission, { person, number, supersedes, at }),
   );

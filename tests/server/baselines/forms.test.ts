@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { findConfiguration } from '@/db/queries/configurations';
+import { findConfiguration, pinnedRevisions } from '@/db/queries/configurations';
 import { lastSubmissionOf, leftOutOf, massHistory } from '@/db/queries/baseline-history';
 import { findSubmission, submissionsOfProgram } from '@/db/queries/baselines';
 import { choicesOf, countEvents, eventsOf } from '@/db/queries/trail';
@@ -122,13 +122,30 @@ describe('the form that submits', () => {
 });
 
 describe('a signature', () => {
-  const sign = (password: string, person = test.crew.chief) =>
-    signWithPassword(test.db, { person, program: test.program, submissionId: first, password });
+  const sign = (password: string, seen = { number: 1, supersedes: null as number | null }) =>
+    signWithPassword(test.db, {
+      person: test.crew.chief,
+      program: test.program,
+      submissionId: first,
+      seen,
+      password,
+    });
 
   it('needs the right password, and tells a wrong one at its field', async () => {
     await expect(sign('not this one')).rejects.toMatchObject({
       code: 'invalid-input',
       errors: [{ pointer: '/password' }],
+    });
+    expect((await findSubmission(test.db, test.program.id, first))?.decision).toBeNull();
+  });
+
+  it.each([
+    { number: 2, supersedes: null },
+    { number: 1, supersedes: 1 },
+  ])('does what its page said, or nothing: %o', async (seen) => {
+    await expect(sign(PASSWORD, seen)).rejects.toMatchObject({
+      code: 'conflict',
+      message: expect.stringContaining('this would be baseline 1 now and supersede none') as string,
     });
     expect((await findSubmission(test.db, test.program.id, first))?.decision).toBeNull();
   });
@@ -308,7 +325,16 @@ c,Body,-1.5,6,0,1,C-3,potential
     });
     const found = await findConfiguration(db, program.id, 'with-changes');
     if (found === undefined) throw new Error('no configuration');
-    expect(await leftOutOf(db, found.id, found.frame_issue_id)).toEqual([
+    await pinRevisions(db, {
+      person: crew.weights,
+      configuration: found,
+      version: found.version,
+      revisions: { body: 1, changes: 1 },
+      rotors: null,
+    });
+    const pins = await pinnedRevisions(db, found.id);
+    const revisions = pins.map((pin) => pin.revision_id);
+    expect(await leftOutOf(db, revisions, found.frame_issue_id)).toEqual([
       { list: 'changes', status: 'pending', rows: 1, mass: 4 },
       { list: 'changes', status: 'potential', rows: 1, mass: -1.5 },
     ]);

@@ -27,8 +27,9 @@ export const signSubmissionAction = programAction(
   'baselines.decide',
   signFormSchema,
   async ({ input, person, program }) => {
-    const { submission: submissionId, password } = input;
-    const { number } = await signWithPassword(serverDb(), { person, program, submissionId, password });
+    const { submission: submissionId, password, number: offered, supersedes } = input;
+    const seen = { number: offered, supersedes };
+    const { number } = await signWithPassword(serverDb(), { person, program, submissionId, seen, password });
     redirect(`/programs/${program.code}/baselines/${number}`);
   },
 );

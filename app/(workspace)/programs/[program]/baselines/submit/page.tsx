@@ -33,12 +33,16 @@ export default async function SubmitPage({
     typeof asked === 'string' ? await findConfiguration(serverDb(), program.id, asked) : undefined;
   if (configuration === undefined) notFound();
   const back = `/programs/${program.code}/configurations/${configuration.code}`;
-  const [looked, pins, last, leftOut] = await Promise.all([
+  const [looked, pins, last] = await Promise.all([
     evaluateOrSay(configuration),
     pinnedRevisions(serverDb(), configuration.id),
     lastSubmissionOf(serverDb(), configuration.id),
-    leftOutOf(serverDb(), configuration.id, configuration.frame_issue_id),
   ]);
+  const leftOut = await leftOutOf(
+    serverDb(),
+    pins.map((pin) => pin.revision_id),
+    configuration.frame_issue_id,
+  );
   const waits = last?.decision === null ? last : null;
   const titles = new Map([
     ...pins.map((pin) => [pin.list_code, pin.list_title] as const),

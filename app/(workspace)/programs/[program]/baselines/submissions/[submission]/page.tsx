@@ -7,6 +7,7 @@ import { ConditionChoice } from '@/components/baselines/condition-choice';
 import { ConditionSheet } from '@/components/baselines/condition-sheet';
 import { DecisionBanner } from '@/components/baselines/decision-banner';
 import { GroupChangeTable } from '@/components/baselines/group-change-table';
+import { LeftOutTable } from '@/components/baselines/left-out-table';
 import { ListChangeTable } from '@/components/baselines/list-change-table';
 import { cgLimits } from '@/components/baselines/cg-limits';
 import { pathWith, rowsPath } from '@/components/baselines/paths';
@@ -49,7 +50,8 @@ export default async function SubmissionPage({
     ),
     limitsOf(serverDb(), program.id),
   ]);
-  const { submission, state, revisions, rotors, former, newest, comparison, lists, obstacles } = review;
+  const { submission, state, revisions, rotors, leftOut, former, newest } = review;
+  const { comparison, lists, obstacles } = review;
   const asked = await searchParams;
   const { result } = submission;
   const condition = chosen(result.conditions, asked['condition']);
@@ -168,6 +170,11 @@ export default async function SubmissionPage({
               }))}
             />
           </Section>
+          {leftOut.length === 0 ? null : (
+            <Section title="Left out">
+              <LeftOutTable lines={leftOut} />
+            </Section>
+          )}
           <Section title="Sources">
             <SourceList
               sources={revisions.map((one) => ({
@@ -209,6 +216,7 @@ export default async function SubmissionPage({
                         program={program.code}
                         submission={submissionId}
                         number={review.nextNumber}
+                        supersedes={former?.number ?? null}
                       />
                     ) : (
                       <ul className="grid gap-1 py-1">
