@@ -58,7 +58,7 @@ async function at(role: Role): Promise<Page> {
   if (open) return open;
   const context = await browser.newContext({ viewport: { width: 1440, height: 1000 } });
   const page = await context.newPage();
-  page.setDefaultTimeout(20_000);
+  page.setDefaultTimeout(30_000);
   page.on('console', (message) => {
     if (/content security policy|hydrat/i.test(message.text())) failures.push(message.text());
   });
