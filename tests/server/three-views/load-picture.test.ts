@@ -1,5 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { findConfiguration } from '@/db/queries/configurations';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
+import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
 import { loadPicture } from '@/lib/server/three-views/load-picture';
 import { loadViews } from '@/lib/server/three-views/load-views';
 import { configurationSource, type ViewsSource } from '@/lib/server/three-views/sources';
@@ -36,6 +38,16 @@ beforeAll(async () => {
     buildCode: 'design',
     code: 'drawn',
     title: 'Drawn',
+  });
+  const drawn = await findConfiguration(db, program.id, 'drawn');
+  if (drawn === undefined) throw new Error('no configuration');
+  // Adjustments are not taken unasked.
+  await pinRevisions(db, {
+    person: crew.weights,
+    configuration: drawn,
+    version: drawn.version,
+    revisions: { wing: 1, changes: 1 },
+    rotors: null,
   });
   source = await configurationSource(db, program.id, 'drawn');
 });
