@@ -2,11 +2,11 @@ import type pg from 'pg';
 import { type Db } from '@/db/client';
 import { claimImport, findImport, type Import } from '@/db/queries/lists';
 import { type ListDeclarations } from '@/lib/mass/declarations';
-import { readMassList } from '@/lib/ingest/mass-list';
 import { type Problem } from '@/lib/ingest/problem';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { log } from '@/lib/server/log';
 import { publishRevision } from './publish-revision';
+import { readImport } from './read-import';
 import { type RevisionWriter } from './revision-writer';
 
 /** Progress is told at most this often. */
@@ -106,7 +106,7 @@ async function readInto(
   writer: RevisionWriter,
 ): Promise<void> {
   const tell = progressTeller(services.db, found.id);
-  const reading = await readMassList(await services.openObject(found.file_sha256), declarations, {
+  const reading = await readImport(services, found, declarations, {
     onComponent: (component, line) => writer.add(component, line),
     onProgress: ({ rows }) => tell(rows),
   });
