@@ -7,6 +7,7 @@ export const ERROR_CODES = {
   'wrong-origin': { status: 403, title: 'The request comes from another site' },
   'insufficient-scope': { status: 403, title: 'The token does not reach this far' },
   'not-found': { status: 404, title: 'Not found' },
+  'method-not-allowed': { status: 405, title: 'There is no such method here' },
   conflict: { status: 409, title: 'The state does not allow this' },
   gone: { status: 410, title: 'No longer available' },
   'length-required': { status: 411, title: 'The request must declare its length' },

@@ -2,11 +2,10 @@ import { findingKey } from '@/lib/baselines/finding-key';
 import { CAUTION } from '@/lib/baselines/caution';
 import { conventionsOf, rollUpMembers } from '@/lib/contracts/condition-members';
 import { type PlacedFinding } from '@/lib/findings/finding';
-import { airframeToBody } from '@/lib/frames/body';
 import { type ConfigurationResult, type PointResult } from '@/lib/loading/configuration';
 import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type Vec3 } from '@/lib/numerics/vec3';
-import { degreesAsTyped, rpm } from '@/lib/units/convert';
+import { degreesAsTyped, rpmAsTyped } from '@/lib/units/convert';
 
 export interface Stamp {
   /** ISO 8601, UTC. */
@@ -58,7 +57,6 @@ export function handoffDocument(input: HandoffInput) {
     conventions: {
       ...conventionsOf(geometry, 'si', degreesAsTyped(geometry.incidence)),
       frameIssue: input.frameIssue,
-      airframeToBody: airframeToBody(geometry.axes, geometry.incidence).map((row) => [...row]),
     },
     referencePoints: input.referencePoints.map(({ code, place: [x, y, z] }) => ({
       code,
@@ -104,7 +102,7 @@ export function pointMember({ code, momentum }: Pick<PointResult, 'code' | 'mome
     gyroMatrix: momentum.gyroMatrix.map((row) => [...row]),
     rotors: momentum.rotors.map((part) => ({
       rotor: part.rotor,
-      rpm: rpm(part.speed),
+      rpm: rpmAsTyped(part.speed),
       hx: part.momentum[0],
       hy: part.momentum[1],
       hz: part.momentum[2],

@@ -1,3 +1,4 @@
+import { airframeToBody } from '@/lib/frames/body';
 import { type AirframeVec } from '@/lib/frames/tags';
 import { type Moments } from '@/lib/frames/products';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
@@ -115,6 +116,7 @@ export function conventionsOf(geometry: AirframeGeometry, system: UnitSystem, in
     spin: 'right-hand rule',
     airframeAxes: { x: geometry.axes[0], y: geometry.axes[1], z: geometry.axes[2] },
     incidenceDeg,
+    airframeToBody: airframeToBody(geometry.axes, geometry.incidence).map((row) => [...row]),
     units,
   };
 }

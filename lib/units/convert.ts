@@ -44,3 +44,8 @@ export function radiansPerSecond(rpm: number): number {
 export function rpm(speed: number): number {
   return (speed * 30) / Math.PI;
 }
+
+/** rad/s -> revolutions per minute with the digits a person typed, as `asTyped`. */
+export function rpmAsTyped(speed: number): number {
+  return Number(rpm(speed).toPrecision(15));
+}

@@ -77,12 +77,24 @@ function actionOf(call: ts.CallExpression): string[] {
   });
 }
 
+/** The names that a declaration gives; none where all of them refuse every request. */
+function namesOf({ name, initializer }: ts.VariableDeclaration): string[] {
+  if (!ts.isObjectBindingPattern(name)) return [name.getText()];
+  const refusesAll =
+    initializer !== undefined &&
+    ts.isCallExpression(initializer) &&
+    initializer.expression.getText() === 'otherMethods';
+  return refusesAll ? [] : name.elements.map((element) => element.name.getText());
+}
+
 /** Every exported value of a module and the node that defines it. */
 function exportsOf(source: ts.SourceFile): [string, ts.Node][] {
   const variables = source.statements
     .filter(ts.isVariableStatement)
     .flatMap((statement) =>
-      statement.declarationList.declarations.map((one) => ({ name: one.name.getText(), one, statement })),
+      statement.declarationList.declarations.flatMap((one) =>
+        namesOf(one).map((name) => ({ name, one, statement })),
+      ),
     );
   const exported: [string, ts.Node][] = variables
     .filter(({ statement }) => isExported(statement))

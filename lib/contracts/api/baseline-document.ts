@@ -65,12 +65,6 @@ export const headMembers = {
 export const documentConventions = z.object({
   ...conventionsSchema.shape,
   frameIssue: z.string().describe('Number and title of the issue of the airframe frame'),
-  airframeToBody: z
-    .array(z.array(z.number()).length(3))
-    .length(3)
-    .describe(
-      'Rows are the body axes in airframe components: v_body = A v_airframe; det is -1 from a left-handed frame',
-    ),
 });
 
 export const baselineDocumentSchema = z

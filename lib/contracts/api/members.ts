@@ -108,6 +108,12 @@ export const conventionsSchema = z
       .object({ x: z.enum(DIRECTIONS), y: z.enum(DIRECTIONS), z: z.enum(DIRECTIONS) })
       .describe('Where the axes of the airframe frame point'),
     incidenceDeg: z.number().describe('Body x nose-up from the reference line, deg'),
+    airframeToBody: z
+      .array(z.array(z.number()).length(3))
+      .length(3)
+      .describe(
+        'Rows are the body axes in airframe components: v_body = A v_airframe; det is -1 from a left-handed frame',
+      ),
     units: z.object({
       mass: z.enum(['kg', 'lb']),
       length: z.enum(['m', 'in']),

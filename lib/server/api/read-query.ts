@@ -1,4 +1,5 @@
 import { type z } from 'zod';
+import { inputWords } from '@/lib/contracts/input-words';
 import { AppError, type InputError } from '@/lib/errors';
 
 /** The query of the schema's shape; each parameter once. Throws `invalid-input` naming the parameters that are wrong. */
@@ -9,7 +10,7 @@ export function readQuery<S extends z.ZodType>(request: Request, schema: S): z.o
   if (repeated !== undefined) {
     throw parametersWrong([{ parameter: repeated, message: 'Give this parameter once.' }]);
   }
-  const parsed = schema.safeParse(Object.fromEntries(searchParams));
+  const parsed = schema.safeParse(Object.fromEntries(searchParams), { error: inputWords });
   if (parsed.success) return parsed.data;
   throw parametersWrong(
     parsed.error.issues.flatMap((issue): InputError[] =>

@@ -2,6 +2,7 @@ import { type Db } from '@/db/client';
 import { pointMember, sigmaOfPoint } from '@/lib/baselines/handoff-document';
 import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { rpmSchema, shaftOf } from '@/lib/contracts/api/angular-momentum';
+import { inputWords } from '@/lib/contracts/input-words';
 import { type InputError } from '@/lib/errors';
 import { angularMomentum, shaftsWithoutSpeed } from '@/lib/rotors/momentum';
 import { type ShaftSpeed } from '@/lib/rotors/rotor';
@@ -59,7 +60,7 @@ async function atSpeeds(
   const shafts = new Set(parts.map(({ shaft }) => shaft));
   const errors: InputError[] = [];
   const speeds: ShaftSpeed[] = asked.flatMap(({ name, shaft, value }) => {
-    const rpm = rpmSchema.safeParse(value);
+    const rpm = rpmSchema.safeParse(value, { error: inputWords });
     if (!shafts.has(shaft))
       errors.push({ parameter: name, message: `Shafts: ${[...shafts].join(', ') || 'none'}.` });
     else if (!rpm.success)

@@ -1,4 +1,5 @@
 import { type z } from 'zod';
+import { inputWords } from '@/lib/contracts/input-words';
 import { AppError, type InputError } from '@/lib/errors';
 
 /** JSON bodies are at most this long, whoever sends them. */
@@ -10,7 +11,7 @@ export async function readJson<S extends z.ZodType>(request: Request, schema: S)
   if (type !== 'application/json') {
     throw new AppError('unsupported-media-type', 'Send the body as application/json.');
   }
-  const parsed = schema.safeParse(parse(await readText(request)));
+  const parsed = schema.safeParse(parse(await readText(request)), { error: inputWords });
   if (!parsed.success) throw inputErrorOf(parsed.error);
   return parsed.data;
 }

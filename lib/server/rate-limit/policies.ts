@@ -17,5 +17,6 @@ export const RATE_POLICIES = {
   linkAddress: { name: 'link-address', quota: 30, windowSeconds: 15 * MINUTE },
   tokenMaking: { name: 'token-making', quota: 20, windowSeconds: 60 * MINUTE },
   badTokenAddress: { name: 'bad-token-address', quota: 30, windowSeconds: 5 * MINUTE },
+  rollUps: { name: 'roll-ups', quota: 60, windowSeconds: MINUTE },
   api: { name: 'api', quota: 600, windowSeconds: MINUTE },
 } as const satisfies Record<string, RatePolicy>;

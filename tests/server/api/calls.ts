@@ -109,7 +109,11 @@ export function tokenOf(
 
 /** Leaves nothing of the API's quota, until `restoreQuotas`. */
 export async function useUpQuota(test: ProgramUnderTest): Promise<void> {
-  await test.db.updateTable('rate_limits').set({ count: 10_000 }).where('bucket', 'like', 'api:%').execute();
+  await test.db
+    .updateTable('rate_limits')
+    .set({ count: 10_000 })
+    .where((eb) => eb.or([eb('bucket', 'like', 'api:%'), eb('bucket', 'like', 'roll-ups:%')]))
+    .execute();
 }
 
 export async function restoreQuotas(test: ProgramUnderTest): Promise<void> {

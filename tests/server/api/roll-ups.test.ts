@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { POST } from '@/app/api/v1/roll-ups/route';
 import { rollUpEndpoint } from '@/lib/contracts/api/roll-ups';
 import { ROLL_UP_BYTES } from '@/lib/ingest/limits';
@@ -17,6 +17,7 @@ beforeAll(async () => {
   test = await programUnderTest();
   token = await tokenOf(test, test.crew.simulation, ['baselines:read']);
 });
+afterEach(() => restoreQuotas(test));
 afterAll(() => test.close());
 
 interface RollUp {
@@ -225,6 +226,7 @@ describe('POST roll-ups', () => {
       401,
       'Bearer realm="polhode", error="invalid_token"',
     ]);
+    await call({ token, query: UNITS, body: 'item,mass,x,y,z\nA,1,0,0,0\n' });
     await useUpQuota(test);
     const over = await call({ token, query: UNITS, body: 'item,mass,x,y,z\nA,1,0,0,0\n' });
     expect([over.status, Number(over.headers.get('retry-after')) > 0]).toEqual([429, true]);

@@ -4,6 +4,7 @@ import { respond } from '@/lib/server/api/respond';
 import { serverDb } from '@/lib/server/database';
 import { apiRoute } from '@/lib/server/http/api-route';
 import { programsInReach } from '@/lib/server/http/token-caller';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 export const GET = apiRoute({ scope: programsEndpoint.scope }, async ({ caller }) => {
   const programs = await programsInReach(serverDb(), caller);
@@ -21,3 +22,5 @@ export const GET = apiRoute({ scope: programsEndpoint.scope }, async ({ caller }
     })),
   });
 });
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

@@ -19,7 +19,7 @@ const DESCRIPTION = `Mass, CG and inertia of an aircraft program.
 
 **Errors** are problem details (RFC 9457) with a stable \`type\`. Unknown parameters and members are refused.
 
-**Limits.** JSON bodies have at most 1 MiB; a token's owner may ask 600 times a minute.`;
+**Limits.** JSON bodies have at most 1 MiB; a token's owner may ask 600 times a minute, and roll up 60 files a minute.`;
 
 const document = (): Json => {
   const book = new SchemaBook();

@@ -3,6 +3,7 @@ import { reachImportOf } from '@/lib/server/api/reach-import';
 import { respond } from '@/lib/server/api/respond';
 import { serverDb } from '@/lib/server/database';
 import { apiRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 interface ImportParams extends Record<string, string> {
   id: string;
@@ -22,3 +23,5 @@ export const GET = apiRoute<ImportParams>({ scope: importEndpoint.scope }, async
     errorCounts: found.problem_counts ?? {},
   });
 });
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

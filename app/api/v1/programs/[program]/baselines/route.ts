@@ -5,6 +5,7 @@ import { parametersWrong, readQuery } from '@/lib/server/api/read-query';
 import { respond } from '@/lib/server/api/respond';
 import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 const { scope } = baselineListEndpoint;
 
@@ -35,3 +36,5 @@ export const GET = apiProgramRoute({ scope, action: 'baselines.read' }, async ({
       })),
   });
 });
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

@@ -4,6 +4,7 @@ import { documentText, keepable } from '@/lib/server/baselines/answer';
 import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 const { scope } = baselineEndpoint;
 
@@ -15,3 +16,5 @@ export const GET = apiProgramRoute<{ program: string; number: string }>(
     return keepable(request, baseline, `document ${units}`, () => documentText(baseline, units));
   },
 );
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

@@ -7,6 +7,7 @@ import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
 import { readJson } from '@/lib/server/http/read-json';
 import { saveList } from '@/lib/server/lists/save-list';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 interface ListParams extends Record<string, string> {
   program: string;
@@ -32,3 +33,5 @@ export const PUT = apiProgramRoute<ListParams>(
     return respond(saveListEndpoint, created ? 201 : 200, list);
   },
 );
+
+export const { DELETE, GET, PATCH, POST } = otherMethods('PUT');

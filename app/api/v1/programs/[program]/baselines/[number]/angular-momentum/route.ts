@@ -7,6 +7,7 @@ import { momentumAt } from '@/lib/server/baselines/momentum-at';
 import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 const { scope } = angularMomentumEndpoint;
 const KNOWN = ['build', 'units', 'point'];
@@ -30,3 +31,5 @@ export const GET = apiProgramRoute<{ program: string; number: string }>(
     });
   },
 );
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

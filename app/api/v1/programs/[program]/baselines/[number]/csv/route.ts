@@ -6,6 +6,7 @@ import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
 import { CSV_TYPE } from '@/lib/server/http/attachment';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 const { scope } = baselineCsvEndpoint;
 
@@ -18,3 +19,5 @@ export const GET = apiProgramRoute<{ program: string; number: string }>(
     return keepable(request, baseline, `csv ${units}`, () => conditionsCsv(baseline, units), CSV_TYPE);
   },
 );
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');

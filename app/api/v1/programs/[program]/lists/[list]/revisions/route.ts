@@ -6,6 +6,7 @@ import { respond } from '@/lib/server/api/respond';
 import { serverDb } from '@/lib/server/database';
 import { env } from '@/lib/server/env';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 interface ListParams extends Record<string, string> {
   program: string;
@@ -30,3 +31,5 @@ export const POST = apiProgramRoute<ListParams>(
     return respond(addRevisionEndpoint, 202, { import: id, url }, { Location: url });
   },
 );
+
+export const { DELETE, GET, PATCH, PUT } = otherMethods('POST');

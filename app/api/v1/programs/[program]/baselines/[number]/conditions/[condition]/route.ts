@@ -8,6 +8,7 @@ import { headOf, keepable } from '@/lib/server/baselines/answer';
 import { reachBaseline } from '@/lib/server/baselines/reach-baseline';
 import { serverDb } from '@/lib/server/database';
 import { apiProgramRoute } from '@/lib/server/http/api-route';
+import { otherMethods } from '@/lib/server/http/other-methods';
 
 const { scope } = baselineConditionEndpoint;
 
@@ -28,3 +29,5 @@ export const GET = apiProgramRoute<{ program: string; number: string; condition:
     );
   },
 );
+
+export const { DELETE, PATCH, POST, PUT } = otherMethods('GET');
