@@ -100,6 +100,29 @@ export function scaleAccount(k: number, a: Account): Account {
   return fromTwices(product, a.rest !== undefined);
 }
 
+/**
+ * The same bodies carried along `by` (m), as one: r' = r + d, so p' = p + m d and Q' = Q + d pᵀ + p' dᵀ. It is how a translation acts on
+ * the pseudo-inertia (Wensing, Kim and Slotine 2018).
+ */
+export function moveAccount(a: Account, by: AirframeVec): Account {
+  const ten = twicesOf(a);
+  const part = (i: number): Twice => ten[i] ?? [NaN, NaN];
+  const d = by.map((k): Twice => [k, 0]) as [Twice, Twice, Twice];
+  const before = [part(1), part(2), part(3)] as const;
+  const after = [0, 1, 2].map((i) => addTwice(part(i + 1), timesTwice(part(0), d[i as 0 | 1 | 2])));
+  const moved = (at: number, i: 0 | 1 | 2, j: 0 | 1 | 2): Twice =>
+    addTwice(part(at), addTwice(timesTwice(d[i], before[j]), timesTwice(after[i] ?? [NaN, NaN], d[j])));
+  const second = [
+    moved(4, 0, 0),
+    moved(5, 1, 1),
+    moved(6, 2, 2),
+    moved(7, 0, 1),
+    moved(8, 0, 2),
+    moved(9, 1, 2),
+  ];
+  return fromTwices([part(0), ...after, ...second], a.rest !== undefined);
+}
+
 /** The account of one body: its mass, its CG as seen from r0 to twice the precision, and its second moment S about its own CG. */
 export function accountAt(mass: number, place: AirframeTwice, own: In<'airframe', Sym3>): Account {
   const m: Twice = [mass, 0];

@@ -66,18 +66,32 @@ export class Placement {
    * Growth is not in it; a memo row has an account like any other, and it is the caller who does not sum it.
    */
   account(component: Placed): Account {
-    const { mass, moments, quantity } = component;
+    const { quantity } = component;
+    const { piece, image } = this.#onePiece(component);
+    if (image === null) return quantity === 1 ? piece : scaleAccount(quantity, piece);
+    return scaleAccount(quantity, addAccounts(piece, image));
+  }
+
+  /** The same with the mirror image apart; null where the row has none. */
+  parts(component: Placed): { readonly pieces: Account; readonly image: Account | null } {
+    const { piece, image } = this.#onePiece(component);
+    const { quantity } = component;
+    return { pieces: scaleAccount(quantity, piece), image: image && scaleAccount(quantity, image) };
+  }
+
+  #onePiece(component: Placed): { readonly piece: Account; readonly image: Account | null } {
+    const { mass, moments } = component;
     const { reference } = this.geometry;
     const { origin } = this.declarations.pose;
     const place = exactPlaceFrom(reference, this.toAirframe, origin, component.position);
     const own = hasOwnMoments(moments)
       ? congruence(this.ownAxes(component), halfTraceMinus(tensorOf(moments)))
       : ZERO_SYM;
-    const piece = accountAt(mass, place, own);
-    if (!isMirrored(component, this.declarations))
-      return quantity === 1 ? piece : scaleAccount(quantity, piece);
-    const image = accountAt(mass, this.#mirrored(place), mirrorSym(own, this.lateral));
-    return scaleAccount(quantity, addAccounts(piece, image));
+    const mirrored = isMirrored(component, this.declarations);
+    return {
+      piece: accountAt(mass, place, own),
+      image: mirrored ? accountAt(mass, this.#mirrored(place), mirrorSym(own, this.lateral)) : null,
+    };
   }
 
   #mirrored(place: AirframeTwice): AirframeTwice {
