@@ -1,4 +1,5 @@
 import { isFiltered, listViewOf } from '@/lib/contracts/list-view';
+import { listFileName } from '@/lib/export/list-file-name';
 import { serverDb } from '@/lib/server/database';
 import { attachment, CSV_TYPE, streamOf } from '@/lib/server/http/attachment';
 import { programRoute } from '@/lib/server/http/internal-route';
@@ -13,9 +14,14 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
   const list = await reachList(db, program.id, params.list);
   const revision = await reachRevision(db, list, params.revision);
   const view = listViewOf(new URL(request.url).searchParams);
-  const part = isFiltered(view) ? '-part' : '';
   return attachment(streamOf(exportRows(db, revision, view, markingOf(list, revision))), {
-    name: `${program.code}-${list.code}-revision-${revision.number}${part}.csv`,
+    name: listFileName({
+      program: program.code,
+      list: list.code,
+      revision: revision.number,
+      isPart: isFiltered(view),
+      declarations: revision.declarations,
+    }),
     type: CSV_TYPE,
   });
 });
