@@ -8,7 +8,10 @@ interface NamedRows {
   readonly revision: number;
   /** Whether rows of the revision are left out. */
   readonly isPart: boolean;
-  readonly declarations: Pick<ListDeclarations, 'massUnit' | 'lengthUnit' | 'inertiaUnit' | 'products' | 'axes'>;
+  readonly declarations: Pick<
+    ListDeclarations,
+    'massUnit' | 'lengthUnit' | 'inertiaUnit' | 'products' | 'axes'
+  >;
 }
 
 /** A name for exported rows that says what the columns of the contract leave to declarations: units, sign of products, axes. */
