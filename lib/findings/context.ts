@@ -1,3 +1,4 @@
+import { type Component } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type Subtotal } from '@/lib/mass/subtotals';
 
@@ -10,4 +11,14 @@ export interface RowContext {
   readonly geometry?: AirframeGeometry | undefined;
   /** The list's revision before this one; absent for a first revision. */
   readonly former?: readonly FormerSubtotal[] | undefined;
+}
+
+/** What rules compare of a row with what its revision before said under the same item: one piece, SI, list axes. */
+export type RowFigures = Pick<Component, 'mass' | 'position' | 'moments'>;
+
+/** A counted row whose figures changed since the revision before, when both are stated in one frame. */
+export interface RowChange {
+  readonly item: string;
+  readonly now: RowFigures;
+  readonly before: RowFigures;
 }

@@ -4,7 +4,7 @@ import { type AirframeGeometry, bareGeometry } from '@/lib/mass/geometry';
 import { Placement } from '@/lib/mass/place';
 import { type RollUp } from '@/lib/mass/roll-up';
 
-import { type RowContext } from './context';
+import { type RowChange, type RowContext } from './context';
 import { type Finding, type Severity } from './finding';
 import { RowFacts } from './row-facts';
 import { type RotatingParts, type Rule, type Sighting } from './rule';
@@ -45,6 +45,11 @@ export class RowChecks {
   see(component: Component): void {
     const row = new RowFacts(component, this.#placement);
     for (const [, watch] of this.#watches) watch.see(row);
+  }
+
+  /** After the last row, before `findings`: a row whose figures changed since the revision before, in any order. */
+  seeChange(change: RowChange): void {
+    for (const [, watch] of this.#watches) watch.change?.(change);
   }
 
   /** After the last row: blockers first. */

@@ -4,7 +4,7 @@ import { type RollUp } from '@/lib/mass/roll-up';
 import { type Sym3 } from '@/lib/numerics/sym3';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 
-import { type RowContext } from './context';
+import { type RowChange, type RowContext } from './context';
 import { type Severity } from './finding';
 import { type RowFacts } from './row-facts';
 import { type SharedBooks } from './shared-books';
@@ -31,6 +31,8 @@ export interface Sighting {
 /** Watches the rows of one list go by, one at a time. */
 export interface Watch {
   see(row: RowFacts): void;
+  /** After the last row, once for each row whose figures changed since the revision before. */
+  change?(change: RowChange): void;
   /** After the last row; null when there is nothing to say. */
   report(): Sighting | null;
 }

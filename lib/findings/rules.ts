@@ -10,6 +10,7 @@ import {
   withoutGroup,
   withoutMaturity,
 } from './rows/bookkeeping';
+import { changedByInertiaUnit, changedByLengthUnit, changedByMassUnit } from './rows/changes';
 import { memoRows, pairInHalfList } from './rows/counting';
 import { duplicateRow, nearDuplicate, pairEnteredTwice, sameMassAndPlace } from './rows/duplicates';
 import { listLengthSlip, listMassSlip, massJump } from './rows/former';
@@ -49,6 +50,9 @@ export const ROW_RULES: readonly RowRule[] = [
   listMassSlip,
   listLengthSlip,
   massJump,
+  changedByMassUnit,
+  changedByLengthUnit,
+  changedByInertiaUnit,
   axesMirrored,
   sideAgainstName,
   mirrorProducts,

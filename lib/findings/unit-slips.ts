@@ -7,6 +7,8 @@ export interface UnitSlip<U extends Unit> {
   readonly isTwice: boolean;
   /** Stated over expected, from the factor table. */
   readonly factor: number;
+  /** The unit that the figures were taken for on their way to the declared one; absent where that is the declared one. */
+  readonly takenFor?: U;
 }
 
 const si = (unit: Unit): number => FACTORS[unit].times / FACTORS[unit].over;
@@ -25,6 +27,37 @@ export function unitSlips<U extends Unit>(declared: U, units: readonly U[], leas
   return [...once, ...once.map(({ unit, factor }) => ({ unit, isTwice: true, factor: 1 / factor }))];
 }
 
+/** Units that are exchanged before a list's own unit comes into play, by a supplier who converts: 32.174, 144, 12, 4633.06; 25.4. */
+const EXCHANGED: readonly (readonly [Unit, Unit])[] = [
+  ['slug', 'lb'],
+  ['in', 'mm'],
+  ['ft', 'in'],
+  ['slug.ft2', 'lb.ft2'],
+  ['lb.ft2', 'lb.in2'],
+  ['slug.ft2', 'lbf.in.s2'],
+  ['slug.ft2', 'lb.in2'],
+];
+
+/**
+ * `unitSlips` and, after them, the usual exchanges of two units neither of which is `declared`. For figures that are known to
+ * belong together within a fraction of a per cent: so many factors explain a looser ratio by chance.
+ */
+export function slipsOfOneThing<U extends Unit>(
+  declared: U,
+  units: readonly U[],
+  least?: number,
+): UnitSlip<U>[] {
+  const isOurs = (unit: Unit): unit is U => units.some((one) => one === unit);
+  const others = EXCHANGED.flatMap(([a, b]): UnitSlip<U>[] => {
+    if (!isOurs(a) || !isOurs(b) || a === declared || b === declared) return [];
+    return [
+      { unit: a, takenFor: b, isTwice: false, factor: si(b) / si(a) },
+      { unit: b, takenFor: a, isTwice: false, factor: si(a) / si(b) },
+    ];
+  });
+  return [...unitSlips(declared, units, least), ...others];
+}
+
 /** The slip whose factor is within `tolerance` (a share) of the ratio stated over expected; null when there is none. */
 export function slipAt<U extends Unit>(
   ratio: number,
@@ -34,8 +67,9 @@ export function slipAt<U extends Unit>(
   return slips.find(({ factor }) => Math.abs(ratio / factor - 1) <= tolerance) ?? null;
 }
 
-/** `as if in lb.in2` or `as if converted from lb.in2 once too often`. */
-export function slipWords({ unit, isTwice }: UnitSlip<Unit>): string {
+/** `as if in lb.in2`, `as if converted from lb.in2 once too often` or `as if slug.ft2 had been taken for lb.ft2`. */
+export function slipWords({ unit, isTwice, takenFor }: UnitSlip<Unit>): string {
+  if (takenFor !== undefined) return `as if ${unit} had been taken for ${takenFor}`;
   return isTwice ? `as if converted from ${unit} once too often` : `as if in ${unit}`;
 }
 

@@ -9,7 +9,7 @@ import { withoutSide } from '../named-side';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
 import { Book } from '../shared-books';
-import { slipOfTwo, slipWords, unitSlips } from '../unit-slips';
+import { slipOfTwo, slipWords, slipsOfOneThing } from '../unit-slips';
 import { Seen, counted, inUnit } from '../watch';
 
 /*
@@ -118,7 +118,7 @@ export const massUnitSlip: RowRule = {
     ['byNumber', 'byName'],
     ({ placement: { declarations } }) => {
       const { massUnit } = declarations;
-      const slips = unitSlips(massUnit, MASS_UNITS);
+      const slips = slipsOfOneThing(massUnit, MASS_UNITS);
       return (now, before) => {
         const found = slipOfTwo(now.mass / before.mass, slips, AT_FACTOR);
         if (found === null) return null;
@@ -148,7 +148,7 @@ export const inertiaUnitSlip: RowRule = {
     ['byNumber', 'byName'],
     ({ placement: { declarations } }) => {
       const { inertiaUnit } = declarations;
-      const slips = unitSlips(inertiaUnit, INERTIA_UNITS, 1.2);
+      const slips = slipsOfOneThing(inertiaUnit, INERTIA_UNITS, 1.2);
       return (now, before) => {
         const [sum, former] = [sumOf(now), sumOf(before)];
         if (Math.abs(now.mass / before.mass - 1) > SAME_MASS || sum === 0 || former === 0) return null;

@@ -1,6 +1,7 @@
 import type pg from 'pg';
 import { type Transaction, sql } from 'kysely';
 import { onClient } from '@/db/client';
+import { formerRevision } from '@/db/queries/former-revision';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
 import { type Database } from '@/db/schema/database';
 import { type ListDeclarations } from '@/lib/mass/declarations';
@@ -50,6 +51,7 @@ export async function publishRevision<T>(
           id,
           { id: issue.id, geometry: geometryOf(issue) },
           declarations,
+          await formerRevision(trx, list.id, issue.id),
         );
         let written: T;
         try {

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import type pg from 'pg';
 import { type Transaction } from 'kysely';
+import { type FormerRevision, sameFrame, suspectChanges } from '@/db/queries/former-revision';
 import { type Database } from '@/db/schema/database';
 import { type Finding } from '@/lib/findings/finding';
 import { RowChecks } from '@/lib/findings/look';
@@ -41,12 +42,13 @@ export class RevisionWriter {
     private readonly client: pg.PoolClient,
     private readonly revisionId: string,
     private readonly frame: { readonly id: string; readonly geometry: AirframeGeometry },
-    declarations: ListDeclarations,
+    private readonly declarations: ListDeclarations,
+    private readonly former: FormerRevision | null,
   ) {
     const placement = new Placement(declarations, frame.geometry);
     this.#book = new SubtotalBook(placement);
     this.#uncertainty = new UncertaintyBook(placement);
-    this.#rules = new RowChecks(declarations, { geometry: frame.geometry });
+    this.#rules = new RowChecks(declarations, { geometry: frame.geometry, former: former?.subtotals });
     this.#hash = createHash('sha256').update(contentHead(declarations));
   }
 
@@ -88,6 +90,7 @@ export class RevisionWriter {
         )
         .execute();
     }
+    if (this.former !== null) await this.#holdAgainst(trx, this.former);
     const total = (count: (subtotal: Subtotal) => number): number =>
       subtotals.reduce((sum, subtotal) => sum + count(subtotal), 0);
     return {
@@ -97,6 +100,17 @@ export class RevisionWriter {
       contentSha256: this.#hash.digest('hex'),
       findings: this.#rules.findings(),
     };
+  }
+
+  /** Rows against themselves in the revision before; places only where both revisions are stated in one frame. */
+  async #holdAgainst(trx: Transaction<Database>, former: FormerRevision): Promise<void> {
+    const isOneFrame = sameFrame(this.declarations, former.declarations);
+    for (const { item, now, before } of await suspectChanges(trx, this.revisionId, former.id))
+      this.#rules.seeChange({
+        item,
+        now,
+        before: isOneFrame ? before : { ...before, position: now.position },
+      });
   }
 
   async abort(reason: Error): Promise<void> {
