@@ -76,6 +76,16 @@ export function fromNumbers(numbers: readonly number[]): Account {
   return accountOf(tenOf(numbers), numbers.length === 20 ? tenOf(numbers.slice(10)) : undefined);
 }
 
+/** The account whose ten numbers stand in `numbers` from `at` on; for long arrays of trusted ones, unchecked. */
+export function accountFrom(numbers: ArrayLike<number>, at: number): Account {
+  const n = (i: number): number => numbers[at + i] ?? NaN;
+  return {
+    mass: n(0),
+    first: [n(1), n(2), n(3)],
+    second: { xx: n(4), yy: n(5), zz: n(6), xy: n(7), xz: n(8), yz: n(9) },
+  };
+}
+
 /** The ten numbers, each with what rounding left out of it. */
 function twicesOf(a: Account): Twice[] {
   const rest = a.rest ?? NO_REST;
