@@ -1,7 +1,7 @@
 import { restoreFormula } from '@/lib/export/formula-text';
 import { type CsvRecord, misplacedQuoteProblem } from '@/lib/ingest/csv/splitter';
 import { type Header } from '@/lib/ingest/table/header';
-import { MARK_OR_THOUSANDS, readNumber } from '@/lib/ingest/table/number-text';
+import { MARK_OR_THOUSANDS, type NumberFault, readNumber } from '@/lib/ingest/table/number-text';
 import { type ProblemLog, shorten } from '@/lib/ingest/problem-log';
 
 const LARGEST_COUNT = 1_000_000;
@@ -34,7 +34,12 @@ export class Cells<C extends string> {
   constructor(
     readonly header: Header<C>,
     private readonly log: ProblemLog,
-    private readonly options: { readonly decimalComma: boolean; readonly fieldLength: number },
+    private readonly options: {
+      readonly decimalComma: boolean;
+      readonly fieldLength: number;
+      /** Reads a number otherwise than the contract says. */
+      readonly readNumber?: (text: string, column: C) => number | NumberFault;
+    },
   ) {
     this.decimalComma = options.decimalComma;
   }
@@ -80,6 +85,12 @@ export class Cells<C extends string> {
     return true;
   }
 
+  /** Whether a mark has been seen, and seen where it could separate thousands: nothing is left to be noted of it then. */
+  marksSeen(mark: DecimalMark): { readonly first: boolean; readonly doubtful: boolean } {
+    const { first, doubtful } = this.marks[mark];
+    return { first: first !== null, doubtful: doubtful !== null };
+  }
+
   /** How many problems the file has so far. */
   get problems(): number {
     return this.log.total;
@@ -112,7 +123,7 @@ export class Cells<C extends string> {
   number(column: C): number | null | undefined {
     const text = this.raw(column);
     if (text === '') return null;
-    const value = readNumber(text, this.decimalComma);
+    const value = this.options.readNumber?.(text, column) ?? readNumber(text, this.decimalComma);
     if (typeof value !== 'number') {
       this.problem(value.kind, column, value.message);
       return undefined;
