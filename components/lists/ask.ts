@@ -35,7 +35,17 @@ export async function ask<S extends z.ZodType>(
     if (reason instanceof DOMException && reason.name === 'AbortError') throw reason;
     throw new AskFailed(NO_ANSWER, 0);
   });
-  const body: unknown = await response.json().catch(() => null);
-  if (!response.ok) throw new AskFailed(problemWords(body, response.status), response.status);
-  return schema.parse(body);
+  const text = await response.text();
+  if (!response.ok) throw new AskFailed(problemWords(jsonOf(text), response.status), response.status);
+  return schema.parse(jsonOf(text));
+}
+
+/** Null where the text is no JSON: what stands between browser and server answers with pages of its own. */
+function jsonOf(text: string): unknown {
+  try {
+    return JSON.parse(text) as unknown;
+  } catch (error) {
+    if (error instanceof SyntaxError) return null;
+    throw error;
+  }
 }
