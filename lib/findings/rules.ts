@@ -1,3 +1,4 @@
+import { REMOVAL_RULES } from './removals/rules';
 import { axisWithoutTwin } from './rotors/axis';
 import { carrierMissing, polarBeyondCarrier, withoutCarrier } from './rotors/carrier';
 import { neverTurns, shaftWithoutSpeed, twoBlades } from './rotors/rules';
@@ -112,7 +113,7 @@ export const ROTOR_RULES: readonly RotorRule[] = [
   twoBlades,
 ];
 
-const ALL: readonly Rule[] = [...ROW_RULES, ...WHOLE_RULES, ...ROTOR_RULES];
+const ALL: readonly Rule[] = [...ROW_RULES, ...WHOLE_RULES, ...ROTOR_RULES, ...REMOVAL_RULES];
 
 /** The rule a finding came from; null for one that is no longer made. */
 export function ruleOf(id: string): Rule | null {

@@ -100,7 +100,7 @@ describe('findings on a rolled-up condition', () => {
       {
         rule: 'group-without-mass',
         severity: 'note',
-        message: '1 group has no positive mass and so no CG. First, Removed/Seats: -1 kg.',
+        message: '1 group has no positive mass and so no CG. First, Removed/Seats: -1 kg (-2.205 lb).',
         rows: ['Removed/Seats'],
         count: 1,
       },
@@ -113,7 +113,7 @@ describe('findings on a rolled-up condition', () => {
       {
         rule: 'growth-unknown',
         severity: 'note',
-        message: '10 kg of 15 kg has no growth allowance and is predicted as it is.',
+        message: '10 kg (22.05 lb) of 15 kg (33.07 lb) has no growth allowance and is predicted as it is.',
         rows: [],
         count: 1,
       },

@@ -7,12 +7,16 @@ import { type Vec3 } from '@/lib/numerics/vec3';
 import { spinArrow, spinAxisProblem } from '@/lib/rotors/axis';
 import { type Rotor } from '@/lib/rotors/rotor';
 
+import { bothUnits } from '../both-units';
 import { ROWS_NAMED } from '../finding';
 import { type RotatingParts, type RotorRule } from '../rule';
-import { counted, shown } from '../watch';
+import { counted } from '../watch';
 
 /** The inertia tensor of one piece of a row about its own CG, airframe components, kg.m2: what `RotatingParts.carriers` holds. */
-export function carrierTensor(component: Component, placement: Placement): Sym3 {
+export function carrierTensor(
+  component: Pick<Component, 'moments' | 'orientation'>,
+  placement: Placement,
+): Sym3 {
   return congruence(placement.ownAxes(component), tensorOf(component.moments));
 }
 
@@ -56,7 +60,7 @@ export const polarBeyondCarrier: RotorRule = {
       'rotors have more inertia than the rows that carry them',
     );
     return {
-      message: `${headline}. First, ${first.rotor}: ${shown(first.polarInertia)} kg.m2, ${first.component ?? ''} ${shown(first.moment)} kg.m2 about the shaft.`,
+      message: `${headline}. First, ${first.rotor}: ${bothUnits(first.polarInertia, 'kg.m2')}, ${first.component ?? ''} ${bothUnits(first.moment, 'kg.m2')} about the shaft.`,
       rows: found.slice(0, ROWS_NAMED).map(({ rotor }) => rotor),
       count: found.length,
     };

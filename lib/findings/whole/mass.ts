@@ -1,6 +1,7 @@
 import { ROWS_NAMED } from '../finding';
+import { bothUnits } from '../both-units';
 import { type WholeRule } from '../rule';
-import { counted, shown } from '../watch';
+import { counted } from '../watch';
 
 export const massNotPositive: WholeRule = {
   id: 'mass-not-positive',
@@ -12,7 +13,11 @@ export const massNotPositive: WholeRule = {
   look: ({ basic, predicted }) => {
     const least = Math.min(basic.mass, predicted.mass);
     if (least > 0) return null;
-    return { message: `The mass is ${shown(least)} kg: there is no CG and no tensor.`, rows: [], count: 1 };
+    return {
+      message: `The mass is ${bothUnits(least, 'kg')}: there is no CG and no tensor.`,
+      rows: [],
+      count: 1,
+    };
   },
 };
 
@@ -29,7 +34,7 @@ export const groupWithoutMass: WholeRule = {
     if (first === undefined) return null;
     const headline = counted(found.length, 'group has no positive mass', 'groups have no positive mass');
     return {
-      message: `${headline} and so no CG. First, ${first.group}: ${shown(first.basic.mass)} kg.`,
+      message: `${headline} and so no CG. First, ${first.group}: ${bothUnits(first.basic.mass, 'kg')}.`,
       rows: found.slice(0, ROWS_NAMED).map(({ group }) => group),
       count: found.length,
     };
@@ -47,7 +52,7 @@ export const growthUnknown: WholeRule = {
     ungrownMass === 0
       ? null
       : {
-          message: `${shown(ungrownMass)} kg of ${shown(basic.mass)} kg has no growth allowance and is predicted as it is.`,
+          message: `${bothUnits(ungrownMass, 'kg')} of ${bothUnits(basic.mass, 'kg')} has no growth allowance and is predicted as it is.`,
           rows: [],
           count: 1,
         },

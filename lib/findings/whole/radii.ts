@@ -6,6 +6,7 @@ import { type Sym3, addSym, halfTraceMinus, outer, scaleSym, traceMinus } from '
 import { type Vec3, scaleVec } from '@/lib/numerics/vec3';
 import { INERTIA_UNITS } from '@/lib/units/table';
 
+import { bothUnits } from '../both-units';
 import { type WholeRule } from '../rule';
 import { unitSlips } from '../unit-slips';
 import { shown } from '../watch';
@@ -92,7 +93,8 @@ export const beyondSpanOrLength: WholeRule = {
       .filter(({ radius, half }) => radius > half);
     if (found.length === 0) return null;
     const parts = found.map(
-      ({ name, radius, half, of }) => `${name} ${shown(radius)} m against ${shown(half)} m, half the ${of}`,
+      ({ name, radius, half, of }) =>
+        `${name} ${bothUnits(radius, 'm')} against ${bothUnits(half, 'm')}, half the ${of}`,
     );
     return { message: `The mass would lie outside the aircraft: ${parts.join('; ')}.`, rows: [], count: 1 };
   },
@@ -152,7 +154,7 @@ export const totalAboutDatum: WholeRule = {
     if (!isWithin(radiiOf(addSym(properties.tensor, transfer, -1), mass, geometry))) return null;
     const { iyy, izz } = properties.inertia;
     return {
-      message: `Iyy ${shown(iyy)} and Izz ${shown(izz)} kg.m2 look taken about the datum: without the transfer from there they are those of an aircraft of this size.`,
+      message: `Iyy ${bothUnits(iyy, 'kg.m2')} and Izz ${bothUnits(izz, 'kg.m2')} look taken about the datum: without the transfer from there they are those of an aircraft of this size.`,
       rows: [],
       count: 1,
     };

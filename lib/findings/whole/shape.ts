@@ -1,5 +1,6 @@
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 
+import { bothUnits } from '../both-units';
 import { type WholeRule } from '../rule';
 import { shown } from '../watch';
 
@@ -25,7 +26,7 @@ export const izzNotLargest: WholeRule = {
     if (izz >= Math.max(ixx, iyy)) return null;
     const [name, larger] = iyy >= ixx ? ['Iyy', iyy] : ['Ixx', ixx];
     return {
-      message: `Izz is ${shown(izz)} kg.m2, ${name} ${shown(larger)} kg.m2: of an aeroplane Izz is the largest.`,
+      message: `Izz is ${bothUnits(izz, 'kg.m2')}, ${name} ${bothUnits(larger, 'kg.m2')}: of an aeroplane Izz is the largest.`,
       rows: [],
       count: 1,
     };

@@ -5,6 +5,7 @@ import { type RollUp } from '@/lib/mass/roll-up';
 import { subVec } from '@/lib/numerics/vec3';
 import { degrees } from '@/lib/units/convert';
 
+import { bothUnits } from '../both-units';
 import { type WholeRule } from '../rule';
 import { shown } from '../watch';
 import { isAircraft } from './shape';
@@ -40,7 +41,7 @@ export const ixzNegative: WholeRule = {
     if (ixz >= -SMALL * izz || layoutIxz(whole, geometry) < -SMALL * izz) return null;
     const angle = degrees(Math.atan2(2 * ixz, izz - ixx)) / 2;
     return {
-      message: `Ixz is ${shown(ixz)} kg.m2 (positive integral, body axes): the principal x axis is turned by ${shown(Math.abs(angle))} degrees from body x, nose up. Most aircraft have it nose down.`,
+      message: `Ixz is ${bothUnits(ixz, 'kg.m2')} (positive integral, body axes): the principal x axis is turned by ${shown(Math.abs(angle))} degrees from body x, nose up. Most aircraft have it nose down.`,
       rows: [],
       count: 1,
     };
@@ -61,7 +62,7 @@ export const ixzAgainstLayout: WholeRule = {
     const layout = layoutIxz(whole, geometry);
     if (ixz * layout >= 0 || Math.min(Math.abs(ixz), Math.abs(layout)) <= SMALL * izz) return null;
     return {
-      message: `Ixz is ${shown(ixz)} kg.m2, while the CGs of the groups alone give ${shown(layout)} kg.m2 (positive integrals, body axes).`,
+      message: `Ixz is ${bothUnits(ixz, 'kg.m2')}, while the CGs of the groups alone give ${bothUnits(layout, 'kg.m2')} (positive integrals, body axes).`,
       rows: [],
       count: 1,
     };
@@ -86,7 +87,7 @@ export const lateralCg: WholeRule = {
     if (Math.abs(off) <= (OFF_PLANE * span) / 2) return null;
     const side = off > 0 === (axes[lateral] === 'right') ? 'right' : 'left';
     return {
-      message: `The CG is ${shown(Math.abs(off))} m to the ${side} of the plane of symmetry, ${shown((200 * Math.abs(off)) / span)} % of half the span.`,
+      message: `The CG is ${bothUnits(Math.abs(off), 'm')} to the ${side} of the plane of symmetry, ${shown((200 * Math.abs(off)) / span)} % of half the span.`,
       rows: [],
       count: 1,
     };
@@ -113,7 +114,7 @@ export const lateralProducts: WholeRule = {
       .filter(({ share }) => Math.abs(share) > ASYMMETRIC)
       .map(
         ({ name, product, share }) =>
-          `${name} ${shown(product)} kg.m2, ${shown(100 * Math.abs(share))} % of the root of its two moments`,
+          `${name} ${bothUnits(product, 'kg.m2')}, ${shown(100 * Math.abs(share))} % of the root of its two moments`,
       );
     return parts.length === 0
       ? null

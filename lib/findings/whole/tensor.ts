@@ -3,8 +3,9 @@ import { type Physicality, checkSecondMoment } from '@/lib/mass/physical';
 import { halfTraceMinus } from '@/lib/numerics/sym3';
 
 import { ROWS_NAMED } from '../finding';
+import { bothUnits } from '../both-units';
 import { type Sighting, type WholeRule } from '../rule';
-import { counted, shown } from '../watch';
+import { counted } from '../watch';
 
 const SOURCE =
   'First principles: what remains of a body after removals is a body (positive semidefinite S; Wensing, Kim and Slotine 2018)';
@@ -20,7 +21,7 @@ function look(
     if (result.properties === null) return [];
     const check = checkSecondMoment(halfTraceMinus(result.properties.tensor));
     if (check.verdict !== verdict) return [];
-    return [`${name}: least principal second moment ${shown(check.least)} kg.m2`];
+    return [`${name}: least principal second moment ${bothUnits(check.least, 'kg.m2')}`];
   });
   if (parts.length === 0) return null;
   const headline =
@@ -71,7 +72,7 @@ export const impossibleGroup: WholeRule = {
       'groups are not bodies that can be',
     );
     return {
-      message: `${headline}. First, ${first.group}: least principal second moment ${shown(first.least)} kg.m2.`,
+      message: `${headline}. First, ${first.group}: least principal second moment ${bothUnits(first.least, 'kg.m2')}.`,
       rows: found.slice(0, ROWS_NAMED).map(({ group }) => group),
       count: found.length,
     };

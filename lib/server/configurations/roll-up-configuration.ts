@@ -17,6 +17,8 @@ import { type Condition, type ConfigurationResult, evaluateConfiguration } from 
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { rotorFindings } from '@/lib/server/rotors/rotor-findings';
+import { removalFindings } from './removal-findings';
 
 export interface Evaluation {
   readonly result: ConfigurationResult;
@@ -25,7 +27,8 @@ export interface Evaluation {
 }
 
 /**
- * Evaluates a configuration from the stored subtotals of its pinned revisions: no row is read.
+ * Evaluates a configuration from the stored subtotals of its pinned revisions. Rows are read only to judge: those that carry rotors,
+ * removals, and those that removals may mean.
  * @throws AppError conflict when it has no condition or no list yet.
  */
 export async function evaluate(db: Db, configuration: Configuration): Promise<Evaluation> {
@@ -80,7 +83,20 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
       ...result.conditions.flatMap(({ code, rollUp }) =>
         placed(findingsOnWhole(rollUp, geometry), { kind: 'condition', code }),
       ),
-      ...placed(rotating?.findings ?? [], { kind: 'rotors', code: '', revision: rotating?.number ?? 0 }),
+      ...(rotating === null
+        ? []
+        : placed(
+            await rotorFindings(
+              db,
+              rotating,
+              geometry,
+              pins.map((pin) => ({ code: pin.list_code, revisionId: pin.revision_id })),
+            ),
+            { kind: 'rotors', code: '', revision: rotating.number },
+          )),
+      ...(await removalFindings(db, pins, geometry, (_, maturity) =>
+        maturity === null ? 0 : allowances[maturity],
+      )),
       ...pins.flatMap((pin) =>
         placed(pin.findings, { kind: 'list', code: pin.list_code, revision: pin.number }),
       ),

@@ -2,11 +2,11 @@ import { type Transaction, sql } from 'kysely';
 import { type Db } from '@/db/client';
 import { type Database } from '@/db/schema/database';
 import { AppError } from '@/lib/errors';
-import { findingsOnRotors } from '@/lib/findings/look';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { rotorFindingsInProgram } from './rotor-findings';
 
 export interface ReviseRotors {
   readonly person: Person;
@@ -53,7 +53,7 @@ export async function reviseRotors(db: Db, input: ReviseRotors): Promise<{ id: s
         reason: input.reason,
         rotors: JSON.stringify(rotors),
         points: JSON.stringify(points),
-        findings: JSON.stringify(findingsOnRotors({ rotors, points })),
+        findings: JSON.stringify(await rotorFindingsInProgram(trx, input.programId, { rotors, points })),
         file_sha256: input.file?.sha256 ?? null,
         file_name: input.file?.name ?? null,
         created_by: input.person.userId,
