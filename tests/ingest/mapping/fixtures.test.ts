@@ -22,7 +22,9 @@ interface Expectation {
     readonly per: unknown;
     readonly questions: readonly string[];
   };
-  readonly answers?: Partial<Draft> & { readonly columns?: Readonly<Record<string, ColumnUse>> };
+  readonly answers?: Partial<Omit<Draft, 'columns'>> & {
+    readonly columns?: Readonly<Record<string, ColumnUse>>;
+  };
   readonly result?: {
     readonly rows: number;
     readonly leftOut: readonly [number, string][];
