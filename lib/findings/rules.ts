@@ -16,7 +16,8 @@ import { memoRows, pairInHalfList } from './rows/counting';
 import { duplicateRow, nearDuplicate, pairEnteredTwice, sameMassAndPlace } from './rows/duplicates';
 import { listLengthSlip, listMassSlip, massJump } from './rows/former';
 import { heavyPoint, masslessRow, masslessTensor, negativeMassOutsideAdjustments } from './rows/mass';
-import { inertiaScale, outsideGroup, placeSlip } from './rows/neighbours';
+import { inertiaScale, largerThanGroup } from './rows/group-sizes';
+import { outsideGroup, placeSlip } from './rows/neighbours';
 import { omittedInertia } from './rows/omitted';
 import { farOutside, onDatum, outsideAircraft } from './rows/place';
 import { axesMirrored, halfOnOtherSide, mirroredOnPlane, sideAgainstName } from './rows/sides';
@@ -48,6 +49,7 @@ export const ROW_RULES: readonly RowRule[] = [
   massUnitSlip,
   inertiaUnitSlip,
   inertiaScale,
+  largerThanGroup,
   listMassSlip,
   listLengthSlip,
   massJump,

@@ -198,7 +198,15 @@ describe('findings against the neighbours', () => {
     expect(sized(0.2 * Math.sqrt(144))).toEqual(['inertia-scale']);
     expect(sized(0.2 * Math.sqrt(4633.06))).toEqual(['inertia-scale']);
     // Larger than the others, but no larger than the group reaches: a long part.
-    expect(sized(0.6)).toEqual([]);
+    expect(sized(0.53)).toEqual([]);
+  });
+
+  it('warn of moments that no body within the group has, where no unit explains them', () => {
+    const sized = (k: number) => found(rows({ moments: diagonal([k * k, k * k, k * k], 3) }));
+    // The box of the CGs is 1.3 by 0 by 0.26 m: half its diagonal 0.6629 m.
+    expect(ids(sized(0.75))).toEqual(['larger-than-group']);
+    expect(sized(0.75)[0]?.message).toMatch(/which reaches 0\.6629 m from its middle\.$/);
+    expect(sized(0.53)).toEqual([]);
   });
 
   it('note what rows without moments may leave out, by the scatter of their group', () => {

@@ -1,7 +1,7 @@
 import { type Component } from '@/lib/mass/component';
 import { type Vec3 } from '@/lib/numerics/vec3';
 import { fromSi } from '@/lib/units/convert';
-import { INERTIA_UNITS, LENGTH_UNITS } from '@/lib/units/table';
+import { LENGTH_UNITS } from '@/lib/units/table';
 
 import { BoundedMap } from '../bounded-map';
 import { type RowFacts } from '../row-facts';
@@ -10,7 +10,6 @@ import { Scatter, outside } from '../scatter';
 import { Book } from '../shared-books';
 import { slipWords, unitSlips } from '../unit-slips';
 import { Seen, counted, inUnit, shown } from '../watch';
-import { leastTrace } from './size';
 
 /*
  * Rows against their neighbours, the other rows of their group: where the three lowest and the three highest of a quantity are set
@@ -18,15 +17,15 @@ import { leastTrace } from './size';
  */
 
 /** Groups that are watched; a list with more has its later groups unwatched. */
-const GROUPS = 1000;
-const KEEPS = `For each of the first ${GROUPS} groups the four lowest and four highest rows of each quantity.`;
+export const GROUPS = 1000;
+export const KEEPS = `For each of the first ${GROUPS} groups the four lowest and four highest rows of each quantity.`;
 
 type Axis = 0 | 1 | 2;
 const AXES: readonly Axis[] = [0, 1, 2];
 const NAMES = ['x', 'y', 'z'] as const;
 
 type Placed = Pick<Component, 'item' | 'position'>;
-type Spread = readonly [Scatter<Placed>, Scatter<Placed>, Scatter<Placed>];
+export type Spread = readonly [Scatter<Placed>, Scatter<Placed>, Scatter<Placed>];
 
 /** Outside the core by this many times its width, and by this much at least, m, a row is not where its group is. */
 const WIDTHS = 4;
@@ -37,7 +36,7 @@ interface Stray {
   readonly axis: Axis;
   readonly cores: readonly [Core, Core, Core];
 }
-type Core = readonly [number, number];
+export type Core = readonly [number, number];
 
 function limitOf([low, high]: Core): number {
   return Math.max(WIDTHS * (high - low), LEAST);
@@ -91,7 +90,7 @@ function strayWords({ row, axis, cores }: Stray, list: WatchedList): string {
 }
 
 /** Where the rows of each group are. */
-class PlaceBook extends Book<Spread | null> {
+export class PlaceBook extends Book<Spread | null> {
   readonly groups = new BoundedMap<Spread>(GROUPS);
 
   protected take({ isCounted, component: { item, group, position, mass } }: RowFacts): Spread | null {
@@ -161,82 +160,4 @@ export const outsideGroup: RowRule = {
     (stray, list) => (slipOf(stray, list) === null ? strayWords(stray, list) : null),
     (count) => counted(count, 'row is far from its group', 'rows are far from their groups'),
   ),
-};
-
-/** Radii of gyration outside the core by less than this factor are nothing to speak of. */
-const FAR_RADIUS = 2.5;
-/** As dense as a solid ball of titanium: what is denser than that is small beyond doubt. */
-const SMALL_BODY = 3;
-
-interface Sized {
-  readonly item: string;
-  readonly mass: number;
-  readonly radius: number;
-}
-
-/** Half the diagonal of the box that holds the CGs of a group, m. */
-function reachOf(spread: Spread): number {
-  const sides = spread.map(({ ends }) => {
-    const values = ends.map(({ value }) => value);
-    return Math.max(...values) - Math.min(...values);
-  });
-  return Math.hypot(...sides) / 2;
-}
-
-export const inertiaScale: RowRule = {
-  id: 'inertia-scale',
-  severity: 'warning',
-  sees: 'A counted row whose radius of gyration is in the range of its group in another inertia unit (32.174, 144, 12, 4633.06, 1e6 ...), and as stated is 2.5 times outside it: larger than the whole group reaches, or as small as a solid ball of metal. Groups of ten rows with moments and more.',
-  why: 'No part is larger than its group reaches. The moments, or the mass, are probably in another unit than the list declares.',
-  remedy:
-    'Check the moments and the mass against their source and put them into the units that the list declares.',
-  source: 'Common practice, no source; factors from NIST SP 811 (2008), appendix B',
-  keeps: KEEPS,
-  watch: (list) => {
-    const groups = new BoundedMap<Scatter<Sized>>(GROUPS);
-    const places = list.books.of(PlaceBook);
-    const { inertiaUnit, lengthUnit } = list.placement.declarations;
-    const slips = unitSlips(inertiaUnit, INERTIA_UNITS, FAR_RADIUS ** 2).filter(({ isTwice }) => !isTwice);
-    const isAbsurd = ({ mass, radius }: Sized, spread: Spread, [, high]: Core): boolean =>
-      Math.log(radius) > high
-        ? radius > reachOf(spread)
-        : Math.abs(mass) * radius ** 2 < SMALL_BODY * leastTrace(Math.abs(mass));
-    const wordsOf = (of: Sized, core: Core, spread: Spread): string | null => {
-      const value = Math.log(of.radius);
-      if (outside(value, core) <= Math.log(FAR_RADIUS) || !isAbsurd(of, spread, core)) return null;
-      const slip = slips.find(({ factor }) => outside(value - Math.log(factor) / 2, core) === 0);
-      if (slip === undefined) return null;
-      const [low, high] = [fromSi(Math.exp(core[0]), lengthUnit), Math.exp(core[1])];
-      return `radius of gyration ${inUnit(of.radius, lengthUnit)}, most of its group ${shown(low)} to ${inUnit(high, lengthUnit)}; the moments look ${slipWords(slip)}`;
-    };
-    return {
-      see: (row) => {
-        places.enter(row);
-        const { item, group, mass } = row.component;
-        const { radius } = row;
-        if (!row.isCounted || radius === null) return;
-        const scatter = groups.get(group) ?? new Scatter<Sized>();
-        groups.set(group, scatter);
-        scatter.add(Math.log(radius), { item, mass, radius });
-      },
-      report: () => {
-        const seen = new Seen();
-        for (const [group, { core, ends }] of groups.entries()) {
-          const spread = places.groups.get(group);
-          if (core === null || spread === undefined) continue;
-          for (const { of } of ends) {
-            const what = wordsOf(of, core, spread);
-            if (what !== null) seen.add(of.item, what);
-          }
-        }
-        return seen.report((count) =>
-          counted(
-            count,
-            'row has moments of another size than its group',
-            'rows have moments of another size than their groups',
-          ),
-        );
-      },
-    };
-  },
 };
