@@ -1,18 +1,8 @@
-import { Cells } from '@/lib/ingest/table/cells';
-import { ComponentRows } from '@/lib/ingest/mass-list/component-row';
-import { type ColumnMapping, type HeaderProblem, readHeader } from '@/lib/ingest/table/header';
-import { ItemTree } from '@/lib/ingest/mass-list/item-tree';
-import { type IngestLimits, MASS_LIST_LIMITS } from '@/lib/ingest/limits';
-import {
-  CHANGE_COLUMNS,
-  LIST_COLUMNS,
-  type ListColumn,
-  NEEDED_COLUMNS,
-  listScales,
-} from '@/lib/ingest/mass-list/columns';
+import { type IngestLimits } from '@/lib/ingest/limits';
+import { type ListColumn } from '@/lib/ingest/mass-list/columns';
 import { type Problem } from '@/lib/ingest/problem';
-import { ProblemLog } from '@/lib/ingest/problem-log';
-import { readTable } from '@/lib/ingest/table/read-table';
+import { readMassListBlocks } from '@/lib/ingest/read-blocks';
+import { type ColumnMapping } from '@/lib/ingest/table/header';
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 
@@ -38,70 +28,25 @@ export interface MassListReading {
 }
 
 /**
- * Reads a component mass list (contract section 1) in one pass and constant memory but for its item names.
+ * Reads a component mass list (contract section 1) in one pass; what stays in memory is its items and group paths.
  *
  * Components are in SI, in the list's own axes, products as positive integrals, uncertainties as one standard deviation, angles
  * in rad. Throws a RangeError when the declarations name no known unit; errors of the byte stream pass through.
  */
-export async function readMassList(
+export function readMassList(
   bytes: AsyncIterable<Uint8Array>,
   declarations: ListDeclarations,
-  { limits = MASS_LIST_LIMITS, mapping = {}, onComponent, onProgress }: MassListOptions,
+  { limits, mapping, onComponent, onProgress }: MassListOptions,
 ): Promise<MassListReading> {
-  const scales = listScales(declarations);
-  const log = new ProblemLog();
-  const tree = new ItemTree(log);
-  let cells: Cells<ListColumn> | null = null;
-  let components: ComponentRows | null = null;
-  let key: ListColumn = 'item';
-  let unknownColumns: readonly string[] = [];
-  let everyRow = true;
-
-  const { rows, whole } = await readTable(bytes, limits, log, {
-    header(record, delimiter) {
-      const check = (positions: ReadonlyMap<ListColumn, number>, problem: HeaderProblem): void =>
-        checkKeys(positions, declarations, problem);
-      const { columns: maxColumns, fieldLength } = limits;
-      const contract = { columns: LIST_COLUMNS, needed: NEEDED_COLUMNS, mapping, maxColumns, check };
-      const header = readHeader(record, contract, log);
-      unknownColumns = header.own.map(({ name }) => name);
-      key = header.positions.has('item') ? 'item' : 'part_number';
-      cells = new Cells(header, log, { decimalComma: delimiter === ';', fieldLength });
-      components = new ComponentRows(cells, scales, declarations);
-      return log.total === 0;
-    },
-    row(record) {
-      if (cells === null || components === null) return;
-      if (!cells.load(record)) {
-        everyRow = false;
-        return;
+  return readMassListBlocks(bytes, declarations, {
+    ...(limits === undefined ? {} : { limits }),
+    ...(mapping === undefined ? {} : { mapping }),
+    onProgress,
+    async onBlock(block) {
+      for (let row = 0; row < block.rows; row += 1) {
+        const waiting = onComponent(block.component(row), block.lines[row] ?? 0);
+        if (waiting !== undefined) await waiting;
       }
-      const component = components.read();
-      const item = component?.item ?? cells.text(key);
-      const fresh = item !== null && tree.add(item, cells.text('parent'), record.line, key);
-      if (component !== null && fresh) return onComponent(component, record.line);
     },
-    progress: (progress) => onProgress?.(progress),
   });
-  (cells as Cells<ListColumn> | null)?.finish();
-  // A parent may stand in a row that could not be read.
-  if (whole && everyRow) tree.finish();
-  return { rows, problems: log.problems(), problemCounts: log.counts(), unknownColumns };
-}
-
-/** A list needs item or part_number; columns of changes belong to adjustments. */
-function checkKeys(
-  positions: ReadonlyMap<ListColumn, number>,
-  { kind }: ListDeclarations,
-  problem: HeaderProblem,
-): void {
-  if (!positions.has('item') && !positions.has('part_number')) {
-    const message = 'The column item is missing. Add it, or a part_number that is unique in the list.';
-    problem('missing-column', 'item', null, message);
-  }
-  for (const column of kind === 'components' ? CHANGE_COLUMNS : []) {
-    if (!positions.has(column)) continue;
-    const message = `The column ${column} belongs to lists of kind adjustments. Declare the list so, or rename the column.`;
-    problem('adjustments-only-column', column, column, message);
-  }
 }

@@ -9,18 +9,27 @@ export interface TextPiece {
   readonly bytes: number;
 }
 
+/** Where in a file a reading begins that is not its beginning: at this physical line, after so many bytes. */
+export interface TextStart {
+  readonly line: number;
+  readonly bytes: number;
+}
+
 /**
- * UTF-8 bytes -> text. A byte order mark is dropped.
+ * UTF-8 bytes -> text. A byte order mark is dropped. With `from` the bytes are the rest of a file, from the beginning of a line on.
  * Throws a CsvFault naming the line at a NUL byte, UTF-16 or a byte that is not UTF-8, after all text before it.
  */
 export async function* decodeText(
   bytes: AsyncIterable<Uint8Array>,
   blockBytes: number,
+  from: TextStart | null = null,
 ): AsyncGenerator<TextPiece> {
   const lineEnds = new LineEnds();
+  lineEnds.line = from?.line ?? 1;
   let tail: Uint8Array = new Uint8Array(0);
-  let read = 0;
-  let characters = 0;
+  let read = from?.bytes ?? 0;
+  // Neither a byte order mark nor the NUL bytes of UTF-16 are looked for within a file.
+  let characters = from === null ? 0 : 2;
 
   for await (const block of blocks(bytes, blockBytes)) {
     read += block.length;

@@ -1,4 +1,4 @@
-import { decodeText } from '@/lib/ingest/csv/decode';
+import { type TextStart, decodeText } from '@/lib/ingest/csv/decode';
 import { type Delimiter, headerDelimiter } from '@/lib/ingest/csv/delimiter';
 import { type CsvRecord, Splitter } from '@/lib/ingest/csv/splitter';
 
@@ -11,20 +11,26 @@ export interface CsvBatch {
 
 const BLOCK_BYTES = 65_536;
 
+/** Where a reading begins that is not at the beginning of a file: at a record, its delimiter known. */
+export interface RecordsStart extends TextStart {
+  readonly delimiter: Delimiter;
+}
+
 /**
- * CSV bytes (UTF-8, RFC 4180) -> records, in constant memory. The delimiter is found from the header row.
+ * CSV bytes (UTF-8, RFC 4180) -> records, in constant memory. The delimiter is found from the header row, or known by `from`.
  * Throws a CsvFault where reading cannot go on, after all records before that place; errors of the source pass through.
  */
 export async function* readRecords(
   bytes: AsyncIterable<Uint8Array>,
   recordLength: number,
   blockBytes: number = BLOCK_BYTES,
+  from: RecordsStart | null = null,
 ): AsyncGenerator<CsvBatch> {
-  let splitter: Splitter | null = null;
+  let splitter = from === null ? null : new Splitter(from.delimiter, recordLength, from.line);
   let pending = '';
-  let read = 0;
+  let read = from?.bytes ?? 0;
 
-  for await (const piece of decodeText(bytes, blockBytes)) {
+  for await (const piece of decodeText(bytes, blockBytes, from)) {
     read = piece.bytes;
     pending += piece.text;
     if (splitter === null) {

@@ -21,11 +21,11 @@ interface Split {
 /** Splits text that arrives in pieces, line ends already \n, and numbers its physical lines. */
 export class Splitter {
   private readonly parser: Papa.Parser;
-  private line = 1;
 
   constructor(
     readonly delimiter: Delimiter,
     private readonly recordLength: number,
+    private line = 1,
   ) {
     this.parser = new Papa.Parser({ delimiter, newline: '\n' });
   }
@@ -110,6 +110,6 @@ export function misplacedQuoteProblem(line: number): CsvFault['problem'] {
   };
 }
 
-function isBlank(fields: readonly string[]): boolean {
+export function isBlank(fields: readonly string[]): boolean {
   return fields.every((field) => field.trim() === '');
 }

@@ -4,7 +4,7 @@ import { type Header } from '@/lib/ingest/table/header';
 import { MARK_OR_THOUSANDS, type NumberFault, readNumber } from '@/lib/ingest/table/number-text';
 import { type ProblemLog, shorten } from '@/lib/ingest/problem-log';
 
-const LARGEST_COUNT = 1_000_000;
+export const LARGEST_COUNT = 1_000_000;
 
 interface Place {
   readonly line: number;

@@ -51,13 +51,18 @@ export async function readTable(
     log.add(error.problem);
     return { rows, whole: false };
   }
-  if (!header)
-    log.add(fileProblem('empty-file', 'The file is empty. It needs a header row and at least one row.'));
-  else if (rows === 0) log.add(fileProblem('no-rows', 'The file has a header row and no rows.'));
+  refuseEmpty(log, header, rows);
   return { rows, whole: true };
 }
 
-function tooManyRows(line: number, rows: number): CsvFault {
+/** To be called at the end of a file: logs a missing header and missing rows. */
+export function refuseEmpty(log: ProblemLog, header: boolean, rows: number): void {
+  if (!header)
+    log.add(fileProblem('empty-file', 'The file is empty. It needs a header row and at least one row.'));
+  else if (rows === 0) log.add(fileProblem('no-rows', 'The file has a header row and no rows.'));
+}
+
+export function tooManyRows(line: number, rows: number): CsvFault {
   const message = `The file has more than ${rows} rows. Split it into several lists.`;
   return new CsvFault({ kind: 'too-many-rows', line, column: null, found: null, message });
 }

@@ -1,0 +1,131 @@
+const CHUNK_BITS = 20;
+const CHUNK = 1 << CHUNK_BITS;
+/** A slot holds an ordinal + 1 in its lower bits and some bits of the hash above them. */
+const ORDINAL_BITS = 22;
+const ORDINALS = 1 << ORDINAL_BITS;
+const ORDINAL_MASK = ORDINALS - 1;
+/** So many texts of one hash are no chance any more. */
+const PROBES = 2000;
+
+/** FNV-1a, one byte at a time: how every hash here is begun and goes on. */
+export const HASH_START = 0x811c9dc5 | 0;
+export const HASH_FACTOR = 0x01000193;
+
+export function hashOf(bytes: Uint8Array, start: number, end: number): number {
+  let hash = HASH_START;
+  for (let at = start; at < end; at += 1) hash = Math.imul(hash ^ (bytes[at] ?? 0), HASH_FACTOR);
+  return hash;
+}
+
+/** Spreads what the last bytes changed over all bits (the finalizer of MurmurHash3). */
+export function spread(hash: number): number {
+  let h = hash ^ (hash >>> 16);
+  h = Math.imul(h, 0x85ebca6b);
+  h ^= h >>> 13;
+  h = Math.imul(h, 0xc2b2ae35);
+  return h ^ (h >>> 16);
+}
+
+/**
+ * A set of texts that numbers them in the order in which they come: their bytes one after another and a table of ordinals, about twelve
+ * bytes a text besides the text itself. Texts are compared byte by byte; the hash only says where to look.
+ */
+export class ItemIndex {
+  #table = new Uint32Array(1 << 10);
+  readonly #chunks: Uint8Array[] = [];
+  #starts = new Uint32Array(1 << 9);
+  #free = 0;
+  count = 0;
+
+  /** The ordinal of a text that is known; otherwise -1, and the text gets the next ordinal. `hash` is its `hashOf`. */
+  add(bytes: Uint8Array, start: number, end: number, hash: number): number {
+    const slot = this.#slotOf(bytes, start, end, hash);
+    const known = ((this.#table[slot] ?? 0) & ORDINAL_MASK) - 1;
+    if (known >= 0) return known;
+    if (this.count + 1 >= ORDINALS) throw new RangeError(`No more than ${ORDINALS} texts are told apart.`);
+    this.#keep(bytes, start, end);
+    this.#table[slot] = (spread(hash) & ~ORDINAL_MASK) | (this.count + 1);
+    this.count += 1;
+    if (2 * this.count > this.#table.length) this.#grow();
+    return -1;
+  }
+
+  /** The ordinal of a text, -1 where it is not known. */
+  find(bytes: Uint8Array, start: number, end: number, hash: number): number {
+    return ((this.#table[this.#slotOf(bytes, start, end, hash)] ?? 0) & ORDINAL_MASK) - 1;
+  }
+
+  bytesOf(ordinal: number): Uint8Array {
+    const place = this.#starts[ordinal] ?? 0;
+    const chunk = this.#chunks[place >>> CHUNK_BITS] ?? new Uint8Array(0);
+    const at = (place & (CHUNK - 1)) + 2;
+    return chunk.subarray(at, at + lengthAt(chunk, at - 2));
+  }
+
+  /** Where the text is, or the empty slot where it would go. */
+  #slotOf(bytes: Uint8Array, start: number, end: number, hash: number): number {
+    const table = this.#table;
+    const mask = table.length - 1;
+    const spreadHash = spread(hash);
+    const tag = (spreadHash & ~ORDINAL_MASK) >>> 0;
+    let slot = spreadHash & mask;
+    for (let entry = table[slot] ?? 0; entry !== 0; entry = table[slot] ?? 0) {
+      if ((entry & ~ORDINAL_MASK) >>> 0 === tag && this.#isAt((entry & ORDINAL_MASK) - 1, bytes, start, end))
+        return slot;
+      slot = (slot + 1) & mask;
+    }
+    return slot;
+  }
+
+  #isAt(ordinal: number, bytes: Uint8Array, start: number, end: number): boolean {
+    const place = this.#starts[ordinal] ?? 0;
+    const chunk = this.#chunks[place >>> CHUNK_BITS];
+    if (chunk === undefined) return false;
+    const at = place & (CHUNK - 1);
+    const length = end - start;
+    if (lengthAt(chunk, at) !== length) return false;
+    // From the end: neighbours begin alike.
+    for (let k = length - 1; k >= 0; k -= 1) if (chunk[at + 2 + k] !== bytes[start + k]) return false;
+    return true;
+  }
+
+  #keep(bytes: Uint8Array, start: number, end: number): void {
+    const length = end - start;
+    if (length > 0xffff) throw new RangeError(`A text of ${length} bytes is too long to be told apart.`);
+    let chunk = this.#chunks.at(-1);
+    if (chunk === undefined || this.#free + 2 + length > chunk.length) {
+      chunk = new Uint8Array(CHUNK);
+      this.#chunks.push(chunk);
+      this.#free = 0;
+    }
+    if (this.count === this.#starts.length) this.#starts = enlarged(this.#starts);
+    this.#starts[this.count] = ((this.#chunks.length - 1) << CHUNK_BITS) | this.#free;
+    chunk[this.#free] = length & 0xff;
+    chunk[this.#free + 1] = length >>> 8;
+    for (let k = 0; k < length; k += 1) chunk[this.#free + 2 + k] = bytes[start + k] ?? 0;
+    this.#free += 2 + length;
+  }
+
+  #grow(): void {
+    const table = new Uint32Array(2 * this.#table.length);
+    const mask = table.length - 1;
+    this.#table = table;
+    for (let ordinal = 0; ordinal < this.count; ordinal += 1) {
+      const text = this.bytesOf(ordinal);
+      const hash = spread(hashOf(text, 0, text.length));
+      let slot = hash & mask;
+      while (table[slot] !== 0) slot = (slot + 1) & mask;
+      table[slot] = (hash & ~ORDINAL_MASK) | (ordinal + 1);
+    }
+  }
+}
+
+function lengthAt(chunk: Uint8Array, at: number): number {
+  return (chunk[at] ?? 0) | ((chunk[at + 1] ?? 0) << 8);
+}
+
+export function enlarged(array: Uint32Array): Uint32Array<ArrayBuffer> {
+  const larger = new Uint32Array(2 * array.length);
+  larger.set(array);
+  return larger;
+}
