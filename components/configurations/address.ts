@@ -1,3 +1,4 @@
+import { type DriversAsked, driversAsked, withDrivers } from '@/lib/drivers/drivers';
 import { type UnitSystem } from '@/lib/units/names';
 
 /** What a reader chose on a configuration's page; kept in its address. */
@@ -7,6 +8,8 @@ export interface ConfigurationView {
   /** Every level of groups, not only the first. */
   readonly allGroups: boolean;
   readonly point: string | null;
+  /** Which of the ten numbers is looked into, and by what parts. */
+  readonly drivers: DriversAsked;
 }
 
 type Asked = Readonly<Record<string, string | string[] | undefined>>;
@@ -21,6 +24,7 @@ export function viewAsked(asked: Asked): ConfigurationView {
     units: asked['units'] === 'us' ? 'us' : 'si',
     allGroups: asked['groups'] === 'all',
     point: text('point'),
+    drivers: driversAsked(asked),
   };
 }
 
@@ -31,5 +35,6 @@ export function viewHref(home: string, view: ConfigurationView): string {
   if (view.units === 'us') query.set('units', 'us');
   if (view.allGroups) query.set('groups', 'all');
   if (view.point !== null) query.set('point', view.point);
+  withDrivers(query, view.drivers);
   return query.size === 0 ? home : `${home}?${query.toString()}`;
 }

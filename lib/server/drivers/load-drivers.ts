@@ -1,5 +1,5 @@
 import { type Db } from '@/db/client';
-import { rowsAt } from '@/db/queries/list-rows';
+import { rowsByItem } from '@/db/queries/list-rows';
 import { type DriverPart, type Drivers, type DriversAsked } from '@/lib/drivers/drivers';
 import { type Account, accountFrom, AccountSum, toNumbersWithRest } from '@/lib/mass/account';
 import { type Category } from '@/lib/mass/component';
@@ -70,7 +70,7 @@ export async function loadDrivers(
 
 type Ranked = Pick<Drivers, 'parts' | 'of' | 'sum' | 'gross'>;
 
-type Found = { readonly revision: number; readonly position: number } | { readonly item: OnBoardItem };
+type Found = { readonly revision: number; readonly row: string } | { readonly onBoard: OnBoardItem };
 
 async function rankRows(
   db: Db,
@@ -81,14 +81,14 @@ async function rankRows(
   const ranking = new Ranking<Found>(whole, number);
   const wanted = new Set(condition.categories);
   for (const [index, revision] of revisions.entries()) {
-    const { positions, categories, numbers } = await rowAccounts(db, revision, geometry);
-    positions.forEach((position, row) => {
+    const { items, categories, numbers } = await rowAccounts(db, revision, geometry);
+    items.forEach((item, row) => {
       const category = categories[row];
       if (category === undefined || !wanted.has(category)) return;
-      ranking.add(accountFrom(numbers, 10 * row), { revision: index, position });
+      ranking.add(accountFrom(numbers, 10 * row), { revision: index, row: item });
     });
   }
-  for (const item of condition.items) ranking.add(accountOfItem(item, geometry), { item });
+  for (const item of condition.items) ranking.add(accountOfItem(item, geometry), { onBoard: item });
   const { of, sum, gross } = ranking;
   return { parts: await rowParts(db, ranking.largest.all(), revisions, geometry), of, sum, gross };
 }
@@ -102,12 +102,12 @@ async function rowParts(
 ): Promise<DriverPart[]> {
   const parts = new Map<string, DriverPart>();
   for (const [index, { id, code, number, declarations }] of revisions.entries()) {
-    const positions = found.flatMap((one) => ('item' in one || one.revision !== index ? [] : [one.position]));
-    if (positions.length === 0) continue;
+    const items = found.flatMap((one) => ('onBoard' in one || one.revision !== index ? [] : [one.row]));
+    if (items.length === 0) continue;
     const placement = new Placement(declarations, geometry);
-    for (const row of await rowsAt(db, id, positions)) {
+    for (const row of await rowsByItem(db, id, items)) {
       const { pieces, image } = placement.parts(componentOf(row));
-      parts.set(`${index} ${row.position}`, {
+      parts.set(`${index} ${row.item}`, {
         key: `${code}/${row.item}`,
         name: row.item,
         description: row.description,
@@ -120,8 +120,8 @@ async function rowParts(
     }
   }
   return found.flatMap((one) => {
-    if ('item' in one) return [itemPart(one.item, geometry)];
-    const part = parts.get(`${one.revision} ${one.position}`);
+    if ('onBoard' in one) return [itemPart(one.onBoard, geometry)];
+    const part = parts.get(`${one.revision} ${one.row}`);
     return part === undefined ? [] : [part];
   });
 }

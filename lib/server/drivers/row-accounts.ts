@@ -9,14 +9,15 @@ import { type SourceRevision } from '@/lib/server/three-views/sources';
 
 /** The counted, approved rows of a revision as accounts about the geometry's r0: ten numbers a row, one row after another. */
 export interface RowAccounts {
-  readonly positions: Int32Array;
+  /** Names its row in the list. */
+  readonly items: readonly string[];
   readonly categories: readonly Category[];
   readonly numbers: Float64Array;
 }
 
 /** A revision never changes, so its rows once placed stay right: those last asked for are kept, this many bytes in all. */
 const KEPT_BYTES = 96 * 2 ** 20;
-const BYTES_PER_ROW = 96;
+const BYTES_PER_ROW = 128;
 
 const kept = new Map<string, { readonly rows: Promise<RowAccounts>; bytes: number }>();
 
@@ -52,7 +53,7 @@ export function rowAccounts(
 function keep(key: string, placed: RowAccounts): void {
   const entry = kept.get(key);
   if (entry === undefined) return;
-  entry.bytes = placed.positions.length * BYTES_PER_ROW;
+  entry.bytes = placed.items.length * BYTES_PER_ROW;
   let total = [...kept.values()].reduce((sum, { bytes }) => sum + bytes, 0);
   for (const [oldest, { bytes }] of kept) {
     if (total <= KEPT_BYTES) return;
@@ -67,24 +68,24 @@ async function placeRows(
   geometry: AirframeGeometry,
 ): Promise<RowAccounts> {
   const placement = new Placement(declarations, geometry);
-  const positions: number[] = [];
+  const items: string[] = [];
   const categories: Category[] = [];
   let numbers = new Float64Array(10 * 1024);
   for await (const row of storedRows(db, id)) {
     if (row.counting !== 'counted' || row.status !== 'approved') continue;
-    const at = 10 * positions.length;
+    const at = 10 * items.length;
     if (at === numbers.length) {
       const longer = new Float64Array(2 * numbers.length);
       longer.set(numbers);
       numbers = longer;
     }
     numbers.set(toNumbers(placement.account(componentOf(row))), at);
-    positions.push(row.position);
+    items.push(row.item);
     categories.push(CATEGORIES[CATEGORIES.indexOf(row.category)] ?? row.category);
   }
   return {
-    positions: Int32Array.from(positions),
+    items,
     categories,
-    numbers: numbers.slice(0, 10 * positions.length),
+    numbers: numbers.slice(0, 10 * items.length),
   };
 }

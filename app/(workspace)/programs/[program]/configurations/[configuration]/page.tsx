@@ -1,5 +1,6 @@
 import { type Metadata } from 'next';
 import { notFound } from 'next/navigation';
+import { Suspense } from 'react';
 import {
   allowancesOf,
   conditionsOf,
@@ -10,7 +11,7 @@ import {
 } from '@/db/queries/configurations';
 import { limitsOf } from '@/db/queries/settings';
 import { OneButtonForm } from '@/components/forms/one-button-form';
-import { viewAsked } from '@/components/configurations/address';
+import { viewAsked, viewHref } from '@/components/configurations/address';
 import { changedSince } from '@/components/configurations/changed-since';
 import { MadeFrom } from '@/components/configurations/made-from';
 import { OnBoard } from '@/components/configurations/on-board';
@@ -29,7 +30,9 @@ import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
+import { configurationSource } from '@/lib/server/three-views/sources';
 import { OUTPUT_UNITS } from '@/lib/units/names';
+import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
 import { rollUpAction, takeRevisionAction } from '../actions';
 
@@ -74,6 +77,8 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
           { version: rollUp.configuration_version, allowances: rollUp.result.allowances },
           { version: configuration.version, allowances },
         );
+  const shownCondition =
+    rollUp?.result.conditions.find((one) => one.code === view.condition) ?? rollUp?.result.conditions[0];
   const stale = rollUp === undefined || changed.length > 0;
   const rollUpButton = keeps ? (
     <OneButtonForm
@@ -132,7 +137,19 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
             </p>
           </EmptyPlace>
         ) : (
-          <RolledUp home={home} view={view} result={rollUp.result} limits={programLimits(limits)} />
+          <div className="grid min-w-0 gap-8">
+            <RolledUp home={home} view={view} result={rollUp.result} limits={programLimits(limits)} />
+            <Suspense fallback={<DriversComing />}>
+              <DriversHere
+                source={conditionSource(program.id, code, shownCondition?.code)}
+                asked={view.drivers}
+                units={OUTPUT_UNITS[view.units]}
+                hrefOf={(drivers) => viewHref(home, { ...view, drivers })}
+                listsHref={`/programs/${program.code}/lists`}
+                of={`${shownCondition?.title ?? ''}, as pinned now, without growth`}
+              />
+            </Suspense>
+          </div>
         )}
         <aside className="grid min-w-0 gap-8" aria-label="Inputs and findings">
           <Section
@@ -162,4 +179,11 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
       <Caution />
     </ProgramFrame>
   );
+}
+
+/** The lists and items of the condition that is shown, as they are pinned now. */
+async function conditionSource(programId: string, code: string, condition: string | undefined) {
+  const source = await configurationSource(serverDb(), programId, code);
+  const shown = source.conditions.find((one) => one.code === condition);
+  return shown === undefined || source.revisions.length === 0 ? null : { ...source, condition: shown };
 }

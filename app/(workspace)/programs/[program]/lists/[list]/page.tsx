@@ -1,6 +1,8 @@
 import { type Metadata } from 'next';
+import { Suspense } from 'react';
+import { subtotalsOf } from '@/db/queries/configurations';
 import { ownColumnsOf } from '@/db/queries/list-rows';
-import { findNewestImport, findRevisionAuthor } from '@/db/queries/lists';
+import { findNewestImport, findRevisionAuthor, type List, type ListRevision } from '@/db/queries/lists';
 import { Declared } from '@/components/lists/declared';
 import { FindingsPanel } from '@/components/lists/findings-panel';
 import { GroupTable } from '@/components/lists/group-table';
@@ -14,9 +16,13 @@ import { EmptyPlace } from '@/components/ui/empty-place';
 import { TABLE_KEYS } from '@/components/ui/key-help';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
+import { driversAsked, withDrivers } from '@/lib/drivers/drivers';
+import { CATEGORIES } from '@/lib/mass/component';
+import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { serverDb } from '@/lib/server/database';
 import { geometryOfList, reachRevision } from '@/lib/server/lists/reach-list';
 import { totalsOfRevision } from '@/lib/server/lists/row-totals';
+import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
 import { orNotFound, requireList } from './list-page';
 
@@ -61,7 +67,8 @@ export default async function ListPage({ params, searchParams }: Props) {
       </ProgramFrame>
     );
   }
-  const asked = (await searchParams)['revision'];
+  const search = await searchParams;
+  const asked = search['revision'];
   const number = typeof asked === 'string' ? asked : String(list.last_revision);
   const revision = await orNotFound(() => reachRevision(db, list, number));
   const geometry = await geometryOfList(db, list);
@@ -71,6 +78,8 @@ export default async function ListPage({ params, searchParams }: Props) {
     ownColumnsOf(db, revision.id),
   ]);
   const here = `${listHref}?revision=${revision.number}`;
+  const plain = () => new URLSearchParams({ revision: String(revision.number) });
+  const { massUnit, lengthUnit, inertiaUnit } = revision.declarations;
   return (
     <ProgramFrame access={access} current="lists" keys={TABLE_KEYS}>
       <PageHead
@@ -137,6 +146,27 @@ export default async function ListPage({ params, searchParams }: Props) {
           hrefOf={(group) => `${here}&group=${encodeURIComponent(group)}#rows`}
         />
       </Section>
+      <Suspense fallback={<DriversComing />}>
+        <DriversHere
+          source={listSource(list, revision, geometry)}
+          asked={driversAsked(search)}
+          units={{ mass: massUnit, length: lengthUnit, inertia: inertiaUnit }}
+          hrefOf={(drivers) => `${listHref}?${withDrivers(plain(), drivers).toString()}`}
+          listsHref={home}
+          of={`Revision ${revision.number}, approved rows without growth`}
+        />
+      </Suspense>
     </ProgramFrame>
   );
+}
+
+/** All that a revision adds up, as the only thing there is. */
+async function listSource(list: List, revision: ListRevision, geometry: AirframeGeometry) {
+  const { id, number, declarations } = revision;
+  return {
+    geometry,
+    revisions: [{ id, code: list.code, title: list.title, number, declarations }],
+    subtotals: await subtotalsOf(serverDb(), [id], list.frame_issue_id),
+    condition: { categories: CATEGORIES, items: [] },
+  };
 }
