@@ -22,7 +22,7 @@ export function RowInspector({ row, declarations, geometry, file }: RowInspector
       <header className="grid gap-1">
         <h3 className="text-lead font-semibold wrap-anywhere">{String(row.cells.item ?? '')}</h3>
         <p className="text-note text-ink-2">
-          {file === null || row.line === null ? `Row ${row.position}` : `Line ${row.line} of ${file}`}
+          {file === null ? 'As edited or brought back' : `As in ${file}`}
         </p>
       </header>
       {rowFieldGroups(declarations).map(({ title, fields }) => (

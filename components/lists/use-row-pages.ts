@@ -13,7 +13,7 @@ import {
 } from '@/lib/contracts/list-rows';
 
 /** Rows known by their item; those on their way by their place. */
-export const rowIdOf = (row: ListRow): string => String(row.cells.item ?? row.position);
+export const rowIdOf = (row: ListRow): string => String(row.cells.item ?? '');
 
 interface RowPages {
   readonly lines: readonly Line<ListRow>[];

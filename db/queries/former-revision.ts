@@ -4,6 +4,7 @@ import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type RowChange, type RowFigures } from '@/lib/findings/context';
 import { type Subtotal } from '@/lib/mass/subtotals';
 import { subtotalsOf } from './configurations';
+import { type RowRange } from './revision-rows';
 
 /** What a new revision is held against: the newest one so far, its declarations and its subtotals. */
 export interface FormerRevision {
@@ -40,11 +41,12 @@ export function sameFrame(a: ListDeclarations, b: ListDeclarations): boolean {
 export const SUSPECTS = 20_000;
 
 /**
- * The counted rows of revision `now` that have the item of a counted row of `before` and figures that a slip of unit or sign could
- * explain: mass, distance from the list's datum or sum of moments off by at least a fifth, or a coordinate of the other sign. One join
- * in the database, whatever the number of rows; what comes back is bounded by `SUSPECTS`, in the order of the list.
+ * Of the revision that is being written after `before`: the counted rows that have the item of a counted row of `before` and figures
+ * that a slip of unit or sign could explain: mass, distance from the list's datum or sum of moments off by at least a fifth, or a
+ * coordinate of the other sign. One join of the rows that are not the same in both; what comes back is bounded by `SUSPECTS`, in the
+ * order of the list.
  */
-export async function suspectChanges(db: Db, now: string, before: string): Promise<RowChange[]> {
+export async function suspectChanges(db: Db, before: RowRange): Promise<RowChange[]> {
   interface Pair {
     readonly item: string;
     readonly now: readonly number[];
@@ -55,16 +57,17 @@ export async function suspectChanges(db: Db, now: string, before: string): Promi
     sql.raw(`abs(${value('n')} - ${value('f')}) > 0.16 * greatest(abs(${value('n')}), abs(${value('f')}))`);
   const { rows } = await sql<Pair>`
     select n.item, ${figures('n')} as now, ${figures('f')} as before
-    from mass_rows n
-    join mass_rows f on f.revision_id = ${before} and f.item = n.item
-    where n.revision_id = ${now} and n.counting = 'counted' and f.counting = 'counted'
+    from row_ends e
+    join row_versions f on f.list_no = ${before.listNo} and f.row_no = e.row_no
+    join row_versions n on n.list_no = ${before.listNo} and n.item = f.item and n.row_no > ${before.lastRow}
+    where e.list_no = ${before.listNo} and e.end_no > ${before.lastEnd} and n.counting = 'counted' and f.counting = 'counted'
       and (
         ${apart((of) => `${of}.mass`)}
         or ${apart((of) => `(abs(${of}.x) + abs(${of}.y) + abs(${of}.z))`)}
         or ${apart((of) => `(${of}.ixx + ${of}.iyy + ${of}.izz)`)}
         or n.x * f.x < 0 or n.y * f.y < 0 or n.z * f.z < 0
       )
-    order by n.position
+    order by n.sort_key
     limit ${SUSPECTS}
   `.execute(db);
   return rows.map(({ item, ...pair }) => ({

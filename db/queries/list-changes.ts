@@ -1,6 +1,7 @@
 import { sql } from 'kysely';
 import { type Db } from '@/db/client';
-import { type MassRowsTable } from '@/db/schema/lists';
+import { type RowVersionsTable } from '@/db/schema/lists';
+import { neededRowRange, type RowRange } from './revision-rows';
 
 /** What a row says: its place in the list and in a file do not count as changes. */
 const COMPARED = [
@@ -35,7 +36,7 @@ const COMPARED = [
   'change_ref',
   'status',
   'extra',
-] as const satisfies readonly (keyof MassRowsTable)[];
+] as const satisfies readonly (keyof RowVersionsTable)[];
 
 export interface ChangeCounts {
   readonly added: number;
@@ -60,7 +61,7 @@ export async function countChanges(
       count(*) filter (where before.item is null) as added,
       count(*) filter (where after.item is null) as removed,
       count(*) filter (where before.item is not null and after.item is not null) as changed
-    ${differing(before, after, group)}
+    ${differing(...(await rangesOf(db, before, after)), group)}
   `.execute(db);
   const counts = rows[0];
   if (counts === undefined) throw new Error('a count came back without a row');
@@ -78,22 +79,43 @@ export async function changedItems(
     select
       coalesce(after.item, before.item) as item,
       case when before.item is null then 'added' when after.item is null then 'removed' else 'changed' end as kind
-    ${differing(before, after, page.group ?? null)}
-    order by after.position nulls last, before.position
+    ${differing(...(await rangesOf(db, before, after)), page.group ?? null)}
+    order by after.sort_key nulls last, before.sort_key
     limit ${page.limit} offset ${page.offset}
   `.execute(db);
   return rows;
 }
 
-function differing(before: string, after: string, group: string | null) {
+/**
+ * The rows that one of two revisions has and the other has not, paired by item, less those that say the same and have only moved.
+ * Only what ended or began between the two is looked at, whichever is the older.
+ */
+function differing(before: RowRange, after: RowRange, group: string | null) {
+  if (before.listNo !== after.listNo) throw new Error('revisions of two lists are not compared');
+  const forward = before.lastRow <= after.lastRow && before.lastEnd <= after.lastEnd;
+  const [older, newer] = forward ? [before, after] : [after, before];
+  const gone = sql`(
+    select r.* from row_ends e join row_versions r on r.list_no = e.list_no and r.row_no = e.row_no
+    where e.list_no = ${older.listNo} and e.end_no > ${older.lastEnd} and e.end_no <= ${newer.lastEnd}
+      and r.row_no <= ${older.lastRow})`;
+  const come = sql`(
+    select r.* from row_versions r
+    where r.list_no = ${older.listNo} and r.row_no > ${older.lastRow} and r.row_no <= ${newer.lastRow}
+      and not exists (
+        select from row_ends e where e.list_no = r.list_no and e.row_no = r.row_no and e.end_no <= ${newer.lastEnd}))`;
+  const [had, has] = forward ? [gone, come] : [come, gone];
   const below = (side: 'before' | 'after') =>
     sql`(${sql.ref(`${side}.group_path`)} = ${group} or starts_with(${sql.ref(`${side}.group_path`)}, ${`${group}/`}))`;
   const columns = (side: 'before' | 'after') =>
     sql.join(COMPARED.map((column) => sql.ref(`${side}.${column}`)));
   return sql`
-    from (select * from mass_rows where revision_id = ${before}) before
-    full join (select * from mass_rows where revision_id = ${after}) after on after.item = before.item
+    from ${had} before
+    full join ${has} after on after.item = before.item
     where (${columns('before')}) is distinct from (${columns('after')})
       ${group === null ? sql`` : sql`and (${below('before')} or ${below('after')})`}
   `;
+}
+
+async function rangesOf(db: Db, before: string, after: string): Promise<[RowRange, RowRange]> {
+  return Promise.all([neededRowRange(db, before), neededRowRange(db, after)]);
 }

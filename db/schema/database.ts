@@ -19,8 +19,10 @@ import {
   type JobWorkersTable,
   type ListRevisionsTable,
   type ListsTable,
-  type MassRowsTable,
+  type MassRowsView,
   type RevisionSubtotalsTable,
+  type RowEndsTable,
+  type RowVersionsTable,
   type StoredFilesTable,
 } from './lists';
 import {
@@ -63,7 +65,9 @@ export interface Database {
   stored_files: StoredFilesTable;
   lists: ListsTable;
   list_revisions: ListRevisionsTable;
-  mass_rows: MassRowsTable;
+  row_versions: RowVersionsTable;
+  row_ends: RowEndsTable;
+  mass_rows: MassRowsView;
   revision_subtotals: RevisionSubtotalsTable;
   imports: ImportsTable;
   rotor_revisions: RotorRevisionsTable;

@@ -1,4 +1,4 @@
-import { type ColumnType, type Generated } from 'kysely';
+import { type ColumnType, type Generated, type GeneratedAlways } from 'kysely';
 import { type Category, type ChangeStatus, type Counting, type Maturity } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type Finding } from '@/lib/findings/finding';
@@ -23,22 +23,36 @@ export interface ListsTable {
   declarations: Json<ListDeclarations>;
   marking: string | null;
   last_revision: Generated<number>;
+  /** What the list's row versions are kept by. */
+  list_no: GeneratedAlways<number>;
+  /** Secret: who knew it could make a changed row look unchanged. */
+  fingerprint_key: GeneratedAlways<string>;
   created_by: string;
   created_at: Generated<Date>;
 }
 
-/** Insert-only. `content_sha256` covers the rows and declarations, so that a frozen revision can be checked. */
+/**
+ * Insert-only. `content_sha256` covers the rows and declarations, so that a frozen revision can be checked; `content_format` says
+ * how. Its rows are the list's row versions up to `last_row`, without those that an end up to `last_end` names.
+ */
 export interface ListRevisionsTable {
   id: string;
   list_id: string;
+  /** The issue that its places are stated in. */
+  frame_issue_id: string;
   number: number;
   declarations: Json<ListDeclarations>;
   marking: string | null;
-  origin: 'file' | 'edit';
+  origin: RevisionOrigin;
+  /** Number of the revision that this one brings back. */
+  restored_from: number | null;
   reason: string;
   file_sha256: string | null;
   file_name: string | null;
   content_sha256: string;
+  content_format: ContentFormat;
+  last_row: number;
+  last_end: number;
   rows: number;
   memo_rows: number;
   pieces: number;
@@ -47,11 +61,21 @@ export interface ListRevisionsTable {
   created_at: Generated<Date>;
 }
 
-/** Insert-only. SI, list axes; products are positive integrals; angles in rad; sigma in the order of SIGMA_FIELDS. */
-export interface MassRowsTable {
-  revision_id: string;
-  position: number;
-  line: number | null;
+export type RevisionOrigin = 'file' | 'edit' | 'restored';
+
+/** 1: canonical JSON of each row. 2: each row as `lib/server/lists/row-bytes.ts` writes it. */
+export type ContentFormat = 1 | 2;
+
+/**
+ * Insert-only. A row of a list as long as it stays the same, numbered within its list; `sort_key` is its place in the order of the list.
+ * SI, list axes; products are positive integrals; angles in rad; sigma in the order of SIGMA_FIELDS.
+ */
+export interface RowVersionsTable {
+  list_no: number;
+  row_no: number;
+  sort_key: number;
+  /** Of its values, by which the next revision knows it again; null where it was stored before there were any. */
+  fingerprint: string | null;
   item: string;
   part_number: string | null;
   part_revision: string | null;
@@ -86,6 +110,19 @@ export interface MassRowsTable {
   extra: Json<Record<string, string>> | null;
 }
 
+/** Insert-only. A row version that the list no longer has, numbered within its list. */
+export interface RowEndsTable {
+  list_no: number;
+  end_no: number;
+  row_no: number;
+}
+
+/** A view: the rows of every revision, `position` giving their order. For one revision `isIn` of `db/queries/revision-rows.ts` is quicker. */
+export interface MassRowsView extends RowVersionsTable {
+  revision_id: string;
+  position: number;
+}
+
 /** Accounts about the frame issue's reference: mass, first moment (3), second moment (6), then what rounding left out of each. Insert-only. */
 export interface RevisionSubtotalsTable {
   revision_id: string;
@@ -107,7 +144,7 @@ export interface RevisionSubtotalsTable {
   unstated_basic_uncertainty: number[];
 }
 
-export type ImportState = 'waiting' | 'running' | 'done' | 'failed';
+export type ImportState = 'waiting' | 'running' | 'done' | 'failed' | 'cancelled';
 
 export interface ImportsTable {
   id: string;
@@ -125,7 +162,11 @@ export interface ImportsTable {
   created_by: string;
   created_at: Generated<Date>;
   touched_at: Generated<Date>;
+  /** When its latest run began. */
+  started_at: Date | null;
   finished_at: Date | null;
+  /** Its file was the revision in force, which is then the one it names. */
+  unchanged: Generated<boolean>;
 }
 
 /** A worker of the job queue and the advisory lock that its process holds while it lives. */

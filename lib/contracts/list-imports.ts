@@ -16,11 +16,13 @@ export const problemSchema = z.object({
 /** An import as its page shows it. */
 export const importSchema = z.object({
   import: z.string(),
-  state: z.enum(['waiting', 'running', 'done', 'failed']),
+  state: z.enum(['waiting', 'running', 'done', 'failed', 'cancelled']),
   file: z.string(),
   reason: z.string(),
   rows: z.number().int().describe('Read so far'),
   ofRows: z.number().int().nullable().describe('Estimated from the lines of the file until it has been read'),
+  secondsLeft: z.number().nullable().describe('Estimated from how far it has come; null when nothing tells'),
+  unchanged: z.boolean().describe('Its file was the revision in force already; no new one was made'),
   revision: z.number().int().nullable(),
   problems: z.array(problemSchema).describe('The first 200'),
   counts: z.array(z.object({ kind: z.string(), count: z.number().int() })),

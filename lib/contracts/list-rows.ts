@@ -5,12 +5,6 @@ const cell = z.union([z.string(), z.number()]);
 
 /** A row as its list states it: figures in the list's own units, signs and axes; blank cells are left out. */
 export const listRowSchema = z.object({
-  position: z.number().int(),
-  line: z
-    .number()
-    .int()
-    .nullable()
-    .describe('Physical line in the file of the revision; null for edited revisions'),
   cells: z.partialRecord(z.enum(LIST_COLUMNS), cell),
   own: z.record(z.string(), z.string()).describe("The list's own columns"),
 });

@@ -153,7 +153,7 @@ export async function reviseList(
     },
     async (writer) => {
       const reading = await readMassList(Readable.from([Buffer.from(csv)]), declarations, {
-        onComponent: (component, line) => writer.add(component, line),
+        onComponent: (component) => writer.add(component),
       });
       if (reading.problems.length > 0) throw new Error(reading.problems.map((one) => one.message).join('\n'));
     },

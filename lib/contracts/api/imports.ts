@@ -8,7 +8,9 @@ export const importSchema = z
     import: z.string().describe('Identifier of the import'),
     program: z.string().describe('Code of the program'),
     list: z.string().describe('Code of the list'),
-    state: z.enum(['waiting', 'running', 'done', 'failed']),
+    state: z
+      .enum(['waiting', 'running', 'done', 'failed', 'cancelled'])
+      .describe('Nothing is kept of one that failed or was cancelled'),
     rows: z.number().int().describe('Rows read so far'),
     ofRows: z.number().int().nullable().describe('Rows in the file: an estimate until it has been read'),
     revision: z.number().int().nullable().describe('Number of the revision it made; null until it is done'),

@@ -60,6 +60,7 @@ export async function editRows(services: { pool: pg.Pool; db: Db }, input: EditR
         reason,
         file: null,
         author: person,
+        patience: 'a-moment',
       },
       async (writer, trx) => {
         await holdNewest(trx, list, base);
@@ -113,7 +114,7 @@ async function writeEdited(
       let row = underway.shift();
       while (row !== undefined && row.item !== component.item) row = underway.shift();
       if (row === undefined) throw new Error(`the row ${component.item} came from nowhere`);
-      return writer.add(row.stored ?? component, null);
+      return writer.add(row.stored ?? component);
     },
   });
   if (reading.problems.length === 0) return;

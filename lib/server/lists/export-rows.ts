@@ -1,5 +1,5 @@
 import { type Db } from '@/db/client';
-import { ownColumnsOf, positionsOfView, rowsAt } from '@/db/queries/list-rows';
+import { ownColumnsOf, rowNosOfView, rowsAt } from '@/db/queries/list-rows';
 import { type ListRevision } from '@/db/queries/lists';
 import { isFiltered, type ListView } from '@/lib/contracts/list-view';
 import { massListWriter } from '@/lib/export/mass-list';
@@ -41,12 +41,12 @@ async function* rowsInOrder(db: Db, revision: ListRevision, view: ListView): Asy
     yield* storedRows(db, revision.id);
     return;
   }
-  const positions = await positionsOfView(db, revision.id, filterOf(view, revision.findings), order);
-  for (let at = 0; at < positions.length; at += BATCH) {
-    const wanted = positions.slice(at, at + BATCH);
-    const rows = new Map((await rowsAt(db, revision.id, wanted)).map((row) => [row.position, row]));
-    for (const position of wanted) {
-      const row = rows.get(position);
+  const rowNos = await rowNosOfView(db, revision.id, filterOf(view, revision.findings), order);
+  for (let at = 0; at < rowNos.length; at += BATCH) {
+    const wanted = rowNos.slice(at, at + BATCH);
+    const rows = new Map((await rowsAt(db, revision.id, wanted)).map((row) => [row.row_no, row]));
+    for (const rowNo of wanted) {
+      const row = rows.get(rowNo);
       if (row !== undefined) yield row;
     }
   }

@@ -107,7 +107,7 @@ async function readInto(
 ): Promise<void> {
   const tell = progressTeller(services.db, found.id);
   const reading = await readImport(services, found, declarations, {
-    onComponent: (component, line) => writer.add(component, line),
+    onComponent: (component) => writer.add(component),
     onProgress: ({ rows }) => tell(rows),
   });
   if (reading.problems.length > 0) throw new WrongFile(reading.problems, reading.problemCounts);

@@ -48,6 +48,9 @@ export function lineOf(row: Row): ListInProgram {
             author: author ?? '',
             findings: row.findings ?? [],
           },
-    file: file === null || state === null || state === 'done' ? null : { import: file, state },
+    file:
+      file === null || state === null || state === 'done' || state === 'cancelled'
+        ? null
+        : { import: file, state },
   };
 }

@@ -4,10 +4,13 @@ import { onClient } from '@/db/client';
 import { formerRevision } from '@/db/queries/former-revision';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
 import { type Database } from '@/db/schema/database';
+import { type RevisionOrigin } from '@/db/schema/lists';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type Actor } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { CONTENT_FORMAT } from './content-hash';
+import { holdList, type Patience } from './hold-list';
 import { RevisionWriter } from './revision-writer';
 
 export interface NewRevision {
@@ -18,16 +21,22 @@ export interface NewRevision {
     readonly frameIssueId: string;
   };
   readonly declarations: ListDeclarations;
-  readonly origin: 'file' | 'edit';
+  readonly origin: RevisionOrigin;
+  /** Number of the revision that a restored one brings back. */
+  readonly restoredFrom?: number;
   readonly reason: string;
   readonly file: { readonly sha256: string; readonly name: string } | null;
   readonly author: Actor & { readonly userId: string };
+  /** How long to wait while another revision of the list is being written; a person is told soon. */
+  readonly patience?: Patience;
+  /** Called when the list is held, before anything of it is read; what it throws ends it all. */
+  readonly prepare?: (trx: Transaction<Database>) => Promise<void>;
 }
 
 /**
  * Makes the next revision of a list in one transaction on a connection of its own: `write` fills it row by row, `settle` adds what
- * must stand or fall with it. When either throws, nothing of it remains. Numbers are given at the end, one list at a
- * time, without gaps.
+ * must stand or fall with it. When either throws, nothing of it remains. One revision of a list is written at a time, for it is held
+ * against the one before.
  */
 export async function publishRevision<T>(
   pool: pg.Pool,
@@ -46,13 +55,14 @@ export async function publishRevision<T>(
         const id = newId();
         const { list, declarations, author } = revision;
         const issue = await findFrameIssue(trx, list.frameIssueId);
-        const writer = new RevisionWriter(
-          client,
+        const rows = await holdList(trx, list.id, revision.patience ?? 'as-long-as-it-takes');
+        await revision.prepare?.(trx);
+        const writer = await RevisionWriter.open(client, rows, {
           id,
-          { id: issue.id, geometry: geometryOf(issue) },
+          frame: { id: issue.id, geometry: geometryOf(issue) },
           declarations,
-          await formerRevision(trx, list.id, issue.id),
-        );
+          former: await formerRevision(trx, list.id, issue.id),
+        });
         let written: T;
         try {
           written = await write(writer, trx);
@@ -72,6 +82,7 @@ export async function publishRevision<T>(
           .values({
             id,
             list_id: list.id,
+            frame_issue_id: issue.id,
             number,
             declarations: JSON.stringify(declarations),
             marking: declarations.marking,
@@ -79,7 +90,11 @@ export async function publishRevision<T>(
             reason: revision.reason,
             file_sha256: revision.file?.sha256 ?? null,
             file_name: revision.file?.name ?? null,
+            restored_from: revision.restoredFrom ?? null,
             content_sha256: content.contentSha256,
+            content_format: CONTENT_FORMAT,
+            last_row: content.lastRow,
+            last_end: content.lastEnd,
             rows: content.rows,
             memo_rows: content.memoRows,
             pieces: content.pieces,

@@ -3,6 +3,7 @@ import { type Db } from '@/db/client';
 import { openImportsOf } from '@/db/queries/lists';
 import { type Database } from '@/db/schema/database';
 import { AppError } from '@/lib/errors';
+import { type Mapping } from '@/lib/ingest/mapping/mapping';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
@@ -31,6 +32,8 @@ export interface RequestImport {
     readonly lines: number;
   };
   readonly reason: string;
+  /** How its columns are read, where not as the contract says. */
+  readonly read?: { readonly mappingId: string; readonly mapping: Mapping; readonly acceptTotals: boolean };
 }
 
 /** Records a stored file as waiting to be read into a list, and queues the job that reads it. Returns the import's id. */
@@ -61,6 +64,18 @@ export async function queueImport(trx: Transaction<Database>, input: RequestImpo
       created_by: person.userId,
     })
     .execute();
+  if (input.read !== undefined) {
+    const { mappingId, mapping, acceptTotals } = input.read;
+    await trx
+      .insertInto('import_mappings')
+      .values({
+        import_id: id,
+        mapping_id: mappingId,
+        mapping: JSON.stringify(mapping),
+        accept_totals: acceptTotals,
+      })
+      .execute();
+  }
   await recordEvent(trx, {
     scope: list.programId,
     actor: person,

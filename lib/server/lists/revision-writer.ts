@@ -1,5 +1,3 @@
-import { createHash } from 'node:crypto';
-import canonicalize from 'canonicalize';
 import type pg from 'pg';
 import { type Transaction } from 'kysely';
 import { type FormerRevision, sameFrame, suspectChanges } from '@/db/queries/former-revision';
@@ -14,16 +12,22 @@ import { Placement } from '@/lib/mass/place';
 import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
 import { UncertaintyBook, type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
 import { toNumbers as uncertaintyNumbers } from '@/lib/mass/uncertainty/sums';
-import { RowCopy } from './copy-rows';
-import { copyLine, rowValues } from './row-codec';
+import { contentHead } from './content-hash';
+import { type ListRows, RowStore, type StoredContent } from './row-store';
 
 /** What a finished revision amounts to. */
-export interface RevisionContent {
-  readonly rows: number;
+export interface RevisionContent extends StoredContent {
   readonly memoRows: number;
   readonly pieces: number;
-  readonly contentSha256: string;
   readonly findings: readonly Finding[];
+}
+
+/** What a revision is before its first row. */
+export interface OpenRevision {
+  readonly id: string;
+  readonly frame: { readonly id: string; readonly geometry: AirframeGeometry };
+  readonly declarations: ListDeclarations;
+  readonly former: FormerRevision | null;
 }
 
 /**
@@ -31,15 +35,13 @@ export interface RevisionContent {
  * hash, and none is kept. The caller holds the transaction; until it commits nobody sees anything.
  */
 export class RevisionWriter {
-  #copy: RowCopy | null = null;
   readonly #book: SubtotalBook;
   readonly #uncertainty: UncertaintyBook;
   readonly #rules: RowChecks;
-  readonly #hash;
-  #rows = 0;
 
-  constructor(
-    private readonly client: pg.PoolClient,
+  private constructor(
+    private readonly store: RowStore,
+    private readonly list: ListRows,
     private readonly revisionId: string,
     private readonly frame: { readonly id: string; readonly geometry: AirframeGeometry },
     private readonly declarations: ListDeclarations,
@@ -49,28 +51,40 @@ export class RevisionWriter {
     this.#book = new SubtotalBook(placement);
     this.#uncertainty = new UncertaintyBook(placement);
     this.#rules = new RowChecks(declarations, { geometry: frame.geometry, former: former?.subtotals });
-    this.#hash = createHash('sha256').update(contentHead(declarations));
+  }
+
+  /** `list` is held by the caller and as its newest revision left it; rows that stay as they are stored are not stored again. */
+  static async open(client: pg.PoolClient, list: ListRows, revision: OpenRevision): Promise<RevisionWriter> {
+    const store = await RowStore.open(client, list, contentHead(revision.declarations));
+    return new RevisionWriter(
+      store,
+      list,
+      revision.id,
+      revision.frame,
+      revision.declarations,
+      revision.former,
+    );
   }
 
   get rows(): number {
-    return this.#rows;
+    return this.store.rows;
   }
 
-  /** From the first row on the connection speaks COPY: no other query on it until `finish` or `abort`. */
-  async add(component: Component, line: number | null): Promise<void> {
-    this.#copy ??= new RowCopy(this.client, this.revisionId);
-    this.#rows += 1;
-    const values = rowValues(component, this.#rows, line);
-    this.#hash.update(contentLine(component));
+  /**
+   * From the first row on the connection speaks COPY: no other query on it until `finish` or `abort`. A promise only where the
+   * database has to catch up.
+   */
+  add(component: Component): Promise<void> | undefined {
+    this.store.block.add(component);
     this.#book.add(component);
     this.#uncertainty.add(component);
     this.#rules.see(component);
-    await this.#copy.write(copyLine(values));
+    return this.store.took();
   }
 
   /** Closes the stream of rows, then stores the subtotals in `trx`, which must be on the same connection. */
   async finish(trx: Transaction<Database>): Promise<RevisionContent> {
-    await this.#copy?.end();
+    const stored = await this.store.finish();
     const subtotals = this.#book.subtotals();
     const uncertainties = this.#uncertainty.sums();
     if (subtotals.length > 0) {
@@ -94,10 +108,9 @@ export class RevisionWriter {
     const total = (count: (subtotal: Subtotal) => number): number =>
       subtotals.reduce((sum, subtotal) => sum + count(subtotal), 0);
     return {
-      rows: this.#rows,
+      ...stored,
       memoRows: total((subtotal) => subtotal.memoRows),
       pieces: total((subtotal) => subtotal.pieces),
-      contentSha256: this.#hash.digest('hex'),
       findings: this.#rules.findings(),
     };
   }
@@ -105,7 +118,7 @@ export class RevisionWriter {
   /** Rows against themselves in the revision before; places only where both revisions are stated in one frame. */
   async #holdAgainst(trx: Transaction<Database>, former: FormerRevision): Promise<void> {
     const isOneFrame = sameFrame(this.declarations, former.declarations);
-    for (const { item, now, before } of await suspectChanges(trx, this.revisionId, former.id))
+    for (const { item, now, before } of await suspectChanges(trx, this.list))
       this.#rules.seeChange({
         item,
         now,
@@ -114,17 +127,8 @@ export class RevisionWriter {
   }
 
   async abort(reason: Error): Promise<void> {
-    await this.#copy?.abort(reason);
+    await this.store.abort(reason);
   }
-}
-
-/** The content hash covers the declarations, then every row in its order, each as canonical JSON (RFC 8785) on a line. */
-export function contentHead(declarations: ListDeclarations): string {
-  return `${canonicalize(declarations) ?? ''}\n`;
-}
-
-export function contentLine(component: Component): string {
-  return `${canonicalize(component) ?? ''}\n`;
 }
 
 function subtotalValues(subtotal: Subtotal) {

@@ -1,14 +1,20 @@
 import { type Selectable } from 'kysely';
-import { type MassRowsTable } from '@/db/schema/lists';
+import { type RowVersionsTable } from '@/db/schema/lists';
 import { type Component, type ComponentSigma } from '@/lib/mass/component';
 
 /** The order in which a row's ten standard uncertainties are stored. */
 export const SIGMA_FIELDS = ['mass', 'x', 'y', 'z', 'ixx', 'iyy', 'izz', 'ixy', 'ixz', 'iyz'] as const;
 
-/** The columns of a stored row in the order that COPY sends them; `revision_id` goes before. */
-export const ROW_COLUMNS = [
-  'position',
-  'line',
+/** The columns that say where a stored row stands, in the order in which a row is written. */
+export const PLACE_COLUMNS = [
+  'list_no',
+  'row_no',
+  'sort_key',
+  'fingerprint',
+] as const satisfies readonly (keyof RowVersionsTable)[];
+
+/** The columns of what a row says, in the order in which a row is written. */
+export const VALUE_COLUMNS = [
   'item',
   'part_number',
   'part_revision',
@@ -41,71 +47,9 @@ export const ROW_COLUMNS = [
   'change_ref',
   'status',
   'extra',
-] as const satisfies readonly (keyof MassRowsTable)[];
+] as const satisfies readonly (keyof RowVersionsTable)[];
 
-export type StoredRow = Selectable<MassRowsTable>;
-
-type Value = string | number | boolean | null | readonly (number | null)[];
-
-/** A component as the values of `ROW_COLUMNS`. */
-export function rowValues(component: Component, position: number, line: number | null): Value[] {
-  const { position: place, moments, orientation, sigma, extra } = component;
-  return [
-    position,
-    line,
-    component.item,
-    component.partNumber,
-    component.partRevision,
-    component.description,
-    component.group,
-    component.category,
-    component.parent,
-    component.counting,
-    component.quantity,
-    component.mass,
-    place[0],
-    place[1],
-    place[2],
-    moments.ixx,
-    moments.iyy,
-    moments.izz,
-    moments.ixy,
-    moments.ixz,
-    moments.iyz,
-    orientation.yaw,
-    orientation.pitch,
-    orientation.roll,
-    component.pair,
-    component.maturity,
-    component.growth,
-    sigma === null ? null : SIGMA_FIELDS.map((field) => sigma[field]),
-    component.source,
-    component.sourceDate,
-    component.note,
-    component.changeRef,
-    component.status,
-    Object.keys(extra).length === 0 ? null : JSON.stringify(extra),
-  ];
-}
-
-/** One line of PostgreSQL's COPY text format; numbers in the shortest form that reads back to the same bits. */
-export function copyLine(values: readonly Value[]): string {
-  return `${values.map(copyField).join('\t')}\n`;
-}
-
-function copyField(value: Value): string {
-  if (value === null) return '\\N';
-  if (typeof value === 'string') return escapeText(value);
-  if (typeof value === 'object')
-    return `{${value.map((one) => (one === null ? 'NULL' : String(one))).join(',')}}`;
-  return String(value);
-}
-
-function escapeText(text: string): string {
-  return text.replace(/[\\\t\n\r]/g, (character) => ESCAPES[character] ?? character);
-}
-
-const ESCAPES: Readonly<Record<string, string>> = { '\\': '\\\\', '\t': '\\t', '\n': '\\n', '\r': '\\r' };
+export type StoredRow = Selectable<RowVersionsTable>;
 
 /** A stored row as the component it came from. */
 export function componentOf(row: StoredRow): Component {

@@ -37,6 +37,6 @@ export function rowReader(declarations: ListDeclarations): (row: StoredRow) => L
       const value = cells[column];
       if (value !== null) stated[column] = value;
     }
-    return { position: row.position, line: row.line, cells: stated, own: { ...component.extra } };
+    return { cells: stated, own: { ...component.extra } };
   };
 }

@@ -4,8 +4,6 @@ import { type RowEdit } from '@/lib/contracts/list-edits';
 import { type ListRow } from '@/lib/contracts/list-rows';
 
 const row: ListRow = {
-  position: 1,
-  line: 2,
   cells: { item: 'A', mass: 7.3, note: 'first' },
   own: { Zone: '12' },
 };

@@ -212,9 +212,14 @@ describe('what is signed', () => {
     `delete from decisions`,
     `update submissions set reason = ''`,
     `update list_revisions set content_sha256 = repeat('0', 64)`,
-    `update mass_rows set mass = mass + 1`,
-    `delete from mass_rows`,
-    `truncate mass_rows`,
+    `update row_versions set mass = mass + 1`,
+    `delete from row_versions`,
+    `truncate row_versions`,
+    `update row_ends set row_no = row_no + 1`,
+    `delete from row_ends`,
+    `truncate row_ends`,
+    `drop view mass_rows`,
+    `update list_revisions set last_row = last_row + 1`,
     `update revision_subtotals set basic[1] = 0`,
     `delete from supersessions`,
     `delete from withdrawals`,
@@ -247,12 +252,12 @@ describe('what is signed', () => {
     const owner = new pg.Client({ connectionString: test.ownerUrl });
     await owner.connect();
     await owner.query('alter table baselines disable trigger user');
-    await owner.query('alter table mass_rows disable trigger user');
+    await owner.query('alter table row_versions disable trigger user');
     await owner.query('alter table audit_events disable trigger user');
     await owner.query(
       `update baselines set document = replace(document, '"ixz":', '"ixz":-') where number = 1`,
     );
-    await owner.query(`update mass_rows set mass = mass * 2.2046 where item = 'spar'`);
+    await owner.query(`update row_versions set mass = mass * 2.2046 where item = 'spar'`);
     await owner.query(`delete from audit_events where number = 3 and scope = $1`, [test.program.id]);
     await owner.query(
       `delete from audit_events a where number = (select max(number) from audit_events where scope = $1) and scope = $1`,

@@ -110,7 +110,7 @@ describe('The rows of a view', () => {
       { offset: 0, limit: 1 },
     );
     expect(rows.map(rowReader(stated.declarations))).toMatchObject([
-      { position: 3, cells: { item: 'P-3', quantity: 4, mass: 2.5, x: 5.5, ixx: 1, ixy: -0.1 }, own: {} },
+      { cells: { item: 'P-3', quantity: 4, mass: 2.5, x: 5.5, ixx: 1, ixy: -0.1 }, own: {} },
     ]);
     expect(Object.keys(rows.map(rowReader(stated.declarations))[0]?.cells ?? {})).not.toContain('maturity');
   });

@@ -17,7 +17,7 @@ export default async function ImportPage({
 }: PageProps<'/programs/[program]/lists/[list]/imports/[import]'>) {
   const { access, list, listHref, route } = await requireList(params, 'lists.read');
   const { import: id } = await params;
-  const found = importOf(await orNotFound(() => reachImport(serverDb(), list, id)), list);
+  const found = importOf(await orNotFound(() => reachImport(serverDb(), list, id)), list, new Date());
   return (
     <ProgramFrame access={access} current="lists">
       <PageHead

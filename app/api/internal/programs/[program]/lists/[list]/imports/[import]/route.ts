@@ -10,5 +10,5 @@ type Params = { program: string; list: string; import: string };
 export const GET = programRoute<Params>('lists.read', async ({ params, program }) => {
   const list = await reachList(serverDb(), program.id, params.list);
   const found = await reachImport(serverDb(), list, params.import);
-  return Response.json(importSchema.parse(importOf(found, list)));
+  return Response.json(importSchema.parse(importOf(found, list, new Date())));
 });
