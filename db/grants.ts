@@ -22,6 +22,7 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   builds: ['select', 'insert', 'update'],
   limits: ['select', 'insert', 'update', 'delete'],
   growth_allowances: ['select', 'insert', 'update', 'delete'],
+  group_changes: ['select', 'insert'],
   stored_files: ['select', 'insert'],
   lists: ['select', 'insert', 'update'],
   list_revisions: ['select', 'insert'],

@@ -1,20 +1,8 @@
 import { type CgLimits } from '@/components/baselines/condition-sheet';
+import { type Limit, tightest } from '@/lib/loading/limits';
 
-type Limit = { readonly quantity: string; readonly value: number };
-
-/** The CG limits among a program's limits, % MAC. */
-export function cgLimits(limits: readonly Limit[]): CgLimits {
-  return {
-    forward: limitOf(limits, 'cg-forward-percent-mac'),
-    aft: limitOf(limits, 'cg-aft-percent-mac'),
-  };
-}
-
-/** kg */
-export function massLimit(limits: readonly Limit[]): number | null {
-  return limitOf(limits, 'mass-maximum');
-}
-
-function limitOf(limits: readonly Limit[], quantity: string): number | null {
-  return limits.find((limit) => limit.quantity === quantity)?.value ?? null;
+/** The CG limits of the whole aircraft in a condition, % MAC, the tightest on each side. */
+export function cgLimits(limits: readonly Limit[], condition: string | null): CgLimits {
+  const { least, most } = tightest(limits, 'percentMac', condition);
+  return { forward: least?.value ?? null, aft: most?.value ?? null };
 }

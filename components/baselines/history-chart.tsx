@@ -13,8 +13,14 @@ interface HistoryChartProps {
   readonly unit: string;
   /** By number. */
   readonly points: readonly HistoryPoint[];
-  /** As shown; null where none is set. */
-  readonly limit: number | null;
+  /** As shown. */
+  readonly limits: readonly HistoryLimit[];
+}
+
+export interface HistoryLimit {
+  readonly value: number;
+  /** As in "contract, at most". */
+  readonly words: string;
 }
 
 const [TOP, HEIGHT, FOOT] = [24, 200, 48];
@@ -22,12 +28,16 @@ const [TOP, HEIGHT, FOOT] = [24, 200, 48];
 const COLOURS = ['#0072b2', '#e69f00', '#009e73', '#cc79a7', '#56b4e9', '#d55e00'];
 const percent = (share: number): string => `${100 * share}%`;
 
-/** Mass over all baselines of a program, a line for each build, against its limit. */
-export function HistoryChart({ label, unit, points, limit }: HistoryChartProps) {
-  const scale = chartScale(
-    [...points.flatMap(({ mass, predicted }) => [mass, predicted]), ...(limit === null ? [] : [limit])],
-    4,
-  );
+/**
+ * Mass over all baselines of a program, a line for each build, against its limits. The scale is that of the masses: a limit farther
+ * from them than they lie apart is told at the edge, with its figure.
+ */
+export function HistoryChart({ label, unit, points, limits }: HistoryChartProps) {
+  const masses = points.flatMap(({ mass, predicted }) => [mass, predicted]);
+  const near = limits.filter(({ value }) => isNear(value, masses));
+  const scale = chartScale([...masses, ...near.map(({ value }) => value)], 4);
+  const above = limits.filter(({ value }) => value > scale.to);
+  const below = limits.filter(({ value }) => value < scale.from);
   const y = (value: number): number => TOP + HEIGHT * (1 - scale.place(value));
   const x = (index: number): number => 0.12 + (0.88 * (index + 0.5)) / points.length;
   const builds = [...new Set(points.map(({ build }) => build))];
@@ -50,14 +60,18 @@ export function HistoryChart({ label, unit, points, limit }: HistoryChartProps) 
       <text x="0" y="12" className="fill-ink-2 text-note">
         {unit}
       </text>
-      {limit === null ? null : (
-        <>
-          <line x1="12%" x2="100%" y1={y(limit)} y2={y(limit)} className="stroke-limit" strokeWidth="2" />
-          <text x="100%" y={y(limit) - 5} textAnchor="end" className="fill-ink text-note">
-            maximum mass {limit.toFixed(scale.decimals)} {unit}
-          </text>
-        </>
-      )}
+      {limits
+        .filter(({ value }) => value >= scale.from && value <= scale.to)
+        .map(({ value, words }) => (
+          <g key={`${words} ${value}`}>
+            <line x1="12%" x2="100%" y1={y(value)} y2={y(value)} className="stroke-limit" strokeWidth="2" />
+            <text x="100%" y={y(value) - 5} textAnchor="end" className="fill-ink text-note">
+              {words} {value.toFixed(scale.decimals)} {unit}
+            </text>
+          </g>
+        ))}
+      <AtTheEdge limits={above} edge={TOP} side={1} {...{ unit }} decimals={scale.decimals} />
+      <AtTheEdge limits={below} edge={TOP + HEIGHT} side={-1} {...{ unit }} decimals={scale.decimals} />
       {builds.map((build, at) => (
         <BuildLine
           key={build}
@@ -83,6 +97,51 @@ export function HistoryChart({ label, unit, points, limit }: HistoryChartProps) 
         </text>
       ))}
     </svg>
+  );
+}
+
+/** Near enough to be drawn: no farther from the masses than they lie apart. */
+function isNear(value: number, masses: readonly number[]): boolean {
+  const [low, high] = [Math.min(...masses), Math.max(...masses)];
+  return masses.length > 0 && value >= low - (high - low) && value <= high + (high - low);
+}
+
+/** Limits beyond the drawing: a mark at its edge that points to where they lie, and their figures. */
+function AtTheEdge({
+  limits,
+  edge,
+  side,
+  unit,
+  decimals,
+}: {
+  readonly limits: readonly HistoryLimit[];
+  readonly edge: number;
+  /** 1 above the drawing, -1 below it. */
+  readonly side: 1 | -1;
+  readonly unit: string;
+  readonly decimals: number;
+}) {
+  if (limits.length === 0) return null;
+  return (
+    <g>
+      <line x1="12%" x2="100%" y1={edge} y2={edge} className="stroke-limit" strokeDasharray="2 6" />
+      {limits.map(({ value, words }, index) => (
+        <svg
+          key={`${words} ${value}`}
+          x="100%"
+          y={edge + side * (6 + 16 * index)}
+          className="overflow-visible"
+        >
+          <path
+            d={side === 1 ? 'M-12 8 L-6 -2 L0 8 Z' : 'M-12 -8 L-6 2 L0 -8 Z'}
+            className="fill-limit stroke-ink"
+          />
+          <text x="-18" y={side === 1 ? 9 : 1} textAnchor="end" className="fill-ink text-note">
+            {words} {value.toFixed(decimals)} {unit}, {side === 1 ? 'above' : 'below'} this drawing
+          </text>
+        </svg>
+      ))}
+    </g>
   );
 }
 

@@ -1,4 +1,4 @@
-import { type ShownCondition } from '@/components/baselines/condition-sheet';
+import { type ShownCondition, type ShownProperties } from '@/components/baselines/condition-sheet';
 import { type HandoffDocument } from '@/lib/baselines/handoff-document';
 import { type ConditionResult } from '@/lib/loading/configuration';
 import { type Vec3 } from '@/lib/numerics/vec3';
@@ -14,6 +14,7 @@ export function shownOfResult(condition: StoredCondition): ShownCondition {
     mass: rollUp.basic.mass,
     predictedMass: rollUp.predicted.mass,
     properties: rollUp.basic.properties,
+    predicted: rollUp.predicted.properties,
     sigma: sigmaOfResult(condition),
   };
 }
@@ -22,7 +23,8 @@ function sigmaOfResult({ uncertainty }: StoredCondition): ShownCondition['sigma'
   if (uncertainty === undefined) return null;
   const { mass, massShare, properties } = uncertainty.basic;
   if (properties === null || massShare === null || massShare === 0) return null;
-  return { mass, massShare, percentMac: properties.percentMac, inertia: properties.inertia };
+  const { cg, percentMac, inertia } = properties;
+  return { mass, massShare, cg: [cg.x, cg.y, cg.z], percentMac, inertia };
 }
 
 /**
@@ -34,29 +36,35 @@ export function shownOfDocument(
   submitted: StoredCondition | undefined,
 ): ShownCondition {
   const { title, mass, predictedMass } = condition;
-  if (!('cg' in condition)) return { title, mass, predictedMass, properties: null, sigma: null };
-  const { cg, inertia, principal } = condition;
-  const [first, second, third] = principal.axes;
   return {
     title,
     mass,
     predictedMass,
-    properties: {
-      cg: [cg.airframe.x, cg.airframe.y, cg.airframe.z],
-      percentMac: cg.percentMac ?? null,
-      inertia,
-      principal: {
-        moments: triple(principal.moments),
-        axes: [triple(first), triple(second), triple(third)],
-      },
-    },
+    properties: propertiesOf(condition),
+    predicted: propertiesOf(condition.predicted),
     sigma:
       'sigma' in condition
         ? {
             ...condition.sigma,
+            cg: [condition.sigma.cg.x, condition.sigma.cg.y, condition.sigma.cg.z],
             percentMac: submitted?.uncertainty?.basic.properties?.percentMac ?? null,
           }
         : null,
+  };
+}
+
+type StoredProperties =
+  HandoffDocument['conditions'][number] | HandoffDocument['conditions'][number]['predicted'];
+
+function propertiesOf(stored: StoredProperties): ShownProperties | null {
+  const { cg, inertia, principal } = { cg: undefined, inertia: undefined, principal: undefined, ...stored };
+  if (cg === undefined || inertia === undefined || principal === undefined) return null;
+  const [first, second, third] = principal.axes;
+  return {
+    cg: [cg.airframe.x, cg.airframe.y, cg.airframe.z],
+    percentMac: cg.percentMac ?? null,
+    inertia,
+    principal: { moments: triple(principal.moments), axes: [triple(first), triple(second), triple(third)] },
   };
 }
 

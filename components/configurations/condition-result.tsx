@@ -1,9 +1,9 @@
 import { BalanceBar } from '@/components/mass/balance-bar';
+import { CgTable } from '@/components/mass/cg-table';
 import { MassFigure } from '@/components/mass/mass-figure';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
-import { PrincipalTable } from '@/components/mass/principal-table';
-import { TensorPlate } from '@/components/mass/tensor-plate';
+import { TwoTensors } from '@/components/mass/two-tensors';
 import { MassMargin } from '@/components/configurations/mass-margin';
 import { Banner } from '@/components/ui/banner';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
@@ -11,7 +11,7 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { principalInclination } from '@/lib/mass/inclination';
 import { type MassProperties } from '@/lib/mass/result';
 import { type RollUp } from '@/lib/mass/roll-up';
-import { type MassUncertainty, type PropertiesUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
+import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { degrees, fromSi } from '@/lib/units/convert';
 import { type OutputUnits } from '@/lib/units/names';
 
@@ -68,44 +68,35 @@ export function ConditionResultView({ rollUp, uncertainty, geometry, limits, uni
         </Banner>
       ) : (
         <>
-          <CgTable basic={properties} predicted={predicted.properties} {...{ sigma, geometry, units }} />
-          <TensorPlate
-            moments={properties.inertia}
+          <CgTable
+            basic={properties}
+            predicted={predicted.properties}
+            sigma={
+              sigma === null
+                ? null
+                : { cg: [sigma.cg.x, sigma.cg.y, sigma.cg.z], percentMac: sigma.percentMac }
+            }
+            axes={geometry.axes}
+            units={units}
+          />
+          <TwoTensors
+            basic={properties}
+            predicted={predicted.properties}
+            sigma={{ basic: sigma?.inertia ?? null, predicted: predictedSigma?.inertia ?? null }}
             unit={units.inertia}
-            {...(sigma === null ? {} : { sigma: sigma.inertia })}
           />
           <SigmaNote share={uncertainty.basic.massShare} />
-          <div className="grid gap-2">
-            <PrincipalTable
-              moments={properties.principal.moments}
-              axes={properties.principal.axes}
-              unit={units.inertia}
+          <p className="text-ink-2">
+            <Inclination
+              angle={degrees(principalInclination(properties.principal))}
+              predicted={
+                predicted.properties === null
+                  ? null
+                  : degrees(principalInclination(predicted.properties.principal))
+              }
             />
-            <p className="text-ink-2">
-              <Inclination angle={degrees(principalInclination(properties.principal))} />
-            </p>
-          </div>
+          </p>
           <RadiiTable basic={properties} predicted={predicted.properties} units={units} />
-          {predicted.properties === null ? null : (
-            <details>
-              <summary className="cursor-pointer underline decoration-1 underline-offset-4">
-                Predicted tensor and principal axes, with growth
-              </summary>
-              <div className="grid gap-4 pt-4">
-                <TensorPlate
-                  moments={predicted.properties.inertia}
-                  unit={units.inertia}
-                  title="Predicted inertia about the predicted CG, body axes"
-                  {...(predictedSigma === null ? {} : { sigma: predictedSigma.inertia })}
-                />
-                <PrincipalTable
-                  moments={predicted.properties.principal.moments}
-                  axes={predicted.properties.principal.axes}
-                  unit={units.inertia}
-                />
-              </div>
-            </details>
-          )}
         </>
       )}
     </div>
@@ -133,65 +124,6 @@ function SigmaNote({ share }: { readonly share: number | null }) {
         'No row states an uncertainty, so none is shown.'
       )}
     </p>
-  );
-}
-
-function CgTable({
-  basic,
-  predicted,
-  sigma,
-  geometry,
-  units,
-}: TwoResults & { readonly sigma: PropertiesUncertainty | null; readonly geometry: AirframeGeometry }) {
-  const rows = [
-    { name: 'Basic', properties: basic },
-    ...(predicted === null ? [] : [{ name: 'Predicted', properties: predicted }]),
-  ];
-  const decimals = sharedDecimals(
-    rows.flatMap(({ properties }) => properties.cg.map((v) => fromSi(v, units.length))),
-  );
-  return (
-    <Table caption="CG in airframe axes from the datum">
-      <thead>
-        <tr>
-          <ColumnHead>CG</ColumnHead>
-          {(['x', 'y', 'z'] as const).map((letter, index) => (
-            <ColumnHead key={letter} side="right" unit={units.length}>
-              {letter} {geometry.axes[index]}
-            </ColumnHead>
-          ))}
-          <ColumnHead side="right">% MAC</ColumnHead>
-        </tr>
-      </thead>
-      <tbody>
-        {rows.map(({ name, properties }) => (
-          <tr key={name}>
-            <RowHead>{name}</RowHead>
-            {properties.cg.map((value, index) => (
-              <Cell key={index} side="right">
-                <Num value={value} unit={units.length} decimals={decimals} />
-              </Cell>
-            ))}
-            <Cell side="right">
-              <Num value={properties.percentMac} decimals={2} />
-            </Cell>
-          </tr>
-        ))}
-        {sigma === null ? null : (
-          <tr>
-            <RowHead>± of the basic CG</RowHead>
-            {[sigma.cg.x, sigma.cg.y, sigma.cg.z].map((value, index) => (
-              <Cell key={index} side="right">
-                <Num value={value} unit={units.length} decimals={decimals} />
-              </Cell>
-            ))}
-            <Cell side="right">
-              <Num value={sigma.percentMac} decimals={2} />
-            </Cell>
-          </tr>
-        )}
-      </tbody>
-    </Table>
   );
 }
 
@@ -235,12 +167,18 @@ function RadiiTable({ basic, predicted, units }: TwoResults) {
 }
 
 /** The trade's inclination of the principal axis, its sense in words. */
-function Inclination({ angle }: { readonly angle: number }) {
+function Inclination({ angle, predicted }: { readonly angle: number; readonly predicted: number | null }) {
   return (
     <>
       Inclination of the principal x axis: <Num value={Math.abs(angle)} decimals={3} />°{' '}
       {angle === 0 ? 'from body x' : angle > 0 ? 'above body x, nose up' : 'below body x, nose down'}, in the
-      plane of symmetry.
+      plane of symmetry
+      {predicted === null ? null : (
+        <>
+          ; predicted <Num value={Math.abs(predicted)} decimals={3} />° {predicted < 0 ? 'below' : 'above'}
+        </>
+      )}
+      .
     </>
   );
 }

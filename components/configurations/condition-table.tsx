@@ -18,13 +18,15 @@ interface ConditionTableProps {
   /** Code of the condition that the page shows in full. */
   readonly shown: string;
   readonly units: OutputUnits;
-  readonly limits: Pick<ProgramLimits, 'forward' | 'aft'>;
+  readonly limitsOf: (condition: string) => Limits;
 }
+
+type Limits = Pick<ProgramLimits, 'forward' | 'aft'>;
 
 const SHOWN = ['ixx', 'iyy', 'izz', 'ixz'] as const;
 
 /** The conditions beside each other; each leads to its page. */
-export function ConditionTable({ conditions, shown, units, limits }: ConditionTableProps) {
+export function ConditionTable({ conditions, shown, units, limitsOf }: ConditionTableProps) {
   const masses = conditions.map(({ rollUp }) => fromSi(rollUp.basic.mass, units.mass));
   const moments = conditions.flatMap(({ rollUp }) =>
     SHOWN.map((name) => fromSi(rollUp.basic.properties?.inertia[name] ?? 0, units.inertia)),
@@ -71,7 +73,7 @@ export function ConditionTable({ conditions, shown, units, limits }: ConditionTa
               <Num value={rollUp.predicted.mass} unit={units.mass} decimals={massDecimals} />
             </Cell>
             <Cell side="right">
-              <BalanceFigure cg={rollUp.basic.properties?.percentMac ?? null} limits={limits} />
+              <BalanceFigure cg={rollUp.basic.properties?.percentMac ?? null} limits={limitsOf(code)} />
             </Cell>
             {SHOWN.map((symbol) => (
               <Cell key={symbol} side="right">
@@ -91,7 +93,7 @@ export function ConditionTable({ conditions, shown, units, limits }: ConditionTa
 }
 
 /** % MAC; beyond a limit with its mark, and in words for whoever does not see it. */
-function BalanceFigure({ cg, limits }: { readonly cg: number | null } & Pick<ConditionTableProps, 'limits'>) {
+function BalanceFigure({ cg, limits }: { readonly cg: number | null; readonly limits: Limits }) {
   const verdict = cg === null ? null : balanceVerdict(cg, limits.forward, limits.aft);
   if (verdict === null || verdict.inside) return <Num value={cg} decimals={2} />;
   return (

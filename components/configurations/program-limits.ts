@@ -1,19 +1,13 @@
 import { type ProgramLimits } from '@/components/configurations/condition-result';
+import { type Limit, tightest } from '@/lib/loading/limits';
 
-interface StoredLimit {
-  readonly quantity: 'cg-forward-percent-mac' | 'cg-aft-percent-mac' | 'mass-maximum';
-  readonly kind: string;
-  readonly value: number;
-  readonly source: string;
-}
-
-/** The program's limits as a condition is judged by them. */
-export function programLimits(limits: readonly StoredLimit[]): ProgramLimits {
-  const limitOf = (quantity: StoredLimit['quantity']) => limits.find((limit) => limit.quantity === quantity);
-  const mass = limitOf('mass-maximum');
+/** The limits of the whole aircraft that a condition is drawn against: the tightest on each side. */
+export function programLimits(limits: readonly Limit[], condition: string): ProgramLimits {
+  const cg = tightest(limits, 'percentMac', condition);
+  const mass = tightest(limits, 'mass', condition).most;
   return {
-    forward: limitOf('cg-forward-percent-mac')?.value ?? null,
-    aft: limitOf('cg-aft-percent-mac')?.value ?? null,
-    mass: mass === undefined ? null : { value: mass.value, kind: mass.kind, source: mass.source },
+    forward: cg.least?.value ?? null,
+    aft: cg.most?.value ?? null,
+    mass: mass === null ? null : { value: mass.value, kind: mass.kind, source: mass.source },
   };
 }

@@ -1,11 +1,16 @@
 import { type ConfigurationView, viewHref } from '@/components/configurations/address';
-import { ConditionResultView, type ProgramLimits } from '@/components/configurations/condition-result';
+import { ConditionResultView } from '@/components/configurations/condition-result';
 import { ConditionTable } from '@/components/configurations/condition-table';
 import { GroupTable } from '@/components/configurations/group-table';
+import { programLimits } from '@/components/configurations/program-limits';
+import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
+import { StandingTable } from '@/components/limits/standing-table';
+import { MaturitySection } from '@/components/mass/maturity-section';
 import { MomentumByPoint } from '@/components/rotors/momentum-by-point';
 import { ChoiceLinks } from '@/components/ui/choice-links';
 import { Section } from '@/components/ui/section';
-import { type ConfigurationResult } from '@/lib/loading/configuration';
+import { type ConfigurationResult, standingsOf } from '@/lib/loading/configuration';
+import { type Limit } from '@/lib/loading/limits';
 import { OUTPUT_UNITS, UNIT_SYSTEMS } from '@/lib/units/names';
 
 interface RolledUpProps {
@@ -13,13 +18,16 @@ interface RolledUpProps {
   readonly home: string;
   readonly view: ConfigurationView;
   readonly result: ConfigurationResult;
-  readonly limits: ProgramLimits;
+  /** Those in force today, for results that were stored before theirs were kept. */
+  readonly limitsToday: readonly Limit[];
 }
 
 /** What a roll-up says: the conditions beside each other, one of them in full, the rotors. */
-export function RolledUp({ home, view, result, limits }: RolledUpProps) {
+export function RolledUp({ home, view, result, limitsToday }: RolledUpProps) {
   const units = OUTPUT_UNITS[view.units];
-  const { conditions, geometry, operatingPoints } = result;
+  const { conditions, geometry, operatingPoints, allowances } = result;
+  const limits = result.limits ?? limitsToday;
+  const standings = standingsOf({ ...result, limits });
   const shown = conditions.find(({ code }) => code === view.condition) ?? conditions[0];
   const to = (changes: Partial<ConfigurationView>) => viewHref(home, { ...view, ...changes });
   if (shown === undefined) return null;
@@ -45,16 +53,34 @@ export function RolledUp({ home, view, result, limits }: RolledUpProps) {
           }))}
           shown={shown.code}
           units={units}
-          limits={limits}
+          limitsOf={(code) => programLimits(limits, code)}
         />
       </Section>
       <Section title={shown.title}>
         <ConditionResultView
           rollUp={shown.rollUp}
           uncertainty={shown.uncertainty}
-          {...{ geometry, limits, units }}
+          limits={programLimits(limits, shown.code)}
+          {...{ geometry, units }}
         />
       </Section>
+      <Section
+        title="Limits and targets"
+        lead={
+          result.limits === undefined
+            ? 'Those of today: this was rolled up before they were kept with it.'
+            : null
+        }
+      >
+        <StandingTable
+          standings={standings}
+          units={units}
+          rowsHref={(condition, group) =>
+            viewsHref(`${home}/views`, viewsAsked({ condition, within: group }))
+          }
+        />
+      </Section>
+      <MaturitySection condition={shown} unit={units.mass} {...{ geometry, allowances }} />
       <Section
         title="Groups"
         aside={

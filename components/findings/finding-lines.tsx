@@ -8,6 +8,8 @@ export interface FindingLine extends Finding {
   readonly seen: string | null;
   /** The page that shows the rows concerned. */
   readonly href: string | null;
+  /** Where the finding names groups: the rows of each. */
+  readonly groups?: readonly { readonly words: string; readonly href: string }[] | null;
 }
 
 /** Findings in the order given, each with its rows one click away and its reason folded beneath. */
@@ -35,7 +37,17 @@ export function FindingLines({ findings }: { readonly findings: readonly Finding
 
 const NAMED_AT_ONCE = 6;
 
-function Rows({ finding: { rows, count, href } }: { readonly finding: FindingLine }) {
+function Rows({ finding: { rows, count, href, groups } }: { readonly finding: FindingLine }) {
+  if (groups)
+    return (
+      <p className="flex flex-wrap gap-x-4">
+        {groups.map((group) => (
+          <TextLink key={group.href} href={group.href}>
+            {group.words}
+          </TextLink>
+        ))}
+      </p>
+    );
   if (rows.length === 0) return null;
   if (href !== null)
     return (

@@ -1,47 +1,43 @@
+import { OneButtonForm } from '@/components/forms/one-button-form';
+import { limitFields, limitFigure } from '@/components/limits/figure';
 import { Num } from '@/components/mass/num';
 import { typedDecimals } from '@/components/mass/number-text';
-import { OneButtonForm } from '@/components/forms/one-button-form';
-import { LimitForm } from '@/components/settings/limit-form';
-import { LIMIT_KIND_WORDS, LIMIT_WORDS } from '@/components/settings/words';
+import { type LimitChoices, LimitForm } from '@/components/settings/limit-form';
+import { LIMIT_KIND_WORDS, LIMIT_QUANTITY_WORDS, LIMIT_SENSE_WORDS } from '@/components/settings/words';
 import { DialogButton } from '@/components/ui/dialog-button';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
-import { LIMIT_QUANTITIES, type LIMIT_KINDS } from '@/lib/contracts/program-settings';
 import { type FormAction } from '@/lib/form-state';
-import { asTyped } from '@/lib/units/convert';
-import { type MassUnit } from '@/lib/units/table';
+import { inForce, type Limit } from '@/lib/loading/limits';
+import { type OutputUnits } from '@/lib/units/names';
 
-type Quantity = (typeof LIMIT_QUANTITIES)[number];
-
-interface LimitLine {
-  readonly quantity: Quantity;
-  readonly kind: (typeof LIMIT_KINDS)[number];
-  /** % MAC, or kg. */
-  readonly value: number;
-  readonly source: string;
-  readonly source_date: string;
-  readonly author: string;
-}
+type LimitLine = Limit & { readonly id: string; readonly author: string };
 
 interface LimitTableProps {
   readonly limits: readonly LimitLine[];
+  /** ISO date: what is in force on it is marked. */
+  readonly day: string;
   readonly program: string;
-  readonly massUnit: MassUnit;
+  readonly units: OutputUnits;
+  readonly choices: LimitChoices;
   /** Null for those who may only look. */
   readonly actions: { readonly set: FormAction; readonly remove: FormAction } | null;
 }
 
-/** Every limit that a program can have, set or not. */
-export function LimitTable({ limits, program, massUnit, actions }: LimitTableProps) {
+/** Every limit and target of a program, those too that are not in force. */
+export function LimitTable({ limits, day, program, units, choices, actions }: LimitTableProps) {
+  if (limits.length === 0)
+    return <p className="text-ink-2">None is stated: results are judged by nothing.</p>;
   return (
-    <Table caption="Limits" captionHidden>
+    <Table caption="Limits and targets" captionHidden>
       <thead>
         <tr>
           <ColumnHead>Limit</ColumnHead>
+          <ColumnHead>Allowed</ColumnHead>
           <ColumnHead side="right">Value</ColumnHead>
           <ColumnHead>Unit</ColumnHead>
           <ColumnHead>Kind</ColumnHead>
+          <ColumnHead>In force</ColumnHead>
           <ColumnHead>Source</ColumnHead>
-          <ColumnHead>Dated</ColumnHead>
           <ColumnHead>Set by</ColumnHead>
           {actions ? (
             <ColumnHead>
@@ -51,30 +47,33 @@ export function LimitTable({ limits, program, massUnit, actions }: LimitTablePro
         </tr>
       </thead>
       <tbody>
-        {LIMIT_QUANTITIES.map((quantity) => {
-          const limit = limits.find((one) => one.quantity === quantity);
-          const isMass = quantity === 'mass-maximum';
+        {limits.map((limit) => {
+          const figure = limitFigure(limit, units);
+          const isNow = inForce(limit, day);
           return (
-            <tr key={quantity}>
-              <RowHead>{LIMIT_WORDS[quantity]}</RowHead>
+            <tr key={limit.id} className={isNow ? undefined : 'text-ink-2'}>
+              <RowHead>
+                {LIMIT_QUANTITY_WORDS[limit.quantity]}
+                <span className="block text-note text-ink-2">{aboutWords(limit, choices)}</span>
+              </RowHead>
+              <Cell>{LIMIT_SENSE_WORDS[limit.sense]}</Cell>
               <Cell side="right">
-                {limit ? (
-                  <Num
-                    value={shownValue(limit, massUnit)}
-                    decimals={Math.min(6, typedDecimals(shownValue(limit, massUnit)))}
-                  />
-                ) : (
-                  'not set'
-                )}
+                <Num value={figure.value} decimals={Math.min(6, typedDecimals(figure.value))} />
               </Cell>
-              <Cell>{isMass ? massUnit : '% MAC'}</Cell>
-              <Cell>{limit ? LIMIT_KIND_WORDS[limit.kind] : ''}</Cell>
-              <Cell>{limit?.source}</Cell>
-              <Cell className="num">{limit?.source_date}</Cell>
-              <Cell>{limit?.author}</Cell>
+              <Cell>{figure.label}</Cell>
+              <Cell>{LIMIT_KIND_WORDS[limit.kind]}</Cell>
+              <Cell className="num">
+                from {limit.from}
+                {limit.until === null ? null : ` to ${limit.until}`}
+                {isNow ? null : <span className="block text-note">not today</span>}
+              </Cell>
+              <Cell>
+                {limit.source}, <span className="num">{limit.sourceDate}</span>
+              </Cell>
+              <Cell>{limit.author}</Cell>
               {actions ? (
                 <Cell>
-                  <Change {...{ quantity, limit, program, massUnit, actions }} />
+                  <Change {...{ limit, program, units, choices, actions }} />
                 </Cell>
               ) : null}
             </tr>
@@ -85,50 +84,46 @@ export function LimitTable({ limits, program, massUnit, actions }: LimitTablePro
   );
 }
 
-function Change({
-  quantity,
-  limit,
-  program,
-  massUnit,
-  actions,
-}: {
-  readonly quantity: Quantity;
-  readonly limit: LimitLine | undefined;
-  readonly program: string;
-  readonly massUnit: MassUnit;
-  readonly actions: { readonly set: FormAction; readonly remove: FormAction };
-}) {
-  const title = LIMIT_WORDS[quantity];
-  const present: Record<string, string> = limit
-    ? {
-        value: String(shownValue(limit, massUnit)),
-        kind: limit.kind,
-        source: limit.source,
-        source_date: limit.source_date,
-      }
-    : {};
-  return (
-    <span className="-my-1.5 flex gap-4 pointer-coarse:-my-3">
-      <DialogButton words={limit ? 'Change limit' : 'Set limit'} kind="quiet" title={title}>
-        <LimitForm action={actions.set} {...{ program, quantity, massUnit, present }} />
-      </DialogButton>
-      {limit ? (
-        <DialogButton words="Remove limit" kind="quiet" title={`Remove: ${title}?`} asks>
-          <p className="measure">Results are no longer judged by it. The trail keeps what it was.</p>
-          <OneButtonForm
-            action={actions.remove}
-            fields={{ program, quantity }}
-            words="Remove limit"
-            pendingWords="Removing"
-            kind="danger"
-          />
-        </DialogButton>
-      ) : null}
-    </span>
-  );
+/** Of what and in which condition. */
+function aboutWords({ group, condition, frameIssue }: Limit, { conditions }: LimitChoices): string {
+  const of = group === '' ? 'Whole aircraft' : group;
+  const title = conditions.find(({ code }) => code === condition)?.title ?? condition;
+  const where = title === null ? 'every condition' : title;
+  return `${of}, ${where}${frameIssue === null ? '' : `, frame issue ${frameIssue}`}`;
 }
 
-/** % MAC, or the mass in the unit that is shown, as it was entered. */
-function shownValue({ quantity, value }: LimitLine, massUnit: MassUnit): number {
-  return quantity === 'mass-maximum' ? asTyped(value, massUnit) : value;
+function Change({
+  limit,
+  program,
+  units,
+  choices,
+  actions,
+}: {
+  readonly limit: LimitLine;
+  readonly program: string;
+  readonly units: OutputUnits;
+  readonly choices: LimitChoices;
+  readonly actions: { readonly set: FormAction; readonly remove: FormAction };
+}) {
+  const title = LIMIT_QUANTITY_WORDS[limit.quantity];
+  return (
+    <span className="-my-1.5 flex gap-4 pointer-coarse:-my-3">
+      <DialogButton words="Change limit" kind="quiet" title={title}>
+        <LimitForm action={actions.set} {...{ program, choices }} present={limitFields(limit, units)} />
+      </DialogButton>
+      <DialogButton words="Remove limit" kind="quiet" title={`Remove: ${title}?`} asks>
+        <p className="measure">
+          Results are no longer judged by it. The trail keeps what it was, and baselines that were signed
+          under it keep it.
+        </p>
+        <OneButtonForm
+          action={actions.remove}
+          fields={{ program, id: limit.id }}
+          words="Remove limit"
+          pendingWords="Removing"
+          kind="danger"
+        />
+      </DialogButton>
+    </span>
+  );
 }

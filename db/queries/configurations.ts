@@ -5,6 +5,7 @@ import {
   type RotorRevisionsTable,
   type RollUpsTable,
 } from '@/db/schema/configurations';
+import { groupBreakdownOf, growthAllowancesOf } from '@/db/queries/settings';
 import { fromNumbers } from '@/lib/mass/account';
 import { type GrowthAllowances, NO_GROWTH } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
@@ -157,13 +158,25 @@ export async function conditionsOf(db: Db, configurationId: string) {
   }));
 }
 
+/** The growth allowances of a program, those of groups by the names that the groups have today. */
 export async function allowancesOf(db: Db, programId: string): Promise<GrowthAllowances> {
-  const rows = await db
-    .selectFrom('growth_allowances')
-    .selectAll()
-    .where('program_id', '=', programId)
-    .execute();
-  return { ...NO_GROWTH, ...Object.fromEntries(rows.map((row) => [row.maturity, row.fraction])) };
+  const [rows, breakdown] = await Promise.all([
+    growthAllowancesOf(db, programId),
+    groupBreakdownOf(db, programId),
+  ]);
+  const own = rows.filter((row) => row.group_path === '');
+  const groups = rows
+    .filter((row) => row.group_path !== '')
+    .map(({ group_path: path, maturity, fraction }) => ({
+      group: breakdown.present(path),
+      maturity,
+      fraction,
+    }));
+  return {
+    ...NO_GROWTH,
+    ...Object.fromEntries(own.map((row) => [row.maturity, row.fraction])),
+    ...(groups.length === 0 ? {} : { groups }),
+  };
 }
 
 export function latestRollUp(db: Db, configurationId: string) {

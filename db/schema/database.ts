@@ -44,6 +44,7 @@ import {
   type ProgramsTable,
   type ReferencePointsTable,
 } from './programs';
+  type GroupChangesTable,
 
 /** Every table of the application, by its name in PostgreSQL. */
 export interface Database {
@@ -68,6 +69,7 @@ export interface Database {
   row_versions: RowVersionsTable;
   row_ends: RowEndsTable;
   mass_rows: MassRowsView;
+  group_changes: GroupChangesTable;
   revision_subtotals: RevisionSubtotalsTable;
   imports: ImportsTable;
   rotor_revisions: RotorRevisionsTable;

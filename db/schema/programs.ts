@@ -1,11 +1,11 @@
 import { type Generated } from 'kysely';
 import { type Direction } from '@/lib/frames/axes';
+import { type GroupChangeKind } from '@/lib/groups/breakdown';
+import { type LimitKind, type LimitQuantity, type LimitSense } from '@/lib/loading/limits';
 import { type Maturity } from '@/lib/mass/component';
 import { type MemberRole } from '@/lib/permissions';
 
 export type BuildKind = 'design' | 'as-built' | 'as-weighed';
-export type LimitQuantity = 'cg-forward-percent-mac' | 'cg-aft-percent-mac' | 'mass-maximum';
-export type LimitKind = 'contract' | 'specification' | 'target' | 'allocation';
 
 export interface ProgramsTable {
   id: string;
@@ -67,11 +67,18 @@ export interface BuildsTable {
   created_at: Generated<Date>;
 }
 
-/** `value` in SI: kg for masses, percent of the mean chord for CG limits. */
+/** `value` in SI, `percentMac` in % of the mean chord. `group_path` '' is the whole aircraft, no `condition_code` every condition. */
 export interface LimitsTable {
   id: string;
   program_id: string;
   quantity: LimitQuantity;
+  sense: LimitSense;
+  group_path: string;
+  condition_code: string | null;
+  /** The issue whose axes a limit of `cgx`, `cgy` or `cgz` is stated in. */
+  frame_issue_id: string | null;
+  valid_from: string;
+  valid_until: string | null;
   kind: LimitKind;
   value: number;
   source: string;
@@ -80,9 +87,23 @@ export interface LimitsTable {
   created_at: Generated<Date>;
 }
 
+/** `group_path` '' is the program's own. */
 export interface GrowthAllowancesTable {
   program_id: string;
+  group_path: string;
   maturity: Maturity;
   fraction: number;
   source: string;
+}
+
+/** Insert-only. `number` counts within the program. */
+export interface GroupChangesTable {
+  program_id: string;
+  number: number;
+  kind: GroupChangeKind;
+  path: string;
+  to_path: string | null;
+  code: string | null;
+  changed_by: string;
+  changed_at: Generated<Date>;
 }

@@ -21,11 +21,23 @@ export interface AuditDetails {
   'frame.issued': { number: number; title: string; reason: string };
   'reference-point.added': { code: string; frameIssue: number };
   'build.added': { code: string; kind: string };
-  'limit.set': { quantity: string; value: number; before: number | null; source: string };
-  'limit.removed': { quantity: string; before: number };
-  'allowance.set': { maturity: string; fraction: number; before: number | null };
+  'limit.set': LimitWords & {
+    value: number;
+    before: number | null;
+    source: string;
+    kind?: string;
+    from?: string;
+    until?: string | null;
+  };
+  'limit.removed': LimitWords & { before: number };
+  'allowance.set': { maturity: string; group?: string; fraction: number; before: number | null };
+  'allowance.removed': { maturity: string; group: string; before: number };
+  'groups.changed': { change: string; path: string; to: string | null; code: string | null };
   'list.created': { code: string; title: string };
   'list.declared': { code: string; before: unknown; after: unknown };
+  'list.mapped': { list: string; file: string; mapping: string; headingsSha256: string };
+  'upload.kept': { list: string; file: string; sha256: string };
+  'upload.dropped': { list: string; file: string };
   'import.requested': { list: string; file: string; sha256: string };
   'import.failed': { list: string; file: string; problems: number };
   'list.revised': {
@@ -45,6 +57,14 @@ export interface AuditDetails {
   'baseline.superseded': { number: number; by: number };
   'baseline.withdrawn': { number: number; reason: string };
   'configuration.rolled-up': { code: string; version: number; inputSha256: string };
+}
+
+/** Which limit; only `quantity` in events of before limits had groups and conditions. */
+interface LimitWords {
+  quantity: string;
+  sense?: string;
+  group?: string;
+  condition?: string | null;
 }
 
 export type AuditKind = keyof AuditDetails;

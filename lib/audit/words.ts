@@ -16,7 +16,28 @@ const LIMITS: Readonly<Record<string, string>> = {
   'cg-aft-percent-mac': 'the aft CG limit (% MAC)',
   'mass-maximum': 'the maximum mass (kg)',
 };
-const limit = (quantity: string): string => LIMITS[quantity] ?? quantity;
+const QUANTITIES: Readonly<Record<string, string>> = {
+  mass: 'mass (kg)',
+  percentMac: 'CG (% MAC)',
+  cgx: 'CG x (m)',
+  cgy: 'CG y (m)',
+  cgz: 'CG z (m)',
+};
+const limit = ({ quantity, sense, group, condition }: AuditDetails['limit.removed']): string => {
+  if (sense === undefined) return LIMITS[quantity] ?? quantity;
+  const of = group ? ` of ${group}` : '';
+  const where = condition ? ` in condition ${condition}` : '';
+  const what = QUANTITIES[quantity] ?? `${quantity} (kg.m2)`;
+  return `the ${sense === 'at-most' ? 'most' : 'least'} allowed ${what}${of}${where}`;
+};
+const ofGroup = (group: string | undefined): string => (group ? `, group ${group},` : '');
+const GROUP_CHANGES: Readonly<Record<string, (detail: AuditDetails['groups.changed']) => string>> = {
+  added: ({ path, code }) => `Added group ${path}${code === null ? '' : `, code ${code}`}`,
+  moved: ({ path, to }) => `Group ${path} is ${to ?? ''} from now on`,
+  recoded: ({ path, code }) =>
+    code === null ? `Took the code of group ${path} away` : `Gave group ${path} the code ${code}`,
+  removed: ({ path }) => `Removed group ${path}`,
+};
 const wasBefore = (before: number | null): string => (before === null ? '' : `, before ${before}`);
 
 /** Every kind of event in words. A new kind says here what its reader will see. */
@@ -69,24 +90,46 @@ const WORDS: { readonly [K in AuditKind]: KindWords<K> } = {
   'build.added': { name: 'Build added', say: ({ code, kind }) => `Added build ${code}, ${kind}` },
   'limit.set': {
     name: 'Limit set',
-    say: ({ quantity, value, before, source }) =>
-      `Set ${limit(quantity)} to ${value}${wasBefore(before)}. Source: ${source}`,
+    say: (detail) =>
+      `Set ${limit({ ...detail, before: 0 })} to ${detail.value}${wasBefore(detail.before)}. Source: ${detail.source}`,
   },
   'limit.removed': {
     name: 'Limit removed',
-    say: ({ quantity, before }) => `Removed ${limit(quantity)}, which was ${before}`,
+    say: (detail) => `Removed ${limit(detail)}, which was ${detail.before}`,
   },
   'allowance.set': {
     name: 'Growth allowance set',
-    say: ({ maturity, fraction, before }) =>
-      `Set the growth allowance of maturity ${maturity} to ${percent(fraction)}${
+    say: ({ maturity, group, fraction, before }) =>
+      `Set the growth allowance of maturity ${maturity}${ofGroup(group)} to ${percent(fraction)}${
         before === null ? '' : `, before ${percent(before)}`
       }`,
+  },
+  'allowance.removed': {
+    name: 'Growth allowance removed',
+    say: ({ maturity, group, before }) =>
+      `Removed the growth allowance of maturity ${maturity}${ofGroup(group)} which was ${percent(before)}`,
+  },
+  'groups.changed': {
+    name: 'Group breakdown changed',
+    say: (detail) => GROUP_CHANGES[detail.change]?.(detail) ?? `Changed group ${detail.path}`,
   },
   'list.created': { name: 'List created', say: ({ code, title }) => `Created list ${code}, ${title}` },
   'list.declared': {
     name: 'List declared',
     say: ({ code, before, after }) => `Changed what list ${code} declares: ${changedMembers(before, after)}`,
+  },
+  'list.mapped': {
+    name: 'Columns mapped',
+    say: ({ list, file }) => `Said how the columns of ${file} are read into list ${list}`,
+  },
+  'upload.kept': {
+    name: 'File kept',
+    say: ({ list, file, sha256 }) =>
+      `Uploaded ${file} for list ${list}, to be mapped, SHA-256 ${short(sha256)}`,
+  },
+  'upload.dropped': {
+    name: 'File dropped',
+    say: ({ list, file }) => `Dropped ${file}, which waited for a mapping into list ${list}`,
   },
   'import.requested': {
     name: 'File uploaded',

@@ -2,7 +2,8 @@ import { findingKey } from '@/lib/baselines/finding-key';
 import { CAUTION } from '@/lib/baselines/caution';
 import { conventionsOf, rollUpMembers } from '@/lib/contracts/condition-members';
 import { type PlacedFinding } from '@/lib/findings/finding';
-import { type ConfigurationResult, type PointResult } from '@/lib/loading/configuration';
+import { limitMembers } from '@/lib/baselines/limit-members';
+import { type ConfigurationResult, type PointResult, standingsOf } from '@/lib/loading/configuration';
 import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type Vec3 } from '@/lib/numerics/vec3';
 import { degreesAsTyped, rpmAsTyped } from '@/lib/units/convert';
@@ -68,6 +69,7 @@ export function handoffDocument(input: HandoffInput) {
       ...rollUpMembers(rollUp, 'si'),
       ...sigmaMember(uncertainty.basic),
     })),
+    ...limitsMember(result),
     operatingPoints: result.operatingPoints.map((point) => ({
       ...pointMember(point),
       ...sigmaOfPoint(point),
@@ -91,7 +93,14 @@ export function handoffDocument(input: HandoffInput) {
   };
 }
 
+/** Documents of before limits were kept with a baseline have none. */
 export type HandoffDocument = ReturnType<typeof handoffDocument>;
+
+/** Absent where no limit was in force. */
+function limitsMember(result: ConfigurationResult): { limits?: ReturnType<typeof limitMembers> } {
+  const limits = limitMembers(standingsOf(result));
+  return limits.length === 0 ? {} : { limits };
+}
 
 /** Angular momentum in body axes, kg.m2/s, by the right-hand rule; rpm of each rotor about its own axis. */
 export function pointMember({ code, momentum }: Pick<PointResult, 'code' | 'momentum'>) {

@@ -1,3 +1,4 @@
+import { type GroupBreakdown } from '@/lib/groups/breakdown';
 import { type Component } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type Subtotal } from '@/lib/mass/subtotals';
@@ -11,6 +12,8 @@ export interface RowContext {
   readonly geometry?: AirframeGeometry | undefined;
   /** The list's revision before this one; absent for a first revision. */
   readonly former?: readonly FormerSubtotal[] | undefined;
+  /** The breakdown of the program's groups; absent for a list that belongs to no program. */
+  readonly groups?: Pick<GroupBreakdown, 'isUnknown'> | undefined;
 }
 
 /** What rules compare of a row with what its revision before said under the same item: one piece, SI, list axes. */

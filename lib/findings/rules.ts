@@ -1,3 +1,4 @@
+import { LIMIT_RULES, limitNotJudged } from './limits/rules';
 import { REMOVAL_RULES } from './removals/rules';
 import { axisWithoutTwin } from './rotors/axis';
 import { carrierMissing, polarBeyondCarrier, withoutCarrier } from './rotors/carrier';
@@ -15,6 +16,7 @@ import { changedByInertiaUnit, changedByLengthUnit, changedByMassUnit } from './
 import { memoRows, pairInHalfList } from './rows/counting';
 import { duplicateRow, nearDuplicate, pairEnteredTwice, sameMassAndPlace } from './rows/duplicates';
 import { listLengthSlip, listMassSlip, massJump } from './rows/former';
+import { unknownGroup } from './rows/groups';
 import { heavyPoint, masslessRow, masslessTensor, negativeMassOutsideAdjustments } from './rows/mass';
 import { inertiaScale, largerThanGroup } from './rows/group-sizes';
 import { outsideGroup, placeSlip } from './rows/neighbours';
@@ -68,6 +70,7 @@ export const ROW_RULES: readonly RowRule[] = [
   duplicateRow,
   parentCountedWithChildren,
   assemblyNotCounted,
+  unknownGroup,
   sigmaBeyondValue,
   tensorWithinRounding,
   masslessRow,
@@ -115,7 +118,14 @@ export const ROTOR_RULES: readonly RotorRule[] = [
   twoBlades,
 ];
 
-const ALL: readonly Rule[] = [...ROW_RULES, ...WHOLE_RULES, ...ROTOR_RULES, ...REMOVAL_RULES];
+const ALL: readonly Rule[] = [
+  ...ROW_RULES,
+  ...WHOLE_RULES,
+  ...ROTOR_RULES,
+  ...REMOVAL_RULES,
+  ...Object.values(LIMIT_RULES),
+  limitNotJudged,
+];
 
 /** The rule a finding came from; null for one that is no longer made. */
 export function ruleOf(id: string): Rule | null {

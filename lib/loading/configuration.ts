@@ -1,3 +1,4 @@
+import { type Limit, limitStandings, type LimitStanding } from '@/lib/loading/limits';
 import { type Category } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type GrowthAllowances, type OnBoardItem, type RollUp, rollUp } from '@/lib/mass/roll-up';
@@ -25,6 +26,8 @@ export interface ConfigurationInput {
   readonly conditions: readonly Condition[];
   readonly rotors: readonly Rotor[];
   readonly points: readonly OperatingPoint[];
+  readonly limits?: readonly Limit[];
+  readonly frameIssue?: number;
 }
 
 export interface ConditionResult {
@@ -49,6 +52,10 @@ export interface ConfigurationResult {
   readonly allowances: GrowthAllowances;
   readonly conditions: readonly ConditionResult[];
   readonly operatingPoints: readonly PointResult[];
+  /** Limits and targets in force on the day of evaluation. Absent in results stored before they were kept. */
+  readonly limits?: readonly Limit[];
+  /** The number of the frame issue that all this stands on. Absent in results stored before it was kept. */
+  readonly frameIssue?: number;
 }
 
 /**
@@ -56,7 +63,7 @@ export interface ConfigurationResult {
  * has no angular momentum and is left out: the findings name it.
  */
 export function evaluateConfiguration(input: ConfigurationInput): ConfigurationResult {
-  const { geometry, allowances, conditions, rotors, points } = input;
+  const { geometry, allowances, conditions, rotors, points, limits, frameIssue } = input;
   return {
     geometry,
     allowances,
@@ -69,6 +76,8 @@ export function evaluateConfiguration(input: ConfigurationInput): ConfigurationR
         momentum: angularMomentum(rotors, point, geometry),
         uncertainty: momentumUncertainty(rotors, point, geometry),
       })),
+    ...(limits === undefined ? {} : { limits }),
+    ...(frameIssue === undefined ? {} : { frameIssue }),
   };
 }
 
@@ -92,4 +101,14 @@ function evaluateCondition(
       predicted: uncertaintyOf(predicted, total.predictedAccount, geometry),
     },
   };
+}
+
+/** How every condition stands to the limits that were in force, as a result holds them. */
+export function standingsOf({
+  limits,
+  conditions,
+  geometry,
+  frameIssue,
+}: ConfigurationResult): LimitStanding[] {
+  return limitStandings(limits ?? [], conditions, geometry, frameIssue ?? null);
 }

@@ -5,13 +5,16 @@ import { halfTraceMinus } from '@/lib/numerics/sym3';
 import { subVec } from '@/lib/numerics/vec3';
 
 import { type Account, AccountSum, accountOfBody } from './account';
-import { CATEGORIES, type Category, type ChangeStatus, type Maturity } from './component';
+import { allowanceFor, type GroupAllowance } from './allowances';
+import { CATEGORIES, type Category, type ChangeStatus, MATURITIES, type Maturity } from './component';
 import { type AirframeGeometry } from './geometry';
 import { type MassResult, resultOf } from './result';
 import { type Subtotal } from './subtotals';
 
-/** The program's mass growth allowance per maturity, a fraction of mass, for rows that state none. */
-export type GrowthAllowances = Readonly<Record<Maturity, number>>;
+/** The program's mass growth allowance per maturity, a fraction of mass, for rows that state none; `groups` states others. */
+export type GrowthAllowances = Readonly<Record<Maturity, number>> & {
+  readonly groups?: readonly GroupAllowance[];
+};
 
 export const NO_GROWTH: GrowthAllowances = { E: 0, C: 0, A: 0 };
 
@@ -30,6 +33,9 @@ export interface RollUpOptions {
   readonly categories?: readonly Category[];
 }
 
+/** Basic mass, kg, by the maturity that rows state. */
+export type MassByMaturity = Readonly<Record<Maturity | 'none', number>>;
+
 /** The rows of one group path, without those of the paths below it. */
 export interface GroupTotal {
   readonly group: string;
@@ -40,6 +46,8 @@ export interface GroupTotal {
   readonly predicted: MassResult;
   readonly basicAccount: Account;
   readonly predictedAccount: Account;
+  /** Absent in results that were stored before it was kept. */
+  readonly byMaturity?: MassByMaturity;
 }
 
 export interface RollUp {
@@ -59,6 +67,8 @@ export interface RollUp {
   readonly groups: readonly GroupTotal[];
   /** The items on board alone; mass 0 without any. */
   readonly onBoard: MassResult;
+  /** Of the lists, without the items on board. Absent in results that were stored before it was kept. */
+  readonly byMaturity?: MassByMaturity;
 }
 
 /** Running counts and sums of whatever is added up: a group, a branch of groups, the whole. */
@@ -68,6 +78,7 @@ class Tally {
   memoRows = 0;
   readonly basic = new AccountSum();
   readonly predicted = new AccountSum();
+  readonly maturity = new MaturitySum();
 
   count(part: Pick<Subtotal, 'rows' | 'pieces' | 'memoRows'>): void {
     this.rows += part.rows;
@@ -86,7 +97,27 @@ class Tally {
       predicted: resultOf(predictedAccount, geometry),
       basicAccount,
       predictedAccount,
+      byMaturity: this.maturity.masses,
     };
+  }
+}
+
+/** Mass by maturity, added up without loss. */
+class MaturitySum {
+  readonly #sums = {
+    E: new CompensatedSum(),
+    C: new CompensatedSum(),
+    A: new CompensatedSum(),
+    none: new CompensatedSum(),
+  };
+
+  add(maturity: Maturity | 'none', mass: number): void {
+    this.#sums[maturity].add(mass);
+  }
+
+  get masses(): MassByMaturity {
+    const { E, C, A, none } = this.#sums;
+    return { E: E.value, C: C.value, A: A.value, none: none.value };
   }
 }
 
@@ -129,10 +160,11 @@ export function rollUp(
   const ungrown = new CompensatedSum();
   for (const part of subtotals) {
     if (!statuses.includes(part.status) || !categories.includes(part.category)) continue;
-    const allowance = part.maturity === null ? 0 : allowances[part.maturity];
+    const allowance = allowanceFor(allowances, part.group, part.maturity).fraction;
     if (allowance === 0) ungrown.add(part.unstatedBasic.mass);
     for (const tally of [whole, tallyOf(groups, part.group)]) {
       tally.count(part);
+      tally.maturity.add(part.maturity ?? 'none', part.basic.mass);
       tally.basic.add(part.basic);
       tally.predicted.add(part.statedPredicted);
       tally.predicted.add(part.unstatedBasic, 1 + allowance);
@@ -142,19 +174,10 @@ export function rollUp(
   for (const item of items) onBoard.add(accountOfItem(item, geometry));
   whole.basic.add(onBoard.account);
   whole.predicted.add(onBoard.account);
-  const { rows, pieces, memoRows, basic, predicted, basicAccount, predictedAccount } = whole.total(
-    '',
-    geometry,
-  );
+  const { group: _group, ...total } = whole.total('', geometry);
   return {
-    rows,
-    pieces,
-    memoRows,
+    ...total,
     ungrownMass: ungrown.value,
-    basic,
-    predicted,
-    basicAccount,
-    predictedAccount,
     groups: [...groups].map(([group, tally]) => tally.total(group, geometry)).sort(byPath),
     onBoard: resultOf(onBoard.account, geometry),
   };
@@ -163,14 +186,20 @@ export function rollUp(
 /** Every group path and every path above one, each with all that is below it: `Wing` holds `Wing/Spars` and `Wing/Ribs`. */
 export function groupBranches(groups: readonly GroupTotal[], geometry: AirframeGeometry): GroupTotal[] {
   const branches = new Map<string, Tally>();
+  const known = groups.every(({ byMaturity }) => byMaturity !== undefined);
   for (const part of groups) {
     const levels = part.group.split('/');
     for (let depth = 1; depth <= levels.length; depth += 1) {
       const tally = tallyOf(branches, levels.slice(0, depth).join('/'));
       tally.count(part);
+      for (const code of [...MATURITIES, 'none'] as const)
+        tally.maturity.add(code, part.byMaturity?.[code] ?? 0);
       tally.basic.add(part.basicAccount);
       tally.predicted.add(part.predictedAccount);
     }
   }
-  return [...branches].map(([group, tally]) => tally.total(group, geometry)).sort(byPath);
+  return [...branches]
+    .map(([group, tally]) => tally.total(group, geometry))
+    .map(({ byMaturity, ...total }) => (known && byMaturity ? { ...total, byMaturity } : total))
+    .sort(byPath);
 }

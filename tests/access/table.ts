@@ -77,6 +77,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
     setLimitAction: 'program limits.keep',
     removeLimitAction: 'program limits.keep',
     setAllowanceAction: 'program allowances.keep',
+    removeAllowanceAction: 'program allowances.keep',
   },
   'app/(workspace)/programs/[program]/rotating-parts/page.tsx': { page: 'program rotors.read' },
   'app/(workspace)/programs/[program]/rotating-parts/upload/page.tsx': { page: 'program rotors.keep' },

@@ -22,11 +22,24 @@ const EVENTS: { readonly [K in AuditKind]: AuditDetails[K] } = {
   'frame.issued': { number: 2, title: 'Datum moved', reason: 'longer nose' },
   'reference-point.added': { code: 'MRC', frameIssue: 1 },
   'build.added': { code: 'design', kind: 'design' },
-  'limit.set': { quantity: 'mass-maximum', value: 7450, before: 7400, source: 'type specification' },
-  'limit.removed': { quantity: 'cg-aft-percent-mac', before: 34 },
-  'allowance.set': { maturity: 'E', fraction: 0.06, before: null },
+  'limit.set': {
+    quantity: 'mass',
+    sense: 'at-most',
+    group: 'Wing',
+    condition: 'empty',
+    value: 525,
+    before: 520,
+    source: 'control plan',
+  },
+  'limit.removed': { quantity: 'percentMac', sense: 'at-least', group: '', condition: null, before: 14 },
+  'allowance.set': { maturity: 'E', group: 'Wing', fraction: 0.06, before: null },
+  'allowance.removed': { maturity: 'E', group: 'Wing', before: 0.06 },
+  'groups.changed': { change: 'moved', path: 'Wing/Nose', to: 'Wing/Leading edge', code: null },
   'list.created': { code: 'wing', title: 'Wing' },
   'list.declared': { code: 'wing', before: { massUnit: 'kg' }, after: { massUnit: 'lb' } },
+  'list.mapped': { list: 'wing', file: 'nacelle.csv', mapping: 'm1', headingsSha256: 'cd'.repeat(32) },
+  'upload.kept': { list: 'wing', file: 'nacelle.csv', sha256: 'ab'.repeat(32) },
+  'upload.dropped': { list: 'wing', file: 'nacelle.csv' },
   'import.requested': { list: 'wing', file: 'wing.csv', sha256: 'ab'.repeat(32) },
   'import.failed': { list: 'wing', file: 'wing.csv', problems: 1 },
   'list.revised': {
@@ -66,8 +79,35 @@ describe('the words of an event', () => {
 
   it('tell a limit by its name and unit, with what it was', () => {
     expect(eventWords('limit.set', EVENTS['limit.set'])).toBe(
+      'Set the most allowed mass (kg) of Wing in condition empty to 525, before 520. Source: control plan',
+    );
+    expect(eventWords('limit.removed', EVENTS['limit.removed'])).toBe(
+      'Removed the least allowed CG (% MAC), which was 14',
+    );
+  });
+
+  it('of before limits had groups and conditions are told as they were', () => {
+    const former = { quantity: 'mass-maximum', value: 7450, before: 7400, source: 'type specification' };
+    expect(eventWords('limit.set', former)).toBe(
       'Set the maximum mass (kg) to 7450, before 7400. Source: type specification',
     );
+    expect(eventWords('limit.removed', { quantity: 'cg-aft-percent-mac', before: 34 })).toBe(
+      'Removed the aft CG limit (% MAC), which was 34',
+    );
+    expect(eventWords('allowance.set', { maturity: 'E', fraction: 0.06, before: null })).toBe(
+      'Set the growth allowance of maturity E to 6 %',
+    );
+  });
+
+  it('tell what was done to the breakdown of groups', () => {
+    const told = (change: string, path: string, to: string | null, code: string | null) =>
+      eventWords('groups.changed', { change, path, to, code });
+    expect(told('added', 'Wing', null, '10')).toBe('Added group Wing, code 10');
+    expect(told('moved', 'Wing/Nose', 'Wing/Leading edge', null)).toBe(
+      'Group Wing/Nose is Wing/Leading edge from now on',
+    );
+    expect(told('recoded', 'Wing', null, null)).toBe('Took the code of group Wing away');
+    expect(told('removed', 'Wing', null, null)).toBe('Removed group Wing');
   });
 
   it('of a kind that is not known tell the detail as it stands', () => {

@@ -66,9 +66,15 @@ export function rollUps(demo: DemoProgram, read: readonly ReadRevision[], code: 
     for (const component of components) book.add(component);
     return book.subtotals();
   });
+  const own = demo.growthAllowances.filter(({ group }) => group === '');
   const allowance = (maturity: 'E' | 'C' | 'A'): number =>
-    demo.growthAllowances.find((each) => each.maturity === maturity)?.fraction ?? NaN;
-  const allowances = { E: allowance('E'), C: allowance('C'), A: allowance('A') };
+    own.find((each) => each.maturity === maturity)?.fraction ?? NaN;
+  const allowances = {
+    E: allowance('E'),
+    C: allowance('C'),
+    A: allowance('A'),
+    groups: demo.growthAllowances.filter(({ group }) => group !== ''),
+  };
   return new Map(
     codeOf(demo, code).conditions.map((condition) => {
       const items = condition.items.map(({ name, mass, place }) => ({ name, mass, position: place }));

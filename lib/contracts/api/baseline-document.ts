@@ -14,6 +14,7 @@ import {
   placeSchema,
   unitsParameter,
 } from '@/lib/contracts/api/members';
+import { limitSchema } from '@/lib/contracts/api/limit';
 import { momentumMembers } from '@/lib/contracts/api/momentum-members';
 import documentExample from './baseline-example.json';
 
@@ -77,6 +78,7 @@ export const baselineDocumentSchema = z
     conventions: documentConventions,
     referencePoints: z.array(z.object({ code: z.string(), airframe: placeSchema })),
     conditions: z.array(conditionSchema),
+    limits: z.array(limitSchema).optional(),
     operatingPoints: z.array(z.object({ code: z.string(), ...momentumMembers })),
     findings: z.array(
       z.object({

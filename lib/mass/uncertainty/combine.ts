@@ -1,3 +1,4 @@
+import { allowanceFor } from '@/lib/mass/allowances';
 import { CATEGORIES } from '@/lib/mass/component';
 import { type GrowthAllowances, type OnBoardItem, type RollUpOptions } from '@/lib/mass/roll-up';
 
@@ -25,7 +26,7 @@ export function combineUncertainty(
     if (!statuses.includes(part.status) || !categories.includes(part.category)) continue;
     basic.add(part.basic);
     predicted.add(part.statedPredicted);
-    predicted.add(part.unstatedBasic, 1 + (part.maturity === null ? 0 : allowances[part.maturity]));
+    predicted.add(part.unstatedBasic, 1 + allowanceFor(allowances, part.group, part.maturity).fraction);
   }
   for (const { mass } of items) {
     basic.addWithoutSigma(mass);

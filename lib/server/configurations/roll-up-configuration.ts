@@ -10,15 +10,24 @@ import {
   subtotalsOf,
 } from '@/db/queries/configurations';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { groupBreakdownOf, limitsInForce } from '@/db/queries/settings';
 import { AppError } from '@/lib/errors';
 import { type Finding, type PlacedFinding } from '@/lib/findings/finding';
+import { findingsOnLimits } from '@/lib/findings/limits/look';
 import { findingsOnWhole } from '@/lib/findings/look';
-import { type Condition, type ConfigurationResult, evaluateConfiguration } from '@/lib/loading/configuration';
+import {
+  type Condition,
+  type ConfigurationResult,
+  evaluateConfiguration,
+  standingsOf,
+} from '@/lib/loading/configuration';
+import { allowanceFor } from '@/lib/mass/allowances';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
 import { rotorFindings } from '@/lib/server/rotors/rotor-findings';
 import { removalFindings } from './removal-findings';
+import { inPresentGroup, unknownGroups, withoutUnknownGroups } from './present-groups';
 
 export interface Evaluation {
   readonly result: ConfigurationResult;
@@ -36,6 +45,8 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
   const pins = await pinnedRevisions(db, configuration.id);
   const conditions = await conditionsOf(db, configuration.id);
   const allowances = await allowancesOf(db, configuration.program_id);
+  const limits = await limitsInForce(db, configuration.program_id);
+  const groups = await groupBreakdownOf(db, configuration.program_id);
   if (pins.length === 0)
     throw new AppError('conflict', 'This configuration holds no list yet. Choose list revisions first.');
   if (conditions.length === 0)
@@ -48,11 +59,12 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
       ? null
       : await findRotorRevision(db, configuration.rotor_revision_id);
   const geometry = geometryOf(issue);
-  const subtotals = await subtotalsOf(
+  const stored = await subtotalsOf(
     db,
     pins.map((pin) => pin.revision_id),
     issue.id,
   );
+  const subtotals = stored.map((part) => inPresentGroup(part, groups));
   const loadings: Condition[] = conditions.map((condition) => ({
     code: condition.code,
     title: condition.title,
@@ -66,10 +78,13 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
     conditions: loadings,
     rotors: rotating?.rotors ?? [],
     points: rotating?.points ?? [],
+    limits,
+    frameIssue: issue.number,
   });
   const inputs = {
     frameIssue: issue.id,
     allowances,
+    ...(limits.length === 0 ? {} : { limits }),
     lists: pins.map((pin) => ({ list: pin.list_code, revision: pin.number, sha256: pin.content_sha256 })),
     rotors:
       rotating === null
@@ -83,6 +98,8 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
       ...result.conditions.flatMap(({ code, rollUp }) =>
         placed(findingsOnWhole(rollUp, geometry), { kind: 'condition', code }),
       ),
+      ...findingsOnLimits(standingsOf(result)),
+      ...unknownGroups(stored, pins, groups),
       ...(rotating === null
         ? []
         : placed(
@@ -94,11 +111,18 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
             ),
             { kind: 'rotors', code: '', revision: rotating.number },
           )),
-      ...(await removalFindings(db, pins, geometry, (_, maturity) =>
-        maturity === null ? 0 : allowances[maturity],
+      ...(await removalFindings(
+        db,
+        pins,
+        geometry,
+        (group, maturity) => allowanceFor(allowances, groups.present(group), maturity).fraction,
       )),
       ...pins.flatMap((pin) =>
-        placed(pin.findings, { kind: 'list', code: pin.list_code, revision: pin.number }),
+        placed(withoutUnknownGroups(pin.findings), {
+          kind: 'list',
+          code: pin.list_code,
+          revision: pin.number,
+        }),
       ),
     ],
     inputSha256: createHash('sha256')

@@ -2,6 +2,9 @@ import { type Db } from '@/db/client';
 import { type DemoProgram } from '@/fixtures/demo/program';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { changeGroups } from '@/lib/server/programs/change-groups';
+import { setAllowance } from '@/lib/server/programs/set-allowance';
+import { stateLimit } from '@/lib/server/programs/set-limit';
 import { type DemoServices } from './load-demo';
 import { type DemoPeople, personOf } from './load-people';
 
@@ -57,7 +60,7 @@ export async function loadProgram(
 
 async function loadGeometry(
   db: Db,
-  { frameIssue, referencePoints, builds, limits, growthAllowances }: DemoProgram,
+  { frameIssue, referencePoints, builds, groups, limits, growthAllowances }: DemoProgram,
   program: LoadedProgram,
   people: DemoPeople,
 ): Promise<void> {
@@ -122,29 +125,12 @@ async function loadGeometry(
         .execute();
       await recordEvent(trx, { ...record, kind: 'build.added', subject: code, detail: { code, kind } });
     }
-    for (const { quantity, kind, value, source, sourceDate } of limits) {
-      await trx
-        .insertInto('limits')
-        .values({ ...mine, id: newId(), quantity, kind, value, source, source_date: sourceDate })
-        .execute();
-      await recordEvent(trx, {
-        ...record,
-        kind: 'limit.set',
-        subject: quantity,
-        detail: { quantity, value, before: null, source },
-      });
-    }
-    for (const { maturity, fraction, source } of growthAllowances) {
-      await trx
-        .insertInto('growth_allowances')
-        .values({ program_id: program.id, maturity, fraction, source })
-        .execute();
-      await recordEvent(trx, {
-        ...record,
-        kind: 'allowance.set',
-        subject: maturity,
-        detail: { maturity, fraction, before: null },
-      });
-    }
   });
+  const about = { person: chief, programId: program.id };
+  await changeGroups(db, {
+    ...about,
+    changes: groups.map(({ path, code }) => ({ kind: 'added', path, to: null, code })),
+  });
+  for (const limit of limits) await stateLimit(db, { ...about, id: null, limit });
+  for (const allowance of growthAllowances) await setAllowance(db, { ...about, ...allowance });
 }

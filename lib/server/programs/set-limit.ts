@@ -1,87 +1,126 @@
 import { sql, type Transaction } from 'kysely';
 import { type Db } from '@/db/client';
+import { groupBreakdownOf, limitsOf, type StatedLimit } from '@/db/queries/settings';
 import { type Database } from '@/db/schema/database';
-import { type LimitKind, type LimitQuantity } from '@/db/schema/programs';
 import { AppError, fieldError } from '@/lib/errors';
+import { type Limit } from '@/lib/loading/limits';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { currentFrameIssue } from '@/db/queries/frames';
 
-interface LimitChange {
+export interface StateLimit {
   readonly person: Person;
   readonly programId: string;
-  readonly quantity: LimitQuantity;
+  /** The limit that this one replaces; null states a further one. */
+  readonly id: string | null;
+  /** Of a place in airframe axes: it is in those of the frame issue in force. */
+  readonly limit: Omit<Limit, 'frameIssue'>;
 }
 
-export interface SetLimit extends LimitChange {
-  readonly kind: LimitKind;
-  /** Per cent of the mean chord, or kg. */
-  readonly value: number;
-  readonly source: string;
-  /** ISO date. */
-  readonly sourceDate: string;
-}
-
-/** Sets a limit of a program, or changes it. @throws AppError invalid-input for CG limits that leave nothing between them. */
-export async function setLimit(db: Db, input: SetLimit): Promise<void> {
-  const { person, programId, quantity, kind, value, source, sourceDate } = input;
-  await db.transaction().execute(async (trx) => {
+/**
+ * States a limit of a program, or changes one.
+ * @throws AppError invalid-input for limits that leave nothing between them, not-found for one that is gone.
+ */
+export async function stateLimit(db: Db, input: StateLimit): Promise<string> {
+  const { person, programId, limit } = input;
+  return db.transaction().execute(async (trx) => {
     const known = await lockLimits(trx, programId);
-    const limits = new Map([...known, [quantity, value]]);
-    const forward = limits.get('cg-forward-percent-mac');
-    const aft = limits.get('cg-aft-percent-mac');
-    if (forward !== undefined && aft !== undefined && forward >= aft)
-      throw fieldError(
-        'value',
-        `The forward limit, ${forward} % MAC, must lie ahead of the aft limit, ${aft} % MAC.`,
-      );
-    const content = { kind, value, source, source_date: sourceDate, created_by: person.userId };
-    await trx
-      .insertInto('limits')
-      .values({ id: newId(), program_id: programId, quantity, ...content })
-      .onConflict((conflict) =>
-        conflict.columns(['program_id', 'quantity']).doUpdateSet({ ...content, created_at: sql`now()` }),
-      )
-      .execute();
+    const before = input.id === null ? null : oneOf(known, input.id);
+    const breakdown = await groupBreakdownOf(trx, programId);
+    assertRoomBetween(
+      known
+        .filter(({ id }) => id !== input.id)
+        .map((one) => ({ ...one, group: breakdown.present(one.group) })),
+      limit,
+    );
+    const isPlace = limit.quantity === 'cgx' || limit.quantity === 'cgy' || limit.quantity === 'cgz';
+    const issue = isPlace ? await currentFrameIssue(trx, programId) : undefined;
+    if (isPlace && issue === undefined)
+      throw fieldError('quantity', 'State the airframe frame first: a place means nothing without its axes.');
+    const content = {
+      quantity: limit.quantity,
+      sense: limit.sense,
+      kind: limit.kind,
+      value: limit.value,
+      group_path: limit.group,
+      condition_code: limit.condition,
+      frame_issue_id: issue?.id ?? null,
+      source: limit.source,
+      source_date: limit.sourceDate,
+      valid_from: limit.from,
+      valid_until: limit.until,
+      created_by: person.userId,
+    };
+    const id = input.id ?? newId();
+    if (before === null)
+      await trx
+        .insertInto('limits')
+        .values({ id, program_id: programId, ...content })
+        .execute();
+    else
+      await trx
+        .updateTable('limits')
+        .set({ ...content, created_at: sql`now()` })
+        .where('id', '=', id)
+        .execute();
     await recordEvent(trx, {
       scope: programId,
       actor: person,
       kind: 'limit.set',
-      subject: quantity,
-      detail: { quantity, value, before: known.get(quantity) ?? null, source },
+      subject: limit.quantity,
+      detail: { ...limit, before: before?.value ?? null },
     });
+    return id;
   });
 }
 
 /** Takes a limit away. @throws AppError not-found when there is none. */
-export async function removeLimit(db: Db, { person, programId, quantity }: LimitChange): Promise<void> {
+export async function removeLimit(
+  db: Db,
+  { person, programId, id }: Pick<StateLimit, 'person' | 'programId'> & { readonly id: string },
+): Promise<void> {
   await db.transaction().execute(async (trx) => {
-    const before = (await lockLimits(trx, programId)).get(quantity);
-    if (before === undefined) throw new AppError('not-found', 'This limit is not set any more.');
-    await trx
-      .deleteFrom('limits')
-      .where('program_id', '=', programId)
-      .where('quantity', '=', quantity)
-      .execute();
+    const { quantity, value, sense, group, condition } = oneOf(await lockLimits(trx, programId), id);
+    await trx.deleteFrom('limits').where('program_id', '=', programId).where('id', '=', id).execute();
     await recordEvent(trx, {
       scope: programId,
       actor: person,
       kind: 'limit.removed',
       subject: quantity,
-      detail: { quantity, before },
+      detail: { quantity, before: value, sense, group, condition },
     });
   });
 }
 
-async function lockLimits(
-  trx: Transaction<Database>,
-  programId: string,
-): Promise<ReadonlyMap<LimitQuantity, number>> {
+function oneOf(known: readonly StatedLimit[], id: string): StatedLimit {
+  const found = known.find((limit) => limit.id === id);
+  if (found === undefined) throw new AppError('not-found', 'This limit is not set any more.');
+  return found;
+}
+
+/** Two of one kind about the same figure at the same time must leave something between them. */
+function assertRoomBetween(known: readonly Limit[], limit: Omit<Limit, 'frameIssue'>): void {
+  const opposite = known.find(
+    (one) =>
+      one.kind === limit.kind &&
+      one.quantity === limit.quantity &&
+      one.sense !== limit.sense &&
+      one.group === limit.group &&
+      (one.condition === null || limit.condition === null || one.condition === limit.condition) &&
+      (one.until === null || limit.from <= one.until) &&
+      (limit.until === null || one.from <= limit.until) &&
+      (limit.sense === 'at-least' ? limit.value >= one.value : limit.value <= one.value),
+  );
+  if (opposite === undefined) return;
+  const words = opposite.sense === 'at-most' ? 'below the most' : 'above the least';
+  throw fieldError(
+    'value',
+    `It must lie ${words} that is allowed of the same by ${opposite.source}: nothing would be left between the two.`,
+  );
+}
+
+async function lockLimits(trx: Transaction<Database>, programId: string): Promise<StatedLimit[]> {
   await sql`select pg_advisory_xact_lock(hashtextextended(${`limits:${programId}`}, 0))`.execute(trx);
-  const rows = await trx
-    .selectFrom('limits')
-    .select(['quantity', 'value'])
-    .where('program_id', '=', programId)
-    .execute();
-  return new Map(rows.map((row) => [row.quantity, row.value]));
+  return limitsOf(trx, programId);
 }

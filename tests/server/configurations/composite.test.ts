@@ -139,6 +139,7 @@ describe('the three-body composite from list to stored result', () => {
     await setAllowance(test.db, {
       person: test.crew.chief,
       programId: test.program.id,
+      group: '',
       maturity: 'C',
       fraction: 0.1,
       source: 'for the test',

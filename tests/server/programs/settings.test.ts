@@ -1,14 +1,23 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { currentFrameIssue, geometryOf } from '@/db/queries/frames';
-import { buildsOf, growthAllowancesOf, limitsOf, referencePointsOf } from '@/db/queries/settings';
+import { allowancesOf } from '@/db/queries/configurations';
+import {
+  buildsOf,
+  growthAllowancesOf,
+  limitsInForce,
+  limitsOf,
+  referencePointsOf,
+} from '@/db/queries/settings';
 import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
+import { limitInSi, limitSchema } from '@/lib/contracts/program-settings';
 import { type ProgramAction } from '@/lib/permissions';
 import { requireProgramAction } from '@/lib/server/http/access';
 import { addBuild } from '@/lib/server/programs/add-build';
 import { addReferencePoint } from '@/lib/server/programs/add-reference-point';
 import { issueFrame } from '@/lib/server/programs/issue-frame';
-import { setAllowance } from '@/lib/server/programs/set-allowance';
-import { removeLimit, setLimit } from '@/lib/server/programs/set-limit';
+import { changeGroups } from '@/lib/server/programs/change-groups';
+import { removeAllowance, setAllowance } from '@/lib/server/programs/set-allowance';
+import { removeLimit, stateLimit, type StateLimit } from '@/lib/server/programs/set-limit';
 import { addPerson, type ProgramUnderTest, programUnderTest } from '@/tests/support/program';
 
 let test: ProgramUnderTest;
@@ -139,27 +148,41 @@ describe('builds', () => {
 });
 
 describe('limits', () => {
-  const limit = (quantity: 'cg-forward-percent-mac' | 'cg-aft-percent-mac', value: number) =>
-    setLimit(test.db, {
+  const limit = (
+    sense: 'at-least' | 'at-most',
+    value: number,
+    more: Partial<StateLimit['limit']> = {},
+    id: string | null = null,
+  ) =>
+    stateLimit(test.db, {
       ...here(),
-      quantity,
-      kind: 'specification',
-      value,
-      source: 'a document',
-      sourceDate: '2026-02-03',
+      id,
+      limit: {
+        quantity: 'percentMac',
+        sense,
+        kind: 'specification',
+        value,
+        group: '',
+        condition: null,
+        source: 'a document',
+        sourceDate: '2026-02-03',
+        from: '2026-02-03',
+        until: null,
+        ...more,
+      },
     });
 
   it('leave something between them, and the trail says what they were before', async () => {
-    await limit('cg-forward-percent-mac', 15);
-    await limit('cg-aft-percent-mac', 35);
-    await limit('cg-forward-percent-mac', 16);
-    await expect(limit('cg-forward-percent-mac', 35)).rejects.toMatchObject({ code: 'invalid-input' });
-    await removeLimit(test.db, { ...here(), quantity: 'cg-aft-percent-mac' });
-    await expect(removeLimit(test.db, { ...here(), quantity: 'cg-aft-percent-mac' })).rejects.toMatchObject({
-      code: 'not-found',
-    });
+    const forward = await limit('at-least', 15);
+    const aft = await limit('at-most', 35);
+    expect(await limit('at-least', 16, {}, forward)).toBe(forward);
+    await expect(limit('at-least', 35, {}, forward)).rejects.toMatchObject({ code: 'invalid-input' });
+    await removeLimit(test.db, { ...here(), id: aft });
+    await expect(removeLimit(test.db, { ...here(), id: aft })).rejects.toMatchObject({ code: 'not-found' });
     const stands = await limitsOf(test.db, test.program.id);
-    expect(stands.map(({ quantity, value }) => [quantity, value])).toEqual([['cg-forward-percent-mac', 16]]);
+    expect(stands.map(({ quantity, sense, value }) => [quantity, sense, value])).toEqual([
+      ['percentMac', 'at-least', 16],
+    ]);
     const told = (await trail()).filter(({ kind }) => kind.startsWith('limit.')).map(({ detail }) => detail);
     expect(told).toMatchObject([
       { value: 15, before: null },
@@ -167,18 +190,100 @@ describe('limits', () => {
       { value: 16, before: 15 },
       { before: 35 },
     ]);
+    await removeLimit(test.db, { ...here(), id: forward });
+  });
+
+  it('of another kind, group, condition or time do not stand in each other’s way', async () => {
+    const made = [
+      await limit('at-most', 30),
+      await limit('at-least', 40, { kind: 'target' }),
+      await limit('at-least', 40, { group: 'Wing' }),
+      await limit('at-least', 40, { quantity: 'mass' }),
+    ];
+    await expect(limit('at-least', 40, { condition: 'empty' })).rejects.toMatchObject({
+      code: 'invalid-input',
+    });
+    await removeLimit(test.db, { ...here(), id: made[0] ?? '' });
+    made[0] = await limit('at-most', 30, { condition: 'take-off', until: '2026-03-31' });
+    made.push(await limit('at-least', 40, { condition: 'empty' }));
+    made.push(await limit('at-least', 41, { condition: 'take-off', from: '2026-04-01' }));
+    for (const id of made) await removeLimit(test.db, { ...here(), id });
+  });
+
+  it('of a place are in the axes of the frame issue in force, and count on the days they state only', async () => {
+    const id = await limit('at-most', 7.5, { quantity: 'cgx' });
+    const past = await limit('at-most', 30, { until: '2026-02-04' });
+    const future = await limit('at-most', 30, { from: '2999-01-01' });
+    const issue = await currentFrameIssue(test.db, test.program.id);
+    const force = await limitsInForce(test.db, test.program.id);
+    expect(force.map(({ quantity, frameIssue }) => [quantity, frameIssue])).toEqual([['cgx', issue?.number]]);
+    expect(await limitsOf(test.db, test.program.id)).toHaveLength(3);
+    for (const one of [id, past, future]) await removeLimit(test.db, { ...here(), id: one });
+  });
+
+  it('read a form in the unit that it names, and refuse one of another quantity', () => {
+    const form = {
+      id: '',
+      quantity: 'ixx',
+      sense: 'at-most',
+      kind: 'contract',
+      group: 'Wing/Spars',
+      condition: '',
+      value: '12',
+      unit: 'slug.ft2',
+      source: 'a document',
+      source_date: '2026-02-03',
+      from: '2026-02-03',
+      until: '',
+    };
+    // 1 slug.ft2 = 0.45359237 x 9.80665 x 0.3048 kg.m2, from the exact factors of NIST SP 811.
+    expect(limitInSi(limitSchema.parse(form))).toBeCloseTo(12 * 0.45359237 * 9.80665 * 0.3048, 12);
+    const wrong = (changes: Partial<typeof form>) =>
+      limitSchema.safeParse({ ...form, ...changes }).error?.issues.map(({ path }) => path[0]);
+    expect(wrong({ unit: 'kg' })).toEqual(['unit']);
+    expect(wrong({ until: '2026-02-02' })).toEqual(['until']);
+    expect(wrong({ group: 'Wing//Spars' })).toEqual(['group']);
+    expect(wrong({ group: '', value: '0' })).toEqual(['value']);
   });
 });
 
 describe('growth allowances', () => {
+  const allowance = (fraction: number, group = '') =>
+    setAllowance(test.db, { ...here(), group, maturity: 'E', fraction, source: 'a plan' });
+
   it('are set per maturity, the trail keeps the one before', async () => {
-    const allowance = (fraction: number) =>
-      setAllowance(test.db, { ...here(), maturity: 'E', fraction, source: 'a plan' });
     await allowance(0.08);
     await allowance(0.05);
     const stands = await growthAllowancesOf(test.db, test.program.id);
     expect(stands.map(({ maturity, fraction }) => [maturity, fraction])).toEqual([['E', 0.05]]);
     expect((await trail()).at(-1)?.detail).toEqual({ maturity: 'E', fraction: 0.05, before: 0.08 });
+  });
+
+  it('are set per group as well, and follow the group when it gets another name', async () => {
+    await allowance(0.1, 'Wing');
+    expect((await trail()).at(-1)?.detail).toEqual({
+      maturity: 'E',
+      group: 'Wing',
+      fraction: 0.1,
+      before: null,
+    });
+    const change = (kind: 'added' | 'moved', path: string, to: string | null) =>
+      changeGroups(test.db, { ...here(), changes: [{ kind, path, to, code: null }] });
+    await change('added', 'Wing', null);
+    await change('moved', 'Wing', 'Mainplane');
+    expect((await allowancesOf(test.db, test.program.id)).groups).toEqual([
+      { group: 'Mainplane', maturity: 'E', fraction: 0.1 },
+    ]);
+    await allowance(0.12, 'Mainplane');
+    const stands = await growthAllowancesOf(test.db, test.program.id);
+    expect(stands.map(({ group_path: path, fraction }) => [path, fraction])).toEqual([
+      ['', 0.05],
+      ['Mainplane', 0.12],
+    ]);
+    const chosen = { ...here(), group: 'Mainplane', maturity: 'E' } as const;
+    await removeAllowance(test.db, chosen);
+    await expect(removeAllowance(test.db, chosen)).rejects.toMatchObject({ code: 'not-found' });
+    expect(await allowancesOf(test.db, test.program.id)).toEqual({ E: 0.05, C: 0, A: 0 });
   });
 });
 

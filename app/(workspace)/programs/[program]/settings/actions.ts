@@ -3,9 +3,11 @@
 import { redirect } from 'next/navigation';
 import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
 import {
+  allowanceChoiceSchema,
   allowanceSchema,
   buildSchema,
   limitChoiceSchema,
+  limitInSi,
   limitSchema,
   referencePointSchema,
 } from '@/lib/contracts/program-settings';
@@ -14,8 +16,8 @@ import { programAction } from '@/lib/server/http/action';
 import { addBuild } from '@/lib/server/programs/add-build';
 import { addReferencePoint } from '@/lib/server/programs/add-reference-point';
 import { issueFrame } from '@/lib/server/programs/issue-frame';
-import { setAllowance } from '@/lib/server/programs/set-allowance';
-import { removeLimit, setLimit } from '@/lib/server/programs/set-limit';
+import { removeAllowance, setAllowance } from '@/lib/server/programs/set-allowance';
+import { removeLimit, stateLimit } from '@/lib/server/programs/set-limit';
 import { toSi } from '@/lib/units/convert';
 
 export const issueFrameAction = programAction(
@@ -75,17 +77,25 @@ export const setLimitAction = programAction(
   'limits.keep',
   limitSchema,
   async ({ input, person, program }) => {
-    const { quantity, kind, value, source } = input;
-    await setLimit(serverDb(), {
+    const { id, quantity, sense, kind, group, condition, source, from, until } = input;
+    await stateLimit(serverDb(), {
       person,
       programId: program.id,
-      quantity,
-      kind,
-      value: quantity === 'mass-maximum' ? toSi(value, input.mass_unit) : value,
-      source,
-      sourceDate: input.source_date,
+      id,
+      limit: {
+        quantity,
+        sense,
+        kind,
+        group,
+        condition,
+        value: limitInSi(input),
+        source,
+        sourceDate: input.source_date,
+        from,
+        until,
+      },
     });
-    return { message: 'The limit is set. Results are judged by it from now on.' };
+    return { message: 'The limit is set. It counts from the next roll-up of a configuration.' };
   },
 );
 
@@ -93,7 +103,7 @@ export const removeLimitAction = programAction(
   'limits.keep',
   limitChoiceSchema,
   async ({ input, person, program }) => {
-    await removeLimit(serverDb(), { person, programId: program.id, quantity: input.quantity });
+    await removeLimit(serverDb(), { person, programId: program.id, id: input.id });
   },
 );
 
@@ -101,14 +111,23 @@ export const setAllowanceAction = programAction(
   'allowances.keep',
   allowanceSchema,
   async ({ input, person, program }) => {
-    const { maturity, percent, source } = input;
+    const { maturity, group, percent, source } = input;
     await setAllowance(serverDb(), {
       person,
       programId: program.id,
+      group,
       maturity,
       fraction: percent / 100,
       source,
     });
     return { message: 'The allowance is set. It counts from the next roll-up of a configuration.' };
+  },
+);
+
+export const removeAllowanceAction = programAction(
+  'allowances.keep',
+  allowanceChoiceSchema,
+  async ({ input, person, program }) => {
+    await removeAllowance(serverDb(), { person, programId: program.id, ...input });
   },
 );

@@ -1,5 +1,10 @@
 import { type Metadata } from 'next';
-import { limitsOf } from '@/db/queries/settings';
+import { limitsInForce } from '@/db/queries/settings';
+import { StandingTable } from '@/components/limits/standing-table';
+import { MaturitySection } from '@/components/mass/maturity-section';
+import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
+import { standingsOf } from '@/lib/loading/configuration';
+import { keptStandings } from '@/lib/baselines/limit-members';
 import { AnsweredFindings } from '@/components/baselines/answered-findings';
 import { cgLimits } from '@/components/baselines/cg-limits';
 import { chosen } from '@/components/baselines/choose';
@@ -42,9 +47,9 @@ export default async function BaselinePage({
   const access = await requireProgram(code, 'baselines.read');
   const { program, can } = access;
   const home = `/programs/${program.code}/baselines`;
-  const [signed, limits] = await Promise.all([
+  const [signed, limitsToday] = await Promise.all([
     orShow(() => loadSigned(serverDb(), program.id, number)),
-    limitsOf(serverDb(), program.id),
+    limitsInForce(serverDb(), program.id),
   ]);
   const { baseline, submission, document } = signed;
   const asked = await searchParams;
@@ -53,6 +58,9 @@ export default async function BaselinePage({
   const units = OUTPUT_UNITS[system];
   const { x, y, z } = document.conventions.airframeAxes;
   const { supersedes } = baseline;
+  const kept = keptStandings(document) ?? (submission.result.limits === undefined ? null : []);
+  const limits = kept === null ? limitsToday : kept.map(({ limit }) => limit);
+  const submitted = submission.result.conditions.find((one) => one.code === condition?.code);
   return (
     <ProgramFrame access={access} current="baselines">
       <PageHead
@@ -116,13 +124,40 @@ export default async function BaselinePage({
         <div className="grid min-w-0 content-start gap-8 lg:col-span-8">
           {condition === null ? null : (
             <ConditionSheet
-              condition={shownOfDocument(
-                condition,
-                submission.result.conditions.find((one) => one.code === condition.code),
-              )}
-              limits={cgLimits(limits)}
+              condition={shownOfDocument(condition, submitted)}
+              limits={cgLimits(limits, condition.code)}
               axes={[x, y, z]}
               units={units}
+            />
+          )}
+          <Section
+            title="Limits and targets"
+            lead={
+              kept === null
+                ? 'Those of today: this was signed before limits in force were kept with a baseline.'
+                : 'As they were in force when this was submitted; they are part of what was signed.'
+            }
+          >
+            <StandingTable
+              standings={kept ?? standingsOf({ ...submission.result, limits })}
+              units={units}
+              rowsHref={
+                can('lists.read')
+                  ? (code, group) =>
+                      viewsHref(
+                        `${home}/${baseline.number}/views`,
+                        viewsAsked({ condition: code, within: group }),
+                      )
+                  : null
+              }
+            />
+          </Section>
+          {submitted === undefined ? null : (
+            <MaturitySection
+              condition={submitted}
+              geometry={submission.result.geometry}
+              allowances={submission.result.allowances}
+              unit={units.mass}
             />
           )}
           <RotorSection

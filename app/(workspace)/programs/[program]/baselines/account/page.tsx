@@ -1,10 +1,13 @@
 import { type Metadata } from 'next';
 import { baselinesOfProgram } from '@/db/queries/baselines';
 import { massHistory } from '@/db/queries/baseline-history';
-import { limitsOf } from '@/db/queries/settings';
+import { limitsInForce } from '@/db/queries/settings';
+import { massLimitsOf } from '@/components/limits/mass-limits';
+import { LIMIT_KIND_WORDS } from '@/components/settings/words';
+import { tightest } from '@/lib/loading/limits';
 import { AccountChoice } from '@/components/baselines/account-choice';
 import { AccountTable } from '@/components/baselines/account-table';
-import { cgLimits, massLimit } from '@/components/baselines/cg-limits';
+import { cgLimits } from '@/components/baselines/cg-limits';
 import { chosen } from '@/components/baselines/choose';
 import { ConditionChoice } from '@/components/baselines/condition-choice';
 import { HistoryChart } from '@/components/baselines/history-chart';
@@ -38,7 +41,7 @@ export default async function AccountPage({
   const asked = await searchParams;
   const [baselines, limits] = await Promise.all([
     baselinesOfProgram(serverDb(), program.id),
-    limitsOf(serverDb(), program.id),
+    limitsInForce(serverDb(), program.id),
   ]);
   const sides = namesSides(baselines, asked);
   const head = (
@@ -67,7 +70,7 @@ export default async function AccountPage({
   const shown = shownQuantity(quantity, units);
   const history = condition === null ? [] : await massHistory(serverDb(), program.id, condition.code);
   const mass = shownQuantity('mass', units);
-  const limit = massLimit(limits);
+  const massLimits = massLimitsOf(limits, condition?.code ?? null);
   const keep = { from: sides.from, to: sides.to, quantity, within };
   const steps =
     'account' in outcome
@@ -163,10 +166,10 @@ export default async function AccountPage({
       <Section
         title="Mass over all baselines"
         aside={condition?.title ?? null}
-        lead="Lines are basic masses, dashed ones predicted masses with growth. Limits are those in force today."
+        lead="Lines are basic masses, dashed ones predicted masses with growth. Limits are those in force today for this condition; one that lies far from the masses stands at the edge."
       >
         <HistoryChart
-          label="Basic and predicted mass of every signed baseline against the maximum mass. The table below has the figures."
+          label="Basic and predicted mass of every signed baseline against the limits of mass. The table below has the figures."
           unit={mass.unit}
           points={history.flatMap((one) =>
             one.mass === null || one.predicted === null
@@ -180,14 +183,17 @@ export default async function AccountPage({
                   },
                 ],
           )}
-          limit={limit === null ? null : mass.shown(limit)}
+          limits={massLimits.map((limit) => ({
+            value: mass.shown(limit.value),
+            words: `${LIMIT_KIND_WORDS[limit.kind].toLowerCase()}, ${limit.sense === 'at-most' ? 'at most' : 'at least'}`,
+          }))}
         />
         <HistoryTable
           home={home}
           lines={history}
           unit={units.mass}
-          massLimit={limit}
-          cgLimits={cgLimits(limits)}
+          massLimit={tightest(limits, 'mass', condition?.code ?? null).most?.value ?? null}
+          cgLimits={cgLimits(limits, condition?.code ?? null)}
         />
       </Section>
       <Caution />

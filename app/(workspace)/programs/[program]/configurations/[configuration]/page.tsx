@@ -9,7 +9,7 @@ import {
   pinnedRevisions,
   rotorRevisionsOf,
 } from '@/db/queries/configurations';
-import { limitsOf } from '@/db/queries/settings';
+import { limitsInForce } from '@/db/queries/settings';
 import { OneButtonForm } from '@/components/forms/one-button-form';
 import { viewAsked, viewHref } from '@/components/configurations/address';
 import { changedSince } from '@/components/configurations/changed-since';
@@ -17,7 +17,6 @@ import { MadeFrom } from '@/components/configurations/made-from';
 import { OnBoard } from '@/components/configurations/on-board';
 import { placedFindings } from '@/components/configurations/placed-findings';
 import { pinsOnPage } from '@/components/configurations/pins-on-page';
-import { programLimits } from '@/components/configurations/program-limits';
 import { RolledUp } from '@/components/configurations/rolled-up';
 import { FindingLines } from '@/components/findings/finding-lines';
 import { FindingCounts } from '@/components/lists/finding-counts';
@@ -59,7 +58,7 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
     conditionsOf(db, configuration.id),
     latestRollUp(db, configuration.id),
     allowancesOf(db, program.id),
-    limitsOf(db, program.id),
+    limitsInForce(db, program.id),
   ]);
   const station = `/programs/${program.code}/configurations`;
   const home = `${station}/${configuration.code}`;
@@ -74,8 +73,8 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
     rollUp === undefined
       ? []
       : changedSince(
-          { version: rollUp.configuration_version, allowances: rollUp.result.allowances },
-          { version: configuration.version, allowances },
+          { ...rollUp.result, version: rollUp.configuration_version },
+          { version: configuration.version, allowances, limits },
         );
   const shownCondition =
     rollUp?.result.conditions.find((one) => one.code === view.condition) ?? rollUp?.result.conditions[0];
@@ -138,7 +137,7 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
           </EmptyPlace>
         ) : (
           <div className="grid min-w-0 gap-8">
-            <RolledUp home={home} view={view} result={rollUp.result} limits={programLimits(limits)} />
+            <RolledUp home={home} view={view} result={rollUp.result} limitsToday={limits} />
             <Suspense fallback={<DriversComing />}>
               <DriversHere
                 source={conditionSource(program.id, code, shownCondition?.code)}
@@ -170,7 +169,12 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
           {rollUp === undefined ? null : (
             <Section title="Findings" aside={<FindingCounts findings={rollUp.findings} />}>
               <FindingLines
-                findings={placedFindings(rollUp.findings, program.code, rollUp.result.conditions)}
+                findings={placedFindings(
+                  rollUp.findings,
+                  program.code,
+                  rollUp.result.conditions,
+                  configuration.code,
+                )}
               />
             </Section>
           )}

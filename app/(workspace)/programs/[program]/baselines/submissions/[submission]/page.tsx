@@ -1,5 +1,8 @@
 import { type Metadata } from 'next';
-import { limitsOf } from '@/db/queries/settings';
+import { limitsInForce } from '@/db/queries/settings';
+import { StandingTable } from '@/components/limits/standing-table';
+import { MaturitySection } from '@/components/mass/maturity-section';
+import { standingsOf } from '@/lib/loading/configuration';
 import { AnsweredFindings } from '@/components/baselines/answered-findings';
 import { ChangeTable, MomentumChangeTable } from '@/components/baselines/change-table';
 import { chosen } from '@/components/baselines/choose';
@@ -44,16 +47,17 @@ export default async function SubmissionPage({
   const { program, role, user, can } = access;
   const home = `/programs/${program.code}/baselines`;
   const path = `${home}/submissions/${submissionId}`;
-  const [review, limits] = await Promise.all([
+  const [review, limitsToday] = await Promise.all([
     orShow(() =>
       loadReview(serverDb(), { programId: program.id, submissionId, reader: { userId: user.id, role } }),
     ),
-    limitsOf(serverDb(), program.id),
+    limitsInForce(serverDb(), program.id),
   ]);
   const { submission, state, revisions, rotors, leftOut, former, newest } = review;
   const { comparison, lists, obstacles } = review;
   const asked = await searchParams;
   const { result } = submission;
+  const limits = result.limits ?? limitsToday;
   const condition = chosen(result.conditions, asked['condition']);
   const point = chosen(result.operatingPoints, asked['point']);
   const change = comparison.conditions.find((one) => one.code === condition?.code) ?? null;
@@ -102,9 +106,31 @@ export default async function SubmissionPage({
           {condition === null ? null : (
             <ConditionSheet
               condition={shownOfResult(condition)}
-              limits={cgLimits(limits)}
+              limits={cgLimits(limits, condition.code)}
               axes={result.geometry.axes}
               units={units}
+            />
+          )}
+          <Section
+            title="Limits and targets"
+            lead={
+              result.limits === undefined
+                ? 'Those of today: this was submitted before limits in force were kept with it.'
+                : 'As they were in force when this was submitted. A signature signs them too.'
+            }
+          >
+            <StandingTable
+              standings={standingsOf({ ...result, limits })}
+              units={units}
+              rowsHref={(_condition, group) => rows(group === '' ? {} : { group })}
+            />
+          </Section>
+          {condition === null ? null : (
+            <MaturitySection
+              condition={condition}
+              geometry={result.geometry}
+              allowances={result.allowances}
+              unit={units.mass}
             />
           )}
           <Section
