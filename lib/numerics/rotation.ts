@@ -52,3 +52,17 @@ export function rotationZ(angle: number): Mat3 {
 export function rotation(yaw: number, pitch: number, roll: number): Mat3 {
   return multiply(rotationZ(yaw), multiply(rotationY(pitch), rotationX(roll)));
 }
+
+/** Below this cosine of the pitch, yaw and roll turn about one axis and only their sum or difference is known. */
+const LOCKED = 1e-12;
+
+/**
+ * Yaw, pitch, roll (rad) whose `rotation` is m, a proper rotation; |pitch| <= 90 degrees. Where the pitch is 90 degrees the yaw is
+ * given as 0 and the roll holds all of the turn.
+ */
+export function anglesOf(m: Mat3): { readonly yaw: number; readonly pitch: number; readonly roll: number } {
+  const level = Math.hypot(m[0][0], m[1][0]);
+  const pitch = Math.atan2(0 - m[2][0], level);
+  if (level < LOCKED) return { yaw: 0, pitch, roll: Math.atan2(0 - m[1][2], m[1][1]) };
+  return { yaw: Math.atan2(m[1][0], m[0][0]), pitch, roll: Math.atan2(m[2][1], m[2][2]) };
+}
