@@ -18,6 +18,7 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   programs: ['select', 'insert', 'update'],
   program_members: ['select', 'insert', 'update', 'delete'],
   frame_issues: ['select', 'insert'],
+  frame_steps: ['select', 'insert'],
   reference_points: ['select', 'insert'],
   builds: ['select', 'insert', 'update'],
   limits: ['select', 'insert', 'update', 'delete'],

@@ -5,10 +5,14 @@ import { type Category } from '@/lib/mass/component';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 import { type Json } from './lists';
 
-/** Insert-only: the rotating parts and operating points of a program as they stood. SI, airframe components. */
+/**
+ * Insert-only: the rotating parts and operating points of a program as they stood. SI; directions in airframe components of
+ * `frame_issue_id`, which is null where they were made before the program's first issue and so in whatever one came.
+ */
 export interface RotorRevisionsTable {
   id: string;
   program_id: string;
+  frame_issue_id: string | null;
   number: number;
   reason: string;
   rotors: Json<Rotor[]>;

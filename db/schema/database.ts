@@ -38,13 +38,14 @@ import {
 import {
   type BuildsTable,
   type FrameIssuesTable,
+  type FrameStepsTable,
+  type GroupChangesTable,
   type GrowthAllowancesTable,
   type LimitsTable,
   type ProgramMembersTable,
   type ProgramsTable,
   type ReferencePointsTable,
 } from './programs';
-  type GroupChangesTable,
 
 /** Every table of the application, by its name in PostgreSQL. */
 export interface Database {
@@ -59,6 +60,7 @@ export interface Database {
   programs: ProgramsTable;
   program_members: ProgramMembersTable;
   frame_issues: FrameIssuesTable;
+  frame_steps: FrameStepsTable;
   reference_points: ReferencePointsTable;
   builds: BuildsTable;
   limits: LimitsTable;

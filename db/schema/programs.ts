@@ -45,6 +45,18 @@ export interface FrameIssuesTable {
   created_at: Generated<Date>;
 }
 
+/**
+ * Insert-only. How the frame of the issue before lies in this one: its datum (m) in the components of this issue, and yaw, pitch,
+ * roll (rad) as of a list's frame. A first issue has none, and no issue made before this was asked for.
+ */
+export interface FrameStepsTable {
+  frame_issue_id: string;
+  origin: number[];
+  turn: number[];
+  stated_by: string;
+  created_at: Generated<Date>;
+}
+
 export interface ReferencePointsTable {
   frame_issue_id: string;
   code: string;
