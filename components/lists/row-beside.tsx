@@ -2,6 +2,7 @@
 
 import { changeOf, type PendingEdits, textsOf, withEdit } from '@/components/lists/edits';
 import { RowForm } from '@/components/lists/row-form';
+import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowInspector } from '@/components/lists/row-inspector';
 import { Actions } from '@/components/ui/actions';
 import { Banner } from '@/components/ui/banner';
@@ -20,7 +21,8 @@ export type Beside =
 interface RowBesideProps {
   readonly beside: Beside;
   readonly declarations: ListDeclarations;
-  readonly geometry: Pick<AirframeGeometry, 'axes' | 'lateralPlane'>;
+  readonly geometry: AirframeGeometry;
+  readonly wholes: readonly WholeOnPage[];
   /** Columns of the list's own. */
   readonly own: readonly string[];
   readonly file: string | null;
@@ -110,7 +112,13 @@ export function RowBeside(props: RowBesideProps) {
           ) : null}
         </Actions>
       ) : null}
-      <RowInspector row={row} declarations={declarations} geometry={props.geometry} file={props.file} />
+      <RowInspector
+        row={row}
+        declarations={declarations}
+        geometry={props.geometry}
+        wholes={props.wholes}
+        file={props.file}
+      />
     </>
   );
 }

@@ -1,21 +1,29 @@
 import { OwnTensor } from '@/components/lists/own-tensor';
 import { rowFieldGroups, type RowField } from '@/components/lists/row-fields';
 import { placeInAirframe } from '@/components/lists/row-place';
+import { RowShares, type WholeOnPage } from '@/components/lists/row-shares';
+import { RowViews } from '@/components/lists/row-views';
 import { DefinitionList, type Definition } from '@/components/ui/definition-list';
 import { type ListRow } from '@/lib/contracts/list-rows';
+import { type AirframeVec } from '@/lib/frames/tags';
+import { fromNumbers } from '@/lib/mass/account';
+import { wholeOf } from '@/lib/mass/contributions/contribution';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type ListDeclarations } from '@/lib/mass/declarations';
+import { addVec } from '@/lib/numerics/vec3';
 
 interface RowInspectorProps {
   readonly row: ListRow;
   readonly declarations: ListDeclarations;
-  readonly geometry: Pick<AirframeGeometry, 'axes' | 'lateralPlane'>;
+  readonly geometry: AirframeGeometry;
+  /** What the row is part of: the revision first, then conditions of configurations that pin it. */
+  readonly wholes: readonly WholeOnPage[];
   /** The file that the revision was read from; null when it was made by edits. */
   readonly file: string | null;
 }
 
 /** What one row says, in full: fields that hold something, its own tensor, its place in the airframe, where it came from. */
-export function RowInspector({ row, declarations, geometry, file }: RowInspectorProps) {
+export function RowInspector({ row, declarations, geometry, wholes, file }: RowInspectorProps) {
   const own = Object.entries(row.own);
   return (
     <div className="grid gap-6">
@@ -30,9 +38,16 @@ export function RowInspector({ row, declarations, geometry, file }: RowInspector
       ))}
       <OwnTensor row={row} declarations={declarations} />
       <Fields title="Place in the airframe" items={placeInAirframe(row, declarations, geometry)} />
+      <RowViews {...{ row, declarations, geometry }} cg={cgOf(wholes[0], geometry)} />
+      <RowShares {...{ row, declarations, geometry, wholes }} />
       <Fields title="Columns of the list's own" items={own.map(([term, value]) => ({ term, value }))} />
     </div>
   );
+}
+
+function cgOf(whole: WholeOnPage | undefined, geometry: AirframeGeometry): AirframeVec | null {
+  const found = whole === undefined ? null : wholeOf(fromNumbers(whole.account), geometry);
+  return found === null ? null : addVec(geometry.reference, found.cg);
 }
 
 function Fields({ title, items }: { readonly title: string; readonly items: readonly Definition[] }) {

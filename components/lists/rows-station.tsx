@@ -9,6 +9,7 @@ import { counted } from '@/components/lists/list-words';
 import { PendingPanel } from '@/components/lists/pending-panel';
 import { rowColumns, totalCells } from '@/components/lists/row-columns';
 import { type Beside, RowBeside } from '@/components/lists/row-beside';
+import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowsBar } from '@/components/lists/rows-bar';
 import { usePendingEdits } from '@/components/lists/use-pending-edits';
 import { rowIdOf, useRowPages, useRowTotals } from '@/components/lists/use-row-pages';
@@ -31,7 +32,8 @@ export interface RowsStationProps {
   readonly revision: number;
   readonly newest: number;
   readonly declarations: ListDeclarations;
-  readonly geometry: Pick<AirframeGeometry, 'axes' | 'lateralPlane'>;
+  readonly geometry: AirframeGeometry;
+  readonly wholes: readonly WholeOnPage[];
   readonly totals: RowTotals;
   readonly rows: number;
   readonly groups: readonly string[];
@@ -181,6 +183,7 @@ export function RowsStation(props: RowsStationProps) {
                 beside={beside}
                 declarations={declarations}
                 geometry={props.geometry}
+                wholes={props.wholes}
                 own={props.own}
                 file={props.file}
                 mayEdit={mayEdit}

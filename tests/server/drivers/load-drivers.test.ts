@@ -1,11 +1,14 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { findConfiguration } from '@/db/queries/configurations';
+import { wholesWithRevision } from '@/db/queries/pinned-wholes';
 import { BY, partOf, wholeAccount } from '@/lib/drivers/drivers';
+import { toNumbersWithRest } from '@/lib/mass/account';
 import { contributionOf, wholeOf } from '@/lib/mass/contributions/contribution';
 import { accountOfPart } from '@/lib/mass/contributions/effects';
 import { type NameOfTen, TEN, tenOf } from '@/lib/mass/contributions/ten';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
 import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
+import { rollUpConfiguration } from '@/lib/server/configurations/roll-up-configuration';
 import { type DriversSource, loadDrivers, MOST_PARTS } from '@/lib/server/drivers/load-drivers';
 import { configurationSource, type ViewsSource } from '@/lib/server/three-views/sources';
 import { type ProgramUnderTest, programUnderTest, reviseList } from '@/tests/support/program';
@@ -134,5 +137,37 @@ describe('what drives a condition', () => {
   it('has nothing to say of a condition without mass', async () => {
     const none = { ...source, condition: { categories: [], items: [] } };
     expect(await loadDrivers(test.db, none, { number: 'mass', by: 'rows' })).toBeNull();
+  });
+});
+
+describe('what a list is part of', () => {
+  const wholes = (code: string) => {
+    const revision = source.revisions.find((one) => one.code === code);
+    return wholesWithRevision(test.db, revision?.id ?? '', test.frameIssueId);
+  };
+
+  it('is each condition of a configuration that pins it, once that is rolled up, and not when its inputs have changed', async () => {
+    const { db, program, crew } = test;
+    const driven = () => findConfiguration(db, program.id, 'driven');
+    expect(await wholes('wing')).toEqual([]);
+    const before = await driven();
+    if (before === undefined) throw new Error('no configuration');
+    const { result } = await rollUpConfiguration(db, { person: crew.weights, configuration: before });
+    const found = await wholes('wing');
+    expect(found.map(({ configuration, condition }) => [configuration, condition])).toEqual(
+      result.conditions.map(({ code }) => ['driven', code]),
+    );
+    expect(found.map(({ account }) => toNumbersWithRest(account))).toEqual(
+      result.conditions.map(({ rollUp }) => toNumbersWithRest(rollUp.basicAccount)),
+    );
+    expect(found[0]?.categories).toEqual(result.conditions[0]?.categories);
+    await pinRevisions(db, {
+      person: crew.weights,
+      configuration: before,
+      version: before.version,
+      revisions: { wing: 1, tail: 1 },
+      rotors: null,
+    });
+    expect(await wholes('wing')).toEqual([]);
   });
 });

@@ -2,6 +2,7 @@ import { type Metadata } from 'next';
 import { Suspense } from 'react';
 import { subtotalsOf } from '@/db/queries/configurations';
 import { ownColumnsOf } from '@/db/queries/list-rows';
+import { type PinnedWhole, wholesWithRevision } from '@/db/queries/pinned-wholes';
 import { findNewestImport, findRevisionAuthor, type List, type ListRevision } from '@/db/queries/lists';
 import { Declared } from '@/components/lists/declared';
 import { FindingsPanel } from '@/components/lists/findings-panel';
@@ -9,6 +10,7 @@ import { GroupTable } from '@/components/lists/group-table';
 import { ListNotices } from '@/components/lists/list-notices';
 import { counted } from '@/components/lists/list-words';
 import { QueryRoot } from '@/components/lists/query-root';
+import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowsStation } from '@/components/lists/rows-station';
 import { ButtonLink } from '@/components/ui/button';
 import { Day } from '@/components/ui/day';
@@ -17,8 +19,10 @@ import { TABLE_KEYS } from '@/components/ui/key-help';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { driversAsked, withDrivers } from '@/lib/drivers/drivers';
+import { toNumbersWithRest } from '@/lib/mass/account';
 import { CATEGORIES } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { serverDb } from '@/lib/server/database';
 import { geometryOfList, reachRevision } from '@/lib/server/lists/reach-list';
 import { totalsOfRevision } from '@/lib/server/lists/row-totals';
@@ -72,11 +76,14 @@ export default async function ListPage({ params, searchParams }: Props) {
   const number = typeof asked === 'string' ? asked : String(list.last_revision);
   const revision = await orNotFound(() => reachRevision(db, list, number));
   const geometry = await geometryOfList(db, list);
-  const [author, totals, own] = await Promise.all([
+  const [author, totals, own, source, pinned] = await Promise.all([
     findRevisionAuthor(db, revision.id),
     totalsOfRevision(db, revision.id, list.frame_issue_id, { declarations: revision.declarations, geometry }),
     ownColumnsOf(db, revision.id),
+    listSource(list, revision, geometry),
+    wholesWithRevision(db, revision.id, list.frame_issue_id),
   ]);
+  const wholes = wholesOnPage(revision.number, source, pinned);
   const here = `${listHref}?revision=${revision.number}`;
   const plain = () => new URLSearchParams({ revision: String(revision.number) });
   const { massUnit, lengthUnit, inertiaUnit } = revision.declarations;
@@ -127,7 +134,8 @@ export default async function ListPage({ params, searchParams }: Props) {
             revision={revision.number}
             newest={list.last_revision}
             declarations={revision.declarations}
-            geometry={{ axes: geometry.axes, lateralPlane: geometry.lateralPlane }}
+            geometry={geometry}
+            wholes={wholes}
             totals={totals.whole}
             rows={revision.rows}
             groups={totals.groups.map(({ group }) => group)}
@@ -148,7 +156,7 @@ export default async function ListPage({ params, searchParams }: Props) {
       </Section>
       <Suspense fallback={<DriversComing />}>
         <DriversHere
-          source={listSource(list, revision, geometry)}
+          source={Promise.resolve(source)}
           asked={driversAsked(search)}
           units={{ mass: massUnit, length: lengthUnit, inertia: inertiaUnit }}
           hrefOf={(drivers) => `${listHref}?${withDrivers(plain(), drivers).toString()}`}
@@ -169,4 +177,26 @@ async function listSource(list: List, revision: ListRevision, geometry: Airframe
     subtotals: await subtotalsOf(serverDb(), [id], list.frame_issue_id),
     condition: { categories: CATEGORIES, items: [] },
   };
+}
+
+/** The revision, and the conditions that it is part of. */
+function wholesOnPage(
+  revision: number,
+  { subtotals, geometry }: Awaited<ReturnType<typeof listSource>>,
+  pinned: readonly PinnedWhole[],
+): WholeOnPage[] {
+  return [
+    {
+      key: '',
+      title: `Revision ${revision} of this list`,
+      account: toNumbersWithRest(rollUp(subtotals, [], geometry, NO_GROWTH).basicAccount),
+      categories: CATEGORIES,
+    },
+    ...pinned.map((one) => ({
+      key: `${one.configuration}/${one.condition}`,
+      title: `${one.configuration_title}, ${one.condition_title}`,
+      account: toNumbersWithRest(one.account),
+      categories: one.categories,
+    })),
+  ];
 }
