@@ -41,6 +41,7 @@ const PROGRAM = {
   'builds.keep': ['chief'],
   'limits.keep': ['chief'],
   'allowances.keep': ['chief'],
+  'groups.keep': ['chief', 'weights'],
   'lists.read': ['chief', 'weights'],
   'lists.keep': ['weights'],
   'rotors.read': ['chief', 'weights'],

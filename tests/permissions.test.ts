@@ -36,6 +36,7 @@ const EXPECTED: Readonly<Record<Action, readonly Who[]>> = {
   'builds.keep': ['chief'],
   'limits.keep': ['chief'],
   'allowances.keep': ['chief'],
+  'groups.keep': ['chief', 'weights'],
   'lists.read': ['chief', 'weights'],
   'lists.keep': ['weights'],
   'rotors.read': ['chief', 'weights'],

@@ -5,6 +5,7 @@ const PAGES = [
   { path: '', title: 'Airframe frame' },
   { path: '/reference-points', title: 'Reference points' },
   { path: '/builds', title: 'Builds' },
+  { path: '/groups', title: 'Group breakdown' },
   { path: '/limits', title: 'Limits and growth' },
   { path: '/members', title: 'Members' },
 ] as const;

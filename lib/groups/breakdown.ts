@@ -114,3 +114,8 @@ function compareKeys(a: readonly string[], b: readonly string[]): number {
   }
   return a.length - b.length;
 }
+
+/** The path of a group called `name` below `above`; `above` '' makes it a top group. */
+export function joinedPath(above: string, name: string): string {
+  return above === '' ? name : `${above}/${name}`;
+}

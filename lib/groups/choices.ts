@@ -8,3 +8,11 @@ export function groupChoices(breakdown: GroupBreakdown, paths: readonly string[]
   const others = new Set(paths.flatMap((path) => pathsUp(breakdown.present(path))));
   return [...tree, ...[...others].filter((path) => !breakdown.has(path)).sort()];
 }
+
+/** What has to be added, groups above before those below, so that all of `wanted` are in the tree. */
+export function pathsToAdd(breakdown: GroupBreakdown, wanted: readonly string[]): string[] {
+  const needed = new Set(wanted.flatMap((path) => pathsUp(path)));
+  return [...needed]
+    .filter((path) => !breakdown.has(path))
+    .sort((a, b) => a.split('/').length - b.split('/').length || (a < b ? -1 : 1));
+}

@@ -86,10 +86,9 @@ class Tally {
     this.memoRows += part.memoRows;
   }
 
-  total(group: string, geometry: AirframeGeometry): GroupTotal {
+  total(geometry: AirframeGeometry): Omit<GroupTotal, 'group'> {
     const [basicAccount, predictedAccount] = [this.basic.account, this.predicted.account];
     return {
-      group,
       rows: this.rows,
       pieces: this.pieces,
       memoRows: this.memoRows,
@@ -174,11 +173,10 @@ export function rollUp(
   for (const item of items) onBoard.add(accountOfItem(item, geometry));
   whole.basic.add(onBoard.account);
   whole.predicted.add(onBoard.account);
-  const { group: _group, ...total } = whole.total('', geometry);
   return {
-    ...total,
+    ...whole.total(geometry),
     ungrownMass: ungrown.value,
-    groups: [...groups].map(([group, tally]) => tally.total(group, geometry)).sort(byPath),
+    groups: [...groups].map(([group, tally]) => ({ group, ...tally.total(geometry) })).sort(byPath),
     onBoard: resultOf(onBoard.account, geometry),
   };
 }
@@ -199,7 +197,7 @@ export function groupBranches(groups: readonly GroupTotal[], geometry: AirframeG
     }
   }
   return [...branches]
-    .map(([group, tally]) => tally.total(group, geometry))
+    .map(([group, tally]) => ({ group, ...tally.total(geometry) }))
     .map(({ byMaturity, ...total }) => (known && byMaturity ? { ...total, byMaturity } : total))
     .sort(byPath);
 }

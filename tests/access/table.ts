@@ -70,6 +70,14 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/programs/[program]/settings/reference-points/page.tsx': { page: 'program settings.read' },
   'app/(workspace)/programs/[program]/settings/builds/page.tsx': { page: 'program settings.read' },
   'app/(workspace)/programs/[program]/settings/limits/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/groups/page.tsx': { page: 'program settings.read' },
+  'app/(workspace)/programs/[program]/settings/groups/actions.ts': {
+    addGroupAction: 'program groups.keep',
+    takeGroupsAction: 'program groups.keep',
+    moveGroupAction: 'program groups.keep',
+    recodeGroupAction: 'program groups.keep',
+    removeGroupAction: 'program groups.keep',
+  },
   'app/(workspace)/programs/[program]/settings/actions.ts': {
     issueFrameAction: 'program frame.keep',
     addReferencePointAction: 'program reference-points.keep',

@@ -3,6 +3,7 @@ import { type Transaction, sql } from 'kysely';
 import { onClient } from '@/db/client';
 import { formerRevision } from '@/db/queries/former-revision';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { groupBreakdownOf } from '@/db/queries/settings';
 import { type Database } from '@/db/schema/database';
 import { type RevisionOrigin } from '@/db/schema/lists';
 import { type ListDeclarations } from '@/lib/mass/declarations';
@@ -62,6 +63,7 @@ export async function publishRevision<T>(
           frame: { id: issue.id, geometry: geometryOf(issue) },
           declarations,
           former: await formerRevision(trx, list.id, issue.id),
+          groups: await groupBreakdownOf(trx, list.programId),
         });
         let written: T;
         try {

@@ -9,6 +9,7 @@ import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { Placement } from '@/lib/mass/place';
+import { type GroupBreakdown } from '@/lib/groups/breakdown';
 import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
 import { UncertaintyBook, type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
 import { toNumbers as uncertaintyNumbers } from '@/lib/mass/uncertainty/sums';
@@ -32,6 +33,8 @@ export interface OpenRevision {
 
 /**
  * Writes the rows of one new revision: each goes to the database, into the subtotals, past the row rules and into the content
+  /** The breakdown of the program's groups. */
+  readonly groups: GroupBreakdown;
  * hash, and none is kept. The caller holds the transaction; until it commits nobody sees anything.
  */
 export class RevisionWriter {
@@ -50,7 +53,12 @@ export class RevisionWriter {
     const placement = new Placement(declarations, frame.geometry);
     this.#book = new SubtotalBook(placement);
     this.#uncertainty = new UncertaintyBook(placement);
-    this.#rules = new RowChecks(declarations, { geometry: frame.geometry, former: former?.subtotals });
+    groups: GroupBreakdown,
+    this.#rules = new RowChecks(declarations, {
+      geometry: frame.geometry,
+      former: former?.subtotals,
+      groups,
+    });
   }
 
   /** `list` is held by the caller and as its newest revision left it; rows that stay as they are stored are not stored again. */
@@ -67,6 +75,7 @@ export class RevisionWriter {
   }
 
   get rows(): number {
+      revision.groups,
     return this.store.rows;
   }
 
