@@ -91,6 +91,20 @@ describe('findings on a rolled-up condition', () => {
     ]);
   });
 
+  it('warn of a group from which more was taken than it holds, though the total is sound', () => {
+    const cabin = { ...SOUND, group: 'Cabin' };
+    const removed = (moment: number) =>
+      found([
+        { ...SOUND, mass: 100, moments: diagonal([90, 90, 90]) },
+        cabin,
+        { mass: -4, group: 'Cabin', moments: diagonal([-0.1, -0.1, -moment]) },
+      ]);
+    expect(removed(0.1)).toEqual([]);
+    expect(removed(1.2)).toMatchObject([
+      { rule: 'impossible-group', severity: 'warning', rows: ['Cabin'], count: 1 },
+    ]);
+  });
+
   it('note groups that only take away', () => {
     const findings = found([
       { ...SOUND, group: 'Fuselage' },

@@ -21,10 +21,15 @@ import {
   solidCone,
   solidCylinder,
   solidSphere,
+  thinCone,
   thinDisc,
   thinEllipse,
+  thinPlate,
   thinRod,
+  thinSphere,
+  thinTube,
   threeBodies,
+  torus,
 } from '@/tests/references/solids';
 import {
   NO_TURN,
@@ -135,6 +140,68 @@ describe('closed-form solids (handbook formulas, see the reference)', () => {
     const { tensor, cg } = aboutCg(cone);
     expect(cg[0]).toBeCloseTo(h / 4, 14);
     expectDiagonal(tensor, solidCone(r, h), cone.mass);
+  });
+
+  it('a wide tube of no thickness is what remains of two cylinders as they come together', () => {
+    const [r, l, t] = [0.7, 3, 1e-6];
+    const [full, core] = [(r + t / 2) ** 2 * l, (r - t / 2) ** 2 * l];
+    const { tensor } = aboutCg(
+      together([body(full, 1, solidCylinder(r + t / 2, l)), body(-core, 1, solidCylinder(r - t / 2, l))]),
+    );
+    const [xx, yy, zz] = thinTube(r, l).map((k) => k * (full - core));
+    // Of what is left of two equal numbers 1e-6 apart, ten digits are known.
+    expect(
+      relativeDifference(tensor, { xx: xx ?? NaN, yy: yy ?? NaN, zz: zz ?? NaN, xy: 0, xz: 0, yz: 0 }),
+    ).toBeLessThan(1e-9);
+  });
+
+  it('hoops make a tube, a shell of a sphere and one of a cone', () => {
+    const hoop = (radius: number): Vec3 => [radius ** 2, radius ** 2 / 2, radius ** 2 / 2];
+    const [r, h] = [1.2, 4];
+    const tube = slices(-1.5, 1.5, () => ({ mass: 2, perMass: hoop(0.8) }));
+    expectDiagonal(aboutCg(tube).tensor, thinTube(0.8, 3), 6);
+    // Archimedes: equal slices of a sphere have equal surface.
+    const sphere = slices(-r, r, (x) => ({ mass: 1, perMass: hoop(Math.sqrt(r ** 2 - x ** 2)) }));
+    expectDiagonal(aboutCg(sphere).tensor, thinSphere(r), sphere.mass);
+    const cone = slices(0, h, (x) => {
+      const radius = r * (1 - x / h);
+      return { mass: radius, perMass: hoop(radius) };
+    });
+    const { tensor, cg } = aboutCg(cone);
+    expect(cg[0]).toBeCloseTo(h / 3, 14);
+    expectDiagonal(tensor, thinCone(r, h), cone.mass);
+  });
+
+  it('rods make a plate', () => {
+    const plate = together(
+      [7, 32, 12, 32, 7].map((weight, i) => ({
+        mass: (weight * 6) / 90,
+        position: [0, -1 + i / 2, 0] as const,
+        moments: diagonal([1.5 ** 2 / 12, 1.5 ** 2 / 12, 0], (weight * 6) / 90),
+      })),
+    );
+    expectDiagonal(aboutCg(plate).tensor, thinPlate(2, 1.5), 6);
+  });
+
+  it('discs set around a circle make a ring', () => {
+    // The arc grows outward with 1 + ρ/R, so that the CG of a slice lies r²/(4R) outside the middle circle.
+    const [R, r, n] = [2, 0.5, 24];
+    const ring = together(
+      Array.from({ length: n }, (_, i) => {
+        const phi = (2 * Math.PI * i) / n;
+        const out = r ** 2 / (4 * R);
+        // S of the slice about its own CG: r²/4 along the axis, r²/4 less the shift outward, nothing along the arc.
+        const own = { xx: r ** 2 / 4 / n, yy: (r ** 2 / 4 - out ** 2) / n, zz: 0, xy: 0, xz: 0, yz: 0 };
+        return {
+          mass: 1 / n,
+          position: [0, (R + out) * Math.cos(phi), (R + out) * Math.sin(phi)] as const,
+          moments: momentsOf(traceMinus(own)),
+          orientation: { ...NO_TURN, roll: phi },
+        };
+      }),
+    );
+    const [xx, yy, zz] = torus(R, r);
+    expect(relativeDifference(aboutCg(ring).tensor, { xx, yy, zz, xy: 0, xz: 0, yz: 0 })).toBeLessThan(1e-14);
   });
 
   it('thin elliptic discs make an ellipsoid', () => {

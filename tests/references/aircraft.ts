@@ -118,6 +118,18 @@ export const PUBLISHED: readonly PublishedAircraft[] = [
     source: 'NASA CR-96008, section X',
   },
   {
+    name: 'Cessna 172',
+    // From memory, unverified.
+    weight: 2645,
+    ixx: 948,
+    iyy: 1346,
+    izz: 1967,
+    ixz: 0,
+    span: 36.0,
+    length: 27.2,
+    source: 'JSBSim c172p.xml, after Roskam; weight from memory, unverified',
+  },
+  {
     name: 'X-15, burnt out',
     weight: 15560,
     ixx: 3650,
@@ -173,6 +185,12 @@ export const IMPOSSIBLE = [
 
 /** B1. Engine angular momentum of the F-16, slug.ft2/s along +x body. Source: Stevens and Lewis, after NASA TP-1538 (1979). */
 export const F16_ENGINE_MOMENTUM = 160;
+
+/**
+ * F8. The F-16 of JSBSim: its file states ixz = -982 slug.ft2 with negated products, in structural axes (aft, right, up); in body axes that is the
+ * positive integral +982. Source: JSBSim src/models/FGMassBalance.h and aircraft/f16/f16.xml. Status: the header was read.
+ */
+export const JSBSIM_F16 = { ixx: 9496, iyy: 55814, izz: 63100, ixz: -982, bodyIxz: 982 } as const;
 
 /** B4. Izz below Iyy: possible, and implausible for an aeroplane. slug.ft2. Source: JSBSim T38.xml and F4N.xml. */
 export const IZZ_BELOW_IYY = [

@@ -39,3 +39,14 @@ export const GTM_VERTICAL_TAIL = {
   place: [-3.582, 0, -0.851],
   own: [0.00479, 0.00923, 0.00449],
 } as const;
+
+/**
+ * B8. Balance of the model: ft, x forward of a datum ahead of the nose, so that stations are negative; the leading edge of the chord as a
+ * distance aft. Source: AC_baseparams_T2.m and AC_calcparams_T2.m, as above.
+ */
+export const GTM_BALANCE = {
+  cgFeet: [-4.74747447, -0.0118, -0.9761],
+  leadingEdgeFeet: 4.5462,
+  chordFeet: 0.9153,
+  percent: 21.99,
+} as const;

@@ -30,6 +30,36 @@ export const hollowSphere = (ri: number, ro: number): Diagonal => {
   return [k, k, k];
 };
 
+/** A tube of no thickness, open at both ends. */
+export const thinTube = (r: number, l: number): Diagonal => {
+  const across = (6 * r ** 2 + l ** 2) / 12;
+  return [r ** 2, across, across];
+};
+
+export const thinSphere = (r: number): Diagonal => {
+  const k = (2 / 3) * r ** 2;
+  return [k, k, k];
+};
+
+/** Without its base; CG h/3 from the base. */
+export const thinCone = (r: number, h: number): Diagonal => {
+  const across = r ** 2 / 4 + h ** 2 / 18;
+  return [r ** 2 / 2, across, across];
+};
+
+/** A full ring, R to the middle of its section of radius r. */
+export const torus = (R: number, r: number): Diagonal => {
+  const across = R ** 2 / 2 + (5 / 8) * r ** 2;
+  return [R ** 2 + (3 / 4) * r ** 2, across, across];
+};
+
+/** Across x, b along y and c along z. */
+export const thinPlate = (b: number, c: number): Diagonal => [
+  (b ** 2 + c ** 2) / 12,
+  c ** 2 / 12,
+  b ** 2 / 12,
+];
+
 /** CG h/4 from the base. */
 export const solidCone = (r: number, h: number): Diagonal => {
   const across = (3 / 80) * (4 * r ** 2 + h ** 2);
