@@ -26,6 +26,12 @@ import {
   type StoredFilesTable,
 } from './lists';
 import {
+  type ImportMappingsTable,
+  type ImportReadingsTable,
+  type ListMappingsTable,
+  type PendingUploadsTable,
+} from './mappings';
+import {
   type ApiTokensTable,
   type AuditEventsTable,
   type AuditHeadsTable,
@@ -74,6 +80,10 @@ export interface Database {
   group_changes: GroupChangesTable;
   revision_subtotals: RevisionSubtotalsTable;
   imports: ImportsTable;
+  list_mappings: ListMappingsTable;
+  import_mappings: ImportMappingsTable;
+  import_readings: ImportReadingsTable;
+  pending_uploads: PendingUploadsTable;
   rotor_revisions: RotorRevisionsTable;
   configurations: ConfigurationsTable;
   configuration_lists: ConfigurationListsTable;

@@ -1,9 +1,15 @@
 import { z } from 'zod';
 import { reasonSchema } from './codes';
 
-export const uploadQuerySchema = z.object({ reason: reasonSchema });
+export const uploadQuerySchema = z.object({
+  reason: reasonSchema,
+  by: z.literal('hand').optional().describe('Its columns are to be mapped by hand, whatever its headings'),
+});
 
 export const importStartedSchema = z.object({ import: z.string() });
+
+/** What became of a file: an import under way, or an upload that waits for a mapping. */
+export const fileTakenSchema = z.union([importStartedSchema, z.object({ upload: z.string() })]);
 
 export const problemSchema = z.object({
   kind: z.string(),

@@ -132,6 +132,18 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/api/internal/programs/[program]/lists/[list]/imports/[import]/problems/route.ts': {
     GET: 'program lists.read',
   },
+  'app/api/internal/programs/[program]/lists/[list]/uploads/[upload]/route.ts': {
+    DELETE: 'program lists.keep',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/uploads/[upload]/sample/route.ts': {
+    GET: 'program lists.keep',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/uploads/[upload]/check/route.ts': {
+    POST: 'program lists.keep',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/uploads/[upload]/import/route.ts': {
+    POST: 'program lists.keep',
+  },
   'app/api/internal/programs/[program]/lists/[list]/revisions/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/changes/route.ts': {
     GET: 'program lists.read',

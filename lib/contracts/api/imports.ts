@@ -14,6 +14,12 @@ export const importSchema = z
     rows: z.number().int().describe('Rows read so far'),
     ofRows: z.number().int().nullable().describe('Rows in the file: an estimate until it has been read'),
     revision: z.number().int().nullable().describe('Number of the revision it made; null until it is done'),
+    mapping: z
+      .object({ by: z.string(), at: z.iso.datetime() })
+      .nullable()
+      .describe(
+        "Who told, and when, how the columns of such a file are read, where its headings are not the contract's and the list remembers them; null without",
+      ),
     errors: z
       .array(fileErrorSchema)
       .describe('Why it failed: the first 200. Then the list keeps the revision it had'),
@@ -41,6 +47,7 @@ export const importEndpoint = {
         rows: 12,
         ofRows: 12,
         revision: null,
+        mapping: null,
         errors: [
           {
             kind: 'not-a-number',

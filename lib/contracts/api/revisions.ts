@@ -23,7 +23,8 @@ export const addRevisionEndpoint = {
   operationId: 'addRevision',
   summary: 'Upload a CSV as the next revision of a list',
   description:
-    'Stores the file and queues it; reading it makes the next revision, whole or not at all. Ask the `url` of the answer how it ' +
+    "Stores the file and queues it; reading it makes the next revision, whole or not at all. Headings other than the contract's " +
+    'are read as someone mapped them in the browser for this list, which the import then says. Ask the `url` of the answer how it ' +
     'stands. A person may have four imports under way; a fifth answers 429. With an Idempotency-Key a request can be sent again ' +
     'safely: the same file and reason to the same list give the same answer and no second revision.',
   scope: 'lists:write',

@@ -56,9 +56,10 @@ export async function* csvGridRows(
   if (fault !== null) throw fault;
 }
 
-/** What a person sees of a file's rows before it is read: one pass, and no more than the sample is kept. */
+/** What a person sees of a file's rows before it is read: one pass, and no more than the sample is kept. `headOnly` stops once the head is full. */
 export async function sampleRows(
   rows: AsyncIterable<GridRow>,
+  headOnly = false,
 ): Promise<Pick<FileSample, 'head' | 'tail' | 'rows'>> {
   const head: GridRow[] = [];
   const tail: GridRow[] = [];
@@ -66,6 +67,7 @@ export async function sampleRows(
   for await (const row of rows) {
     count += 1;
     if (head.length < HEAD_ROWS) head.push(shortened(row));
+    else if (headOnly) break;
     else {
       tail.push(shortened(row));
       if (tail.length > TAIL_ROWS) tail.shift();

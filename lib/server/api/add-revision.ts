@@ -5,7 +5,11 @@ import { addRevisionEndpoint } from '@/lib/contracts/api/revisions';
 import { type Person } from '@/lib/server/actor';
 import { reachList } from '@/lib/server/lists/reach-list';
 import { receiveFile } from '@/lib/server/lists/receive-file';
+import { orRefused } from '@/lib/server/lists/mapping/reach-upload';
+import { type Remembered } from '@/lib/server/lists/mapping/remembered';
+import { wayOf } from '@/lib/server/lists/mapping/way-of';
 import { assertMayImport, queueImport, requestImport } from '@/lib/server/lists/request-import';
+import { openObject } from '@/lib/server/storage/open-object';
 import { answerOnce, isKeyInUse } from './idempotency';
 
 interface AddRevision {
@@ -30,7 +34,15 @@ export async function addRevision(db: Db, input: AddRevision): Promise<string> {
   // A repetition is answered whatever is under way; it starts nothing.
   if (key === null || !(await isKeyInUse(db, person.userId, key))) await assertMayImport(db, person.userId);
   const file = await receiveFile(request, { maxBytes: addRevisionEndpoint.body.maxBytes });
-  const asked = { person, list: { id: list.id, programId: program.id, code: list.code }, file, reason };
+  const way = await orRefused(wayOf(db, list.id, { open: () => openObject(file.sha256), bytes: file.bytes }));
+  const asked = {
+    person,
+    list: { id: list.id, programId: program.id, code: list.code },
+    file,
+    reason,
+    // A file of other headings and no remembered mapping is read as the contract says: its import names what it misses.
+    ...(way.way === 'remembered' ? { read: readingOf(way.remembered) } : {}),
+  };
   if (key === null) return requestImport(db, asked);
   const same = { path: addRevisionEndpoint.path, list: list.id, sha256: file.sha256, reason };
   return answerOnce(
@@ -39,4 +51,9 @@ export async function addRevision(db: Db, input: AddRevision): Promise<string> {
     (trx) => queueImport(trx, asked),
     z.string(),
   );
+}
+
+/** A totals row that does not agree is a problem of the import: nobody is there to look at it. */
+function readingOf({ id, mapping }: Remembered) {
+  return { mappingId: id, mapping, acceptTotals: false };
 }

@@ -1,8 +1,9 @@
 import { type Db } from '@/db/client';
 import { type Import } from '@/db/queries/lists';
 import { mappingOfImport } from '@/db/queries/mappings';
-import { type MassListReading, type MassListOptions, readMassList } from '@/lib/ingest/mass-list';
+import { type MassListReading, type MassListOptions } from '@/lib/ingest/mass-list';
 import { type MappedReading, readMapped } from '@/lib/ingest/mapping/read-mapped';
+import { type MassListBlockOptions, readMassListBlocks } from '@/lib/ingest/read-blocks';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { WorkbookRefused } from '@/lib/server/sheets/refused';
 import { mappedRows } from './mapping/file-rows';
@@ -12,19 +13,22 @@ export interface FileServices {
   readonly openObject: (sha256: string) => Promise<AsyncIterable<Uint8Array>>;
 }
 
-type Callbacks = Pick<MassListOptions, 'onComponent' | 'onProgress'>;
+type Callbacks = Pick<MassListOptions, 'onComponent' | 'onProgress'> & Pick<MassListBlockOptions, 'onBlock'>;
 type Reading = Pick<MassListReading, 'problems' | 'problemCounts'>;
 
-/** The rows of the file of an import as components, by the mapping that was asked for with it or as the contract says. */
+/**
+ * The rows of the file of an import: as components, by the mapping that was asked for with it, or in blocks, as the contract says.
+ */
 export async function readImport(
   { db, openObject }: FileServices,
   found: Pick<Import, 'id' | 'file_sha256'>,
   declarations: ListDeclarations,
-  options: Callbacks,
+  { onBlock, ...options }: Callbacks,
 ): Promise<Reading> {
   const mapped = await mappingOfImport(db, found.id);
   const bytes = await openObject(found.file_sha256);
-  if (mapped === undefined) return readMassList(bytes, declarations, options);
+  if (mapped === undefined)
+    return readMassListBlocks(bytes, declarations, { onBlock, onProgress: options.onProgress });
   try {
     const rows = await mappedRows(bytes, mapped.mapping);
     const reading = await readMapped(rows, mapped.mapping, declarations, {

@@ -79,7 +79,14 @@ describe('POST revisions', () => {
     expect(sent.get('location')).toBe(body['url']);
     expect(body['url']).toMatch(/\/api\/v1\/imports\/[0-9a-f-]{36}$/);
     const { import: id } = body;
-    const expected = { import: id, program: test.program.code, list: 'wing', errors: [], errorCounts: {} };
+    const expected = {
+      import: id,
+      program: test.program.code,
+      list: 'wing',
+      mapping: null,
+      errors: [],
+      errorCounts: {},
+    };
     expect((await read(id)).body).toEqual({
       ...expected,
       state: 'waiting',

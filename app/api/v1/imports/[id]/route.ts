@@ -1,3 +1,4 @@
+import { mappingOfImport } from '@/db/queries/mappings';
 import { importEndpoint } from '@/lib/contracts/api/imports';
 import { reachImportOf } from '@/lib/server/api/reach-import';
 import { respond } from '@/lib/server/api/respond';
@@ -11,6 +12,7 @@ interface ImportParams extends Record<string, string> {
 
 export const GET = apiRoute<ImportParams>({ scope: importEndpoint.scope }, async ({ params, caller }) => {
   const found = await reachImportOf(serverDb(), caller, params.id);
+  const mapped = await mappingOfImport(serverDb(), found.id);
   return respond(importEndpoint, 200, {
     import: found.id,
     program: found.program_code,
@@ -19,6 +21,7 @@ export const GET = apiRoute<ImportParams>({ scope: importEndpoint.scope }, async
     rows: found.rows_done,
     ofRows: found.of_rows === null ? null : Math.max(found.of_rows, found.rows_done),
     revision: found.revision_number,
+    mapping: mapped === undefined ? null : { by: mapped.author, at: mapped.created_at.toISOString() },
     errors: found.problems ?? [],
     errorCounts: found.problem_counts ?? {},
   });
