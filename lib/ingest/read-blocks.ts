@@ -67,6 +67,8 @@ class BlockReading {
   #records = 0;
   #free = FEED_BYTES;
   #hasHeader = false;
+  /** Rows of the block whose items are noted. */
+  #settled = 0;
 
   constructor(
     bytes: AsyncIterable<Uint8Array>,
@@ -189,12 +191,14 @@ class BlockReading {
       );
       return true;
     }
+    this.#settle();
     if (this.#records === this.#limits.rows) throw tooManyRows(record.line, this.#limits.rows);
     this.#records += 1;
     const component = this.#list.takeRow(record);
     if (component === null) return true;
     if (this.#block.rows === BLOCK_ROWS) await this.#flush();
     this.#free = this.#block.put(component, record.line, this.#groups.numberOf(component.group), this.#free);
+    this.#settled = this.#block.rows;
     return true;
   }
 
@@ -230,10 +234,21 @@ class BlockReading {
   async #flush(): Promise<void> {
     const block = this.#block;
     if (block.rows === 0) return;
-    const waiting = this.options.onBlock(block);
-    if (waiting !== undefined) await waiting;
+    this.#settle();
+    if (block.rows > 0) {
+      const waiting = this.options.onBlock(block);
+      if (waiting !== undefined) await waiting;
+    }
     block.first += block.rows;
     block.rows = 0;
+    this.#settled = 0;
+    this.#parser?.clear();
+  }
+
+  /** Notes the items of the rows that were read since the last time. */
+  #settle(): void {
+    if (this.#block.rows > this.#settled) this.#parser?.noteItems(this.#settled);
+    this.#settled = this.#block.rows;
   }
 
   #tell(bytes: number): void {

@@ -1,3 +1,4 @@
+import { isSame } from './bytes';
 import { fieldText } from './row-block';
 
 /** Spellings that are remembered of one column. */
@@ -14,12 +15,18 @@ export class Choices {
     readonly blank: number,
   ) {}
 
+  /** The spelling that was asked for last, and its code. */
+  last: Uint8Array = new Uint8Array(0);
+  lastCode = -1;
+
   /** The code of a field, -1 for one that is none of the values. */
   code(bytes: Uint8Array, start: number, end: number): number {
-    if (start === end) return this.blank;
     for (let k = 0; k < this.#spellings.length; k += 1) {
       const spelling = this.#spellings[k];
-      if (spelling !== undefined && isSame(spelling, bytes, start, end)) return this.#codes[k] ?? -1;
+      if (spelling === undefined || !isSame(spelling, bytes, start, end)) continue;
+      this.last = spelling;
+      this.lastCode = this.#codes[k] ?? -1;
+      return this.lastCode;
     }
     const text = fieldText(bytes, start, end).trim().toLowerCase();
     const code = text === '' ? this.blank : this.values.findIndex((value) => value.toLowerCase() === text);
@@ -29,11 +36,4 @@ export class Choices {
     }
     return code;
   }
-}
-
-export function isSame(text: Uint8Array, bytes: Uint8Array, start: number, end: number): boolean {
-  const length = end - start;
-  if (text.length !== length) return false;
-  for (let k = length - 1; k >= 0; k -= 1) if (text[k] !== bytes[start + k]) return false;
-  return true;
 }

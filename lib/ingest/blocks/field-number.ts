@@ -1,14 +1,9 @@
 import { readNumber } from '@/lib/ingest/table/number-text';
 
+import { COMMA, LOWER_E, MINUS, PLUS, POINT, UPPER_E } from './bytes';
+
 /** Powers of ten that are exact. */
 export const POWERS = Float64Array.from({ length: 23 }, (_, power) => Number(`1e${power}`));
-
-const MINUS = 45;
-const PLUS = 43;
-const POINT = 46;
-const COMMA = 44;
-const LOWER_E = 101;
-const UPPER_E = 69;
 
 /**
  * The number in a field, with the very bits of `readNumber` of its text; NaN where that finds fault, or where the field is better judged

@@ -1,7 +1,7 @@
 import { restoreFormula } from '@/lib/export/formula-text';
 import { DEFAULT_GROUP, groupPath } from '@/lib/ingest/mass-list/component-row';
-import { isSame } from './choices';
-import { spread } from './item-index';
+import { isSame } from './bytes';
+import { hashOf } from './item-index';
 import { fieldText } from './row-block';
 
 /** The group paths of a list by number, 0 the default; a path is found by the bytes of its field. */
@@ -10,13 +10,12 @@ export class GroupPaths {
   readonly paths: string[] = [DEFAULT_GROUP];
   readonly #numbers = new Map([[DEFAULT_GROUP, 0]]);
   readonly #spellings = new Map<number, { readonly bytes: Uint8Array; readonly number: number }[]>();
-  #last: Uint8Array = new Uint8Array(0);
-  #lastNumber = -1;
+  /** The spelling of the field that was asked for last, and its number: neighbours are mostly of one group. */
+  last: Uint8Array = new Uint8Array(0);
+  lastNumber = -1;
 
-  /** `hash` is the `hashOf` of the field. */
-  numberOfField(bytes: Uint8Array, start: number, end: number, hash: number): number {
-    if (this.#lastNumber !== -1 && isSame(this.#last, bytes, start, end)) return this.#lastNumber;
-    const key = spread(hash);
+  numberOfField(bytes: Uint8Array, start: number, end: number): number {
+    const key = hashOf(bytes, start, end);
     const alike = this.#spellings.get(key) ?? [];
     let known = alike.find((each) => isSame(each.bytes, bytes, start, end));
     if (known === undefined) {
@@ -25,8 +24,8 @@ export class GroupPaths {
       alike.push(known);
       this.#spellings.set(key, alike);
     }
-    this.#last = known.bytes;
-    this.#lastNumber = known.number;
+    this.last = known.bytes;
+    this.lastNumber = known.number;
     return known.number;
   }
 

@@ -4,26 +4,23 @@ const CHUNK = 1 << CHUNK_BITS;
 const ORDINAL_BITS = 22;
 const ORDINALS = 1 << ORDINAL_BITS;
 const ORDINAL_MASK = ORDINALS - 1;
-/** So many texts of one hash are no chance any more. */
-const PROBES = 2000;
 
-/** FNV-1a, one byte at a time: how every hash here is begun and goes on. */
-export const HASH_START = 0x811c9dc5 | 0;
-export const HASH_FACTOR = 0x01000193;
-
+/** A hash of some bytes, four at a time and every bit spread over all (after MurmurHash3, public domain). */
 export function hashOf(bytes: Uint8Array, start: number, end: number): number {
-  let hash = HASH_START;
-  for (let at = start; at < end; at += 1) hash = Math.imul(hash ^ (bytes[at] ?? 0), HASH_FACTOR);
-  return hash;
-}
-
-/** Spreads what the last bytes changed over all bits (the finalizer of MurmurHash3). */
-export function spread(hash: number): number {
-  let h = hash ^ (hash >>> 16);
-  h = Math.imul(h, 0x85ebca6b);
-  h ^= h >>> 13;
-  h = Math.imul(h, 0xc2b2ae35);
-  return h ^ (h >>> 16);
+  let hash = end - start;
+  let at = start;
+  for (; at + 4 <= end; at += 4) {
+    const word =
+      (bytes[at] ?? 0) |
+      ((bytes[at + 1] ?? 0) << 8) |
+      ((bytes[at + 2] ?? 0) << 16) |
+      ((bytes[at + 3] ?? 0) << 24);
+    hash = Math.imul(hash ^ (hash >>> 15) ^ word, 0x2c1b3c6d);
+  }
+  for (; at < end; at += 1) hash = Math.imul(hash ^ (hash >>> 15) ^ (bytes[at] ?? 0), 0x2c1b3c6d);
+  hash = Math.imul(hash ^ (hash >>> 16), 0x85ebca6b);
+  hash = Math.imul(hash ^ (hash >>> 13), 0xc2b2ae35);
+  return hash ^ (hash >>> 16);
 }
 
 /**
@@ -34,6 +31,7 @@ export class ItemIndex {
   #table = new Uint32Array(1 << 10);
   readonly #chunks: Uint8Array[] = [];
   #starts = new Uint32Array(1 << 9);
+  #hashes = new Int32Array(1 << 9);
   #free = 0;
   count = 0;
 
@@ -44,10 +42,16 @@ export class ItemIndex {
     if (known >= 0) return known;
     if (this.count + 1 >= ORDINALS) throw new RangeError(`No more than ${ORDINALS} texts are told apart.`);
     this.#keep(bytes, start, end);
-    this.#table[slot] = (spread(hash) & ~ORDINAL_MASK) | (this.count + 1);
+    this.#hashes[this.count] = hash;
+    this.#table[slot] = (hash & ~ORDINAL_MASK) | (this.count + 1);
     this.count += 1;
     if (2 * this.count > this.#table.length) this.#grow();
     return -1;
+  }
+
+  /** What the table holds where the search for a text of this hash begins. */
+  foresee(hash: number): number {
+    return this.#table[hash & (this.#table.length - 1)] ?? 0;
   }
 
   /** The ordinal of a text, -1 where it is not known. */
@@ -66,9 +70,8 @@ export class ItemIndex {
   #slotOf(bytes: Uint8Array, start: number, end: number, hash: number): number {
     const table = this.#table;
     const mask = table.length - 1;
-    const spreadHash = spread(hash);
-    const tag = (spreadHash & ~ORDINAL_MASK) >>> 0;
-    let slot = spreadHash & mask;
+    const tag = (hash & ~ORDINAL_MASK) >>> 0;
+    let slot = hash & mask;
     for (let entry = table[slot] ?? 0; entry !== 0; entry = table[slot] ?? 0) {
       if ((entry & ~ORDINAL_MASK) >>> 0 === tag && this.#isAt((entry & ORDINAL_MASK) - 1, bytes, start, end))
         return slot;
@@ -98,7 +101,12 @@ export class ItemIndex {
       this.#chunks.push(chunk);
       this.#free = 0;
     }
-    if (this.count === this.#starts.length) this.#starts = enlarged(this.#starts);
+    if (this.count === this.#starts.length) {
+      this.#starts = enlarged(this.#starts);
+      const hashes = new Int32Array(this.#starts.length);
+      hashes.set(this.#hashes);
+      this.#hashes = hashes;
+    }
     this.#starts[this.count] = ((this.#chunks.length - 1) << CHUNK_BITS) | this.#free;
     chunk[this.#free] = length & 0xff;
     chunk[this.#free + 1] = length >>> 8;
@@ -111,8 +119,7 @@ export class ItemIndex {
     const mask = table.length - 1;
     this.#table = table;
     for (let ordinal = 0; ordinal < this.count; ordinal += 1) {
-      const text = this.bytesOf(ordinal);
-      const hash = spread(hashOf(text, 0, text.length));
+      const hash = this.#hashes[ordinal] ?? 0;
       let slot = hash & mask;
       while (table[slot] !== 0) slot = (slot + 1) & mask;
       table[slot] = (hash & ~ORDINAL_MASK) | (ordinal + 1);

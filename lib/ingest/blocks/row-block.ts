@@ -174,6 +174,19 @@ export class RowBlock {
     return at;
   }
 
+  /** Puts the row `from` in the place of the row `to`. */
+  move(from: number, to: number): void {
+    const { lines, group, category, maturity, status, memo, pair, hasMoments, hasSigma, numbers, texts } =
+      this;
+    const columns = [lines, group, category, maturity, status, memo, pair, hasMoments, hasSigma];
+    const ranges = [...Object.values(texts), ...this.own.map((own) => own.ranges)];
+    for (const column of [...columns, ...Object.values(numbers)]) column.copyWithin(to, from, from + 1);
+    for (const { start, end } of ranges) {
+      start.copyWithin(to, from, from + 1);
+      end.copyWithin(to, from, from + 1);
+    }
+  }
+
   /** Trimmed, null where there is none. */
   text(column: TextColumn, row: number): string | null {
     const { start, end } = this.texts[column];

@@ -27,6 +27,11 @@ export class ItemTree {
     this.addParent(bytes, 0, bytes.length);
   }
 
+  /** What the table of items holds where one of this `hashOf` would be: asked for early, it is at hand when needed. */
+  foresee(hash: number): number {
+    return this.#items.foresee(hash);
+  }
+
   /** The same for an item in UTF-8, whose `hashOf` is `hash`; its parent, if any, comes by `addParent`. */
   addBytes(
     bytes: Uint8Array,
