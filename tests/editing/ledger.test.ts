@@ -70,7 +70,7 @@ describe('the running effect of edits', () => {
     const base = byItem(rows);
     const edits = rows.flatMap(({ item = '' }, index): DraftEdit[] => {
       if (index % 3 === 0)
-        return [{ kind: 'change', item, fields: { mass: number(1).replace('-', ''), x: number(900) } }];
+        return [{ kind: 'change', item, fields: { mass: (1 + random()).toFixed(3), x: number(900) } }];
       if (index % 5 === 0) return [{ kind: 'remove', item }];
       if (index % 13 === 0) return [{ kind: 'change', item, fields: { counting: 'memo' } }];
       return [];
