@@ -108,6 +108,7 @@ async function readInto(
   const tell = progressTeller(services.db, found.id);
   const reading = await readImport(services, found, declarations, {
     onComponent: (component) => writer.add(component),
+    onBlock: (block) => writer.addBlock(block),
     onProgress: ({ rows }) => tell(rows),
   });
   if (reading.problems.length > 0) throw new WrongFile(reading.problems, reading.problemCounts);

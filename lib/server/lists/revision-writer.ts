@@ -4,17 +4,21 @@ import { type FormerRevision, sameFrame, suspectChanges } from '@/db/queries/for
 import { type Database } from '@/db/schema/database';
 import { type Finding } from '@/lib/findings/finding';
 import { RowChecks } from '@/lib/findings/look';
+import { type RowBlock } from '@/lib/ingest/blocks/row-block';
 import { toNumbersWithRest } from '@/lib/mass/account';
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { Placement } from '@/lib/mass/place';
 import { type GroupBreakdown } from '@/lib/groups/breakdown';
+import { Placement } from '@/lib/mass/place';
 import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
 import { UncertaintyBook, type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
 import { toNumbers as uncertaintyNumbers } from '@/lib/mass/uncertainty/sums';
 import { contentHead } from './content-hash';
 import { type ListRows, RowStore, type StoredContent } from './row-store';
+
+/** So many subtotals are stored by one statement, which takes 65 535 values at most. */
+const SUBTOTALS = 1_000;
 
 /** What a finished revision amounts to. */
 export interface RevisionContent extends StoredContent {
@@ -29,12 +33,12 @@ export interface OpenRevision {
   readonly frame: { readonly id: string; readonly geometry: AirframeGeometry };
   readonly declarations: ListDeclarations;
   readonly former: FormerRevision | null;
+  /** The breakdown of the program's groups. */
+  readonly groups: GroupBreakdown;
 }
 
 /**
  * Writes the rows of one new revision: each goes to the database, into the subtotals, past the row rules and into the content
-  /** The breakdown of the program's groups. */
-  readonly groups: GroupBreakdown;
  * hash, and none is kept. The caller holds the transaction; until it commits nobody sees anything.
  */
 export class RevisionWriter {
@@ -49,11 +53,11 @@ export class RevisionWriter {
     private readonly frame: { readonly id: string; readonly geometry: AirframeGeometry },
     private readonly declarations: ListDeclarations,
     private readonly former: FormerRevision | null,
+    groups: GroupBreakdown,
   ) {
     const placement = new Placement(declarations, frame.geometry);
     this.#book = new SubtotalBook(placement);
     this.#uncertainty = new UncertaintyBook(placement);
-    groups: GroupBreakdown,
     this.#rules = new RowChecks(declarations, {
       geometry: frame.geometry,
       former: former?.subtotals,
@@ -71,11 +75,11 @@ export class RevisionWriter {
       revision.frame,
       revision.declarations,
       revision.former,
+      revision.groups,
     );
   }
 
   get rows(): number {
-      revision.groups,
     return this.store.rows;
   }
 
@@ -91,17 +95,29 @@ export class RevisionWriter {
     return this.store.took();
   }
 
+  /** The right rows of a block, which may be used again when the promise, if any, is kept. */
+  addBlock(block: RowBlock): Promise<void> | undefined {
+    for (let row = 0; row < block.rows; row += 1) {
+      this.store.block.addFrom(block, row);
+      const component = block.component(row);
+      this.#book.add(component);
+      this.#uncertainty.add(component);
+      this.#rules.see(component);
+    }
+    return this.store.took();
+  }
+
   /** Closes the stream of rows, then stores the subtotals in `trx`, which must be on the same connection. */
   async finish(trx: Transaction<Database>): Promise<RevisionContent> {
     const stored = await this.store.finish();
     const subtotals = this.#book.subtotals();
     const uncertainties = this.#uncertainty.sums();
-    if (subtotals.length > 0) {
+    for (let at = 0; at < subtotals.length; at += SUBTOTALS) {
       await trx
         .insertInto('revision_subtotals')
         .values(
-          subtotals.map((subtotal, index) => {
-            const uncertainty = uncertainties[index];
+          subtotals.slice(at, at + SUBTOTALS).map((subtotal, index) => {
+            const uncertainty = uncertainties[at + index];
             if (uncertainty === undefined) throw new Error('a subtotal without its uncertainty');
             return {
               revision_id: this.revisionId,

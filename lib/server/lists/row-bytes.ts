@@ -1,4 +1,10 @@
-import { type Component } from '@/lib/mass/component';
+import {
+  NO_MATURITY,
+  type RowBlock,
+  type TextColumn,
+  type TextRanges,
+} from '@/lib/ingest/blocks/row-block';
+import { CATEGORIES, CHANGE_STATUSES, type Component, MATURITIES } from '@/lib/mass/component';
 import { PLACE_COLUMNS, SIGMA_FIELDS, VALUE_COLUMNS } from './row-codec';
 
 const FIELDS = PLACE_COLUMNS.length + VALUE_COLUMNS.length;
@@ -29,6 +35,8 @@ export class RowBytes {
   end = 0;
   /** Where each row begins. */
   readonly starts: number[] = [];
+  /** The group paths of the list whose blocks are added, as they are written. */
+  readonly #groups: Uint8Array[] = [];
 
   constructor(size: number) {
     this.bytes = Buffer.allocUnsafeSlow(size);
@@ -102,6 +110,52 @@ export class RowBytes {
     this.text(component.changeRef);
     this.text(component.status);
     this.json(component.extra);
+  }
+
+  /** Adds a row of a block: the same bytes as of its component. */
+  addFrom(block: RowBlock, row: number): void {
+    const { numbers, texts } = block;
+    this.#room(HEAD.length);
+    this.starts.push(this.end);
+    this.bytes.set(HEAD, this.end);
+    this.end += HEAD.length;
+    this.#range(block, 'item', texts.item, row);
+    this.#range(block, 'part_number', texts.part_number, row);
+    this.#range(block, 'part_revision', texts.part_revision, row);
+    this.#range(block, 'description', texts.description, row);
+    this.#field(this.#groupField(block.groups, block.group[row] ?? 0));
+    this.#field(CATEGORY_FIELDS[block.category[row] ?? 0]);
+    this.#range(block, 'parent', texts.parent, row);
+    this.#field(COUNTING_FIELDS[block.memo[row] ?? 0]);
+    this.integer(numbers.quantity[row] ?? NaN);
+    this.#number(numbers.mass, row);
+    this.#number(numbers.x, row);
+    this.#number(numbers.y, row);
+    this.#number(numbers.z, row);
+    this.#number(numbers.ixx, row);
+    this.#number(numbers.iyy, row);
+    this.#number(numbers.izz, row);
+    this.#number(numbers.ixy, row);
+    this.#number(numbers.ixz, row);
+    this.#number(numbers.iyz, row);
+    this.#number(numbers.yaw, row);
+    this.#number(numbers.pitch, row);
+    this.#number(numbers.roll, row);
+    this.flag(block.pair[row] === 1);
+    this.#field(MATURITY_FIELDS[block.maturity[row] ?? NO_MATURITY]);
+    this.#number(numbers.growth, row);
+    this.floats(
+      block.hasSigma[row] === 1
+        ? SIGMA_FIELDS.map((field) => numberOf(numbers[`${field}_sigma`][row] ?? NaN))
+        : null,
+    );
+    this.#range(block, 'source', texts.source, row);
+    this.#range(block, 'source_date', texts.source_date, row);
+    this.#range(block, 'note', texts.note, row);
+    this.#range(block, 'change_ref', texts.change_ref, row);
+    this.#field(STATUS_FIELDS[block.status[row] ?? 0]);
+    if (block.own.length === 0) this.#null();
+    else this.json(block.extra(row));
   }
 
   text(value: string | null): void {
@@ -184,6 +238,57 @@ export class RowBytes {
     this.bytes[start + 4] = JSONB_VERSION;
   }
 
+  /** NaN is no number. */
+  #number(column: Float64Array, row: number): void {
+    const value = column[row] ?? NaN;
+    if (Number.isNaN(value)) {
+      this.#null();
+      return;
+    }
+    this.#room(12);
+    this.view.setInt32(this.end, FLOAT_BYTES);
+    this.view.setFloat64(this.end + 4, value + 0);
+    this.end += 12;
+  }
+
+  #range(block: RowBlock, column: TextColumn, { start, end }: TextRanges, row: number): void {
+    const from = start[row] ?? 0;
+    const to = end[row] ?? 0;
+    if (to < 0) {
+      this.text(block.text(column, row));
+      return;
+    }
+    if (from === to) {
+      this.#null();
+      return;
+    }
+    const length = to - from;
+    this.#room(4 + length);
+    this.view.setInt32(this.end, length);
+    const target = this.bytes;
+    const source = block.bytes;
+    let at = this.end + 4;
+    if (length > LONG) {
+      target.set(source.subarray(from, to), at);
+      at += length;
+    } else {
+      for (let k = from; k < to; k += 1, at += 1) target[at] = source[k] ?? 0;
+    }
+    this.end = at;
+  }
+
+  /** A field that has been written before, its length in front. */
+  #field(field: Uint8Array | undefined): void {
+    if (field === undefined) throw new RangeError('a row of a block names no such value');
+    this.#room(field.length);
+    this.bytes.set(field, this.end);
+    this.end += field.length;
+  }
+
+  #groupField(groups: readonly string[], index: number): Uint8Array {
+    return (this.#groups[index] ??= fieldOf(groups[index] ?? ''));
+  }
+
   #null(): void {
     this.#room(4);
     this.view.setInt32(this.end, NULL);
@@ -207,4 +312,22 @@ function headOfRow(): Buffer {
   head.writeInt32BE(8, SORT_KEY_AT - 4);
   head.writeInt32BE(16, FINGERPRINT_AT - 4);
   return head;
+}
+
+/** Texts above this length are worth a call. */
+const LONG = 48;
+
+const CATEGORY_FIELDS = CATEGORIES.map(fieldOf);
+const STATUS_FIELDS = CHANGE_STATUSES.map(fieldOf);
+const COUNTING_FIELDS = ['counted', 'memo'].map(fieldOf);
+const MATURITY_FIELDS = [...MATURITIES.map(fieldOf), Buffer.from([0xff, 0xff, 0xff, 0xff])];
+
+function fieldOf(text: string): Uint8Array {
+  const bytes = new RowBytes(4 + 3 * text.length);
+  bytes.text(text);
+  return bytes.written;
+}
+
+function numberOf(value: number): number | null {
+  return Number.isNaN(value) ? null : value;
 }
