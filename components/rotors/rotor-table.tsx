@@ -15,10 +15,12 @@ interface RotorTableProps {
   readonly unit: InertiaUnit;
   /** Code of the program, for the way to the rows that carry the mass. */
   readonly program: string;
+  /** The form of a rotor; null where it cannot be changed. */
+  readonly editHref: string | null;
 }
 
 /** The rotors with their axes as given and as the spin that they mean in body axes. */
-export function RotorTable({ rotors, geometry, unit, program }: RotorTableProps) {
+export function RotorTable({ rotors, geometry, unit, program, editHref }: RotorTableProps) {
   const inertias = rotors.map(({ polarInertia }) => fromSi(polarInertia, unit));
   const decimals = decimalsFor(Math.min(...inertias), 3);
   const ratioDecimals = Math.max(...rotors.map(({ gearRatio }) => Math.min(6, typedDecimals(gearRatio))));
@@ -39,7 +41,11 @@ export function RotorTable({ rotors, geometry, unit, program }: RotorTableProps)
           <ColumnHead side="right">Gear ratio</ColumnHead>
           <ColumnHead side="right">Blades</ColumnHead>
           <ColumnHead>Mass in</ColumnHead>
-          <ColumnHead>Note</ColumnHead>
+          {editHref === null ? null : (
+            <ColumnHead>
+              <span className="sr-only">Change</span>
+            </ColumnHead>
+          )}
         </tr>
       </thead>
       <tbody>
@@ -48,35 +54,48 @@ export function RotorTable({ rotors, geometry, unit, program }: RotorTableProps)
           return (
             <tr key={rotor.rotor}>
               <RowHead>
-                <span className="sm:whitespace-nowrap">{rotor.rotor}</span>
+                {rotor.rotor}
+                <Remarks rotor={rotor} />
               </RowHead>
               <Cell side="right">
                 <Num value={rotor.polarInertia} unit={unit} decimals={decimals} />
               </Cell>
-              <Cell className="whitespace-nowrap">{senseInWords(spin)}</Cell>
+              <Cell className="min-w-28">{senseInWords(spin)}</Cell>
               {spin.map((part, index) => (
                 <Cell key={index} side="right">
                   <Num value={part} decimals={4} plus />
                 </Cell>
               ))}
-              <Cell className="min-w-52">{axisAsGiven(rotor.axis)}</Cell>
-              <Cell className="whitespace-nowrap">{rotor.shaft}</Cell>
+              <Cell className="min-w-32">{axisAsGiven(rotor.axis)}</Cell>
+              <Cell>{rotor.shaft}</Cell>
               <Cell side="right">
                 <Num value={rotor.gearRatio} decimals={ratioDecimals} />
               </Cell>
               <Cell side="right">
                 <Num value={rotor.blades} decimals={0} />
               </Cell>
-              <Cell className="whitespace-nowrap">
+              <Cell className="min-w-28">
                 {rotor.component === null ? '' : <Carrier component={rotor.component} program={program} />}
               </Cell>
-              <Cell className="min-w-40">{[rotor.group, rotor.note].filter(Boolean).join(': ')}</Cell>
+              {editHref === null ? null : (
+                <Cell>
+                  <TextLink href={`${editHref}?rotor=${encodeURIComponent(rotor.rotor)}`}>
+                    Change<span className="sr-only"> {rotor.rotor}</span>
+                  </TextLink>
+                </Cell>
+              )}
             </tr>
           );
         })}
       </tbody>
     </Table>
   );
+}
+
+/** Group and note beneath the name: a column of their own would not fit a desk screen. */
+function Remarks({ rotor: { group, note } }: { readonly rotor: Rotor }) {
+  const words = [group, note].filter(Boolean).join(': ');
+  return words === '' ? null : <div className="max-w-72 text-note text-ink-2">{words}</div>;
 }
 
 /** `list/item`, as a link to that row of the list. */

@@ -1,6 +1,6 @@
 import { type AxisTriple, type Direction, handedness } from '@/lib/frames/axes';
 
-type Point = readonly [number, number];
+export type Point = readonly [number, number];
 
 /** Where a metre in each direction goes on the sheet: seen from above, ahead and to the left. */
 const GROUND: Readonly<Record<Direction, Point>> = {
@@ -13,15 +13,16 @@ const GROUND: Readonly<Record<Direction, Point>> = {
 };
 
 /** forward, right, up -> sheet. */
-function onSheet(forward: number, right: number, up: number): Point {
+export function onSheet(forward: number, right: number, up: number): Point {
   const sum = (k: 0 | 1): number => forward * GROUND.forward[k] + right * GROUND.right[k] + up * GROUND.up[k];
   return [120 + sum(0), 104 + sum(1)];
 }
 
-const path = (...points: readonly Point[]): string =>
+export const path = (...points: readonly Point[]): string =>
   `M${points.map(([x, y]) => `${x.toFixed(1)} ${y.toFixed(1)}`).join('L')}`;
 
-const AIRFRAME = [
+/** An aircraft in a few lines, seen from above, ahead and to the left. */
+export const AIRFRAME = [
   path(
     onSheet(74, 0, 0),
     onSheet(60, 0, 7),

@@ -88,8 +88,13 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
     removeAllowanceAction: 'program allowances.keep',
   },
   'app/(workspace)/programs/[program]/rotating-parts/page.tsx': { page: 'program rotors.read' },
+  'app/(workspace)/programs/[program]/rotating-parts/rotor/page.tsx': { page: 'program rotors.keep' },
   'app/(workspace)/programs/[program]/rotating-parts/upload/page.tsx': { page: 'program rotors.keep' },
-  'app/(workspace)/programs/[program]/rotating-parts/actions.ts': { savePointsAction: 'program rotors.keep' },
+  'app/(workspace)/programs/[program]/rotating-parts/actions.ts': {
+    savePointsAction: 'program rotors.keep',
+    saveRotorAction: 'program rotors.keep',
+    removeRotorAction: 'program rotors.keep',
+  },
   'app/api/internal/programs/[program]/rotors/revisions/route.ts': { POST: 'program rotors.keep' },
   'app/(workspace)/programs/[program]/configurations/page.tsx': { page: 'program configurations.read' },
   'app/(workspace)/programs/[program]/configurations/[configuration]/page.tsx': {

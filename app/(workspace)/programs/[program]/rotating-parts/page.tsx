@@ -76,6 +76,7 @@ export default async function RotatingPartsPage({
         actions={
           can('rotors.keep') ? (
             <>
+              <ButtonLink href={`${home}/rotor`}>Add a rotor</ButtonLink>
               <ButtonLink href={`${home}/upload`}>Upload rotors</ButtonLink>
               <ButtonLink href={`${home}/upload?content=points`}>Upload operating points</ButtonLink>
             </>
@@ -104,7 +105,13 @@ export default async function RotatingPartsPage({
         }
         lead="The tensor of the airframe counts each rotor as if it were locked to it; the angular momentum is what comes on top."
       >
-        <RotorTable rotors={rotors} geometry={geometry} unit={units.inertia} program={program.code} />
+        <RotorTable
+          rotors={rotors}
+          geometry={geometry}
+          unit={units.inertia}
+          program={program.code}
+          editHref={editable ? `${home}/rotor` : null}
+        />
       </Section>
       <Section title="Operating points" lead="Speeds are given per shaft; a rotor turns by its gear ratio.">
         {editable ? (
@@ -178,9 +185,12 @@ function NothingYet({
       title="There are no rotating parts yet"
       action={
         keeps && framed ? (
-          <ButtonLink kind="primary" href={`${home}/upload`}>
-            Upload rotors
-          </ButtonLink>
+          <>
+            <ButtonLink kind="primary" href={`${home}/upload`}>
+              Upload rotors
+            </ButtonLink>
+            <ButtonLink href={`${home}/rotor`}>Add a rotor</ButtonLink>
+          </>
         ) : null
       }
     >
