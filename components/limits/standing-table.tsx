@@ -53,7 +53,7 @@ function Line({
   const unit = unitOf(limit.quantity, units);
   const shown = (value: number | null): number | null =>
     value === null || unit === null ? value : fromSi(value, unit);
-  const decimals = Math.max(1, decimalsFor(shown(limit.value) ?? 0, 5));
+  const decimals = Math.max(1, decimalsFor(shown(limit.value) ?? 0, 4));
   const about = `${limit.group === '' ? 'Whole aircraft' : limit.group}, ${condition.title}`;
   return (
     <tr>
@@ -67,9 +67,11 @@ function Line({
           )}
         </span>
       </RowHead>
-      <Cell>{unit === null ? '% MAC' : unitLabel(unit)}</Cell>
+      <Cell className="whitespace-nowrap">{unit === null ? '% MAC' : unitLabel(unit)}</Cell>
       <Cell side="right">
-        <span className="text-note text-ink-2">{limit.sense === 'at-most' ? 'at most' : 'at least'}</span>{' '}
+        <span className="block text-note text-ink-2">
+          {limit.sense === 'at-most' ? 'at most' : 'at least'}
+        </span>
         <Num value={shown(limit.value)} decimals={decimals} />
       </Cell>
       {[basic, margin.basic, predicted, margin.predicted].map((value, column) => (

@@ -49,13 +49,20 @@ export class GroupBreakdown {
 
   /** Level by level, by code where there is one and then by name, what is below a group after it. */
   nodes(): GroupNode[] {
-    const rank = (path: string): string => `${this.#codes.get(path) ?? '\uffff'}\u0000${path}`;
     const key = new Map(
-      [...this.#codes.keys()].map((path) => [path, pathsUp(path).reverse().map(rank)] as const),
+      [...this.#codes.keys()].map(
+        (path) =>
+          [
+            path,
+            pathsUp(path)
+              .reverse()
+              .map((one) => ({ code: this.codeOf(one), name: groupName(one) })),
+          ] as const,
+      ),
     );
     return [...this.#codes]
       .map(([path, code]) => ({ path, code }))
-      .sort((a, b) => compareKeys(key.get(a.path) ?? [], key.get(b.path) ?? []));
+      .sort((a, b) => compareLevels(key.get(a.path) ?? [], key.get(b.path) ?? []));
   }
 
   has(path: string): boolean {
@@ -107,15 +114,45 @@ export function groupName(path: string): string {
   return path.split('/').at(-1) ?? path;
 }
 
-function compareKeys(a: readonly string[], b: readonly string[]): number {
-  for (let level = 0; level < Math.min(a.length, b.length); level += 1) {
-    const [left = '', right = ''] = [a[level], b[level]];
-    if (left !== right) return left < right ? -1 : 1;
-  }
-  return a.length - b.length;
-}
-
 /** The path of a group called `name` below `above`; `above` '' makes it a top group. */
 export function joinedPath(above: string, name: string): string {
   return above === '' ? name : `${above}/${name}`;
 }
+
+interface Level {
+  readonly code: string | null;
+  readonly name: string;
+}
+
+function compareLevels(a: readonly Level[], b: readonly Level[]): number {
+  for (let level = 0; level < Math.min(a.length, b.length); level += 1) {
+    const [left, right] = [a[level], b[level]];
+    const order = left && right ? compareLevel(left, right) : 0;
+    if (order !== 0) return order;
+  }
+  return a.length - b.length;
+}
+
+/** Those with a code first; 10.2 stands before 10.10. */
+function compareLevel(a: Level, b: Level): number {
+  if (a.code !== null && b.code !== null) {
+    const order = compareCodes(a.code, b.code);
+    if (order !== 0) return order;
+  } else if (a.code !== b.code) return a.code === null ? 1 : -1;
+  return a.name < b.name ? -1 : a.name > b.name ? 1 : 0;
+}
+
+/** Runs of digits by their number, all else by its letters. */
+function compareCodes(a: string, b: string): number {
+  const [p, q] = [runsOf(a), runsOf(b)];
+  for (let at = 0; at < Math.min(p.length, q.length); at += 1) {
+    const [left = '', right = ''] = [p[at], q[at]];
+    if (left === right) continue;
+    const [m, n] = [Number(left), Number(right)];
+    if (m !== n && !Number.isNaN(m) && !Number.isNaN(n)) return m - n;
+    return left < right ? -1 : 1;
+  }
+  return p.length - q.length;
+}
+
+const runsOf = (code: string): readonly string[] => code.match(/\d+|\D+/g) ?? [];

@@ -39,6 +39,12 @@ describe('a breakdown of groups', () => {
     expect(nodes.map(({ path }) => path)).toEqual(['Zulu', 'Zulu/a', 'Zulu/b', 'Beta', 'Alpha']);
   });
 
+  it('counts in codes: 10.2 stands before 10.10', () => {
+    const codes = ['10.10', '10', '9', '10.2', 'A2', 'A10'];
+    const nodes = tree(...codes.map((code) => added(`Group ${code}`, code))).nodes();
+    expect(nodes.map(({ code }) => code)).toEqual(['9', '10', '10.2', '10.10', 'A2', 'A10']);
+  });
+
   it('reads a path that rows have said since before a rename as what it is called now, whatever is below it too', () => {
     const now = tree(...WING, moved('Wing/Nose', 'Wing/Leading edge'), moved('Wing', 'Mainplane'));
     expect(now.present('Wing/Nose')).toBe('Mainplane/Leading edge');

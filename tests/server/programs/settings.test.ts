@@ -8,7 +8,7 @@ import {
   limitsOf,
   referencePointsOf,
 } from '@/db/queries/settings';
-import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
+import { formerOfForm, frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
 import { limitInSi, limitSchema } from '@/lib/contracts/program-settings';
 import { type ProgramAction } from '@/lib/permissions';
 import { requireProgramAction } from '@/lib/server/http/access';
@@ -78,6 +78,7 @@ describe('a frame issue', () => {
       geometry: geometryOfForm(form),
       validFrom: form.valid_from,
       reason: form.reason,
+      former: formerOfForm(form),
       carryPoints: false,
     };
     await expect(issueFrame(test.db, { ...input, base: 0 })).rejects.toMatchObject({ code: 'conflict' });
@@ -98,6 +99,7 @@ describe('a frame issue', () => {
       geometry: geometryOfForm(form),
       validFrom: form.valid_from,
       reason: form.reason,
+      former: formerOfForm(form),
       carryPoints: form.carry_points,
     });
     expect(number).toBe(2);
@@ -111,7 +113,10 @@ describe('a frame issue', () => {
     expect(geometry.reference[0]).toBeCloseTo(110 * 0.0254, 14);
     expect(geometry.incidence).toBeCloseTo((-1.5 * Math.PI) / 180, 15);
     const carried = await referencePointsOf(test.db, issue.id);
-    expect(carried.map(({ code }) => code)).toEqual(['MRC']);
+    // The datum did not move, and butt lines are counted to the left now: 6.5 aft, on the plane of symmetry, 1 up.
+    expect(carried.map(({ code, place }) => [code, place.map((part) => part + 0)])).toEqual([
+      ['MRC', [6.5, 0, 1]],
+    ]);
     const issues = await test.db.selectFrom('frame_issues').select('number').orderBy('number').execute();
     expect(issues).toEqual([{ number: 1 }, { number: 2 }]);
     const kinds = (await trail()).map(({ kind }) => kind);
