@@ -15,6 +15,7 @@ import { EmptyPlace } from '@/components/ui/empty-place';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { angularMomentum, shaftsWithoutSpeed } from '@/lib/rotors/momentum';
+import { momentumUncertainty } from '@/lib/rotors/uncertainty';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { askedSystem } from '@/lib/units/choice';
@@ -145,6 +146,10 @@ export default async function RotatingPartsPage({
                 shaftsWithoutSpeed(rotors, point).length > 0
                   ? null
                   : angularMomentum(rotors, point, geometry),
+              uncertainty:
+                shaftsWithoutSpeed(rotors, point).length > 0
+                  ? null
+                  : momentumUncertainty(rotors, point, geometry),
               href: at({ point: point.code }),
             }))}
             asked={typeof asked['point'] === 'string' ? asked['point'] : null}

@@ -2,6 +2,7 @@ import { type Metadata } from 'next';
 import { limitsInForce } from '@/db/queries/settings';
 import { StandingTable } from '@/components/limits/standing-table';
 import { MaturitySection } from '@/components/mass/maturity-section';
+import { statedSigma } from '@/components/rotors/stated-sigma';
 import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
 import { standingsOf } from '@/lib/loading/configuration';
 import { keptStandings } from '@/lib/baselines/limit-members';
@@ -166,6 +167,10 @@ export default async function BaselinePage({
               title: signed.pointTitles.get(point.code) ?? point.code,
               rotors: point.rotors,
               total: point.angularMomentum,
+              sigma: statedSigma(
+                submission.result.operatingPoints.find(({ code }) => code === point.code)?.uncertainty ??
+                  null,
+              ),
             }))}
           />
         </div>
