@@ -32,6 +32,16 @@ export interface ShownCondition {
     readonly cg: Vec3 | null;
     readonly percentMac: number | null;
     readonly inertia: Moments;
+    /** kg.m2; null where it was not stored. */
+    readonly principal: Vec3 | null;
+    /** Of the predicted mass, CG and moments; null where it was not stored. */
+    readonly predicted: {
+      readonly mass: number;
+      readonly cg: Vec3 | null;
+      readonly percentMac: number | null;
+      readonly inertia: Moments;
+      readonly principal: Vec3 | null;
+    } | null;
     /** The share of the mass, 0 to 1, whose standard deviation is stated. */
     readonly massShare: number;
   } | null;
@@ -60,6 +70,7 @@ export function ConditionSheet({ condition, limits, axes, units }: ConditionShee
         predicted={predictedMass}
         unit={units.mass}
         {...(sigma === null ? {} : { sigma: sigma.mass })}
+        {...(sigma?.predicted ? { predictedSigma: sigma.predicted.mass } : {})}
       >
         {sigma === null ? null : (
           <p className="text-ink-2">
@@ -80,11 +91,15 @@ export function ConditionSheet({ condition, limits, axes, units }: ConditionShee
               {...(sigma?.percentMac ? { sigma: sigma.percentMac } : {})}
             />
           )}
-          <CgTable basic={properties} {...{ predicted, sigma, axes, units }} />
+          <CgTable
+            basic={properties}
+            predictedSigma={sigma?.predicted ?? null}
+            {...{ predicted, sigma, axes, units }}
+          />
           <TwoTensors
             basic={properties}
             predicted={predicted}
-            sigma={{ basic: sigma?.inertia ?? null, predicted: null }}
+            sigma={{ basic: sigma, predicted: sigma?.predicted ?? null }}
             unit={units.inertia}
           />
           <p>

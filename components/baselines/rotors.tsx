@@ -1,5 +1,6 @@
 import { type ReactNode } from 'react';
-import { MomentumTable, type RotorMomentum } from '@/components/mass/momentum-table';
+import { type Momentum, MomentumTable, type RotorMomentum } from '@/components/mass/momentum-table';
+import { statedSigma } from '@/components/rotors/stated-sigma';
 import { Section } from '@/components/ui/section';
 import { type PointResult } from '@/lib/loading/configuration';
 import { rpm } from '@/lib/units/convert';
@@ -19,8 +20,9 @@ export function Rotors({
     <RotorSection
       unit={unit}
       choice={choice}
-      points={(point === null ? [] : [point]).map(({ title, momentum }) => ({
+      points={(point === null ? [] : [point]).map(({ title, momentum, uncertainty }) => ({
         title,
+        sigma: statedSigma(uncertainty ?? null),
         rotors: momentum.rotors.map(({ rotor, speed, momentum: [hx, hy, hz] }) => ({
           rotor,
           rpm: rpm(speed),
@@ -37,7 +39,9 @@ export function Rotors({
 export interface ShownPoint {
   readonly title: string;
   readonly rotors: readonly RotorMomentum[];
-  readonly total: { readonly hx: number; readonly hy: number; readonly hz: number };
+  readonly total: Momentum;
+  /** One standard deviation of the sum, where one is stated. */
+  readonly sigma: Momentum | null;
 }
 
 export function RotorSection({
@@ -58,7 +62,13 @@ export function RotorSection({
       {choice}
       {points.map((point) => (
         <div key={point.title} className="keep-together">
-          <MomentumTable operatingPoint={point.title} rotors={point.rotors} total={point.total} unit={unit} />
+          <MomentumTable
+            operatingPoint={point.title}
+            rotors={point.rotors}
+            total={point.total}
+            sigma={point.sigma}
+            unit={unit}
+          />
         </div>
       ))}
     </Section>

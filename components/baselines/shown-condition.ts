@@ -1,4 +1,5 @@
 import { type ShownCondition, type ShownProperties } from '@/components/baselines/condition-sheet';
+import { tensorDeviation } from '@/components/mass/tensor-deviation';
 import { type HandoffDocument } from '@/lib/baselines/handoff-document';
 import { type ConditionResult } from '@/lib/loading/configuration';
 import { type Vec3 } from '@/lib/numerics/vec3';
@@ -19,23 +20,44 @@ export function shownOfResult(condition: StoredCondition): ShownCondition {
   };
 }
 
-function sigmaOfResult({ uncertainty }: StoredCondition): ShownCondition['sigma'] {
+function sigmaOfResult({ rollUp, uncertainty }: StoredCondition): ShownCondition['sigma'] {
   if (uncertainty === undefined) return null;
   const { mass, massShare, properties } = uncertainty.basic;
   if (properties === null || massShare === null || massShare === 0) return null;
   const { cg, percentMac, inertia } = properties;
-  return { mass, massShare, cg: [cg.x, cg.y, cg.z], percentMac, inertia };
+  return {
+    mass,
+    massShare,
+    cg: [cg.x, cg.y, cg.z],
+    percentMac,
+    inertia,
+    principal: tensorDeviation(rollUp.basic.properties, properties)?.principal ?? null,
+    predicted: predictedSigma({ rollUp, uncertainty }),
+  };
+}
+
+function predictedSigma({
+  rollUp,
+  uncertainty,
+}: Pick<StoredCondition, 'rollUp' | 'uncertainty'>): NonNullable<ShownCondition['sigma']>['predicted'] {
+  if (uncertainty === undefined) return null;
+  const { mass, properties } = uncertainty.predicted;
+  const tensor = tensorDeviation(rollUp.predicted.properties, properties);
+  if (properties === null || tensor === null) return null;
+  const { cg, percentMac } = properties;
+  return { mass, cg: [cg.x, cg.y, cg.z], percentMac, ...tensor };
 }
 
 /**
- * A condition of a signed document, with the very numbers that its digest covers. The document states the deviation of the CG in
- * m; `submitted`, the result it was made from, has it in per cent of the chord too.
+ * A condition of a signed document, with the very numbers that its digest covers. What the document does not state of the deviations, that of
+ * the CG in per cent of the chord, of the principal moments and of the predicted figures, is in `submitted`, the result it was made from.
  */
 export function shownOfDocument(
   condition: HandoffDocument['conditions'][number],
   submitted: StoredCondition | undefined,
 ): ShownCondition {
   const { title, mass, predictedMass } = condition;
+  const stored = submitted === undefined ? null : sigmaOfResult(submitted);
   return {
     title,
     mass,
@@ -47,7 +69,9 @@ export function shownOfDocument(
         ? {
             ...condition.sigma,
             cg: [condition.sigma.cg.x, condition.sigma.cg.y, condition.sigma.cg.z],
-            percentMac: submitted?.uncertainty?.basic.properties?.percentMac ?? null,
+            percentMac: stored?.percentMac ?? null,
+            principal: stored?.principal ?? null,
+            predicted: stored?.predicted ?? null,
           }
         : null,
   };

@@ -3,6 +3,7 @@ import { CgTable } from '@/components/mass/cg-table';
 import { MassFigure } from '@/components/mass/mass-figure';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
+import { tensorDeviation } from '@/components/mass/tensor-deviation';
 import { TwoTensors } from '@/components/mass/two-tensors';
 import { MassMargin } from '@/components/configurations/mass-margin';
 import { Banner } from '@/components/ui/banner';
@@ -11,7 +12,9 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { principalInclination } from '@/lib/mass/inclination';
 import { type MassProperties } from '@/lib/mass/result';
 import { type RollUp } from '@/lib/mass/roll-up';
-import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
+import { radiiSigma } from '@/lib/mass/uncertainty/derived';
+import { type MassUncertainty, type PropertiesUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
+import { type Vec3 } from '@/lib/numerics/vec3';
 import { degrees, fromSi } from '@/lib/units/convert';
 import { type OutputUnits } from '@/lib/units/names';
 
@@ -47,7 +50,7 @@ export function ConditionResultView({ rollUp, uncertainty, geometry, limits, uni
           mass={basic.mass}
           predicted={predicted.mass}
           unit={units.mass}
-          {...(stated ? { sigma: uncertainty.basic.mass } : {})}
+          {...(stated ? { sigma: uncertainty.basic.mass, predictedSigma: uncertainty.predicted.mass } : {})}
         >
           {limits.mass === null ? null : (
             <MassMargin basic={basic.mass} predicted={predicted.mass} limit={limits.mass} unit={units.mass} />
@@ -71,18 +74,18 @@ export function ConditionResultView({ rollUp, uncertainty, geometry, limits, uni
           <CgTable
             basic={properties}
             predicted={predicted.properties}
-            sigma={
-              sigma === null
-                ? null
-                : { cg: [sigma.cg.x, sigma.cg.y, sigma.cg.z], percentMac: sigma.percentMac }
-            }
+            sigma={balanceDeviation(sigma)}
+            predictedSigma={balanceDeviation(predictedSigma)}
             axes={geometry.axes}
             units={units}
           />
           <TwoTensors
             basic={properties}
             predicted={predicted.properties}
-            sigma={{ basic: sigma?.inertia ?? null, predicted: predictedSigma?.inertia ?? null }}
+            sigma={{
+              basic: tensorDeviation(properties, sigma),
+              predicted: tensorDeviation(predicted.properties, predictedSigma),
+            }}
             unit={units.inertia}
           />
           <SigmaNote share={uncertainty.basic.massShare} />
@@ -96,16 +99,28 @@ export function ConditionResultView({ rollUp, uncertainty, geometry, limits, uni
               }
             />
           </p>
-          <RadiiTable basic={properties} predicted={predicted.properties} units={units} />
+          <RadiiTable
+            basic={properties}
+            predicted={predicted.properties}
+            sigma={sigma === null ? null : radiiSigma(basic.mass, properties.inertia, sigma.covariance)}
+            units={units}
+          />
         </>
       )}
     </div>
   );
 }
 
+function balanceDeviation(sigma: PropertiesUncertainty | null) {
+  if (sigma === null) return null;
+  return { cg: [sigma.cg.x, sigma.cg.y, sigma.cg.z] as const, percentMac: sigma.percentMac };
+}
+
 interface TwoResults {
   readonly basic: MassProperties;
   readonly predicted: MassProperties | null;
+  /** One standard deviation of the basic radii, m. */
+  readonly sigma: Vec3 | null;
   readonly units: OutputUnits;
 }
 
@@ -127,17 +142,22 @@ function SigmaNote({ share }: { readonly share: number | null }) {
   );
 }
 
-function RadiiTable({ basic, predicted, units }: TwoResults) {
+function RadiiTable({ basic, predicted, sigma, units }: TwoResults) {
   const rows = [
     { name: 'Basic', radii: basic.radii },
     { name: 'Predicted', radii: predicted?.radii ?? null },
   ].flatMap(({ name, radii }) => (radii === null ? [] : [{ name, radii }]));
   if (rows.length === 0) return null;
+  const lengths = (values: readonly number[]): number[] => values.map((value) => fromSi(value, units.length));
   const decimals = sharedDecimals(
-    rows.flatMap(({ radii }) => [radii.x, radii.y, radii.z].map((value) => fromSi(value, units.length))),
-    [],
+    rows.flatMap(({ radii }) => lengths([radii.x, radii.y, radii.z])),
+    lengths(sigma ?? []),
     5,
   );
+  const deviation =
+    sigma === null
+      ? []
+      : [{ name: '± of the basic radii', radii: { x: sigma[0], y: sigma[1], z: sigma[2] } }];
   return (
     <Table caption="Radii of gyration about the body axes through the CG">
       <thead>
@@ -151,7 +171,7 @@ function RadiiTable({ basic, predicted, units }: TwoResults) {
         </tr>
       </thead>
       <tbody>
-        {rows.map(({ name, radii }) => (
+        {[...rows, ...deviation].map(({ name, radii }) => (
           <tr key={name}>
             <RowHead>{name}</RowHead>
             {[radii.x, radii.y, radii.z].map((value, index) => (

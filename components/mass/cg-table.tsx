@@ -11,23 +11,39 @@ interface Balance {
   readonly percentMac: number | null;
 }
 
+interface Deviation {
+  readonly cg: Vec3 | null;
+  readonly percentMac: number | null;
+}
+
 interface CgTableProps {
   readonly basic: Balance;
   readonly predicted: Balance | null;
-  /** One standard deviation of the basic CG, where rows state theirs. */
-  readonly sigma: { readonly cg: Vec3 | null; readonly percentMac: number | null } | null;
+  /** One standard deviation of the basic CG and of the predicted one, where rows state theirs. */
+  readonly sigma: Deviation | null;
+  readonly predictedSigma?: Deviation | null;
   /** Where the airframe's axes point. */
   readonly axes: readonly [string, string, string];
   readonly units: OutputUnits;
 }
 
 /** The CG without growth and with it, under each other. */
-export function CgTable({ basic, predicted, sigma, axes, units }: CgTableProps) {
+export function CgTable({ basic, predicted, sigma, predictedSigma = null, axes, units }: CgTableProps) {
+  const deviation = (name: string, of: Deviation | null) =>
+    of === null || of.cg === null ? [] : [{ name, cg: of.cg, percentMac: of.percentMac }];
+  const deviations = [
+    ...deviation('± of the basic CG', sigma),
+    ...(predicted === null ? [] : deviation('± of the predicted CG', predictedSigma)),
+  ];
   const rows = [
     { name: 'Basic', ...basic },
     ...(predicted === null ? [] : [{ name: 'Predicted', ...predicted }]),
   ];
-  const decimals = sharedDecimals(rows.flatMap(({ cg }) => cg.map((place) => fromSi(place, units.length))));
+  const inUnit = (of: readonly Balance[]): number[] =>
+    of.flatMap(({ cg }) => cg.map((place) => fromSi(place, units.length)));
+  const decimals = sharedDecimals(inUnit(rows), inUnit(deviations));
+  const alongChord = deviations.flatMap(({ percentMac }) => (percentMac === null ? [] : [percentMac]));
+  const percentDecimals = alongChord.some((each) => each > 0) ? sharedDecimals([], alongChord) : 2;
   return (
     <Table caption="CG in airframe axes from the datum">
       <thead>
@@ -42,17 +58,9 @@ export function CgTable({ basic, predicted, sigma, axes, units }: CgTableProps) 
         </tr>
       </thead>
       <tbody>
-        {rows.map(({ name, cg, percentMac }) => (
-          <Line key={name} {...{ name, cg, percentMac, units, decimals }} />
+        {[...rows, ...deviations].map(({ name, cg, percentMac }) => (
+          <Line key={name} {...{ name, cg, percentMac, units, decimals, percentDecimals }} />
         ))}
-        {sigma?.cg ? (
-          <Line
-            name="± of the basic CG"
-            cg={sigma.cg}
-            percentMac={sigma.percentMac}
-            {...{ units, decimals }}
-          />
-        ) : null}
       </tbody>
     </Table>
   );
@@ -62,9 +70,10 @@ interface LineProps extends Balance {
   readonly name: string;
   readonly units: OutputUnits;
   readonly decimals: number;
+  readonly percentDecimals: number;
 }
 
-function Line({ name, cg, percentMac, units, decimals }: LineProps) {
+function Line({ name, cg, percentMac, units, decimals, percentDecimals }: LineProps) {
   return (
     <tr>
       <RowHead>{name}</RowHead>
@@ -74,7 +83,7 @@ function Line({ name, cg, percentMac, units, decimals }: LineProps) {
         </Cell>
       ))}
       <Cell side="right">
-        <Num value={percentMac} decimals={2} />
+        <Num value={percentMac} decimals={percentDecimals} />
       </Cell>
     </tr>
   );

@@ -14,12 +14,22 @@ interface MassFigureProps {
   readonly predicted?: number | null;
   /** 1 sigma, kg. */
   readonly sigma?: number;
+  /** 1 sigma of the predicted mass, kg. */
+  readonly predictedSigma?: number;
   readonly unit?: MassUnit;
   readonly children?: ReactNode;
 }
 
 /** The one large number of a page: total mass, predicted beneath. */
-export function MassFigure({ label, mass, predicted, sigma, unit = 'kg', children }: MassFigureProps) {
+export function MassFigure({
+  label,
+  mass,
+  predicted,
+  sigma,
+  predictedSigma,
+  unit = 'kg',
+  children,
+}: MassFigureProps) {
   const decimals = sigma ? decimalsFor(fromSi(sigma, unit), 2) : decimalsFor(fromSi(mass, unit), 6);
   return (
     <div className="grid content-start gap-1">
@@ -36,6 +46,12 @@ export function MassFigure({ label, mass, predicted, sigma, unit = 'kg', childre
       {predicted === undefined || predicted === null ? null : (
         <p className="text-lead">
           <Num value={predicted} unit={unit} decimals={decimals} /> {unitLabel(unit)} predicted, with growth
+          {predictedSigma ? (
+            <span className="text-ink-2">
+              {' '}
+              ± <Num value={predictedSigma} unit={unit} decimals={decimals} />
+            </span>
+          ) : null}
         </p>
       )}
       {children}

@@ -22,19 +22,28 @@ interface MomentumTableProps {
   readonly operatingPoint: string;
   readonly rotors: readonly RotorMomentum[];
   readonly total: Momentum;
+  /** One standard deviation of the sum; null where no rotor and no shaft states one. */
+  readonly sigma?: Momentum | null;
   readonly unit?: AngularMomentumUnit;
 }
 
 const COMPONENTS = ['hx', 'hy', 'hz'] as const;
 
 /** Angular momentum of each rotor at one operating point, and their sum. */
-export function MomentumTable({ operatingPoint, rotors, total, unit = 'kg.m2/s' }: MomentumTableProps) {
-  const all = [...rotors, total].flatMap((row) => COMPONENTS.map((name) => fromSi(row[name], unit)));
-  const decimals = sharedDecimals(all);
-  const numbers = (row: Momentum) =>
+export function MomentumTable({
+  operatingPoint,
+  rotors,
+  total,
+  sigma = null,
+  unit = 'kg.m2/s',
+}: MomentumTableProps) {
+  const inUnit = (rows: readonly Momentum[]): number[] =>
+    rows.flatMap((row) => COMPONENTS.map((name) => fromSi(row[name], unit)));
+  const decimals = sharedDecimals(inUnit([...rotors, total]), inUnit(sigma === null ? [] : [sigma]));
+  const numbers = (row: Momentum, plus = true) =>
     COMPONENTS.map((name) => (
       <Cell key={name} side="right">
-        <Num value={row[name]} unit={unit} decimals={decimals} plus />
+        <Num value={row[name]} unit={unit} decimals={decimals} plus={plus} />
       </Cell>
     ));
   return (
@@ -69,6 +78,13 @@ export function MomentumTable({ operatingPoint, rotors, total, unit = 'kg.m2/s' 
           <Cell />
           {numbers(total)}
         </tr>
+        {sigma === null ? null : (
+          <tr>
+            <RowHead>± of all rotors</RowHead>
+            <Cell />
+            {numbers(sigma, false)}
+          </tr>
+        )}
       </tfoot>
     </Table>
   );

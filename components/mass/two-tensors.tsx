@@ -10,55 +10,47 @@ interface Tensor {
   readonly principal: { readonly moments: Vec3; readonly axes: readonly [Vec3, Vec3, Vec3] };
 }
 
+/** One standard deviation of each, kg.m2; `principal` is null where it was not stored. */
+export interface Deviation {
+  readonly inertia: Moments;
+  readonly principal: Vec3 | null;
+}
+
 interface TwoTensorsProps {
   readonly basic: Tensor;
   readonly predicted: Tensor | null;
-  readonly sigma: { readonly basic: Moments | null; readonly predicted: Moments | null };
+  readonly sigma: { readonly basic: Deviation | null; readonly predicted: Deviation | null };
   readonly unit: InertiaUnit;
 }
 
-/** The tensor without growth beside the one with it: each about its own CG. On paper too. */
+/** The tensor without growth beside the one with it, each about its own CG, and their principal axes. On paper too. */
 export function TwoTensors({ basic, predicted, sigma, unit }: TwoTensorsProps) {
+  const both = [
+    { name: 'Basic', tensor: basic, deviation: sigma.basic },
+    ...(predicted === null ? [] : [{ name: 'Predicted', tensor: predicted, deviation: sigma.predicted }]),
+  ];
   return (
-    <div className="grid items-start gap-x-6 gap-y-4 2xl:grid-cols-2">
-      <Plate
-        title="Basic inertia about the basic CG, body axes"
-        tensor={basic}
-        sigma={sigma.basic}
-        unit={unit}
-      />
-      {predicted === null ? null : (
-        <Plate
-          title="Predicted inertia about the predicted CG, body axes"
-          tensor={predicted}
-          sigma={sigma.predicted}
+    <div className="grid items-start gap-x-6 gap-y-4 xl:grid-cols-2">
+      {both.map(({ name, tensor, deviation }) => (
+        <TensorPlate
+          key={name}
+          moments={tensor.inertia}
           unit={unit}
+          title={`${name} inertia about the ${name.toLowerCase()} CG, body axes`}
+          {...(deviation === null ? {} : { sigma: deviation.inertia })}
         />
-      )}
-    </div>
-  );
-}
-
-function Plate({
-  title,
-  tensor,
-  sigma,
-  unit,
-}: {
-  readonly title: string;
-  readonly tensor: Tensor;
-  readonly sigma: Moments | null;
-  readonly unit: InertiaUnit;
-}) {
-  return (
-    <div className="grid min-w-0 content-start gap-4">
-      <TensorPlate
-        moments={tensor.inertia}
-        unit={unit}
-        title={title}
-        {...(sigma === null ? {} : { sigma })}
-      />
-      <PrincipalTable moments={tensor.principal.moments} axes={tensor.principal.axes} unit={unit} />
+      ))}
+      {both.map(({ name, tensor, deviation }) => (
+        <div key={name} className="col-span-full min-w-0">
+          <PrincipalTable
+            of={name}
+            moments={tensor.principal.moments}
+            axes={tensor.principal.axes}
+            sigma={deviation?.principal ?? null}
+            unit={unit}
+          />
+        </div>
+      ))}
     </div>
   );
 }

@@ -4,6 +4,8 @@ import { MomentumSummary } from '@/components/rotors/momentum-summary';
 import { classes } from '@/components/ui/classes';
 import { type AngularMomentum } from '@/lib/rotors/momentum';
 import { rpm } from '@/lib/units/convert';
+import { statedSigma } from '@/components/rotors/stated-sigma';
+import { type MomentumUncertainty } from '@/lib/rotors/uncertainty';
 import { type AngularMomentumUnit } from '@/lib/units/table';
 
 export interface PointOnPage {
@@ -11,6 +13,8 @@ export interface PointOnPage {
   readonly title: string;
   /** Null where a shaft has no speed. */
   readonly momentum: AngularMomentum | null;
+  /** Absent in results that were stored before it was kept. */
+  readonly uncertainty?: MomentumUncertainty | null;
   readonly href: string;
 }
 
@@ -44,6 +48,7 @@ export function MomentumByPoint({ points, asked, unit, stacked = false }: Moment
               ...named(part.momentum),
             }))}
             total={named(momentum.total)}
+            sigma={statedSigma(shown.uncertainty ?? null)}
             unit={unit}
           />
           <GyroPlate matrix={momentum.gyroMatrix} unit={unit} of={shown.title} />
