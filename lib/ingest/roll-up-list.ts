@@ -1,7 +1,7 @@
 import { type Finding } from '@/lib/findings/finding';
 import { bySeverity, findingsOnWhole, RowChecks } from '@/lib/findings/look';
-import { readMassList } from '@/lib/ingest/mass-list';
 import { type Problem } from '@/lib/ingest/problem';
+import { readMassListBlocks } from '@/lib/ingest/read-blocks';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type RollUp } from '@/lib/mass/roll-up';
@@ -30,10 +30,10 @@ export async function rollUpList(
 ): Promise<ListRollUp | WrongList> {
   const sum = new StatelessRollUp(declarations);
   const checks = new RowChecks(declarations);
-  const { problems, problemCounts } = await readMassList(bytes, declarations, {
-    onComponent(component) {
-      sum.add(component);
-      checks.see(component);
+  const { problems, problemCounts } = await readMassListBlocks(bytes, declarations, {
+    onBlock(block) {
+      sum.addRows(block);
+      for (let row = 0; row < block.rows; row += 1) checks.see(block.component(row));
     },
   });
   if (problems.length > 0) return { problems, problemCounts };
