@@ -84,12 +84,12 @@ export function lastSubmissionOf(db: Db, configurationId: string) {
 }
 
 /** What a roll-up of these list revisions leaves out: adjustments that are not approved. */
-export async function leftOutOf(db: Db, revisionIds: readonly string[], frameIssueId: string) {
+export async function leftOutOf(db: Db, revisionIds: readonly string[]) {
   const { rows } = await sql<{ list: string; status: 'pending' | 'potential'; rows: number; mass: number }>`
     select l.code as list, s.status, sum(s.rows)::integer as rows, sum(s.basic[1])::float8 as mass
     from list_revisions r
       join lists l on l.id = r.list_id
-      join revision_subtotals s on s.revision_id = r.id and s.frame_issue_id = ${frameIssueId}
+      join revision_subtotals s on s.revision_id = r.id and s.frame_issue_id = r.frame_issue_id
     where r.id = any(${revisionIds}) and s.status <> 'approved'
     group by l.code, s.status order by l.code, s.status
   `.execute(db);

@@ -79,6 +79,7 @@ export function revisionsOfSubmission(db: Db, submissionId: string) {
       'list_revisions.id as revision_id',
       'list_revisions.number',
       'list_revisions.rows',
+      'list_revisions.frame_issue_id',
       'list_revisions.declarations',
       'list_revisions.marking',
       'list_revisions.content_sha256',

@@ -6,11 +6,13 @@ import {
   type RollUpsTable,
 } from '@/db/schema/configurations';
 import { groupBreakdownOf, growthAllowancesOf } from '@/db/queries/settings';
+import { type RevisionSubtotalsTable } from '@/db/schema/lists';
 import { fromNumbers } from '@/lib/mass/account';
 import { type GrowthAllowances, NO_GROWTH } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
 import { type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
 import { fromNumbers as uncertaintyFrom } from '@/lib/mass/uncertainty/sums';
+import { framesWithIssue } from './program-frames';
 
 export type Configuration = Selectable<ConfigurationsTable>;
 export type RotorRevision = Selectable<RotorRevisionsTable>;
@@ -76,7 +78,7 @@ export function pinnedRevisions(db: Db, configurationId: string) {
       'lists.id as list_id',
       'lists.code as list_code',
       'lists.title as list_title',
-      'lists.frame_issue_id',
+      'list_revisions.frame_issue_id',
       'lists.last_revision as newest',
       'list_revisions.id as revision_id',
       'list_revisions.number',
@@ -93,48 +95,70 @@ export function pinnedRevisions(db: Db, configurationId: string) {
     .execute();
 }
 
-/** The subtotals of some list revisions about the reference point of a frame issue. */
+/**
+ * The subtotals of some list revisions about the reference point of a frame issue. Each is stored in the issue that its revision is
+ * stated in, and converted where that is another.
+ * @throws RangeError where it is not known how the issues lie against each other.
+ */
 export async function subtotalsOf(
   db: Db,
   revisionIds: readonly string[],
   frameIssueId: string,
-): Promise<(Subtotal & { readonly revisionId: string; readonly uncertainty: UncertaintySubtotal })[]> {
+): Promise<StoredSubtotal[]> {
   if (revisionIds.length === 0) return [];
   const rows = await db
     .selectFrom('revision_subtotals')
-    .selectAll()
+    .innerJoin('list_revisions', (join) =>
+      join
+        .onRef('list_revisions.id', '=', 'revision_subtotals.revision_id')
+        .onRef('list_revisions.frame_issue_id', '=', 'revision_subtotals.frame_issue_id'),
+    )
+    .selectAll('revision_subtotals')
     .where('revision_id', 'in', revisionIds)
-    .where('frame_issue_id', '=', frameIssueId)
     .orderBy('revision_id')
     .orderBy('group_path')
     .orderBy('category')
     .orderBy('maturity')
     .orderBy('status')
     .execute();
+  const isElsewhere = rows.some((row) => row.frame_issue_id !== frameIssueId);
+  const frames = isElsewhere ? await framesWithIssue(db, frameIssueId) : null;
   return rows.map((row) => {
-    const key = {
-      group: row.group_path,
-      category: row.category,
-      maturity: row.maturity === '' ? null : row.maturity,
-      status: row.status,
-    };
+    const part = subtotalOf(row);
+    if (frames === null || row.frame_issue_id === frameIssueId) return part;
+    const conversion = frames.conversion(row.frame_issue_id, frameIssueId);
     return {
-      revisionId: row.revision_id,
-      ...key,
-      rows: row.rows,
-      pieces: row.pieces,
-      memoRows: row.memo_rows,
-      basic: fromNumbers(row.basic),
-      statedPredicted: fromNumbers(row.stated_predicted),
-      unstatedBasic: fromNumbers(row.unstated_basic),
-      uncertainty: {
-        ...key,
-        basic: uncertaintyFrom(row.basic_uncertainty),
-        statedPredicted: uncertaintyFrom(row.stated_predicted_uncertainty),
-        unstatedBasic: uncertaintyFrom(row.unstated_basic_uncertainty),
-      },
+      ...conversion.subtotal(part),
+      uncertainty: conversion.uncertaintySubtotal(part.uncertainty),
     };
   });
+}
+
+type StoredSubtotal = Subtotal & { readonly revisionId: string; readonly uncertainty: UncertaintySubtotal };
+
+function subtotalOf(row: Selectable<RevisionSubtotalsTable>): StoredSubtotal {
+  const key = {
+    group: row.group_path,
+    category: row.category,
+    maturity: row.maturity === '' ? null : row.maturity,
+    status: row.status,
+  };
+  return {
+    revisionId: row.revision_id,
+    ...key,
+    rows: row.rows,
+    pieces: row.pieces,
+    memoRows: row.memo_rows,
+    basic: fromNumbers(row.basic),
+    statedPredicted: fromNumbers(row.stated_predicted),
+    unstatedBasic: fromNumbers(row.unstated_basic),
+    uncertainty: {
+      ...key,
+      basic: uncertaintyFrom(row.basic_uncertainty),
+      statedPredicted: uncertaintyFrom(row.stated_predicted_uncertainty),
+      unstatedBasic: uncertaintyFrom(row.unstated_basic_uncertainty),
+    },
+  };
 }
 
 /** The conditions of a configuration in their order, each with its items. */

@@ -4,16 +4,20 @@ import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type RowChange, type RowFigures } from '@/lib/findings/context';
 import { type Subtotal } from '@/lib/mass/subtotals';
 import { subtotalsOf } from './configurations';
+import { framesWithIssue } from './program-frames';
 import { type RowRange } from './revision-rows';
 
-/** What a new revision is held against: the newest one so far, its declarations and its subtotals. */
+/** What a new revision is held against: the newest one so far, its declarations and its subtotals, both in the issue of the new one. */
 export interface FormerRevision {
   readonly id: string;
   readonly declarations: ListDeclarations;
   readonly subtotals: readonly Subtotal[];
 }
 
-/** Null for the first revision of a list. */
+/**
+ * Null for the first revision of a list, and where nobody knows how the issue that the former one is stated in lies against that of
+ * the new one.
+ */
 export async function formerRevision(
   db: Db,
   listId: string,
@@ -21,13 +25,22 @@ export async function formerRevision(
 ): Promise<FormerRevision | null> {
   const found = await db
     .selectFrom('list_revisions')
-    .select(['id', 'declarations'])
+    .select(['id', 'declarations', 'frame_issue_id'])
     .where('list_id', '=', listId)
     .orderBy('number', 'desc')
     .limit(1)
     .executeTakeFirst();
   if (found === undefined) return null;
-  return { ...found, subtotals: await subtotalsOf(db, [found.id], frameIssueId) };
+  const { id, declarations, frame_issue_id: issueId } = found;
+  if (issueId === frameIssueId)
+    return { id, declarations, subtotals: await subtotalsOf(db, [id], frameIssueId) };
+  const conversion = (await framesWithIssue(db, frameIssueId)).between(issueId, frameIssueId);
+  if (conversion === null) return null;
+  return {
+    id,
+    declarations: conversion.declarations(declarations),
+    subtotals: await subtotalsOf(db, [id], frameIssueId),
+  };
 }
 
 /** Places of two revisions are compared only where both are stated in one frame. */

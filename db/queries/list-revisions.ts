@@ -1,7 +1,7 @@
 import { type Db } from '@/db/client';
 
-/** Every revision of every list of a program that lies in a frame issue: lists by code, the newest revision of each first. */
-export function revisionsInFrame(db: Db, programId: string, frameIssueId: string) {
+/** Every revision of every list of a program: lists by code, the newest revision of each first. */
+export function revisionsOfProgram(db: Db, programId: string) {
   return db
     .selectFrom('list_revisions')
     .innerJoin('lists', 'lists.id', 'list_revisions.list_id')
@@ -9,12 +9,12 @@ export function revisionsInFrame(db: Db, programId: string, frameIssueId: string
       'lists.code as list_code',
       'lists.title as list_title',
       'list_revisions.number',
+      'list_revisions.frame_issue_id',
       'list_revisions.reason',
       'list_revisions.rows',
       'list_revisions.created_at',
     ])
     .where('lists.program_id', '=', programId)
-    .where('lists.frame_issue_id', '=', frameIssueId)
     .orderBy('lists.code')
     .orderBy('list_revisions.number', 'desc')
     .execute();

@@ -142,7 +142,7 @@ export async function groupsInLists(
     .innerJoin('revision_subtotals', (join) =>
       join
         .onRef('revision_subtotals.revision_id', '=', 'list_revisions.id')
-        .onRef('revision_subtotals.frame_issue_id', '=', 'lists.frame_issue_id'),
+        .onRef('revision_subtotals.frame_issue_id', '=', 'list_revisions.frame_issue_id'),
     )
     .select((eb) => [
       'lists.code as list',

@@ -18,7 +18,9 @@ export interface AuditDetails {
   'member.added': { email: string; role: string };
   'member.role-changed': { email: string; from: string; to: string };
   'member.removed': { email: string; role: string };
-  'frame.issued': { number: number; title: string; reason: string };
+  /** `former`: how the issue before lies in this one, in words; absent for the first and in events of old. */
+  'frame.issued': { number: number; title: string; reason: string; former?: string };
+  'frame.related': { number: number; former: string };
   'reference-point.added': { code: string; frameIssue: number };
   'build.added': { code: string; kind: string };
   'limit.set': LimitWords & {
@@ -38,8 +40,10 @@ export interface AuditDetails {
   'list.mapped': { list: string; file: string; mapping: string; headingsSha256: string };
   'upload.kept': { list: string; file: string; sha256: string };
   'upload.dropped': { list: string; file: string };
+  'list.carried': { list: string; from: number; to: number; revision: number | null; reason: string };
   'import.requested': { list: string; file: string; sha256: string };
   'import.failed': { list: string; file: string; problems: number };
+  'import.cancelled': { list: string; file: string };
   'list.revised': {
     list: string;
     number: number;

@@ -9,6 +9,13 @@ interface KindWords<K extends AuditKind> {
 
 const role = (code: string): string =>
   (code in ROLE_NAMES ? ROLE_NAMES[code as keyof typeof ROLE_NAMES] : code).toLowerCase();
+/** What each origin of a revision is made by. */
+const MADE_BY: Readonly<Record<string, string>> = {
+  file: 'a file',
+  edit: 'edits',
+  restored: 'bringing an old one back',
+};
+
 const short = (hash: string): string => hash.replace('sha256:', '').slice(0, 12);
 const rows = (count: number): string => (count === 1 ? '1 row' : `${count} rows`);
 const LIMITS: Readonly<Record<string, string>> = {
@@ -81,7 +88,12 @@ const WORDS: { readonly [K in AuditKind]: KindWords<K> } = {
   },
   'frame.issued': {
     name: 'Frame issued',
-    say: ({ number, title, reason }) => `Issued frame ${number}, ${title}: ${reason}`,
+    say: ({ number, title, reason, former }) =>
+      `Issued frame ${number}, ${title}: ${reason}${former === undefined ? '' : ` Frame ${number - 1} lies in it with ${former}`}`,
+  },
+  'frame.related': {
+    name: 'Frame related',
+    say: ({ number, former }) => `Said how frame ${number - 1} lies in frame ${number}: ${former}`,
   },
   'reference-point.added': {
     name: 'Reference point added',
@@ -131,6 +143,11 @@ const WORDS: { readonly [K in AuditKind]: KindWords<K> } = {
     name: 'File dropped',
     say: ({ list, file }) => `Dropped ${file}, which waited for a mapping into list ${list}`,
   },
+  'list.carried': {
+    name: 'List carried',
+    say: ({ list, from, to, revision, reason }) =>
+      `Carried list ${list} from frame issue ${from} to ${to}${revision === null ? '' : `, as revision ${revision}`}: ${reason}`,
+  },
   'import.requested': {
     name: 'File uploaded',
     say: ({ list, file, sha256 }) => `Uploaded ${file} for list ${list}, SHA-256 ${short(sha256)}`,
@@ -140,10 +157,14 @@ const WORDS: { readonly [K in AuditKind]: KindWords<K> } = {
     say: ({ list, file, problems }) =>
       `${file} for list ${list} was refused: ${problems === 1 ? '1 problem' : `${problems} problems`}`,
   },
+  'import.cancelled': {
+    name: 'Import cancelled',
+    say: ({ list, file }) => `Called off the import of ${file} into list ${list}`,
+  },
   'list.revised': {
     name: 'List revised',
     say: ({ list, number, origin, reason, rows: count, contentSha256 }) =>
-      `Made revision ${number} of list ${list} by ${origin === 'edit' ? 'edits' : 'a file'}, ${rows(count)}, content ${short(contentSha256)}: ${reason}`,
+      `Made revision ${number} of list ${list} by ${MADE_BY[origin] ?? origin}, ${rows(count)}, content ${short(contentSha256)}: ${reason}`,
   },
   'rotors.revised': {
     name: 'Rotating parts revised',

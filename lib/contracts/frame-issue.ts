@@ -1,13 +1,48 @@
 import { z } from 'zod';
 import { type AxisTriple, axesProblem, DIRECTIONS } from '@/lib/frames/axes';
 import { quarterChord } from '@/lib/frames/chord';
+import { type Pose } from '@/lib/frames/pose';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { radians, toSi } from '@/lib/units/convert';
-import { LENGTH_UNITS } from '@/lib/units/table';
+import { LENGTH_UNITS, type LengthUnit } from '@/lib/units/table';
 import { reasonSchema, titleSchema } from './codes';
 import { blankOr, dateField, numberField, positiveField, tickField, wholeField } from './form-fields';
 
 const direction = z.enum(DIRECTIONS, 'Choose where this axis points.');
+
+const turn = blankOr(
+  numberField.refine((value) => Math.abs(value) <= 180, 'It must be between -180 and 180 degrees.'),
+);
+
+/** How the frame of the issue before lies in an issue, as the forms send it; nothing is zero. */
+const formerFields = {
+  former_x: blankOr(numberField),
+  former_y: blankOr(numberField),
+  former_z: blankOr(numberField),
+  former_yaw: turn,
+  former_pitch: turn,
+  former_roll: turn,
+};
+
+type FormerFields = z.output<z.ZodObject<typeof formerFields>> & { readonly length_unit: LengthUnit };
+
+/** The pose of the former frame that a form states, m and rad. */
+export function formerOfForm(form: FormerFields): Pose {
+  const metres = (value: number | null): number => toSi(value ?? 0, form.length_unit);
+  return {
+    origin: [metres(form.former_x), metres(form.former_y), metres(form.former_z)],
+    yaw: radians(form.former_yaw ?? 0),
+    pitch: radians(form.former_pitch ?? 0),
+    roll: radians(form.former_roll ?? 0),
+  };
+}
+
+/** Says how the issue before an issue lies in it, where that was not stated. */
+export const formerFrameSchema = z.object({
+  number: wholeField(2),
+  length_unit: z.enum(LENGTH_UNITS),
+  ...formerFields,
+});
 
 /** A frame issue as its form sends it: lengths in `length_unit`, the incidence in degrees. */
 export const frameIssueSchema = z
@@ -30,6 +65,7 @@ export const frameIssueSchema = z
     reference_x: blankOr(numberField),
     reference_y: blankOr(numberField),
     reference_z: blankOr(numberField),
+    ...formerFields,
     valid_from: dateField,
     reason: reasonSchema,
     carry_points: tickField,

@@ -1,3 +1,4 @@
+import { carriedPose } from '@/lib/frames/carry';
 import { type IssueChange, NO_CHANGE, changedPlace, changedPlaceFrom } from '@/lib/frames/issue-change';
 import { type AirframeTwice } from '@/lib/frames/pose';
 import { type AirframeVec } from '@/lib/frames/tags';
@@ -6,6 +7,7 @@ import { propagate } from '@/lib/numerics/propagate';
 import { type Twice, addTwice, timesTwice } from '@/lib/numerics/twice';
 
 import { type Account, fromNumbers, toNumbers } from './account';
+import { type ListDeclarations } from './declarations';
 import { type AirframeGeometry } from './geometry';
 import { type Subtotal } from './subtotals';
 import { type UncertaintySubtotal } from './uncertainty/book';
@@ -90,9 +92,22 @@ export class IssueConversion {
     );
   }
 
+  /** Both are the same issue, and nothing is converted. */
+  get isSame(): boolean {
+    return this.from === this.to;
+  }
+
   /** A place from the datum, m. */
   place(place: AirframeVec): AirframeVec {
     return changedPlace(this.change, place);
+  }
+
+  /** What a list declares, its frame staying where it is on the aircraft: of rows that stand for no mirror image the same. */
+  declarations(declared: ListDeclarations): ListDeclarations {
+    const { axes, pose } = declared;
+    return this.isSame
+      ? declared
+      : { ...declared, pose: carriedPose(axes, pose, this.change, this.from.axes, this.to.axes) };
   }
 
   /** From an account about the reference point of the one issue to that of the same bodies about the other's. */

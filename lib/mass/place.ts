@@ -1,11 +1,12 @@
 import { type AirframeTwice, exactPlaceFrom, listToAirframe, placeFrom } from '@/lib/frames/pose';
 import { tensorOf } from '@/lib/frames/products';
-import { lateralIndex, mirrorSym } from '@/lib/frames/reflection';
+import { lateralIndex, mirrorPlace, mirrorSym } from '@/lib/frames/reflection';
 import { type AirframeVec } from '@/lib/frames/tags';
 import { type Mat3, multiply } from '@/lib/numerics/mat3';
 import { rotation } from '@/lib/numerics/rotation';
 import { ZERO_SYM, congruence, halfTraceMinus } from '@/lib/numerics/sym3';
 import { type Twice, addTwice, minusTwice, timesTwice } from '@/lib/numerics/twice';
+import { addVec } from '@/lib/numerics/vec3';
 
 import { type Account, accountAt, addAccounts, scaleAccount } from './account';
 import { type Component } from './component';
@@ -47,6 +48,14 @@ export class Placement {
   place(component: Pick<Component, 'position'>): AirframeVec {
     const { reference } = this.geometry;
     return placeFrom(reference, this.toAirframe, this.declarations.pose.origin, component.position);
+  }
+
+  /** Where a row's pieces are, from the datum, m: as listed, then their mirror image where the row stands for one too. */
+  places(component: Pick<Component, 'position' | 'pair'>): readonly AirframeVec[] {
+    const { geometry, declarations, lateral } = this;
+    const listed: AirframeVec = addVec(geometry.reference, this.place(component));
+    if (!isMirrored(component, declarations)) return [listed];
+    return [listed, mirrorPlace(listed, lateral, geometry.lateralPlane)];
   }
 
   /** Lateral coordinate, from r0, of the plane of symmetry, m. */

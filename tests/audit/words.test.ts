@@ -20,6 +20,8 @@ const EVENTS: { readonly [K in AuditKind]: AuditDetails[K] } = {
   'member.role-changed': { email: 'a@skerry.example', from: 'chief', to: 'weights' },
   'member.removed': { email: 'a@skerry.example', role: 'simulation' },
   'frame.issued': { number: 2, title: 'Datum moved', reason: 'longer nose' },
+  'frame.related': { number: 2, former: 'its datum at 2.5, 0, 0 m' },
+  'list.carried': { list: 'wing', from: 1, to: 2, revision: 4, reason: 'carried' },
   'reference-point.added': { code: 'MRC', frameIssue: 1 },
   'build.added': { code: 'design', kind: 'design' },
   'limit.set': {
@@ -42,6 +44,7 @@ const EVENTS: { readonly [K in AuditKind]: AuditDetails[K] } = {
   'upload.dropped': { list: 'wing', file: 'nacelle.csv' },
   'import.requested': { list: 'wing', file: 'wing.csv', sha256: 'ab'.repeat(32) },
   'import.failed': { list: 'wing', file: 'wing.csv', problems: 1 },
+  'import.cancelled': { list: 'wing', file: 'wing.csv' },
   'list.revised': {
     list: 'wing',
     number: 3,

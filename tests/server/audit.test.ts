@@ -12,11 +12,14 @@ import { returnSubmission } from '@/lib/server/baselines/return-submission';
 import { signSubmission } from '@/lib/server/baselines/sign-submission';
 import { submitConfiguration } from '@/lib/server/baselines/submit-configuration';
 import { withdrawBaseline } from '@/lib/server/baselines/withdraw-baseline';
+import { NO_POSE } from '@/lib/frames/pose';
+import { chooseFrame } from '@/lib/server/configurations/choose-frame';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
 import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
 import { rollUpConfiguration } from '@/lib/server/configurations/roll-up-configuration';
 import { removeCondition, saveCondition } from '@/lib/server/configurations/save-condition';
 import { saveList } from '@/lib/server/lists/save-list';
+import { issueFrame } from '@/lib/server/programs/issue-frame';
 import { reviseRotors } from '@/lib/server/rotors/revise-rotors';
 import { type ProgramUnderTest, programUnderTest, reviseList } from '@/tests/support/program';
 
@@ -157,6 +160,29 @@ const STEPS: Readonly<Record<string, (db: Db) => Promise<unknown>>> = {
       points: [],
       file: { sha256: 'a'.repeat(64), bytes: 1, name: 'rotors.csv' },
     }),
+  'issue a frame': (db) =>
+    issueFrame(db, {
+      person: test.crew.chief,
+      programId: test.program.id,
+      base: 1,
+      title: 'Second',
+      geometry: {
+        axes: ['aft', 'right', 'up'],
+        lateralPlane: 0,
+        incidence: 0,
+        reference: [9, 0, 1],
+        lemac: [8.5, 0, 1],
+        mac: 2,
+        span: 18,
+        length: 15,
+      },
+      former: { ...NO_POSE, origin: [2.5, 0, 0] },
+      validFrom: '2026-02-01',
+      reason: 'datum moved',
+      carryPoints: true,
+    }),
+  'put a configuration into another frame issue': async (db) =>
+    chooseFrame(db, { ...(await change('three')), frameIssue: 2 }),
   submit: (db) => submit(db, 'three'),
   sign: (db) => signSubmission(db, { person: test.crew.chief, program: test.program, submissionId }),
   return: (db) =>
@@ -176,7 +202,10 @@ async function everything(): Promise<string> {
     'configuration_lists',
     'configurations',
     'decisions',
+    'frame_issues',
+    'frame_steps',
     'lists',
+    'reference_points',
     'roll_ups',
     'rotor_revisions',
     'stored_files',
@@ -218,7 +247,7 @@ describe.each(Object.keys(STEPS))('to %s', (name) => {
       .where('scope', '=', test.program.id)
       .limit(1)
       .executeTakeFirstOrThrow();
-    expect(last.kind).toMatch(/^(configuration|list|rotors|baseline)\./);
+    expect(last.kind).toMatch(/^(configuration|frame|list|rotors|baseline)\./);
     if (name === 'sign') submissionId = await waitingSubmission();
   });
 });

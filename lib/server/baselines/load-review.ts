@@ -41,7 +41,6 @@ export async function loadReview(
     leftOutOf(
       db,
       revisions.map((revision) => revision.revision_id),
-      submission.frame_issue_id,
     ),
     revisionPairs(db, former?.submission_id ?? null, submissionId).then((pairs) => countPairs(db, pairs)),
   ]);

@@ -1,6 +1,6 @@
 import { sql } from 'kysely';
 import { type Db } from '@/db/client';
-import { currentFrameIssue } from '@/db/queries/frames';
+import { programFrames } from '@/db/queries/program-frames';
 import { AppError } from '@/lib/errors';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
@@ -12,21 +12,32 @@ export interface CreateConfiguration {
   readonly buildCode: string;
   readonly code: string;
   readonly title: string;
+  /** Number of the frame issue that it stands in; the one in force where none is named. */
+  readonly frameIssue?: number;
 }
 
 /**
- * A new configuration of a build in the frame issue in force: it pins the newest revision of every components list of the
- * program and the newest rotating parts, and has one condition, the empty aircraft.
- * @throws AppError conflict without a frame issue or when the code is taken, not-found for an unknown build.
+ * A new configuration of a build in a frame issue: it pins the newest revision of every components list of the program and the newest
+ * rotating parts, and has one condition, the empty aircraft. What is stated in another issue is converted at each roll-up; what
+ * nobody knows how to convert is left out.
+ * @throws AppError conflict without a frame issue or when the code is taken, not-found for an unknown build or issue.
  */
 export async function createConfiguration(db: Db, input: CreateConfiguration): Promise<string> {
   return db.transaction().execute(async (trx) => {
-    const issue = await currentFrameIssue(trx, input.programId);
-    if (issue === undefined)
+    const frames = await programFrames(trx, input.programId);
+    const [newest] = frames.issues;
+    if (newest === undefined)
       throw new AppError(
         'conflict',
         'The program has no airframe frame yet. A chief engineer issues it in the settings.',
       );
+    const issue =
+      input.frameIssue === undefined
+        ? newest
+        : frames.issues.find(({ number }) => number === input.frameIssue);
+    if (issue === undefined)
+      throw new AppError('not-found', `The program has no frame issue ${input.frameIssue}.`);
+    const within = frames.issues.filter(({ id }) => frames.gap(id, issue.id) === null).map(({ id }) => id);
     const build = await trx
       .selectFrom('builds')
       .select(['id', 'code'])
@@ -39,6 +50,7 @@ export async function createConfiguration(db: Db, input: CreateConfiguration): P
       .selectFrom('rotor_revisions')
       .select('id')
       .where('program_id', '=', input.programId)
+      .where((eb) => eb.or([eb('frame_issue_id', 'is', null), eb('frame_issue_id', 'in', within)]))
       .orderBy('number', 'desc')
       .limit(1)
       .executeTakeFirst();
@@ -82,7 +94,7 @@ export async function createConfiguration(db: Db, input: CreateConfiguration): P
             'list_revisions.id as revision_id',
           ])
           .where('lists.program_id', '=', input.programId)
-          .where('lists.frame_issue_id', '=', issue.id)
+          .where('list_revisions.frame_issue_id', 'in', within)
           // Adjustments are changes against something; a person chooses which configuration they belong to.
           .where(sql<string>`list_revisions.declarations ->> 'kind'`, '=', 'components'),
       )

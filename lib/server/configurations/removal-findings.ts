@@ -4,14 +4,16 @@ import { type PlacedFinding } from '@/lib/findings/finding';
 import { type BookedRow, type Removal } from '@/lib/findings/removals/removal';
 import { findingsOnRemovals } from '@/lib/findings/removals/rules';
 import { type Maturity } from '@/lib/mass/component';
-import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { Placement } from '@/lib/mass/place';
+import { placementIn } from '@/lib/mass/converted-placement';
+import { type IssueConversion } from '@/lib/mass/issue-conversion';
+import { type Placement } from '@/lib/mass/place';
 import { normVec, subVec } from '@/lib/numerics/vec3';
 
 interface Pin {
   readonly list_code: string;
   readonly number: number;
   readonly revision_id: string;
+  readonly frame_issue_id: string;
 }
 
 interface Placed {
@@ -23,15 +25,15 @@ interface Placed {
 /**
  * Findings on the approved removals of a configuration's lists of adjustments, each against the row of its item or part number that is
  * nearest to it in the lists of components. Reads the removals and the rows that they may mean, and no other.
- * `growthOf` is the allowance for rows that state no growth.
+ * `conversionFrom` leads from a list's frame issue to the configuration's; `growthOf` is the allowance for rows that state no growth.
  */
 export async function removalFindings(
   db: Db,
   pins: readonly Pin[],
-  geometry: AirframeGeometry,
+  conversionFrom: (frameIssueId: string) => IssueConversion,
   growthOf: (group: string, maturity: Maturity | null) => number,
 ): Promise<PlacedFinding[]> {
-  const lists = await revisionsOf(db, pins, geometry);
+  const lists = await revisionsOf(db, pins, conversionFrom);
   const found: PlacedFinding[] = [];
   for (const { pin, placement } of lists.filter(({ kind }) => kind === 'adjustments')) {
     const removals = await removalsOf(db, pin.revision_id);
@@ -61,7 +63,11 @@ export async function removalFindings(
   return found;
 }
 
-async function revisionsOf(db: Db, pins: readonly Pin[], geometry: AirframeGeometry) {
+async function revisionsOf(
+  db: Db,
+  pins: readonly Pin[],
+  conversionFrom: (frameIssueId: string) => IssueConversion,
+) {
   if (pins.length === 0) return [];
   const rows = await db
     .selectFrom('list_revisions')
@@ -76,7 +82,13 @@ async function revisionsOf(db: Db, pins: readonly Pin[], geometry: AirframeGeome
     const row = rows.find(({ id }) => id === pin.revision_id);
     if (row === undefined) return [];
     const { declarations } = row;
-    return [{ pin, kind: declarations.kind, placement: new Placement(declarations, geometry) }];
+    return [
+      {
+        pin,
+        kind: declarations.kind,
+        placement: placementIn(declarations, conversionFrom(pin.frame_issue_id)),
+      },
+    ];
   });
 }
 

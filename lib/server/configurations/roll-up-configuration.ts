@@ -7,9 +7,10 @@ import {
   type Configuration,
   findRotorRevision,
   pinnedRevisions,
+  type RotorRevision,
   subtotalsOf,
 } from '@/db/queries/configurations';
-import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { type ProgramFrames, programFrames } from '@/db/queries/program-frames';
 import { groupBreakdownOf, limitsInForce } from '@/db/queries/settings';
 import { AppError } from '@/lib/errors';
 import { type Finding, type PlacedFinding } from '@/lib/findings/finding';
@@ -22,6 +23,8 @@ import {
   standingsOf,
 } from '@/lib/loading/configuration';
 import { allowanceFor } from '@/lib/mass/allowances';
+import { convertRotor } from '@/lib/rotors/convert';
+import { type Rotor } from '@/lib/rotors/rotor';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
@@ -41,7 +44,8 @@ export interface Evaluation {
  * @throws AppError conflict when it has no condition or no list yet.
  */
 export async function evaluate(db: Db, configuration: Configuration): Promise<Evaluation> {
-  const issue = await findFrameIssue(db, configuration.frame_issue_id);
+  const frames = await programFrames(db, configuration.program_id);
+  const issue = frames.issue(configuration.frame_issue_id);
   const pins = await pinnedRevisions(db, configuration.id);
   const conditions = await conditionsOf(db, configuration.id);
   const allowances = await allowancesOf(db, configuration.program_id);
@@ -58,7 +62,8 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
     configuration.rotor_revision_id === null
       ? null
       : await findRotorRevision(db, configuration.rotor_revision_id);
-  const geometry = geometryOf(issue);
+  const geometry = frames.geometry(issue.id);
+  const rotors = rotorsIn(frames, rotating, issue.id);
   const stored = await subtotalsOf(
     db,
     pins.map((pin) => pin.revision_id),
@@ -76,7 +81,7 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
     allowances,
     subtotals,
     conditions: loadings,
-    rotors: rotating?.rotors ?? [],
+    rotors,
     points: rotating?.points ?? [],
     limits,
     frameIssue: issue.number,
@@ -85,11 +90,15 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
     frameIssue: issue.id,
     allowances,
     ...(limits.length === 0 ? {} : { limits }),
-    lists: pins.map((pin) => ({ list: pin.list_code, revision: pin.number, sha256: pin.content_sha256 })),
-    rotors:
-      rotating === null
-        ? null
-        : { revision: rotating.number, rotors: rotating.rotors, points: rotating.points },
+    lists: pins.map((pin) => ({
+      list: pin.list_code,
+      revision: pin.number,
+      sha256: pin.content_sha256,
+      ...(pin.frame_issue_id === issue.id
+        ? {}
+        : { converted: frames.conversion(pin.frame_issue_id, issue.id).change }),
+    })),
+    rotors: rotating === null ? null : { revision: rotating.number, rotors, points: rotating.points },
     conditions: loadings,
   };
   return {
@@ -105,16 +114,20 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
         : placed(
             await rotorFindings(
               db,
-              rotating,
+              { rotors, points: rotating.points },
               geometry,
-              pins.map((pin) => ({ code: pin.list_code, revisionId: pin.revision_id })),
+              pins.map((pin) => ({
+                code: pin.list_code,
+                revisionId: pin.revision_id,
+                conversion: frames.conversion(pin.frame_issue_id, issue.id),
+              })),
             ),
             { kind: 'rotors', code: '', revision: rotating.number },
           )),
       ...(await removalFindings(
         db,
         pins,
-        geometry,
+        (issueId) => frames.conversion(issueId, issue.id),
         (group, maturity) => allowanceFor(allowances, groups.present(group), maturity).fraction,
       )),
       ...pins.flatMap((pin) =>
@@ -129,6 +142,19 @@ export async function evaluate(db: Db, configuration: Configuration): Promise<Ev
       .update(canonicalize(inputs) ?? '')
       .digest('hex'),
   };
+}
+
+/** Rotating parts as they stand in an issue; those of no issue, made before the first one, stand in any. */
+function rotorsIn(
+  frames: ProgramFrames,
+  rotating: Pick<RotorRevision, 'rotors' | 'frame_issue_id'> | null,
+  issueId: string,
+): readonly Rotor[] {
+  if (rotating === null) return [];
+  const { rotors, frame_issue_id: statedIn } = rotating;
+  if (statedIn === null || statedIn === issueId) return rotors;
+  const { change, from, to } = frames.conversion(statedIn, issueId);
+  return rotors.map((rotor) => convertRotor(rotor, change, from.axes, to.axes));
 }
 
 /** Rolls a configuration up and keeps the result, with who asked and what it was made from. */

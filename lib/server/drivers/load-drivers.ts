@@ -3,10 +3,10 @@ import { rowsByItem } from '@/db/queries/list-rows';
 import { type DriverPart, type Drivers, type DriversAsked } from '@/lib/drivers/drivers';
 import { type Account, accountFrom, AccountSum, toNumbersWithRest } from '@/lib/mass/account';
 import { type Category } from '@/lib/mass/component';
+import { placementIn } from '@/lib/mass/converted-placement';
 import { contributionOf, type Whole, wholeOf } from '@/lib/mass/contributions/contribution';
 import { Largest } from '@/lib/mass/contributions/top';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { Placement } from '@/lib/mass/place';
 import { accountOfItem, groupBranches, NO_GROWTH, type OnBoardItem, rollUp } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
 import { componentOf } from '@/lib/server/lists/row-codec';
@@ -81,7 +81,7 @@ async function rankRows(
   const ranking = new Ranking<Found>(whole, number);
   const wanted = new Set(condition.categories);
   for (const [index, revision] of revisions.entries()) {
-    const { items, categories, numbers } = await rowAccounts(db, revision, geometry);
+    const { items, categories, numbers } = await rowAccounts(db, revision);
     items.forEach((item, row) => {
       const category = categories[row];
       if (category === undefined || !wanted.has(category)) return;
@@ -101,10 +101,10 @@ async function rowParts(
   geometry: AirframeGeometry,
 ): Promise<DriverPart[]> {
   const parts = new Map<string, DriverPart>();
-  for (const [index, { id, code, number, declarations }] of revisions.entries()) {
+  for (const [index, { id, code, number, declarations, conversion }] of revisions.entries()) {
     const items = found.flatMap((one) => ('onBoard' in one || one.revision !== index ? [] : [one.row]));
     if (items.length === 0) continue;
-    const placement = new Placement(declarations, geometry);
+    const placement = placementIn(declarations, conversion);
     for (const row of await rowsByItem(db, id, items)) {
       const { pieces, image } = placement.parts(componentOf(row));
       parts.set(`${index} ${row.item}`, {

@@ -1,8 +1,7 @@
 import { type Db } from '@/db/client';
 import { toNumbers } from '@/lib/mass/account';
 import { CATEGORIES, type Category } from '@/lib/mass/component';
-import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { Placement } from '@/lib/mass/place';
+import { placementIn } from '@/lib/mass/converted-placement';
 import { componentOf } from '@/lib/server/lists/row-codec';
 import { storedRows } from '@/lib/server/lists/stored-rows';
 import { type SourceRevision } from '@/lib/server/three-views/sources';
@@ -15,20 +14,18 @@ export interface RowAccounts {
   readonly numbers: Float64Array;
 }
 
+type PlacedRevision = Pick<SourceRevision, 'id' | 'declarations' | 'conversion'>;
+
 /** A revision never changes, so its rows once placed stay right: those last asked for are kept, this many bytes in all. */
 const KEPT_BYTES = 96 * 2 ** 20;
 const BYTES_PER_ROW = 128;
 
 const kept = new Map<string, { readonly rows: Promise<RowAccounts>; bytes: number }>();
 
-/** Reads and places every row of a revision, or takes what was placed before in the same geometry. */
-export function rowAccounts(
-  db: Db,
-  revision: Pick<SourceRevision, 'id' | 'declarations'>,
-  geometry: AirframeGeometry,
-): Promise<RowAccounts> {
-  const { axes, reference, lateralPlane } = geometry;
-  const key = JSON.stringify([revision.id, axes, reference, lateralPlane]);
+/** Reads and places every row of a revision in the issue that its conversion leads to, or takes what was placed there before. */
+export function rowAccounts(db: Db, revision: PlacedRevision): Promise<RowAccounts> {
+  const { to, change } = revision.conversion;
+  const key = JSON.stringify([revision.id, to.axes, to.reference, to.lateralPlane, change]);
   const known = kept.get(key);
   if (known !== undefined) {
     // The map keeps the order of use: the first is the longest unused.
@@ -36,7 +33,7 @@ export function rowAccounts(
     kept.set(key, known);
     return known.rows;
   }
-  const rows = placeRows(db, revision, geometry).then(
+  const rows = placeRows(db, revision).then(
     (placed) => {
       keep(key, placed);
       return placed;
@@ -62,12 +59,8 @@ function keep(key: string, placed: RowAccounts): void {
   }
 }
 
-async function placeRows(
-  db: Db,
-  { id, declarations }: Pick<SourceRevision, 'id' | 'declarations'>,
-  geometry: AirframeGeometry,
-): Promise<RowAccounts> {
-  const placement = new Placement(declarations, geometry);
+async function placeRows(db: Db, { id, declarations, conversion }: PlacedRevision): Promise<RowAccounts> {
+  const placement = placementIn(declarations, conversion);
   const items: string[] = [];
   const categories: Category[] = [];
   let numbers = new Float64Array(10 * 1024);

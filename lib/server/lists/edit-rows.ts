@@ -23,6 +23,8 @@ export interface EditRows {
   readonly baseRevision: number;
   readonly reason: string;
   readonly edits: readonly RowEdit[];
+  /** What must stand or fall with the revision. */
+  readonly settle?: (trx: Transaction<Database>) => Promise<void>;
 }
 
 class WrongEdits extends Error {
@@ -36,8 +38,8 @@ class WrongEdits extends Error {
 
 /**
  * Makes the next revision of a list from a stated one and a set of edits. The whole list goes through the checks of an import;
- * rows that were not edited are stored as they were, to the last bit. The revision keeps what its base declares, so that figures
- * mean what they meant when they were edited; only the marking is the list's present one. `pool` must not be the one that `db`
+ * rows that were not edited are stored as they were, to the last bit. The revision keeps what its base declares and its frame
+ * issue, so that figures mean what they meant when they were edited; only the marking is the list's present one. `pool` must not be the one that `db`
  * draws on: a revision being written holds a connection of the first while it reads by the second.
  * @throws AppError conflict, naming who made it, when the list has a newer revision than the stated one.
  */
@@ -54,7 +56,7 @@ export async function editRows(services: { pool: pg.Pool; db: Db }, input: EditR
     const made = await publishRevision(
       pool,
       {
-        list: { id: list.id, programId: list.program_id, code: list.code, frameIssueId: list.frame_issue_id },
+        list: { id: list.id, programId: list.program_id, code: list.code, frameIssueId: base.frame_issue_id },
         declarations,
         origin: 'edit',
         reason,
@@ -66,7 +68,7 @@ export async function editRows(services: { pool: pg.Pool; db: Db }, input: EditR
         await holdNewest(trx, list, base);
         await writeEdited(db, base, declarations, editSet(input.edits), writer);
       },
-      async () => undefined,
+      async (trx) => input.settle?.(trx),
     );
     return { status: 'saved', revision: made.number };
   } catch (error) {

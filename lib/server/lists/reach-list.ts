@@ -28,9 +28,12 @@ export async function reachImport(db: Db, list: List, id: string) {
   return found;
 }
 
-/** The geometry of the frame issue that a list is pinned to. */
-export async function geometryOfList(db: Db, list: List): Promise<AirframeGeometry> {
-  return geometryOf(await findFrameIssue(db, list.frame_issue_id));
+/** The geometry of the frame issue that a revision is stated in. */
+export async function geometryOfRevision(
+  db: Db,
+  revision: Pick<ListRevision, 'frame_issue_id'>,
+): Promise<AirframeGeometry> {
+  return geometryOf(await findFrameIssue(db, revision.frame_issue_id));
 }
 
 /** The marking that stands on everything made from a list: its present one, or the one that a revision was read with. */

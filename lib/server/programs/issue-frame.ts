@@ -1,12 +1,15 @@
 import { sql, type Transaction } from 'kysely';
 import { type Db } from '@/db/client';
-import { currentFrameIssue } from '@/db/queries/frames';
+import { currentFrameIssue, type FrameIssue, geometryOf } from '@/db/queries/frames';
 import { type Database } from '@/db/schema/database';
 import { AppError, fieldError } from '@/lib/errors';
+import { changeFromFormer, changedPlace } from '@/lib/frames/issue-change';
+import { NO_POSE, type Pose } from '@/lib/frames/pose';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type Person } from '@/lib/server/actor';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { newId } from '@/lib/server/ids';
+import { formerInWords, stateStep } from './frame-step';
 
 export interface IssueFrame {
   readonly person: Person;
@@ -18,13 +21,16 @@ export interface IssueFrame {
   /** ISO date. */
   readonly validFrom: string;
   readonly reason: string;
-  /** Takes the reference points of the issue before it over, with the places they have: the datum has not moved. */
+  /** How the frame of the issue before lies in this one: r = o + R P r_former; null for the first issue, and only for it. */
+  readonly former: Pose | null;
+  /** Takes the reference points of the issue before it over: the same points of the aircraft, their places converted. */
   readonly carryPoints: boolean;
 }
 
 /**
  * Makes the next frame issue of a program; earlier ones stay as they are, with what refers to them. Returns its number.
- * @throws AppError conflict when another issue was made since `base`, invalid-input for a date before that of the issue before.
+ * @throws AppError conflict when another issue was made since `base`, invalid-input for a date before that of the issue before and where
+ * a later issue does not say how that one lies in it.
  */
 export async function issueFrame(db: Db, input: IssueFrame): Promise<number> {
   const { person, programId, title, geometry, validFrom, reason } = input;
@@ -41,6 +47,8 @@ export async function issueFrame(db: Db, input: IssueFrame): Promise<number> {
         'valid_from',
         `Issue ${before.number} is valid from ${before.valid_from}: not earlier.`,
       );
+    if (before && input.former === null)
+      throw fieldError('former_x', `Say how the frame of issue ${before.number} lies in the new one.`);
     const number = input.base + 1;
     const id = newId();
     await trx
@@ -70,29 +78,38 @@ export async function issueFrame(db: Db, input: IssueFrame): Promise<number> {
       actor: person,
       kind: 'frame.issued',
       subject: `frame issue ${number}`,
-      detail: { number, title, reason },
+      detail: { number, title, reason, ...(before ? { former: formerInWords(input.former) } : {}) },
     });
-    if (before && input.carryPoints) await carryPoints(trx, input, before.id, { id, number });
+    if (before === undefined || input.former === null) return number;
+    await stateStep(trx, { issueId: id, former: input.former, person });
+    if (input.carryPoints) await carryPoints(trx, input, before, { id, number });
     return number;
   });
 }
 
 async function carryPoints(
   trx: Transaction<Database>,
-  { person, programId }: IssueFrame,
-  from: string,
+  { person, programId, geometry, former }: IssueFrame,
+  from: FrameIssue,
   issue: { readonly id: string; readonly number: number },
 ): Promise<void> {
   const points = await trx
     .selectFrom('reference_points')
     .select(['code', 'title', 'place'])
-    .where('frame_issue_id', '=', from)
+    .where('frame_issue_id', '=', from.id)
     .orderBy('code')
     .execute();
-  for (const point of points) {
+  const change = changeFromFormer(geometryOf(from).axes, former ?? NO_POSE, geometry.axes);
+  for (const { place, ...point } of points) {
+    const [x = NaN, y = NaN, z = NaN] = place;
     await trx
       .insertInto('reference_points')
-      .values({ ...point, frame_issue_id: issue.id, created_by: person.userId })
+      .values({
+        ...point,
+        place: [...changedPlace(change, [x, y, z])],
+        frame_issue_id: issue.id,
+        created_by: person.userId,
+      })
       .execute();
     await recordEvent(trx, {
       scope: programId,

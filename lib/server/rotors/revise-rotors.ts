@@ -1,5 +1,6 @@
 import { type Transaction, sql } from 'kysely';
 import { type Db } from '@/db/client';
+import { currentFrameIssue } from '@/db/queries/frames';
 import { type Database } from '@/db/schema/database';
 import { AppError } from '@/lib/errors';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
@@ -14,7 +15,10 @@ export interface ReviseRotors {
   readonly reason: string;
   /** The revision that the change was made against; 0 before the first. */
   readonly base: number;
-  /** What is new; what is left out stays as it was. */
+  /**
+   * What is new; what is left out stays as it was. Rotors of a file are stated in the frame issue in force; others in the issue of the
+   * revision that they were changed from.
+   */
   readonly rotors?: readonly Rotor[];
   readonly points?: readonly OperatingPoint[];
   readonly file?: { readonly sha256: string; readonly bytes: number; readonly name: string };
@@ -37,6 +41,9 @@ export async function reviseRotors(db: Db, input: ReviseRotors): Promise<{ id: s
     const rotors = input.rotors ?? latest?.rotors ?? [];
     const points = input.points ?? latest?.points ?? [];
     const id = newId();
+    const inForce = await currentFrameIssue(trx, input.programId);
+    const isRead = input.rotors !== undefined && input.file !== undefined;
+    const issueId = (isRead ? inForce?.id : (latest?.frame_issue_id ?? inForce?.id)) ?? null;
     if (input.file) {
       await trx
         .insertInto('stored_files')
@@ -49,11 +56,14 @@ export async function reviseRotors(db: Db, input: ReviseRotors): Promise<{ id: s
       .values({
         id,
         program_id: input.programId,
+        frame_issue_id: issueId,
         number: number + 1,
         reason: input.reason,
         rotors: JSON.stringify(rotors),
         points: JSON.stringify(points),
-        findings: JSON.stringify(await rotorFindingsInProgram(trx, input.programId, { rotors, points })),
+        findings: JSON.stringify(
+          await rotorFindingsInProgram(trx, input.programId, { rotors, points }, issueId),
+        ),
         file_sha256: input.file?.sha256 ?? null,
         file_name: input.file?.name ?? null,
         created_by: input.person.userId,
@@ -79,6 +89,7 @@ async function lockLatest(trx: Transaction<Database>, programId: string) {
       'rotor_revisions.number',
       'rotor_revisions.rotors',
       'rotor_revisions.points',
+      'rotor_revisions.frame_issue_id',
       'users.name as author',
     ])
     .where('program_id', '=', programId)

@@ -1,11 +1,12 @@
 import { type Db } from '@/db/client';
-import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { programFrames } from '@/db/queries/program-frames';
 import { rowsNamed } from '@/db/queries/named-rows';
 import { type Finding } from '@/lib/findings/finding';
 import { findingsOnRotors } from '@/lib/findings/look';
 import { carrierTensor } from '@/lib/findings/rotors/carrier';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { Placement } from '@/lib/mass/place';
+import { placementIn } from '@/lib/mass/converted-placement';
+import { type IssueConversion } from '@/lib/mass/issue-conversion';
 import { type Sym3 } from '@/lib/numerics/sym3';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 
@@ -13,6 +14,8 @@ import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 export interface CarrierList {
   readonly code: string;
   readonly revisionId: string;
+  /** From the issue that the revision is stated in to that of the rotating parts. */
+  readonly conversion: IssueConversion;
 }
 
 /**
@@ -25,24 +28,22 @@ export async function rotorFindings(
   geometry: AirframeGeometry,
   lists: readonly CarrierList[],
 ): Promise<Finding[]> {
-  const carriers = await carriersOf(db, parts.rotors, geometry, lists);
+  const carriers = await carriersOf(db, parts.rotors, lists);
   return findingsOnRotors({ rotors: parts.rotors, points: parts.points, geometry, carriers });
 }
 
-/** The same for a program as it stands: its newest frame issue and the newest revision of each list. */
+/**
+ * The same for a program as it stands: the newest revision of each list, in the frame issue that the rotating parts are stated in
+ * (null before the first). A list whose issue nobody knows how to get from is left out.
+ */
 export async function rotorFindingsInProgram(
   db: Db,
   programId: string,
   parts: { readonly rotors: readonly Rotor[]; readonly points: readonly OperatingPoint[] },
+  issueId: string | null,
 ): Promise<Finding[]> {
-  const issue = await db
-    .selectFrom('frame_issues')
-    .select('id')
-    .where('program_id', '=', programId)
-    .orderBy('number', 'desc')
-    .limit(1)
-    .executeTakeFirst();
-  if (issue === undefined) return findingsOnRotors(parts);
+  if (issueId === null) return findingsOnRotors(parts);
+  const frames = await programFrames(db, programId);
   const lists = await db
     .selectFrom('lists')
     .innerJoin('list_revisions', (join) =>
@@ -50,22 +51,25 @@ export async function rotorFindingsInProgram(
         .onRef('list_revisions.list_id', '=', 'lists.id')
         .onRef('list_revisions.number', '=', 'lists.last_revision'),
     )
-    .select(['lists.code', 'list_revisions.id as revisionId'])
+    .select(['lists.code', 'list_revisions.id as revisionId', 'list_revisions.frame_issue_id as statedIn'])
     .where('lists.program_id', '=', programId)
     .execute();
-  return rotorFindings(db, parts, geometryOf(await findFrameIssue(db, issue.id)), lists);
+  const carriers = lists.flatMap(({ statedIn, ...list }): CarrierList[] => {
+    const conversion = frames.between(statedIn, issueId);
+    return conversion === null ? [] : [{ ...list, conversion }];
+  });
+  return rotorFindings(db, parts, frames.geometry(issueId), carriers);
 }
 
 /** `list/item` of the rows that rotors name and that exist; an item may hold a slash itself. */
 async function carriersOf(
   db: Db,
   rotors: readonly Rotor[],
-  geometry: AirframeGeometry,
   lists: readonly CarrierList[],
 ): Promise<Map<string, Sym3>> {
   const carriers = new Map<string, Sym3>();
   const names = rotors.flatMap(({ component }) => (component === null ? [] : [component]));
-  for (const { code, revisionId } of lists) {
+  for (const { code, revisionId, conversion } of lists) {
     const items = names.flatMap((name) => (name.startsWith(`${code}/`) ? [name.slice(code.length + 1)] : []));
     const rows = await rowsNamed(db, revisionId, items);
     if (rows.length === 0) continue;
@@ -74,7 +78,7 @@ async function carriersOf(
       .select('declarations')
       .where('id', '=', revisionId)
       .executeTakeFirstOrThrow();
-    const placement = new Placement(declarations, geometry);
+    const placement = placementIn(declarations, conversion);
     for (const row of rows) carriers.set(`${code}/${row.item}`, carrierTensor(row, placement));
   }
   return carriers;

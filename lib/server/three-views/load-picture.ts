@@ -1,7 +1,7 @@
 import { type Db } from '@/db/client';
 import { type PlacedFilter, largestRows, restByCells } from '@/db/queries/placed-rows';
 import { type Category } from '@/lib/mass/component';
-import { Placement } from '@/lib/mass/place';
+import { placementIn } from '@/lib/mass/converted-placement';
 import { pictureBounds } from '@/lib/three-views/bounds';
 import { ON_BOARD, groupKeys, topGroup } from '@/lib/three-views/group-key';
 import { markRadius, radiusOfOne } from '@/lib/three-views/mark-size';
@@ -87,9 +87,9 @@ async function load(
   const heaviest = await largestRows(db, asked, most);
   const cells = heaviest.length < most ? [] : await restByCells(db, asked, most, size);
   const lists = new Map(
-    revisions.map(({ id, declarations }, index) => [
+    revisions.map(({ id, declarations, conversion }, index) => [
       id,
-      { index, placement: new Placement(declarations, geometry) },
+      { index, placement: placementIn(declarations, conversion) },
     ]),
   );
   const listOf = (revisionId: string) => {

@@ -1,7 +1,7 @@
 import { type Db } from '@/db/client';
 import { findBaseline, findSubmission, revisionsOfSubmission } from '@/db/queries/baselines';
 import { conditionsOf, findConfiguration, pinnedRevisions, subtotalsOf } from '@/db/queries/configurations';
-import { findFrameIssue, geometryOf } from '@/db/queries/frames';
+import { programFrames } from '@/db/queries/program-frames';
 import { referencePointsOf } from '@/db/queries/settings';
 import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { AppError } from '@/lib/errors';
@@ -9,6 +9,7 @@ import { type AirframeVec } from '@/lib/frames/tags';
 import { type Category } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { type IssueConversion } from '@/lib/mass/issue-conversion';
 import { type MassResult } from '@/lib/mass/result';
 import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { type Subtotal } from '@/lib/mass/subtotals';
@@ -20,6 +21,8 @@ export interface SourceRevision {
   readonly title: string;
   readonly number: number;
   readonly declarations: ListDeclarations;
+  /** From the frame issue that the revision is stated in to that of what it is part of. */
+  readonly conversion: IssueConversion;
 }
 
 export interface SourceCondition {
@@ -51,8 +54,9 @@ export async function configurationSource(db: Db, programId: string, code: strin
   const configuration = await findConfiguration(db, programId, code);
   if (configuration === undefined)
     throw new AppError('not-found', 'There is no such configuration in this program.');
-  const issue = await findFrameIssue(db, configuration.frame_issue_id);
-  const geometry = geometryOf(issue);
+  const frames = await programFrames(db, programId);
+  const issue = frames.issue(configuration.frame_issue_id);
+  const geometry = frames.geometry(issue.id);
   const [pins, conditions, points] = await Promise.all([
     pinnedRevisions(db, configuration.id),
     conditionsOf(db, configuration.id),
@@ -79,6 +83,7 @@ export async function configurationSource(db: Db, programId: string, code: strin
               title: pin.list_title,
               number: pin.number,
               declarations: declared,
+              conversion: frames.conversion(pin.frame_issue_id, issue.id),
             },
           ];
     }),
@@ -107,6 +112,7 @@ export async function baselineSource(db: Db, programId: string, number: string):
     throw new AppError('not-found', 'There is no such baseline in this program.');
   const revisions = await revisionsOfSubmission(db, submission.id);
   const document = readStoredDocument(baseline.document);
+  const frames = await programFrames(db, programId);
   const subtotals = await subtotalsOf(
     db,
     revisions.map((revision) => revision.revision_id),
@@ -127,6 +133,7 @@ export async function baselineSource(db: Db, programId: string, number: string):
       title: revision.list_title,
       number: revision.number,
       declarations: revision.declarations,
+      conversion: frames.conversion(revision.frame_issue_id, submission.frame_issue_id),
     })),
     subtotals,
     conditions: submission.result.conditions.map((condition) => ({

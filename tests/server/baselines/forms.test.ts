@@ -334,7 +334,7 @@ c,Body,-1.5,6,0,1,C-3,potential
     });
     const pins = await pinnedRevisions(db, found.id);
     const revisions = pins.map((pin) => pin.revision_id);
-    expect(await leftOutOf(db, revisions, found.frame_issue_id)).toEqual([
+    expect(await leftOutOf(db, revisions)).toEqual([
       { list: 'changes', status: 'pending', rows: 1, mass: 4 },
       { list: 'changes', status: 'potential', rows: 1, mass: -1.5 },
     ]);

@@ -1,7 +1,12 @@
 'use server';
 
 import { redirect } from 'next/navigation';
-import { frameIssueSchema, geometryOfForm } from '@/lib/contracts/frame-issue';
+import {
+  formerFrameSchema,
+  formerOfForm,
+  frameIssueSchema,
+  geometryOfForm,
+} from '@/lib/contracts/frame-issue';
 import {
   allowanceChoiceSchema,
   allowanceSchema,
@@ -15,6 +20,7 @@ import { serverDb } from '@/lib/server/database';
 import { programAction } from '@/lib/server/http/action';
 import { addBuild } from '@/lib/server/programs/add-build';
 import { addReferencePoint } from '@/lib/server/programs/add-reference-point';
+import { stateFormerFrame } from '@/lib/server/programs/frame-step';
 import { issueFrame } from '@/lib/server/programs/issue-frame';
 import { removeAllowance, setAllowance } from '@/lib/server/programs/set-allowance';
 import { removeLimit, stateLimit } from '@/lib/server/programs/set-limit';
@@ -32,9 +38,25 @@ export const issueFrameAction = programAction(
       geometry: geometryOfForm(input),
       validFrom: input.valid_from,
       reason: input.reason,
+      former: input.base === 0 ? null : formerOfForm(input),
       carryPoints: input.carry_points,
     });
     redirect(`/programs/${program.code}/settings?length=${input.length_unit}`);
+  },
+);
+
+export const stateFormerFrameAction = programAction(
+  'frame.keep',
+  formerFrameSchema,
+  async ({ input, person, program }) => {
+    const { number } = input;
+    await stateFormerFrame(serverDb(), {
+      person,
+      programId: program.id,
+      number,
+      former: formerOfForm(input),
+    });
+    return { message: `What is stated in issue ${number - 1} can be converted to issue ${number} now.` };
   },
 );
 

@@ -41,7 +41,6 @@ export default async function SubmitPage({
   const leftOut = await leftOutOf(
     serverDb(),
     pins.map((pin) => pin.revision_id),
-    configuration.frame_issue_id,
   );
   const waits = last?.decision === null ? last : null;
   const titles = new Map([

@@ -22,9 +22,10 @@ import { driversAsked, withDrivers } from '@/lib/drivers/drivers';
 import { toNumbersWithRest } from '@/lib/mass/account';
 import { CATEGORIES } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { noConversion } from '@/lib/mass/issue-conversion';
 import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { serverDb } from '@/lib/server/database';
-import { geometryOfList, reachRevision } from '@/lib/server/lists/reach-list';
+import { geometryOfRevision, reachRevision } from '@/lib/server/lists/reach-list';
 import { totalsOfRevision } from '@/lib/server/lists/row-totals';
 import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
@@ -75,13 +76,13 @@ export default async function ListPage({ params, searchParams }: Props) {
   const asked = search['revision'];
   const number = typeof asked === 'string' ? asked : String(list.last_revision);
   const revision = await orNotFound(() => reachRevision(db, list, number));
-  const geometry = await geometryOfList(db, list);
+  const geometry = await geometryOfRevision(db, revision);
   const [author, totals, own, source, pinned] = await Promise.all([
     findRevisionAuthor(db, revision.id),
-    totalsOfRevision(db, revision.id, list.frame_issue_id, { declarations: revision.declarations, geometry }),
+    totalsOfRevision(db, revision.id, revision.frame_issue_id, { declarations: revision.declarations, geometry }),
     ownColumnsOf(db, revision.id),
     listSource(list, revision, geometry),
-    wholesWithRevision(db, revision.id, list.frame_issue_id),
+    wholesWithRevision(db, revision.id, revision.frame_issue_id),
   ]);
   const wholes = wholesOnPage(revision.number, source, pinned);
   const here = `${listHref}?revision=${revision.number}`;
@@ -173,8 +174,10 @@ async function listSource(list: List, revision: ListRevision, geometry: Airframe
   const { id, number, declarations } = revision;
   return {
     geometry,
-    revisions: [{ id, code: list.code, title: list.title, number, declarations }],
-    subtotals: await subtotalsOf(serverDb(), [id], list.frame_issue_id),
+    revisions: [
+      { id, code: list.code, title: list.title, number, declarations, conversion: noConversion(geometry) },
+    ],
+    subtotals: await subtotalsOf(serverDb(), [id], revision.frame_issue_id),
     condition: { categories: CATEGORIES, items: [] },
   };
 }

@@ -1,7 +1,8 @@
 import { type Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { findConfiguration, pinnedRevisions, rotorRevisionsOf } from '@/db/queries/configurations';
-import { revisionsInFrame } from '@/db/queries/list-revisions';
+import { revisionsOfProgram } from '@/db/queries/list-revisions';
+import { programFrames } from '@/db/queries/program-frames';
 import { PinsForm, type PinChoice } from '@/components/configurations/pins-form';
 import { EmptyPlace } from '@/components/ui/empty-place';
 import { PageHead } from '@/components/ui/section';
@@ -25,12 +26,21 @@ export default async function InputsPage({
   const db = serverDb();
   const configuration = await findConfiguration(db, program.id, code);
   if (configuration === undefined) notFound();
-  const [pins, revisions, rotors] = await Promise.all([
+  const [pins, everyRevision, everyRotors, frames] = await Promise.all([
     pinnedRevisions(db, configuration.id),
-    revisionsInFrame(db, program.id, configuration.frame_issue_id),
+    revisionsOfProgram(db, program.id),
     rotorRevisionsOf(db, program.id),
+    programFrames(db, program.id),
   ]);
   const home = `/programs/${program.code}/configurations/${configuration.code}`;
+  const { frame_issue_id: issueId } = configuration;
+  const revisions = everyRevision.filter((one) => frames.gap(one.frame_issue_id, issueId) === null);
+  const rotors = everyRotors.filter(
+    (one) => one.frame_issue_id === null || frames.gap(one.frame_issue_id, issueId) === null,
+  );
+  const outOfReach = everyRevision.length + everyRotors.length - revisions.length - rotors.length;
+  const statedIn = (id: string | null): string =>
+    id === null || id === issueId ? '' : `, in frame issue ${frames.issue(id).number}, converted`;
   const lists = [...new Map(revisions.map((one) => [one.list_code, one.list_title]))];
   const choices: PinChoice[] = lists.map(([list, title]) => ({
     name: `list:${list}`,
@@ -40,7 +50,7 @@ export default async function InputsPage({
       .filter((one) => one.list_code === list)
       .map((one, index) => ({
         value: String(one.number),
-        label: `Revision ${one.number}${index === 0 ? ', newest' : ''}: ${one.reason} (${one.rows} rows, ${day(one.created_at)})`,
+        label: `Revision ${one.number}${index === 0 ? ', newest' : ''}: ${one.reason} (${one.rows} rows, ${day(one.created_at)}${statedIn(one.frame_issue_id)})`,
       })),
   }));
   if (rotors.length > 0)
@@ -50,7 +60,7 @@ export default async function InputsPage({
       pinned: String(configuration.rotor_revision_number ?? ''),
       options: rotors.map((one, index) => ({
         value: String(one.number),
-        label: `Revision ${one.number}${index === 0 ? ', newest' : ''}: ${one.reason} (${one.rotors.length} rotors, ${day(one.created_at)})`,
+        label: `Revision ${one.number}${index === 0 ? ', newest' : ''}: ${one.reason} (${one.rotors.length} rotors, ${day(one.created_at)}${statedIn(one.frame_issue_id)})`,
       })),
     });
   return (
@@ -58,10 +68,10 @@ export default async function InputsPage({
       <PageHead
         title="Choose revisions"
         above={<TextLink href={home}>{configuration.title}</TextLink>}
-        lead={`Lists of frame issue ${configuration.frame_issue_number}. The configuration keeps what is chosen here until someone chooses again.`}
+        lead={`The configuration stands in frame issue ${configuration.frame_issue_number} and keeps what is chosen here until someone chooses again. What is stated in another issue is converted at each roll-up.${outOfReach === 0 ? '' : ` ${outOfReach} revisions are not offered: an issue between does not say how the one before lies in it.`}`}
       />
       {choices.length === 0 ? (
-        <EmptyPlace title="There is no list revision in this frame issue yet">
+        <EmptyPlace title="There is no list revision yet">
           <p>Upload a mass list first; then its revisions can be chosen here.</p>
         </EmptyPlace>
       ) : (

@@ -2,7 +2,7 @@ import { type RowTotals } from '@/lib/contracts/list-rows';
 import { listViewOf } from '@/lib/contracts/list-view';
 import { serverDb } from '@/lib/server/database';
 import { programRoute } from '@/lib/server/http/internal-route';
-import { geometryOfList, reachList, reachRevision } from '@/lib/server/lists/reach-list';
+import { geometryOfRevision, reachList, reachRevision } from '@/lib/server/lists/reach-list';
 import { totalsOfView } from '@/lib/server/lists/row-totals';
 import { filterOf } from '@/lib/server/lists/row-view';
 
@@ -14,7 +14,7 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
   const list = await reachList(db, program.id, params.list);
   const revision = await reachRevision(db, list, params.revision);
   const filter = filterOf(listViewOf(new URL(request.url).searchParams), revision.findings);
-  const frame = { declarations: revision.declarations, geometry: await geometryOfList(db, list) };
+  const frame = { declarations: revision.declarations, geometry: await geometryOfRevision(db, revision) };
   const totals: RowTotals = await totalsOfView(db, revision.id, filter, frame);
   return Response.json(totals);
 });
