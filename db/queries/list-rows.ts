@@ -10,8 +10,8 @@ import { isIn, neededRowRange } from './revision-rows';
 export interface RowFilter {
   /** Text that stands in the item, part number, description, source, note or a column of the list's own. */
   readonly text: string;
-  /** A group path; the groups below it belong to it. */
-  readonly group: string;
+  /** Group paths as the rows state them. */
+  readonly groups: readonly string[] | null;
   readonly category: Category | null;
   readonly counting: Counting | null;
   readonly items: readonly string[] | null;
@@ -167,7 +167,7 @@ export async function childrenOf(db: Db, revisionId: string, parents: readonly s
     .execute();
 }
 
-const EVERY_ROW: RowFilter = { text: '', group: '', category: null, counting: null, items: null };
+const EVERY_ROW: RowFilter = { text: '', groups: null, category: null, counting: null, items: null };
 
 async function rowsIn(db: Db, revisionId: string, filter = EVERY_ROW) {
   const range = await neededRowRange(db, revisionId);
@@ -182,14 +182,7 @@ async function rowsIn(db: Db, revisionId: string, filter = EVERY_ROW) {
           sql<SqlBool>`concat_ws(E'\n', item, part_number, description, source, note, change_ref, extra::text) ilike ${pattern}`,
         );
       }
-      if (filter.group !== '') {
-        conditions.push(
-          eb.or([
-            eb('group_path', '=', filter.group),
-            sql<SqlBool>`starts_with(group_path, ${`${filter.group}/`})`,
-          ]),
-        );
-      }
+      if (filter.groups !== null) conditions.push(sql<SqlBool>`group_path = any(${filter.groups})`);
       if (filter.category !== null) conditions.push(eb('category', '=', filter.category));
       if (filter.counting !== null) conditions.push(eb('counting', '=', filter.counting));
       if (filter.items !== null) conditions.push(sql<SqlBool>`item = any(${filter.items})`);

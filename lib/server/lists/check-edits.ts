@@ -3,6 +3,7 @@ import { childrenOf, rowsByItem } from '@/db/queries/list-rows';
 import { type ListRevision } from '@/db/queries/lists';
 import { type EditProblem, itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
 import { type ListRow } from '@/lib/contracts/list-rows';
+import { revisionGroups } from './revision-groups';
 import { rowReader } from './row-view';
 
 /** So many names are given in a sentence; the rest are counted. */
@@ -19,7 +20,7 @@ export async function checkEdits(
 ): Promise<EditProblem[]> {
   const items = edits.map(itemOfEdit);
   const stored = await rowsByItem(db, revision.id, [...new Set(items)]);
-  const read = rowReader(revision.declarations);
+  const read = rowReader(revision.declarations, await revisionGroups(db, revision.id));
   const there = new Map(stored.map((row) => [row.item, read(row)]));
   const problems: EditProblem[] = [];
   const seen = new Set<string>();

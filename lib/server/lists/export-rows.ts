@@ -5,6 +5,7 @@ import { isFiltered, type ListView } from '@/lib/contracts/list-view';
 import { massListWriter } from '@/lib/export/mass-list';
 import { componentOf, type StoredRow } from './row-codec';
 import { storedRows } from './stored-rows';
+import { revisionGroups } from './revision-groups';
 import { filterOf, orderOf } from './row-view';
 
 /** The column that carries a list's marking in what leaves it. */
@@ -41,7 +42,8 @@ async function* rowsInOrder(db: Db, revision: ListRevision, view: ListView): Asy
     yield* storedRows(db, revision.id);
     return;
   }
-  const rowNos = await rowNosOfView(db, revision.id, filterOf(view, revision.findings), order);
+  const filter = filterOf(view, revision.findings, await revisionGroups(db, revision.id));
+  const rowNos = await rowNosOfView(db, revision.id, filter, order);
   for (let at = 0; at < rowNos.length; at += BATCH) {
     const wanted = rowNos.slice(at, at + BATCH);
     const rows = new Map((await rowsAt(db, revision.id, wanted)).map((row) => [row.row_no, row]));

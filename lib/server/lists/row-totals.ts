@@ -12,6 +12,7 @@ import { type GroupTotal, groupBranches, NO_GROWTH, rollUp } from '@/lib/mass/ro
 import { applyMat, transpose } from '@/lib/numerics/mat3';
 import { addVec, scaleVec, subVec } from '@/lib/numerics/vec3';
 import { fromSi } from '@/lib/units/convert';
+import { revisionGroups } from './revision-groups';
 
 export interface ListTotals {
   readonly whole: RowTotals;
@@ -24,14 +25,16 @@ interface InFrame {
   readonly geometry: AirframeGeometry;
 }
 
-/** Totals of a revision and of its groups from the stored subtotals, basic (without growth): no row is read. */
+/** Totals of a revision and of its groups of today from the stored subtotals, basic (without growth): no row is read. */
 export async function totalsOfRevision(
   db: Db,
   revisionId: string,
   frameIssueId: string,
   frame: InFrame,
 ): Promise<ListTotals> {
-  const subtotals = await subtotalsOf(db, [revisionId], frameIssueId);
+  const { present } = await revisionGroups(db, revisionId);
+  const stored = await subtotalsOf(db, [revisionId], frameIssueId);
+  const subtotals = stored.map((part) => ({ ...part, group: present(part.group) }));
   const approved = rollUp(subtotals, [], frame.geometry, NO_GROWTH);
   const waiting = new Map<string, number>();
   for (const part of subtotals) {

@@ -5,13 +5,18 @@ import { massListWriter } from '@/lib/export/mass-list';
 import { type Finding } from '@/lib/findings/finding';
 import { type ListColumn } from '@/lib/ingest/mass-list/columns';
 import { type ListDeclarations } from '@/lib/mass/declarations';
+import { type RevisionGroups } from './revision-groups';
 import { componentOf, type StoredRow } from './row-codec';
 
 /** What a view asks of the database. A finding that the revision has not leaves no row in. */
-export function filterOf(view: ListView, findings: readonly Finding[]): RowFilter {
+export function filterOf(
+  view: ListView,
+  findings: readonly Finding[],
+  groups: Pick<RevisionGroups, 'statedIn'>,
+): RowFilter {
   return {
     text: view.find,
-    group: view.group,
+    groups: view.group === '' ? null : groups.statedIn(view.group),
     category: view.category === '' ? null : view.category,
     counting: view.counting === '' ? null : view.counting,
     items: view.finding === '' ? null : (findings.find(({ rule }) => rule === view.finding)?.rows ?? []),
@@ -26,11 +31,17 @@ export function orderOf({ sort }: ListView, declarations: ListDeclarations): Row
   return { column: sort.column, descending: sort.descending !== turned };
 }
 
-/** Stored rows as their list states them. */
-export function rowReader(declarations: ListDeclarations): (row: StoredRow) => ListRow {
+const AS_STATED: Pick<RevisionGroups, 'present'> = { present: (path) => path };
+
+/** Stored rows as their list states them; given `groups`, each in the group that its path is today. */
+export function rowReader(
+  declarations: ListDeclarations,
+  groups: Pick<RevisionGroups, 'present'> = AS_STATED,
+): (row: StoredRow) => ListRow {
   const writer = massListWriter(declarations, []);
   return (row) => {
-    const component = componentOf(row);
+    const stored = componentOf(row);
+    const component = { ...stored, group: groups.present(stored.group) };
     const cells = writer.cells(component);
     const stated: Partial<Record<ListColumn, string | number>> = {};
     for (const column of writer.columns) {

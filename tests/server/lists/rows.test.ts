@@ -8,6 +8,7 @@ import { type Component } from '@/lib/mass/component';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
 import { exportRows } from '@/lib/server/lists/export-rows';
 import { totalsOfRevision, totalsOfView } from '@/lib/server/lists/row-totals';
+import { revisionGroups } from '@/lib/server/lists/revision-groups';
 import { filterOf, orderOf, rowReader } from '@/lib/server/lists/row-view';
 import { programUnderTest, type ProgramUnderTest, reviseList } from '@/tests/support/program';
 
@@ -50,7 +51,7 @@ async function revise(
 
 async function itemsOf(address: string, of = revision, page = { offset: 0, limit: 100 }): Promise<string[]> {
   const view = listViewOf(new URLSearchParams(address));
-  const filter = filterOf(view, of.findings);
+  const filter = filterOf(view, of.findings, await revisionGroups(test.db, of.id));
   const rows = await rowsOfView(test.db, of.id, filter, orderOf(view, of.declarations), page);
   if (page.offset === 0 && page.limit === 100)
     expect(await countRows(test.db, of.id, filter)).toBe(rows.length);
@@ -105,7 +106,7 @@ describe('The rows of a view', () => {
     const rows = await rowsOfView(
       test.db,
       stated.id,
-      filterOf(listViewOf(new URLSearchParams('find=P-3')), []),
+      filterOf(listViewOf(new URLSearchParams('find=P-3')), [], await revisionGroups(test.db, stated.id)),
       { column: 'position', descending: false },
       { offset: 0, limit: 1 },
     );
@@ -160,7 +161,12 @@ describe('The totals of a list', () => {
     const of = await revise(`totals-${title.replace(/\W+/g, '-')}`, declarations, csv);
     const frame = await frameOf(of);
     const kept = await totalsOfRevision(test.db, of.id, test.frameIssueId, frame);
-    const summed = await totalsOfView(test.db, of.id, filterOf(listViewOf(new URLSearchParams()), []), frame);
+    const summed = await totalsOfView(
+      test.db,
+      of.id,
+      filterOf(listViewOf(new URLSearchParams()), [], await revisionGroups(test.db, of.id)),
+      frame,
+    );
     expect({ ...summed, mass: 0, cg: 0 }).toEqual({ ...kept.whole, mass: 0, cg: 0 });
     expect(summed.mass).toBeCloseTo(kept.whole.mass, 9);
     for (const axis of [0, 1, 2] as const)

@@ -1,6 +1,11 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { findConfiguration, subtotalsOf } from '@/db/queries/configurations';
 import { groupBreakdownOf, groupChangesOf, groupsInLists } from '@/db/queries/settings';
+import { rowsOfView } from '@/db/queries/list-rows';
+import { listViewOf } from '@/lib/contracts/list-view';
+import { filterOf, rowReader } from '@/lib/server/lists/row-view';
+import { revisionGroups } from '@/lib/server/lists/revision-groups';
+import { declarations } from '@/tests/support/mass';
 import { type GroupChange } from '@/lib/groups/breakdown';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
 import { evaluate } from '@/lib/server/configurations/roll-up-configuration';
@@ -15,6 +20,8 @@ spar,Wing/Spars,120,6.4,0,1.2,90,8,95,E
 nose ribs,Wing/Nose,30,6,0,1.2,9,1,9,E
 shell,Body,900,6.6,0,1.4,500,4200,4300,C
 `;
+
+const IN_SI = declarations({ axes: ['aft', 'right', 'up'] });
 
 let test: ProgramUnderTest;
 let revision: { id: string; number: number };
@@ -96,6 +103,20 @@ describe('a breakdown of groups', () => {
       .orderBy('item')
       .execute();
     expect(rows.map((row) => row.group_path)).toEqual(['Wing/Nose', 'Body', 'Wing/Spars']);
+    const groups = await revisionGroups(test.db, revision.id);
+    const found = async (group: string): Promise<unknown[]> => {
+      const filter = filterOf({ ...listViewOf(new URLSearchParams({ group })) }, [], groups);
+      const page = { offset: 0, limit: 10 };
+      const order = { column: 'position', descending: false } as const;
+      const inView = await rowsOfView(test.db, revision.id, filter, order, page);
+      return inView.map(rowReader(IN_SI, groups)).map(({ cells }) => [cells.item, cells.group]);
+    };
+    expect(await found('Mainplane')).toEqual([
+      ['spar', 'Mainplane/Spars'],
+      ['nose ribs', 'Mainplane/Leading edge'],
+    ]);
+    expect(await found('Mainplane/Leading edge')).toEqual([['nose ribs', 'Mainplane/Leading edge']]);
+    expect(await found('Wing')).toEqual([]);
     expect((await groupsInLists(test.db, test.program.id)).map(({ group }) => group)).toEqual([
       'Body',
       'Wing/Nose',

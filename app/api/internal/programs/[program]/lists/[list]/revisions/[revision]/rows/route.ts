@@ -4,6 +4,7 @@ import { listViewOf } from '@/lib/contracts/list-view';
 import { serverDb } from '@/lib/server/database';
 import { programRoute } from '@/lib/server/http/internal-route';
 import { reachList, reachRevision } from '@/lib/server/lists/reach-list';
+import { revisionGroups } from '@/lib/server/lists/revision-groups';
 import { filterOf, orderOf, rowReader } from '@/lib/server/lists/row-view';
 
 type Params = { program: string; list: string; revision: string };
@@ -14,7 +15,8 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
   const query = new URL(request.url).searchParams;
   const revision = await reachRevision(db, await reachList(db, program.id, params.list), params.revision);
   const view = listViewOf(query);
-  const filter = filterOf(view, revision.findings);
+  const groups = await revisionGroups(db, revision.id);
+  const filter = filterOf(view, revision.findings, groups);
   const offset = offsetOf(query.get('offset'));
   const [total, rows] = await Promise.all([
     countRows(db, revision.id, filter),
@@ -23,6 +25,6 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
       limit: ROWS_PER_PAGE,
     }),
   ]);
-  const page: RowPage = { offset, total, rows: rows.map(rowReader(revision.declarations)) };
+  const page: RowPage = { offset, total, rows: rows.map(rowReader(revision.declarations, groups)) };
   return Response.json(page);
 });
