@@ -32,6 +32,8 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   mass_rows: ['select'],
   revision_subtotals: ['select', 'insert'],
   imports: ['select', 'insert', 'update'],
+  list_drafts: ['select', 'insert', 'update', 'delete'],
+  list_draft_edits: ['select', 'insert', 'update', 'delete'],
   list_mappings: ['select', 'insert'],
   import_mappings: ['select', 'insert'],
   import_readings: ['select', 'insert'],

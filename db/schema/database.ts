@@ -41,6 +41,7 @@ import {
   type SessionsTable,
   type UsersTable,
 } from './people';
+import { type ListDraftEditsTable, type ListDraftsTable } from './drafts';
 import {
   type BuildsTable,
   type FrameIssuesTable,
@@ -71,15 +72,17 @@ export interface Database {
   builds: BuildsTable;
   limits: LimitsTable;
   growth_allowances: GrowthAllowancesTable;
+  group_changes: GroupChangesTable;
   stored_files: StoredFilesTable;
   lists: ListsTable;
   list_revisions: ListRevisionsTable;
   row_versions: RowVersionsTable;
   row_ends: RowEndsTable;
   mass_rows: MassRowsView;
-  group_changes: GroupChangesTable;
   revision_subtotals: RevisionSubtotalsTable;
   imports: ImportsTable;
+  list_drafts: ListDraftsTable;
+  list_draft_edits: ListDraftEditsTable;
   list_mappings: ListMappingsTable;
   import_mappings: ImportMappingsTable;
   import_readings: ImportReadingsTable;
