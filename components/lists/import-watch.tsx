@@ -1,10 +1,10 @@
 'use client';
 
-import { useQuery } from '@tanstack/react-query';
+import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useEffect, useRef } from 'react';
 import { ask } from '@/components/lists/ask';
-import { counted, countWords } from '@/components/lists/list-words';
+import { counted, countWords, durationWords } from '@/components/lists/list-words';
 import { ProblemTable } from '@/components/lists/problem-table';
 import { Banner } from '@/components/ui/banner';
 import { Button, ButtonLink } from '@/components/ui/button';
@@ -53,18 +53,27 @@ export function ImportWatch({ initial, from, listHref, mayUpload }: ImportWatchP
       </Banner>
     );
   }
-  if (isOpen(data)) return <Underway found={data} />;
+  if (isOpen(data)) return <Underway found={data} from={from} mayCancel={mayUpload} />;
+  if (data.state === 'cancelled') return <Cancelled found={data} listHref={listHref} mayUpload={mayUpload} />;
   if (data.state === 'done') {
     return (
       <Banner
         severity="done"
         live
-        title={`Revision ${data.revision ?? ''} is made of this file`}
+        title={
+          data.unchanged
+            ? `This file is revision ${data.revision ?? ''} already`
+            : `Revision ${data.revision ?? ''} is made of this file`
+        }
         action={
           <ButtonLink href={`${listHref}?revision=${data.revision ?? ''}`}>Go to the revision</ButtonLink>
         }
       >
-        <p>{counted(data.rows, 'row')} read and checked.</p>
+        {data.unchanged ? (
+          <p>The same bytes, read in the same way. No new revision was made.</p>
+        ) : (
+          <p>{counted(data.rows, 'row')} read and checked.</p>
+        )}
       </Banner>
     );
   }
@@ -75,7 +84,19 @@ function isOpen(found: ImportView | undefined): boolean {
   return found?.state === 'waiting' || found?.state === 'running';
 }
 
-function Underway({ found }: { readonly found: ImportView }) {
+interface UnderwayProps {
+  readonly found: ImportView;
+  readonly from: string;
+  readonly mayCancel: boolean;
+}
+
+function Underway({ found, from, mayCancel }: UnderwayProps) {
+  const client = useQueryClient();
+  const cancel = useMutation({
+    mutationFn: () => ask(from, importSchema, { method: 'DELETE' }),
+    onSuccess: (now) => client.setQueryData(['import', found.import], now),
+    onError: () => client.invalidateQueries({ queryKey: ['import', found.import] }),
+  });
   return (
     <div className="grid max-w-160 gap-4">
       <ProgressBar
@@ -84,9 +105,48 @@ function Underway({ found }: { readonly found: ImportView }) {
         total={found.ofRows}
         of="rows"
       />
+      <p aria-live="polite">{leftWords(found)}</p>
       <p className="text-ink-2">You can leave this page and come back to it: the import goes on.</p>
+      {cancel.error === null ? null : <p className="text-blocker">{cancel.error.message}</p>}
+      {mayCancel ? (
+        <div>
+          <Button onClick={() => cancel.mutate()} disabled={cancel.isPending}>
+            {cancel.isPending ? 'Cancelling the import' : 'Cancel import'}
+          </Button>
+        </div>
+      ) : null}
     </div>
   );
+}
+
+function leftWords({ state, rows, ofRows, secondsLeft }: ImportView): string {
+  if (state === 'waiting') return 'It has not begun.';
+  if (ofRows !== null && rows >= ofRows) return 'All rows are read; they are being stored.';
+  return secondsLeft === null ? 'Too early to say how long it takes.' : `${durationWords(secondsLeft)} left.`;
+}
+
+function Cancelled({
+  found,
+  listHref,
+  mayUpload,
+}: Pick<ImportWatchProps, 'listHref' | 'mayUpload'> & { found: ImportView }) {
+  return (
+    <Banner
+      severity="note"
+      word="Cancelled"
+      live
+      title="The import was called off"
+      action={mayUpload ? <ButtonLink href={`${listHref}/upload`}>Upload again</ButtonLink> : null}
+    >
+      <p>{forceWords(found)}</p>
+    </Banner>
+  );
+}
+
+function forceWords({ inForce }: ImportView): string {
+  return inForce === 0
+    ? 'Nothing of it was kept; the list has no revision yet.'
+    : `Nothing of it was kept; revision ${inForce} stays in force.`;
 }
 
 function Refused({
@@ -96,10 +156,7 @@ function Refused({
   mayUpload,
 }: { readonly found: ImportView } & Omit<ImportWatchProps, 'initial'>) {
   const total = found.counts.reduce((sum, { count }) => sum + count, 0);
-  const force =
-    found.inForce === 0
-      ? 'Nothing of it was kept; the list has no revision yet.'
-      : `Nothing of it was kept; revision ${found.inForce} stays in force.`;
+  const force = forceWords(found);
   const again = mayUpload ? (
     <ButtonLink href={`${listHref}/upload`} kind="primary">
       Upload again

@@ -69,3 +69,11 @@ export function countWords(count: number): string {
 export function counted(count: number, one: string, many = `${one}s`): string {
   return `${countWords(count)} ${count === 1 ? one : many}`;
 }
+
+/** About how long, as people say it: `A few seconds`, `About 40 seconds`, `About 3 minutes`. */
+export function durationWords(seconds: number): string {
+  if (seconds < 5) return 'A few seconds';
+  if (seconds < 55) return `About ${Math.ceil(seconds / 5) * 5} seconds`;
+  const minutes = Math.ceil(seconds / 60);
+  return minutes === 1 ? 'About a minute' : `About ${countWords(minutes)} minutes`;
+}

@@ -13,19 +13,23 @@ export interface RevisionLine {
   readonly reason: string;
   readonly rows: number;
   readonly findings: readonly Pick<Finding, 'severity'>[];
-  /** The file it was read from; null when it was made by edits. */
+  /** The file it was read from; null when it was not made from one. */
   readonly file: string | null;
+  /** The revision that it brings back. */
+  readonly restoredFrom: number | null;
 }
 
 interface RevisionTableProps {
   readonly revisions: readonly RevisionLine[];
+  readonly newest: number;
+  readonly mayRestore: boolean;
   readonly listHref: string;
   /** The internal routes of the list's revisions. */
   readonly route: string;
 }
 
 /** The revisions of a list, newest first: who, when, why, from what, and how they differ. */
-export function RevisionTable({ revisions, listHref, route }: RevisionTableProps) {
+export function RevisionTable({ revisions, newest, mayRestore, listHref, route }: RevisionTableProps) {
   return (
     <Table caption="Revisions, newest first" captionHidden>
       <thead>
@@ -38,6 +42,7 @@ export function RevisionTable({ revisions, listHref, route }: RevisionTableProps
           <ColumnHead side="right">Rows</ColumnHead>
           <ColumnHead>Against the one before</ColumnHead>
           <ColumnHead>Findings</ColumnHead>
+          <ColumnHead>Against the newest</ColumnHead>
         </tr>
       </thead>
       <tbody>
@@ -54,7 +59,11 @@ export function RevisionTable({ revisions, listHref, route }: RevisionTableProps
             <Cell className="whitespace-nowrap">{revision.author}</Cell>
             <Cell className="max-w-90 min-w-48 wrap-anywhere">{revision.reason}</Cell>
             <Cell className="max-w-60 wrap-anywhere">
-              {revision.file === null ? (
+              {revision.restoredFrom !== null ? (
+                <TextLink
+                  href={`${listHref}?revision=${revision.restoredFrom}`}
+                >{`Revision ${revision.restoredFrom}`}</TextLink>
+              ) : revision.file === null ? (
                 'Edits'
               ) : (
                 <a href={`${route}/${revision.number}/file`} download className={LINK_CLASS}>
@@ -77,6 +86,15 @@ export function RevisionTable({ revisions, listHref, route }: RevisionTableProps
             </Cell>
             <Cell>
               <FindingCounts findings={revision.findings} />
+            </Cell>
+            <Cell className="whitespace-nowrap">
+              {revision.number === newest ? (
+                <span className="text-ink-2">The newest</span>
+              ) : (
+                <TextLink href={`${listHref}/changes?from=${newest}&to=${revision.number}`}>
+                  {mayRestore ? 'Compare or bring back' : 'Compare'}
+                </TextLink>
+              )}
             </Cell>
           </tr>
         ))}

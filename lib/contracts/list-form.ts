@@ -1,7 +1,16 @@
 import { z } from 'zod';
 import { axesProblem } from '@/lib/frames/axes';
-import { codeSchema, titleSchema } from './codes';
+import { codeSchema, reasonSchema, titleSchema } from './codes';
+import { wholeField } from './form-fields';
 import { type ListDeclarationsBody, listDeclarationsSchema } from './list-declarations';
+
+/** Which old revision is brought back, over which newest one, and why. */
+export const restoreSchema = z.object({
+  list: codeSchema,
+  revision: wholeField(1),
+  newest: wholeField(1),
+  reason: reasonSchema,
+});
 
 const NUMBER = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?$/;
 

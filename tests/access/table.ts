@@ -122,6 +122,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/programs/[program]/lists/actions.ts': {
     addListAction: 'program lists.keep',
     declareListAction: 'program lists.keep',
+    restoreRevisionAction: 'program lists.keep',
   },
   'app/(workspace)/programs/[program]/lists/new/page.tsx': { page: 'program lists.keep' },
   'app/(workspace)/programs/[program]/lists/[list]/page.tsx': { page: 'program lists.read' },
@@ -133,9 +134,15 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
 
   'app/api/internal/programs/[program]/lists/example/route.ts': { GET: 'program lists.read' },
   'app/api/internal/programs/[program]/lists/[list]/edits/route.ts': { POST: 'program lists.keep' },
-  'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': { GET: 'program lists.read' },
+  'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': {
+    GET: 'program lists.read',
+    DELETE: 'program lists.keep',
+  },
   'app/api/internal/programs/[program]/lists/[list]/imports/[import]/problems/route.ts': {
     GET: 'program lists.read',
+  },
+  'app/(workspace)/programs/[program]/lists/[list]/uploads/[upload]/page.tsx': {
+    page: 'program lists.keep',
   },
   'app/api/internal/programs/[program]/lists/[list]/uploads/[upload]/route.ts': {
     DELETE: 'program lists.keep',

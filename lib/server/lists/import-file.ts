@@ -1,16 +1,17 @@
 import type pg from 'pg';
+import { type Updateable } from 'kysely';
 import { type Db } from '@/db/client';
 import { claimImport, findImport, type Import } from '@/db/queries/lists';
+import { type ImportsTable } from '@/db/schema/lists';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type Problem } from '@/lib/ingest/problem';
 import { recordEvent } from '@/lib/server/audit/record-event';
 import { log } from '@/lib/server/log';
+import { ImportCancelled, progressTeller } from './import-progress';
 import { publishRevision } from './publish-revision';
 import { readImport } from './read-import';
 import { type RevisionWriter } from './revision-writer';
-
-/** Progress is told at most this often. */
-const PROGRESS_EVERY_MS = 400;
+import { revisionOfSameFile } from './same-file';
 
 export interface ImportServices {
   readonly pool: pg.Pool;
@@ -30,26 +31,28 @@ class WrongFile extends Error {
 
 class AlreadyHandled extends Error {}
 
+/** The file is the revision in force. */
+class SameFile extends Error {
+  constructor(readonly revisionId: string) {
+    super('the file is the revision in force');
+  }
+}
+
 /**
  * Reads the stored file of an import and makes it the list's next revision, whole or not at all. Safe to run again after a crash
- * at any moment: an import that is done or failed is left alone, and two runs of one import cannot both commit.
+ * at any moment: an import that has ended is left alone, and two runs of one import cannot both commit. One that is called off
+ * stores nothing; one whose file is the revision in force makes no other.
  */
 export async function importFile(services: ImportServices, importId: string): Promise<void> {
   const { db, pool } = services;
   const found = await findImport(db, importId);
   if (found === undefined) throw new Error(`there is no import ${importId}`);
-  if (found.state === 'done' || found.state === 'failed') return;
+  if (!(await begin(db, importId))) return;
   const list = await db
     .selectFrom('lists')
     .selectAll()
     .where('id', '=', found.list_id)
     .executeTakeFirstOrThrow();
-  await db
-    .updateTable('imports')
-    .set({ state: 'running', rows_done: 0, touched_at: new Date() })
-    .where('id', '=', importId)
-    .where('state', 'in', ['waiting', 'running'])
-    .execute();
   const author = { userId: found.created_by, address: 'job' };
   try {
     await publishRevision(
@@ -61,32 +64,72 @@ export async function importFile(services: ImportServices, importId: string): Pr
         reason: found.reason,
         file: { sha256: found.file_sha256, name: found.file_name },
         author,
+        prepare: async (trx) => {
+          await claimImport(trx, importId);
+          if (!(await isOpen(trx, importId))) throw new AlreadyHandled();
+          const same = await revisionOfSameFile(trx, list, found);
+          if (same !== null) throw new SameFile(same);
+        },
       },
-      async (writer, trx) => {
-        await claimImport(trx, importId);
-        if (!(await isOpen(trx, importId))) throw new AlreadyHandled();
+      async (writer) => {
         await readInto(services, found, list.declarations, writer);
         return writer.rows;
       },
-      async (trx, made, rows) => {
-        await trx
-          .updateTable('imports')
-          .set({
-            state: 'done',
-            revision_id: made.id,
-            rows_done: rows,
-            of_rows: rows,
-            finished_at: new Date(),
-            touched_at: new Date(),
-          })
-          .where('id', '=', importId)
-          .execute();
-      },
+      (trx, made, rows) =>
+        endImport(trx, importId, { state: 'done', revision_id: made.id, rows_done: rows, of_rows: rows }),
     );
   } catch (error) {
-    if (error instanceof AlreadyHandled) return;
-    if (!(error instanceof WrongFile)) throw error;
-    await failImport(db, found, error);
+    if (error instanceof AlreadyHandled || error instanceof ImportCancelled) return;
+    if (error instanceof SameFile) await keepAsItIs(db, importId, error.revisionId);
+    else if (error instanceof WrongFile) await failImport(db, found, error);
+    else throw error;
+  }
+}
+
+/** False when it has ended already. */
+async function begin(db: Db, importId: string): Promise<boolean> {
+  const begun = await db
+    .updateTable('imports')
+    .set({ state: 'running', rows_done: 0, started_at: new Date(), touched_at: new Date() })
+    .where('id', '=', importId)
+    .where('state', 'in', ['waiting', 'running'])
+    .executeTakeFirst();
+  return begun.numUpdatedRows === 1n;
+}
+
+/** @throws AlreadyHandled when it has ended otherwise meanwhile. */
+async function endImport(db: Db, importId: string, end: Updateable<ImportsTable>): Promise<void> {
+  const ended = await db
+    .updateTable('imports')
+    .set({ ...end, finished_at: new Date(), touched_at: new Date() })
+    .where('id', '=', importId)
+    .where('state', 'in', ['waiting', 'running'])
+    .executeTakeFirst();
+  if (ended.numUpdatedRows !== 1n) throw new AlreadyHandled();
+}
+
+async function keepAsItIs(db: Db, importId: string, revisionId: string): Promise<void> {
+  const { rows } = await db
+    .selectFrom('list_revisions')
+    .select('rows')
+    .where('id', '=', revisionId)
+    .executeTakeFirstOrThrow();
+  await unlessHandled(
+    endImport(db, importId, {
+      state: 'done',
+      revision_id: revisionId,
+      unchanged: true,
+      rows_done: rows,
+      of_rows: rows,
+    }),
+  );
+}
+
+async function unlessHandled(ending: Promise<void>): Promise<void> {
+  try {
+    await ending;
+  } catch (error) {
+    if (!(error instanceof AlreadyHandled)) throw error;
   }
 }
 
@@ -114,44 +157,18 @@ async function readInto(
   if (reading.problems.length > 0) throw new WrongFile(reading.problems, reading.problemCounts);
 }
 
-/** Tells the rows done on another connection than the import's own, a few times a second; a telling that fails is only logged. */
-function progressTeller(db: Db, importId: string): (rows: number) => void {
-  let next = 0;
-  let telling = false;
-  return (rows) => {
-    if (telling || Date.now() < next) return;
-    telling = true;
-    next = Date.now() + PROGRESS_EVERY_MS;
-    db.updateTable('imports')
-      .set({ rows_done: rows, touched_at: new Date() })
-      .where('id', '=', importId)
-      .where('state', '=', 'running')
-      .execute()
-      .catch((error: unknown) => log.warn({ err: error }, 'could not tell the progress of an import'))
-      .finally(() => {
-        telling = false;
-      });
-  };
-}
-
 async function failImport(
   db: Db,
   found: Pick<Import, 'id' | 'created_by' | 'file_name'> & { program_id: string; list_code: string },
   wrong: WrongFile,
 ): Promise<void> {
   const count = Object.values(wrong.counts).reduce((sum, one) => sum + one, 0);
-  await db.transaction().execute(async (trx) => {
-    await trx
-      .updateTable('imports')
-      .set({
-        state: 'failed',
-        problems: JSON.stringify(wrong.problems),
-        problem_counts: JSON.stringify(wrong.counts),
-        finished_at: new Date(),
-        touched_at: new Date(),
-      })
-      .where('id', '=', found.id)
-      .execute();
+  const refused = db.transaction().execute(async (trx) => {
+    await endImport(trx, found.id, {
+      state: 'failed',
+      problems: JSON.stringify(wrong.problems),
+      problem_counts: JSON.stringify(wrong.counts),
+    });
     await recordEvent(trx, {
       scope: found.program_id,
       actor: { userId: found.created_by, address: 'job' },
@@ -160,5 +177,6 @@ async function failImport(
       detail: { list: found.list_code, file: found.file_name, problems: count },
     });
   });
+  await unlessHandled(refused);
   log.info({ import: found.id, problems: count }, 'import refused');
 }

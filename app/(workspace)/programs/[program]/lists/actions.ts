@@ -2,10 +2,11 @@
 
 import { redirect } from 'next/navigation';
 import { declarationsFromBody } from '@/lib/contracts/list-declarations';
-import { changeListSchema, newListSchema } from '@/lib/contracts/list-form';
-import { serverDb } from '@/lib/server/database';
+import { changeListSchema, newListSchema, restoreSchema } from '@/lib/contracts/list-form';
+import { serverDb, writerPool } from '@/lib/server/database';
 import { programAction } from '@/lib/server/http/action';
 import { reachList } from '@/lib/server/lists/reach-list';
+import { restoreRevision } from '@/lib/server/lists/restore-revision';
 import { addList, saveList } from '@/lib/server/lists/save-list';
 
 export const addListAction = programAction(
@@ -33,5 +34,18 @@ export const declareListAction = programAction(
       declarations,
     });
     redirect(`/programs/${program.code}/lists/${list.code}`);
+  },
+);
+
+export const restoreRevisionAction = programAction(
+  'lists.keep',
+  restoreSchema,
+  async ({ input, person, program }) => {
+    const list = await reachList(serverDb(), program.id, input.list);
+    const number = await restoreRevision(
+      { pool: writerPool(), db: serverDb() },
+      { person, list, number: input.revision, newest: input.newest, reason: input.reason },
+    );
+    redirect(`/programs/${program.code}/lists/${list.code}?revision=${number}`);
   },
 );

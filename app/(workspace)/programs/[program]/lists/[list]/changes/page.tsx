@@ -1,4 +1,6 @@
 import { type Metadata } from 'next';
+import { GroupChangeTable } from '@/components/lists/group-change-table';
+import { RestoreForm } from '@/components/lists/restore-form';
 import { ChangeTable } from '@/components/lists/change-table';
 import { counted } from '@/components/lists/list-words';
 import { Pagination } from '@/components/ui/pagination';
@@ -6,11 +8,13 @@ import { PageHead, Section } from '@/components/ui/section';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
+import { compareGroups } from '@/lib/server/lists/compare-groups';
 import { compareRevisions } from '@/lib/server/lists/compare-revisions';
 import { declarationChanges } from '@/lib/server/lists/declaration-changes';
 import { pageOf } from '@/lib/server/lists/page-of';
 import { reachRevision } from '@/lib/server/lists/reach-list';
 import { ProgramFrame } from '../../../frame';
+import { restoreRevisionAction } from '../../actions';
 import { orNotFound, requireList } from '../list-page';
 
 export const metadata: Metadata = { title: 'Changes' };
@@ -33,10 +37,12 @@ export default async function ChangesPage({
   );
   const here = `${listHref}/changes?from=${before.number}&to=${after.number}&`;
   const first = pageOf(asked['page'], Number.MAX_SAFE_INTEGER, PER_PAGE, here);
-  const { counts, rows } = await compareRevisions(db, before, after, {
-    offset: first.offset,
-    limit: PER_PAGE,
-  });
+  const [{ counts, rows }, mass] = await Promise.all([
+    compareRevisions(db, before, after, { offset: first.offset, limit: PER_PAGE }),
+    compareGroups(db, before, after),
+  ]);
+  const mayRestore =
+    access.can('lists.keep') && before.number === list.last_revision && after.number < before.number;
   const total = counts.added + counts.removed + counts.changed;
   const page = pageOf(asked['page'], total, PER_PAGE, here);
   const declared = declarationChanges(before.declarations, after.declarations);
@@ -69,6 +75,32 @@ export default async function ChangesPage({
           </Table>
         </Section>
       )}
+      {mayRestore ? (
+        <Section
+          title={`Bring revision ${after.number} back`}
+          lead={`It becomes revision ${before.number + 1}, with its own declarations. What this page shows is what that changes; revisions ${after.number + 1} to ${before.number} stay as they are.`}
+        >
+          <RestoreForm
+            action={restoreRevisionAction}
+            program={access.program.code}
+            list={list.code}
+            revision={after.number}
+            newest={before.number}
+          />
+        </Section>
+      ) : null}
+      <Section
+        title="Mass, CG and tensor by group"
+        lead="After less before, without growth. CG in airframe axes from the datum; moments of each about its own CG in body axes, products as positive integrals."
+      >
+        <GroupChangeTable
+          whole={mass.whole}
+          groups={mass.groups}
+          hrefOf={(group) =>
+            `${listHref}?${new URLSearchParams({ revision: String(after.number), group }).toString()}#rows`
+          }
+        />
+      </Section>
       <Section title="Rows">
         {total === 0 ? (
           <p className="text-ink-2">No row differs.</p>

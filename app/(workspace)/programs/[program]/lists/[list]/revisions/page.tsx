@@ -1,10 +1,11 @@
 import { type Metadata } from 'next';
 import { revisionsOfList } from '@/db/queries/lists';
+import { CompareForm } from '@/components/lists/compare-form';
 import { QueryRoot } from '@/components/lists/query-root';
 import { RevisionTable } from '@/components/lists/revision-table';
 import { EmptyPlace } from '@/components/ui/empty-place';
 import { Pagination } from '@/components/ui/pagination';
-import { PageHead } from '@/components/ui/section';
+import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { pageOf } from '@/lib/server/lists/page-of';
@@ -35,6 +36,8 @@ export default async function RevisionsPage({
       ) : (
         <QueryRoot>
           <RevisionTable
+            newest={list.last_revision}
+            mayRestore={access.can('lists.keep')}
             listHref={listHref}
             route={`${route}/revisions`}
             revisions={all.slice(page.offset, page.offset + PER_PAGE).map((revision) => ({
@@ -45,10 +48,16 @@ export default async function RevisionsPage({
               rows: revision.rows,
               findings: revision.findings,
               file: revision.file_name,
+              restoredFrom: revision.restored_from,
             }))}
           />
         </QueryRoot>
       )}
+      {all.length > 1 ? (
+        <Section title="Compare any two">
+          <CompareForm action={`${listHref}/changes`} numbers={all.map(({ number }) => number)} />
+        </Section>
+      ) : null}
       {all.length > PER_PAGE ? <Pagination {...page.words} of="revisions" /> : null}
     </ProgramFrame>
   );
