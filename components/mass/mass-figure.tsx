@@ -49,7 +49,8 @@ export function MassFigure({
           {predictedSigma ? (
             <span className="text-ink-2">
               {' '}
-              ± <Num value={predictedSigma} unit={unit} decimals={decimals} />
+              ±&nbsp;
+              <Num value={predictedSigma} unit={unit} decimals={decimals} />
             </span>
           ) : null}
         </p>

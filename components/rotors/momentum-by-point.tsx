@@ -34,7 +34,11 @@ export function MomentumByPoint({ points, asked, unit, stacked = false }: Moment
   return (
     <div className="grid min-w-0 gap-6">
       <MomentumSummary
-        points={points.map((point) => ({ ...point, total: point.momentum?.total ?? null }))}
+        points={points.map((point) => ({
+          ...point,
+          total: point.momentum?.total ?? null,
+          sigma: statedSigma(point.uncertainty ?? null),
+        }))}
         shown={shown?.code ?? null}
         unit={unit}
       />

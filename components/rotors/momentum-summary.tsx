@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import { type Momentum } from '@/components/mass/momentum-table';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
@@ -13,6 +14,8 @@ export interface MomentumPoint {
   readonly title: string;
   /** kg.m2/s in body axes; null where a shaft has no speed. */
   readonly total: Vec3 | null;
+  /** One standard deviation of each component, where one is stated: it sets the figures shown. */
+  readonly sigma: Momentum | null;
   readonly href: string;
 }
 
@@ -26,7 +29,11 @@ interface MomentumSummaryProps {
 /** Total angular momentum at every operating point; each leads to its rotors. */
 export function MomentumSummary({ points, shown, unit }: MomentumSummaryProps) {
   const all = points.flatMap(({ total }) => (total ?? []).map((part) => fromSi(part, unit)));
-  const decimals = sharedDecimals(all);
+  const deviations = points.flatMap(({ sigma }) => (sigma === null ? [] : [sigma.hx, sigma.hy, sigma.hz]));
+  const decimals = sharedDecimals(
+    all,
+    deviations.map((part) => fromSi(part, unit)),
+  );
   return (
     <Table caption="Angular momentum of all rotors relative to the airframe, in body axes by the right-hand rule">
       <thead>
