@@ -12,7 +12,7 @@ import {
   withoutGroup,
   withoutMaturity,
 } from './rows/bookkeeping';
-import { changedByInertiaUnit, changedByLengthUnit, changedByMassUnit } from './rows/changes';
+import { changedByInertiaUnit, changedByLengthUnit, changedByMassUnit, movedAcross } from './rows/changes';
 import { memoRows, pairInHalfList } from './rows/counting';
 import { duplicateRow, nearDuplicate, pairEnteredTwice, sameMassAndPlace } from './rows/duplicates';
 import { listLengthSlip, listMassSlip, massJump } from './rows/former';
@@ -80,6 +80,7 @@ export const ROW_RULES: readonly RowRule[] = [
   nearDuplicate,
   samePartDiffers,
   halfOnOtherSide,
+  movedAcross,
   memoRows,
   assemblyTotalDiffers,
   withoutMaturity,

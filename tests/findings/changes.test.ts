@@ -46,13 +46,21 @@ describe('findings on a row against itself in the revision before', () => {
     expect(found({ position: [-5 / 0.3048, -1.5 / 0.3048, 0.8 / 0.3048] })).toEqual([]);
   });
 
-  it('warn of one coordinate with the other sign', () => {
-    const finding = found({ position: [5, 1.5, 0.8] })[0];
-    expect(finding?.message).toMatch(/CG 5, 1\.5, 0\.8 m, before 5, -1\.5, 0\.8 m: y has the other sign\.$/);
+  it('warn of one coordinate with the other sign, and note one that is lateral', () => {
+    const [up] = found({ position: [5, -1.5, -0.8] });
+    expect(up).toMatchObject({ rule: 'place-changed-by-slip', severity: 'warning' });
+    expect(up?.message).toMatch(/CG 5, -1\.5, -0\.8 m, before 5, -1\.5, 0\.8 m: z has the other sign\.$/);
+    const [across] = found({ position: [5, 1.5, 0.8] });
+    expect(across).toMatchObject({ rule: 'moved-to-other-side', severity: 'note' });
+    expect(across?.message).toMatch(/R1: CG 5, 1\.5, 0\.8 m, before 5, -1\.5, 0\.8 m\.$/);
+    expect(ids(found({ position: [-5, -1.5, 0.8] }, { axes: ['left', 'aft', 'up'] }))).toEqual([
+      'moved-to-other-side',
+    ]);
     expect(found({ position: [5, 1.3, 0.8] })).toEqual([]);
     expect(found({ position: [-5, 1.5, 0.8] })).toEqual([]);
-    const near = { ...BEFORE, position: [5, -0.04, 0.8] } as const;
-    expect(found({ position: [5, 0.04, 0.8] }, {}, near)).toEqual([]);
+    const near = { ...BEFORE, position: [5, -0.04, 0.04] } as const;
+    expect(found({ position: [5, 0.04, 0.04] }, {}, near)).toEqual([]);
+    expect(found({ position: [5, -0.04, -0.04] }, {}, near)).toEqual([]);
   });
 
   it('warn of moments off by the factor of a unit at one mass', () => {

@@ -1,9 +1,9 @@
 import { type Vec3, normVec } from '@/lib/numerics/vec3';
-import { INERTIA_UNITS, LENGTH_UNITS, type LengthUnit, MASS_UNITS } from '@/lib/units/table';
+import { INERTIA_UNITS, LENGTH_UNITS, MASS_UNITS } from '@/lib/units/table';
 
 import { type RowChange, type RowFigures } from '../context';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
-import { type UnitSlip, slipAt, slipWords, slipsOfOneThing } from '../unit-slips';
+import { slipAt, slipWords, slipsOfOneThing } from '../unit-slips';
 import { FIRST_ROWS, Seen, counted, inUnit } from '../watch';
 
 /*
@@ -72,42 +72,57 @@ export const changedByMassUnit: RowRule = {
   ),
 };
 
-/** `looks as if in mm`, or which coordinate has the other sign; null where the place changed otherwise. */
-function placeWords(now: Vec3, before: Vec3, slips: readonly UnitSlip<LengthUnit>[]): string | null {
-  const was = normVec(before);
-  if (was === 0) return null;
-  const slip = slipAt(normVec(now) / was, slips, AT_FACTOR);
-  if (slip !== null) {
-    const scaled = AXES.every(
-      (k) => Math.abs(now[k] - slip.factor * before[k]) <= AT_FACTOR * slip.factor * was,
-    );
-    return scaled ? `it looks ${slipWords(slip)}` : null;
-  }
+type Axis = (typeof AXES)[number];
+
+/** The one coordinate whose sign turned while all kept their size; null where the place changed otherwise. */
+function turnedAxis(now: Vec3, before: Vec3): Axis | null {
   const [turned, ...more] = AXES.filter((k) => now[k] * before[k] < 0);
   if (turned === undefined || more.length > 0 || Math.abs(now[turned]) < NEAR_ZERO) return null;
-  const isSame = AXES.every((k) => Math.abs(Math.abs(now[k]) - Math.abs(before[k])) <= AT_FACTOR * was);
-  return isSame ? `${NAMES[turned]} has the other sign` : null;
+  const most = AT_FACTOR * normVec(before);
+  return AXES.every((k) => Math.abs(Math.abs(now[k]) - Math.abs(before[k])) <= most) ? turned : null;
+}
+
+function isLateral(axis: Axis, { placement: { declarations } }: WatchedList): boolean {
+  return ['left', 'right'].includes(declarations.axes[axis]);
+}
+
+/** `it looks as if in mm`, or which coordinate has the other sign; null where the place changed otherwise. */
+function slipOfPlace({ now, before }: RowChange, list: WatchedList): string | null {
+  const was = normVec(before.position);
+  if (was === 0) return null;
+  const slips = slipsOfOneThing(list.placement.declarations.lengthUnit, LENGTH_UNITS);
+  const slip = slipAt(normVec(now.position) / was, slips, AT_FACTOR);
+  if (slip !== null) {
+    const { factor } = slip;
+    const isScaled = AXES.every(
+      (k) => Math.abs(now.position[k] - factor * before.position[k]) <= AT_FACTOR * factor * was,
+    );
+    return isScaled ? `it looks ${slipWords(slip)}` : null;
+  }
+  const turned = turnedAxis(now.position, before.position);
+  return turned === null || isLateral(turned, list) ? null : `${NAMES[turned]} has the other sign`;
+}
+
+/** `CG 5, 1.5, 0.8 m, before 5, -1.5, 0.8 m`. */
+function bothPlaces({ now, before }: RowChange, { placement }: WatchedList): string {
+  const { lengthUnit } = placement.declarations;
+  const at = (place: Vec3): string =>
+    `${place.map((part) => inUnit(part, lengthUnit).split(' ')[0]).join(', ')} ${lengthUnit}`;
+  return `CG ${at(now.position)}, before ${at(before.position)}`;
 }
 
 export const changedByLengthUnit: RowRule = {
   id: 'place-changed-by-slip',
   severity: 'warning',
-  sees: 'A counted row whose place against its revision before is off by the factor of a length unit in all three coordinates (25.4, 12, 3.2808, 1000 ...), or has the other sign of one, within 0.5 %.',
+  sees: 'A counted row whose place against its revision before is off by the factor of a length unit in all three coordinates (25.4, 12, 3.2808, 1000 ...), or has the other sign of one that is not lateral, within 0.5 %.',
   why: 'A part that moves goes somewhere near; a factor of a unit or a turned sign is a slip of the entry.',
   remedy: 'Check the place against its source: unit, sign and the axes that the list declares.',
   source: FACTORS,
   keeps: FIRST_ROWS,
   watch: watchChanges(
-    ({ placement: { declarations } }) => {
-      const { lengthUnit } = declarations;
-      const slips = slipsOfOneThing(lengthUnit, LENGTH_UNITS);
-      return ({ now, before }) => {
-        const words = placeWords(now.position, before.position, slips);
-        if (words === null) return null;
-        const shownAt = (at: Vec3): string =>
-          `${at.map((part) => inUnit(part, lengthUnit).split(' ')[0]).join(', ')} ${lengthUnit}`;
-        return `CG ${shownAt(now.position)}, before ${shownAt(before.position)}: ${words}`;
-      };
+    (list) => (change) => {
+      const words = slipOfPlace(change, list);
+      return words === null ? null : `${bothPlaces(change, list)}: ${words}`;
     },
     (count) =>
       counted(
@@ -115,6 +130,23 @@ export const changedByLengthUnit: RowRule = {
         'row moved by a unit or a sign since the revision before',
         'rows moved by a unit or a sign since the revision before',
       ),
+  ),
+};
+
+export const movedAcross: RowRule = {
+  id: 'moved-to-other-side',
+  severity: 'note',
+  sees: 'A counted row whose lateral coordinate has the other sign than in its revision before, all else being where it was within 0.5 %.',
+  why: 'Parts do change sides; but a sign lost in a new source looks just the same, and moves the CG twice as far as the part is off the plane.',
+  remedy: 'Check that the part was meant to change sides.',
+  source: 'Common practice, no source',
+  keeps: FIRST_ROWS,
+  watch: watchChanges(
+    (list) => (change) => {
+      const turned = turnedAxis(change.now.position, change.before.position);
+      return turned === null || !isLateral(turned, list) ? null : bothPlaces(change, list);
+    },
+    (count) => counted(count, 'row changed sides', 'rows changed sides'),
   ),
 };
 

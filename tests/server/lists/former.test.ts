@@ -63,7 +63,8 @@ describe('A new revision is held against the one before', () => {
     expect(seen('mass-changed-by-unit')?.message).toMatch(/26\.46 kg, before 12 kg: it looks as if in lb\.$/);
     expect(seen('inertia-changed-by-unit')?.rows).toEqual(['P4']);
     expect(seen('inertia-changed-by-unit')?.message).toMatch(/as if lb\.ft2 had been taken for slug\.ft2\.$/);
-    expect(seen('place-changed-by-slip')?.rows).toEqual(['P6', 'P8']);
+    expect(seen('place-changed-by-slip')?.rows).toEqual(['P8']);
+    expect(seen('moved-to-other-side')).toMatchObject({ rows: ['P6'], severity: 'note' });
   });
 
   it('when it is edited too', async () => {
