@@ -10,6 +10,7 @@ import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type GroupBreakdown } from '@/lib/groups/breakdown';
+import { ColumnBook } from '@/lib/mass/columns/column-book';
 import { Placement } from '@/lib/mass/place';
 import { type Subtotal, SubtotalBook } from '@/lib/mass/subtotals';
 import { UncertaintyBook, type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
@@ -44,6 +45,8 @@ export interface OpenRevision {
 export class RevisionWriter {
   readonly #book: SubtotalBook;
   readonly #uncertainty: UncertaintyBook;
+  /** Instead of both where rows come in blocks. */
+  #columns: ColumnBook | null = null;
   readonly #rules: RowChecks;
 
   private constructor(
@@ -88,6 +91,7 @@ export class RevisionWriter {
    * database has to catch up.
    */
   add(component: Component): Promise<void> | undefined {
+    if (this.#columns !== null) throw new Error('a revision is given in rows or in blocks');
     this.store.block.add(component);
     this.#book.add(component);
     this.#uncertainty.add(component);
@@ -95,23 +99,22 @@ export class RevisionWriter {
     return this.store.took();
   }
 
-  /** The right rows of a block, which may be used again when the promise, if any, is kept. */
+  /** Instead of `add` for every row: the right rows of a block, which may be used again when the promise, if any, is kept. */
   addBlock(block: RowBlock): Promise<void> | undefined {
     for (let row = 0; row < block.rows; row += 1) {
       this.store.block.addFrom(block, row);
-      const component = block.component(row);
-      this.#book.add(component);
-      this.#uncertainty.add(component);
-      this.#rules.see(component);
+      this.#rules.see(block.component(row));
     }
+    this.#columns ??= new ColumnBook(this.#book.placement);
+    this.#columns.add(block);
     return this.store.took();
   }
 
   /** Closes the stream of rows, then stores the subtotals in `trx`, which must be on the same connection. */
   async finish(trx: Transaction<Database>): Promise<RevisionContent> {
     const stored = await this.store.finish();
-    const subtotals = this.#book.subtotals();
-    const uncertainties = this.#uncertainty.sums();
+    const subtotals = this.#columns?.subtotals() ?? this.#book.subtotals();
+    const uncertainties = this.#columns?.uncertainties() ?? this.#uncertainty.sums();
     for (let at = 0; at < subtotals.length; at += SUBTOTALS) {
       await trx
         .insertInto('revision_subtotals')
