@@ -1,12 +1,12 @@
-import { type Expression, type SqlBool, sql } from 'kysely';
+import { type SqlBool, sql } from 'kysely';
 import { type Db } from '@/db/client';
 import { type Category } from '@/lib/mass/component';
 
-/** Which counted, approved rows of some revisions; a group takes in those below it, '' takes in all. */
+/** Which counted, approved rows of some revisions: those in `groups`, as the rows state them, each with the top group it is drawn by. */
 export interface PlacedFilter {
   readonly revisionIds: readonly string[];
   readonly categories: readonly Category[];
-  readonly group: string;
+  readonly groups: readonly { readonly stated: string; readonly top: string }[];
 }
 
 /** Of all pieces that a row stands for at its one place, kg. */
@@ -46,10 +46,12 @@ export async function restByCells(
   limit: number,
   size: number,
 ): Promise<RowsOfCell[]> {
+  const [stated, tops] = [filter.groups.map((one) => one.stated), filter.groups.map((one) => one.top)];
+  const topOf = sql<string>`(${tops}::text[])[array_position(${stated}::text[], mass_rows.group_path)]`;
   const ranked = filtered(db, filter)
     .select(['revision_id', 'pair', 'x', 'y', 'z'])
     .select([
-      sql<string>`split_part(group_path, '/', 1)`.as('top_group'),
+      topOf.as('top_group'),
       MASS.as('mass'),
       sql<number>`row_number() over (order by abs(${MASS}) desc, revision_id, position)`.as('rank'),
     ]);
@@ -74,19 +76,12 @@ export async function restByCells(
     .execute();
 }
 
-function filtered(db: Db, { revisionIds, categories, group }: PlacedFilter) {
+function filtered(db: Db, { revisionIds, categories, groups }: PlacedFilter) {
   return db
     .selectFrom('mass_rows')
     .where(sql<SqlBool>`revision_id = any(${revisionIds})`)
     .where(sql<SqlBool>`category = any(${categories})`)
     .where('counting', '=', 'counted')
     .where('status', '=', 'approved')
-    .where((eb) => {
-      const conditions: Expression<SqlBool>[] = [];
-      if (group !== '')
-        conditions.push(
-          eb.or([eb('group_path', '=', group), sql<SqlBool>`starts_with(group_path, ${`${group}/`})`]),
-        );
-      return eb.and(conditions);
-    });
+    .where(sql<SqlBool>`group_path = any(${groups.map(({ stated }) => stated)})`);
 }

@@ -123,8 +123,25 @@ export function groupChangesOf(db: Db, programId: string) {
     .execute();
 }
 
-export async function groupBreakdownOf(db: Db, programId: string): Promise<GroupBreakdown> {
-  return new GroupBreakdown(await groupChangesOf(db, programId));
+/** What was done to the breakdown after one time and up to another: by it names of then are those of later. */
+export async function groupsRenamedBetween(
+  db: Db,
+  programId: string,
+  after: Date,
+  upTo: Date,
+): Promise<GroupBreakdown> {
+  const changes = await groupChangesOf(db, programId);
+  return new GroupBreakdown(changes.filter(({ changed_at: at }) => at > after && at <= upTo));
+}
+
+/** The breakdown as it stands today, or as it stood at a time. */
+export async function groupBreakdownOf(
+  db: Db,
+  programId: string,
+  at: Date | null = null,
+): Promise<GroupBreakdown> {
+  const changes = await groupChangesOf(db, programId);
+  return new GroupBreakdown(changes.filter((change) => at === null || change.changed_at <= at));
 }
 
 /** The group paths of the newest revisions of a program's lists, as their rows have them, with the number of counted rows. */

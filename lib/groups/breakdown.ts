@@ -1,5 +1,22 @@
 import { pathsUp } from '@/lib/mass/allowances';
 
+/** How the group paths that some rows state are read. */
+export interface GroupReading {
+  /** The path that a stated one has. */
+  readonly present: (path: string) => string;
+  /** The paths, as rows state them, that are in a group or below it. */
+  readonly statedIn: (group: string) => readonly string[];
+}
+
+/** Reads the paths that rows state by a breakdown. */
+export function groupReading(breakdown: GroupBreakdown, stated: Iterable<string>): GroupReading {
+  const paths = [...new Set(stated)];
+  return {
+    present: (path) => breakdown.present(path),
+    statedIn: (group) => paths.filter((path) => breakdown.isIn(path, group)),
+  };
+}
+
 export const GROUP_CHANGE_KINDS = ['added', 'moved', 'recoded', 'removed'] as const;
 export type GroupChangeKind = (typeof GROUP_CHANGE_KINDS)[number];
 
@@ -41,6 +58,11 @@ export class GroupBreakdown {
       for (const [one] of moved) this.#codes.delete(one);
       for (const [one, own] of moved) this.#codes.set(movedPath(one, path, to), own);
     }
+  }
+
+  /** Whether anything was ever renamed or moved. */
+  get hasMoves(): boolean {
+    return this.#moves.length > 0;
   }
 
   get isEmpty(): boolean {
@@ -89,9 +111,9 @@ export class GroupBreakdown {
     return !this.isEmpty && path !== UNGROUPED && !this.has(this.present(path));
   }
 
-  /** Whether a path that rows hold belongs, as of today, to `group` or what is below it. */
+  /** Whether a path that rows hold belongs, as of today, to `group` or what is below it; '' is the whole tree. */
   isIn(path: string, group: string): boolean {
-    return isWithin(this.present(path), group);
+    return group === '' || isWithin(this.present(path), group);
   }
 }
 

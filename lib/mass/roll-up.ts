@@ -5,7 +5,7 @@ import { halfTraceMinus } from '@/lib/numerics/sym3';
 import { subVec } from '@/lib/numerics/vec3';
 
 import { type Account, AccountSum, accountOfBody } from './account';
-import { allowanceFor, type GroupAllowance } from './allowances';
+import { allowanceFor, type GroupAllowance, pathsUp } from './allowances';
 import { CATEGORIES, type Category, type ChangeStatus, MATURITIES, type Maturity } from './component';
 import { type AirframeGeometry } from './geometry';
 import { type MassResult, resultOf } from './result';
@@ -183,12 +183,28 @@ export function rollUp(
 
 /** Every group path and every path above one, each with all that is below it: `Wing` holds `Wing/Spars` and `Wing/Ribs`. */
 export function groupBranches(groups: readonly GroupTotal[], geometry: AirframeGeometry): GroupTotal[] {
-  const branches = new Map<string, Tally>();
+  return joinedTotals(groups, geometry, pathsUp);
+}
+
+/** The same groups by other names; those that come to have one name are one. */
+export function renamedGroups(
+  groups: readonly GroupTotal[],
+  geometry: AirframeGeometry,
+  nameOf: (group: string) => string,
+): GroupTotal[] {
+  return joinedTotals(groups, geometry, (group) => [nameOf(group)]);
+}
+
+function joinedTotals(
+  groups: readonly GroupTotal[],
+  geometry: AirframeGeometry,
+  namesOf: (group: string) => readonly string[],
+): GroupTotal[] {
+  const joined = new Map<string, Tally>();
   const known = groups.every(({ byMaturity }) => byMaturity !== undefined);
   for (const part of groups) {
-    const levels = part.group.split('/');
-    for (let depth = 1; depth <= levels.length; depth += 1) {
-      const tally = tallyOf(branches, levels.slice(0, depth).join('/'));
+    for (const name of namesOf(part.group)) {
+      const tally = tallyOf(joined, name);
       tally.count(part);
       for (const code of [...MATURITIES, 'none'] as const)
         tally.maturity.add(code, part.byMaturity?.[code] ?? 0);
@@ -196,7 +212,7 @@ export function groupBranches(groups: readonly GroupTotal[], geometry: AirframeG
       tally.predicted.add(part.predictedAccount);
     }
   }
-  return [...branches]
+  return [...joined]
     .map(([group, tally]) => ({ group, ...tally.total(geometry) }))
     .map(({ byMaturity, ...total }) => (known && byMaturity ? { ...total, byMaturity } : total))
     .sort(byPath);

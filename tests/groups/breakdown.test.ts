@@ -4,6 +4,10 @@ import { type GroupChange, GroupBreakdown } from '@/lib/groups/breakdown';
 import { groupChoices, pathsToAdd } from '@/lib/groups/choices';
 import { groupProblem } from '@/lib/groups/problems';
 import { USUAL_GROUPS } from '@/lib/groups/usual-groups';
+import { Placement } from '@/lib/mass/place';
+import { NO_GROWTH, renamedGroups, rollUp } from '@/lib/mass/roll-up';
+import { SubtotalBook } from '@/lib/mass/subtotals';
+import { aComponent, declarations, geometry, properties } from '@/tests/support/mass';
 
 const added = (path: string, code: string | null = null): GroupChange => ({
   kind: 'added',
@@ -186,5 +190,31 @@ describe('choices of groups', () => {
   it('offered as a start are top groups with codes of their own', () => {
     expect(() => made(...USUAL_GROUPS.map(({ path, code }) => added(path, code)))).not.toThrow();
     for (const { path } of USUAL_GROUPS) expect(path).not.toContain('/');
+  });
+});
+
+describe('a stored result under the names of a later one', () => {
+  const book = new SubtotalBook(new Placement(declarations(), geometry()));
+  [
+    { item: 'a', group: 'Wing/Spars', mass: 10, position: [1, 0, 0] as const },
+    { item: 'b', group: 'Mainplane/Spars', mass: 5, position: [4, 0, 0] as const },
+    { item: 'c', group: 'Body', mass: 7 },
+  ].forEach((row) => book.add(aComponent({ maturity: 'C', ...row })));
+  const total = rollUp(book.subtotals(), [], geometry(), NO_GROWTH);
+
+  it('has each group by its new name, those that come to have one name as one, with their mass and CG', () => {
+    const since = tree(...WING, moved('Wing', 'Mainplane'));
+    const renamed = renamedGroups(total.groups, geometry(), (group) => since.present(group));
+    expect(renamed.map(({ group, rows, basic }) => [group, rows, basic.mass])).toEqual([
+      ['Body', 1, 7],
+      ['Mainplane/Spars', 2, 15],
+    ]);
+    // Two masses of 10 and 5 kg at 1 and 4 m: the lever rule.
+    expect(properties(renamed[1]?.basic ?? { properties: null }).cg[0]).toBeCloseTo(2, 12);
+    expect(renamed[1]?.byMaturity).toEqual({ E: 0, C: 15, A: 0, none: 0 });
+  });
+
+  it('is as it was where nothing was renamed', () => {
+    expect(renamedGroups(total.groups, geometry(), (group) => group)).toEqual(total.groups);
   });
 });

@@ -1,10 +1,11 @@
 import { type Db } from '@/db/client';
 import { findBaseline, findSubmission, revisionsOfSubmission } from '@/db/queries/baselines';
-import { resultOfSubmission, rotorsOfSubmission } from '@/db/queries/baseline-history';
+import { rotorsOfSubmission } from '@/db/queries/baseline-history';
 import { type GroupChange, groupChanges } from '@/lib/baselines/compare';
 import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { whereWords } from '@/lib/findings/where-words';
 import { AppError } from '@/lib/errors';
+import { namedFormer } from './named-former';
 
 /**
  * A signed baseline: its stored document, what later events say of it, and what it changed by group against the one that it
@@ -23,7 +24,7 @@ export async function loadSigned(db: Db, programId: string, number: string) {
     rotorsOfSubmission(db, submission.id),
     baseline.supersedes === null ? undefined : findBaseline(db, programId, baseline.supersedes),
   ]);
-  const formerResult = former && (await resultOfSubmission(db, former.submission_id));
+  const formerResult = former && (await namedFormer(db, former.submission_id, submission.id));
   const changesOf = (condition: string): GroupChange[] => {
     const groups = (result: typeof submission.result) =>
       result.conditions.find(({ code }) => code === condition)?.rollUp.groups ?? [];

@@ -2,6 +2,7 @@ import { type Db } from '@/db/client';
 import { rowsByItem } from '@/db/queries/list-rows';
 import { type DriverPart, type Drivers, type DriversAsked } from '@/lib/drivers/drivers';
 import { type Account, accountFrom, AccountSum, toNumbersWithRest } from '@/lib/mass/account';
+import { type GroupReading } from '@/lib/groups/breakdown';
 import { type Category } from '@/lib/mass/component';
 import { placementIn } from '@/lib/mass/converted-placement';
 import { contributionOf, type Whole, wholeOf } from '@/lib/mass/contributions/contribution';
@@ -20,11 +21,15 @@ export interface DriversSource {
   readonly geometry: AirframeGeometry;
   readonly revisions: readonly SourceRevision[];
   readonly subtotals: readonly Subtotal[];
+  /** How the groups of rows are read; left out, as the rows state them. */
+  readonly groups?: Pick<GroupReading, 'present'>;
   readonly condition: {
     readonly categories: readonly Category[];
     readonly items: readonly OnBoardItem[];
   };
 }
+
+const AS_STATED: Pick<GroupReading, 'present'> = { present: (path) => path };
 
 /** Runs over parts: keeps the largest contributions to one number, and the sums of all. */
 class Ranking<T> {
@@ -74,7 +79,7 @@ type Found = { readonly revision: number; readonly row: string } | { readonly on
 
 async function rankRows(
   db: Db,
-  { geometry, revisions, condition }: DriversSource,
+  { geometry, revisions, condition, groups = AS_STATED }: DriversSource,
   whole: Whole,
   number: DriversAsked['number'],
 ): Promise<Ranked> {
@@ -90,15 +95,19 @@ async function rankRows(
   }
   for (const item of condition.items) ranking.add(accountOfItem(item, geometry), { onBoard: item });
   const { of, sum, gross } = ranking;
-  return { parts: await rowParts(db, ranking.largest.all(), revisions, geometry), of, sum, gross };
+  return {
+    parts: await rowParts(db, ranking.largest.all(), { revisions, geometry, groups }),
+    of,
+    sum,
+    gross,
+  };
 }
 
 /** The rows found, in the order found, as they stand in their lists. */
 async function rowParts(
   db: Db,
   found: readonly Found[],
-  revisions: readonly SourceRevision[],
-  geometry: AirframeGeometry,
+  { revisions, geometry, groups }: Required<Pick<DriversSource, 'revisions' | 'geometry' | 'groups'>>,
 ): Promise<DriverPart[]> {
   const parts = new Map<string, DriverPart>();
   for (const [index, { id, code, number, declarations, conversion }] of revisions.entries()) {
@@ -111,7 +120,7 @@ async function rowParts(
         key: `${code}/${row.item}`,
         name: row.item,
         description: row.description,
-        group: row.group_path,
+        group: groups.present(row.group_path),
         list: { code, revision: number },
         rows: 1,
         pieces: toNumbersWithRest(pieces),

@@ -3,16 +3,16 @@ import { type ListRow } from '@/lib/contracts/list-rows';
 import { type ListView } from '@/lib/contracts/list-view';
 import { massListWriter } from '@/lib/export/mass-list';
 import { type Finding } from '@/lib/findings/finding';
+import { type GroupReading } from '@/lib/groups/breakdown';
 import { type ListColumn } from '@/lib/ingest/mass-list/columns';
 import { type ListDeclarations } from '@/lib/mass/declarations';
-import { type RevisionGroups } from './revision-groups';
 import { componentOf, type StoredRow } from './row-codec';
 
 /** What a view asks of the database. A finding that the revision has not leaves no row in. */
 export function filterOf(
   view: ListView,
   findings: readonly Finding[],
-  groups: Pick<RevisionGroups, 'statedIn'>,
+  groups: Pick<GroupReading, 'statedIn'>,
 ): RowFilter {
   return {
     text: view.find,
@@ -31,12 +31,12 @@ export function orderOf({ sort }: ListView, declarations: ListDeclarations): Row
   return { column: sort.column, descending: sort.descending !== turned };
 }
 
-const AS_STATED: Pick<RevisionGroups, 'present'> = { present: (path) => path };
+const AS_STATED: Pick<GroupReading, 'present'> = { present: (path) => path };
 
 /** Stored rows as their list states them; given `groups`, each in the group that its path is today. */
 export function rowReader(
   declarations: ListDeclarations,
-  groups: Pick<RevisionGroups, 'present'> = AS_STATED,
+  groups: Pick<GroupReading, 'present'> = AS_STATED,
 ): (row: StoredRow) => ListRow {
   const writer = massListWriter(declarations, []);
   return (row) => {

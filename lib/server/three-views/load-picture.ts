@@ -73,7 +73,7 @@ const isAll = ({ list, group, category }: PictureFilter): boolean =>
 
 async function load(
   db: Db,
-  { revisions, geometry }: ViewsSource,
+  { revisions, geometry, groups }: ViewsSource,
   condition: SourceCondition,
   { list, group, category }: PictureFilter,
   most: number,
@@ -81,7 +81,7 @@ async function load(
   const asked: PlacedFilter = {
     revisionIds: revisions.filter(({ code }) => list === null || code === list).map(({ id }) => id),
     categories: condition.categories.filter((one) => category === null || one === category),
-    group,
+    groups: groups.statedIn(group).map((stated) => ({ stated, top: topGroup(groups.present(stated)) })),
   };
   const size = (Math.max(geometry.length, geometry.span) || 20) / 24;
   const heaviest = await largestRows(db, asked, most);
@@ -103,7 +103,7 @@ async function load(
       item: row.item,
       description: row.description,
       list: index,
-      group: row.group_path,
+      group: groups.present(row.group_path),
       category: row.category,
       mass: row.mass,
       places: placesOf({ position: [row.x, row.y, row.z], pair: row.pair }, placement),

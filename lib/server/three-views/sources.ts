@@ -2,10 +2,11 @@ import { type Db } from '@/db/client';
 import { findBaseline, findSubmission, revisionsOfSubmission } from '@/db/queries/baselines';
 import { conditionsOf, findConfiguration, pinnedRevisions, subtotalsOf } from '@/db/queries/configurations';
 import { programFrames } from '@/db/queries/program-frames';
-import { referencePointsOf } from '@/db/queries/settings';
+import { groupBreakdownOf, referencePointsOf } from '@/db/queries/settings';
 import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { AppError } from '@/lib/errors';
 import { type AirframeVec } from '@/lib/frames/tags';
+import { type GroupBreakdown, groupReading, type GroupReading } from '@/lib/groups/breakdown';
 import { type Category } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
@@ -45,7 +46,9 @@ export interface ViewsSource {
   readonly frameIssue: number | string;
   readonly points: readonly NamedPlace[];
   readonly revisions: readonly SourceRevision[];
+  /** Each in the group that its rows are in by the breakdown of today, or of the day of a baseline. */
   readonly subtotals: readonly Subtotal[];
+  readonly groups: GroupReading;
   readonly conditions: readonly SourceCondition[];
 }
 
@@ -63,10 +66,12 @@ export async function configurationSource(db: Db, programId: string, code: strin
     referencePointsOf(db, issue.id),
   ]);
   const ids = pins.map((pin) => pin.revision_id);
-  const [subtotals, declarations] = await Promise.all([
+  const [stored, declarations, breakdown] = await Promise.all([
     subtotalsOf(db, ids, issue.id),
     declarationsOf(db, ids),
+    groupBreakdownOf(db, programId),
   ]);
+  const { groups, subtotals } = read(stored, breakdown);
   return {
     title: configuration.title,
     geometry,
@@ -88,6 +93,7 @@ export async function configurationSource(db: Db, programId: string, code: strin
           ];
     }),
     subtotals,
+    groups,
     conditions: conditions.map((condition) => {
       const items = condition.items.map(({ name, category, mass, place }) => ({
         name,
@@ -113,11 +119,12 @@ export async function baselineSource(db: Db, programId: string, number: string):
   const revisions = await revisionsOfSubmission(db, submission.id);
   const document = readStoredDocument(baseline.document);
   const frames = await programFrames(db, programId);
-  const subtotals = await subtotalsOf(
+  const stored = await subtotalsOf(
     db,
     revisions.map((revision) => revision.revision_id),
     submission.frame_issue_id,
   );
+  const { groups, subtotals } = read(stored, await groupBreakdownOf(db, programId, submission.submitted_at));
   return {
     title: `Baseline ${baseline.number}, ${baseline.title}`,
     geometry: submission.result.geometry,
@@ -136,6 +143,7 @@ export async function baselineSource(db: Db, programId: string, number: string):
       conversion: frames.conversion(revision.frame_issue_id, submission.frame_issue_id),
     })),
     subtotals,
+    groups,
     conditions: submission.result.conditions.map((condition) => ({
       code: condition.code,
       title: condition.title,
@@ -143,6 +151,19 @@ export async function baselineSource(db: Db, programId: string, number: string):
       items: condition.items.map(({ name, mass, position }) => ({ name, category: null, mass, position })),
       basic: condition.rollUp.basic,
     })),
+  };
+}
+
+function read<T extends Subtotal>(
+  stored: readonly T[],
+  breakdown: GroupBreakdown,
+): { readonly groups: GroupReading; readonly subtotals: readonly T[] } {
+  return {
+    groups: groupReading(
+      breakdown,
+      stored.map(({ group }) => group),
+    ),
+    subtotals: stored.map((part) => ({ ...part, group: breakdown.present(part.group) })),
   };
 }
 

@@ -9,6 +9,9 @@ import { readStoredDocument } from '@/lib/baselines/stored-document';
 import { baselineDocumentSchema } from '@/lib/contracts/api/baseline-document';
 import { standingsOf } from '@/lib/loading/configuration';
 import { type Limit } from '@/lib/loading/limits';
+import { loadReview } from '@/lib/server/baselines/load-review';
+import { loadSigned } from '@/lib/server/baselines/load-signed';
+import { changeGroups } from '@/lib/server/programs/change-groups';
 import { submitConfiguration } from '@/lib/server/baselines/submit-configuration';
 import { verifyEverything } from '@/lib/server/baselines/verify';
 import { evaluate } from '@/lib/server/configurations/roll-up-configuration';
@@ -176,5 +179,32 @@ describe('a figure beyond a limit', () => {
     expect(changedSince(then, { ...then, limits: [{ ...first, value: 1 }, ...rest] })).toEqual([
       'The limits in force are others.',
     ]);
+  });
+});
+
+describe('a group renamed between two baselines', () => {
+  it('is one group in their comparison, by the name it had when the later one was submitted; signed ones keep theirs', async () => {
+    const change = (...changes: Parameters<typeof changeGroups>[1]['changes'][number][]) =>
+      changeGroups(test.db, { person: test.crew.weights, programId: test.program.id, changes });
+    const blank = { to: null, code: null };
+    await change({ kind: 'added', path: 'Wing', ...blank }, { kind: 'added', path: 'Body', ...blank });
+    await change({ kind: 'moved', path: 'Wing', to: 'Mainplane', code: null });
+    await state({ condition: 'ferry', value: 9000 }, ids[0] ?? null);
+    const { number, submissionId } = await signed(test, { code: 'renamed', title: 'Under another name' });
+    const later = await loadSigned(test.db, test.program.id, String(number));
+    expect(later.submission.result.conditions[0]?.rollUp.groups.map(({ group }) => group)).toEqual([
+      'Body',
+      'Mainplane',
+    ]);
+    expect(later.changesOf('empty')).toEqual([]);
+    const before = await loadSigned(test.db, test.program.id, String(number - 1));
+    expect(before.submission.result.conditions[0]?.rollUp.groups.map(({ group }) => group)).toEqual([
+      'Body',
+      'Wing',
+    ]);
+    const reader = { userId: test.crew.chief.userId, role: 'chief' } as const;
+    const review = await loadReview(test.db, { programId: test.program.id, submissionId, reader });
+    expect(review.comparison.conditions.flatMap(({ groups }) => groups)).toEqual([]);
+    expect((await verifyEverything(test.db)).breaches).toEqual([]);
   });
 });
