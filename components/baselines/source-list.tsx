@@ -8,6 +8,8 @@ export interface Source {
   readonly fileSha256: string | null;
   readonly author: string | null;
   readonly marking: string | null;
+  /** Number and title of the frame issue that it is stated in, where it was converted from that; null where it was not. */
+  readonly convertedFrom: string | null;
 }
 
 /** The list revisions that results were made from, with their hashes. */
@@ -21,6 +23,9 @@ export function SourceList({ sources }: { readonly sources: readonly Source[] })
             {source.author === null ? null : `, by ${source.author}`}
           </p>
           {source.marking === null ? null : <p className="text-note">Marking: {source.marking}</p>}
+          {source.convertedFrom === null ? null : (
+            <p className="text-note">Stated in frame issue {source.convertedFrom}, and converted</p>
+          )}
           <p className="text-note wrap-anywhere text-ink-2">
             Content SHA-256 <span className="font-mono">{source.sha256}</span>
           </p>

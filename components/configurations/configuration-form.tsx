@@ -13,10 +13,12 @@ interface ConfigurationFormProps {
   readonly action: FormAction;
   readonly program: string;
   readonly builds: readonly Option[];
+  /** The program's frame issues, newest first. */
+  readonly issues: readonly Option[];
 }
 
 /** Makes a configuration of a build. */
-export function ConfigurationForm({ action, program, builds }: ConfigurationFormProps) {
+export function ConfigurationForm({ action, program, builds, issues }: ConfigurationFormProps) {
   const [state, send] = useActionState(action, IDLE);
   const field = (name: string) => ({ name, defaultValue: state.values[name], error: state.errors[name] });
   return (
@@ -48,6 +50,15 @@ export function ConfigurationForm({ action, program, builds }: ConfigurationForm
             required
           />
         </FieldRow>
+        {issues.length < 2 ? null : (
+          <SelectField
+            {...field('frame_issue')}
+            label="Frame issue"
+            hint="Lists that are stated in another one are converted."
+            options={issues}
+            defaultValue={state.values['frame_issue'] ?? issues[0]?.value ?? ''}
+          />
+        )}
         <Actions>
           <SubmitButton kind="secondary" pendingWords="Making the configuration">
             Make configuration

@@ -14,6 +14,8 @@ export interface Pin {
   readonly facts: string;
   readonly made: Date;
   readonly marking: string | null;
+  /** What is said where it is stated in another frame issue than the configuration's; null where it is not. */
+  readonly converted: string | null;
 }
 
 interface MadeFromProps {
@@ -41,6 +43,7 @@ export function MadeFrom({ pins, take }: MadeFromProps) {
             </span>
             {pin.revision === pin.newest ? <span>newest</span> : null}
           </div>
+          {pin.converted === null ? null : <p className="text-note">{pin.converted}</p>}
           {pin.revision === pin.newest ? null : (
             <div className="flex flex-wrap items-baseline justify-between gap-x-4">
               <span className="text-caution">Revision {pin.newest} is the newest</span>

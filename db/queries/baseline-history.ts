@@ -13,6 +13,16 @@ export async function resultOfSubmission(db: Db, submissionId: string): Promise<
   return result;
 }
 
+/** The frame issue that a submission stands in. */
+export async function issueOfSubmission(db: Db, submissionId: string): Promise<string> {
+  const { frame_issue_id } = await db
+    .selectFrom('submissions')
+    .select('frame_issue_id')
+    .where('id', '=', submissionId)
+    .executeTakeFirstOrThrow();
+  return frame_issue_id;
+}
+
 /**
  * What a submission is held against: the build's newest baseline that was signed before `decidedAt` (null: by now) and not
  * withdrawn then. `withdrawn` is set where the newest one was: then there was no current one.

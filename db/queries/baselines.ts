@@ -71,6 +71,7 @@ export function revisionsOfSubmission(db: Db, submissionId: string) {
     .selectFrom('submission_revisions')
     .innerJoin('lists', 'lists.id', 'submission_revisions.list_id')
     .innerJoin('list_revisions', 'list_revisions.id', 'submission_revisions.revision_id')
+    .innerJoin('frame_issues as stated', 'stated.id', 'list_revisions.frame_issue_id')
     .innerJoin('users', 'users.id', 'list_revisions.created_by')
     .select([
       'lists.id as list_id',
@@ -80,6 +81,8 @@ export function revisionsOfSubmission(db: Db, submissionId: string) {
       'list_revisions.number',
       'list_revisions.rows',
       'list_revisions.frame_issue_id',
+      'stated.number as frame_issue_number',
+      'stated.title as frame_issue_title',
       'list_revisions.declarations',
       'list_revisions.marking',
       'list_revisions.content_sha256',

@@ -1,5 +1,5 @@
 import { type Moments } from '@/lib/frames/products';
-import { type ConditionResult, type ConfigurationResult } from '@/lib/loading/configuration';
+import { type ComparableResult } from '@/lib/loading/result-in-issue';
 import { principalInclination } from '@/lib/mass/inclination';
 import { type MassResult } from '@/lib/mass/result';
 import { type GroupTotal } from '@/lib/mass/roll-up';
@@ -44,8 +44,13 @@ export interface Comparison {
   readonly operatingPoints: readonly PointChange[];
 }
 
-/** What changed from one configuration's results to another's, condition by condition and point by point, by their codes. */
-export function compareResults(before: ConfigurationResult | null, after: ConfigurationResult): Comparison {
+type ConditionResult = ComparableResult['conditions'][number];
+
+/**
+ * What changed from one configuration's results to another's, condition by condition and point by point, by their codes. Both stand in
+ * one frame issue.
+ */
+export function compareResults(before: ComparableResult | null, after: ComparableResult): Comparison {
   return {
     conditions: joined(before?.conditions ?? [], after.conditions).map(([a, b]) => conditionChange(a, b)),
     operatingPoints: joined(before?.operatingPoints ?? [], after.operatingPoints).map(([a, b]) => {

@@ -3,6 +3,7 @@ import { CAUTION } from '@/lib/baselines/caution';
 import { conventionsOf, rollUpMembers } from '@/lib/contracts/condition-members';
 import { type PlacedFinding } from '@/lib/findings/finding';
 import { limitMembers } from '@/lib/baselines/limit-members';
+import { type IssueChange, changedPlace } from '@/lib/frames/issue-change';
 import { type ConfigurationResult, type PointResult, standingsOf } from '@/lib/loading/configuration';
 import { type MassUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type Vec3 } from '@/lib/numerics/vec3';
@@ -34,6 +35,8 @@ export interface HandoffInput {
     readonly contentSha256: string;
     readonly fileSha256: string | null;
     readonly rows: number;
+    /** From the issue that the revision is stated in, where that is another one than the document's. */
+    readonly converted: { readonly frameIssue: string; readonly change: IssueChange } | null;
   }[];
 }
 
@@ -83,13 +86,27 @@ export function handoffDocument(input: HandoffInput) {
         ...(answer === undefined ? {} : { answer }),
       };
     }),
-    sources: input.sources.map(({ list, revision, contentSha256, fileSha256, rows }) => ({
+    sources: input.sources.map(({ list, revision, contentSha256, fileSha256, rows, converted }) => ({
       list,
       revision,
       sha256: contentSha256,
       ...(fileSha256 === null ? {} : { fileSha256 }),
       rows,
+      ...convertedMember(converted),
     })),
+  };
+}
+
+/** Absent where nothing was converted, and in documents of before anything could be. */
+function convertedMember(converted: HandoffInput['sources'][number]['converted']) {
+  if (converted === null) return {};
+  const [x, y, z] = changedPlace(converted.change, [0, 0, 0]);
+  return {
+    converted: {
+      frameIssue: converted.frameIssue,
+      datum: { airframe: { x, y, z } },
+      matrix: converted.change.matrix.map((row) => [...row]),
+    },
   };
 }
 

@@ -9,12 +9,16 @@ export const newConfigurationSchema = z.object({
   build: z.string('Choose a build.').min(1, 'Choose a build.'),
   code: codeSchema,
   title: titleSchema,
+  /** Left blank, the issue in force. */
+  frame_issue: blankOr(wholeField(1)),
 });
 
 /** The configuration that a change is made to, at the version that the person saw. */
 const seen = { configuration: codeSchema, version: wholeField(1) };
 
 export const configurationSeenSchema = z.object(seen);
+
+export const frameChoiceSchema = z.object({ ...seen, frame_issue: wholeField(1) });
 
 const revisionChoice = blankOr(wholeField(1));
 

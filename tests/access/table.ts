@@ -80,6 +80,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   },
   'app/(workspace)/programs/[program]/settings/actions.ts': {
     issueFrameAction: 'program frame.keep',
+    stateFormerFrameAction: 'program frame.keep',
     addReferencePointAction: 'program reference-points.keep',
     addBuildAction: 'program builds.keep',
     setLimitAction: 'program limits.keep',
@@ -114,6 +115,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
     rollUpAction: 'program configurations.keep',
     takeRevisionAction: 'program configurations.keep',
     pinRevisionsAction: 'program configurations.keep',
+    chooseFrameAction: 'program configurations.keep',
     saveConditionAction: 'program configurations.keep',
     removeConditionAction: 'program configurations.keep',
   },

@@ -98,6 +98,21 @@ export const baselineDocumentSchema = z
           .optional()
           .describe('Of the uploaded file; absent where the revision was edited in the browser'),
         rows: z.number().int(),
+        converted: z
+          .object({
+            frameIssue: z.string().describe('Number and title of the issue that the list is stated in'),
+            datum: z
+              .object({ airframe: placeSchema })
+              .describe('Datum of that issue, from the datum of this document'),
+            matrix: z
+              .array(z.array(z.number()).length(3))
+              .length(3)
+              .describe('r = datum + matrix r_stated, airframe axes; det is -1 where handedness differs'),
+          })
+          .optional()
+          .describe(
+            'How the list was converted; absent where it is stated in the frame issue of the document',
+          ),
       }),
     ),
   })

@@ -1,5 +1,5 @@
 import { type Db } from '@/db/client';
-import { resultOfSubmission } from '@/db/queries/baseline-history';
+import { issueOfSubmission, resultOfSubmission } from '@/db/queries/baseline-history';
 import {
   accountRefusal,
   type AccountQuantity,
@@ -7,6 +7,7 @@ import {
   massAccount,
 } from '@/lib/baselines/mass-account';
 import { type ConditionResult } from '@/lib/loading/configuration';
+import { formerInWords, formerResultIn } from './former-result';
 import { loadSides } from './load-sides';
 
 type Asked = string | readonly string[] | undefined;
@@ -50,6 +51,8 @@ export async function loadAccount(
   readonly conditions: readonly ConditionResult[];
   readonly condition: ConditionResult | null;
   readonly outcome: AccountOutcome;
+  /** What was converted to compare, in words; null where nothing was. */
+  readonly converted: string | null;
 }> {
   const { quantity, within } = input;
   const { before, after } = await loadSides(db, programId, {
@@ -57,26 +60,34 @@ export async function loadAccount(
     to: String(input.to),
   });
   const [old, now] = await Promise.all([
-    before && resultOfSubmission(db, before.submissionId),
+    before &&
+      issueOfSubmission(db, after.submissionId).then((issue) =>
+        formerResultIn(db, before.submissionId, issue, after.submissionId),
+      ),
     resultOfSubmission(db, after.submissionId),
   ]);
   const { conditions } = now;
   const condition = conditions.find(({ code }) => code === input.condition) ?? conditions[0] ?? null;
-  const former = old?.conditions.find(({ code }) => code === condition?.code);
+  const converted = old && formerInWords(`Baseline ${input.from}`, old);
+  if (old?.result === null)
+    return { conditions, condition, converted: null, outcome: { refused: converted ?? '' } };
+  const former = old?.result.conditions.find(({ code }) => code === condition?.code);
   if (old === null || former === undefined || condition === null)
     return {
       conditions,
       condition,
+      converted: null,
       outcome: { refused: `Baseline ${input.from} does not have this condition. Choose another.` },
     };
   const sides = [
-    { geometry: old.geometry, condition: former },
+    { geometry: old.result.geometry, condition: former },
     { geometry: now.geometry, condition },
   ] as const;
   const refused = accountRefusal(...sides, quantity);
   return {
     conditions,
     condition,
+    converted,
     outcome: refused === null ? { account: massAccount(...sides, quantity, within) } : { refused },
   };
 }

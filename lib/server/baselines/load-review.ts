@@ -4,13 +4,13 @@ import {
   baselineBefore,
   leftOutOf,
   nextBaselineNumber,
-  resultOfSubmission,
   rotorsOfSubmission,
 } from '@/db/queries/baseline-history';
 import { compareResults } from '@/lib/baselines/compare';
 import { signingObstacles } from '@/lib/baselines/signing';
 import { AppError } from '@/lib/errors';
 import { type MemberRole } from '@/lib/permissions';
+import { formerInWords, formerResultIn } from './former-result';
 import { countPairs, revisionPairs } from './revision-changes';
 
 /**
@@ -37,7 +37,7 @@ export async function loadReview(
   ]);
   const former = newest !== null && !newest.withdrawn ? newest : null;
   const [formerResult, leftOut, lists] = await Promise.all([
-    former && resultOfSubmission(db, former.submission_id),
+    former && formerResultIn(db, former.submission_id, submission.frame_issue_id, submission.id),
     leftOutOf(
       db,
       revisions.map((revision) => revision.revision_id),
@@ -55,7 +55,9 @@ export async function loadReview(
     newest,
     former,
     nextNumber,
-    comparison: compareResults(formerResult, submission.result),
+    comparison: compareResults(formerResult?.result ?? null, submission.result),
+    /** What was converted to compare, in words; null where nothing was. */
+    formerConverted: formerResult && former && formerInWords(`Baseline ${former.number}`, formerResult),
     lists,
     obstacles: signingObstacles({
       ...reader,

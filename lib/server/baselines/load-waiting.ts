@@ -1,7 +1,8 @@
 import { type Db } from '@/db/client';
 import { type submissionsOfProgram } from '@/db/queries/baselines';
-import { baselineBefore, resultOfSubmission } from '@/db/queries/baseline-history';
+import { baselineBefore, issueOfSubmission, resultOfSubmission } from '@/db/queries/baseline-history';
 import { compareResults } from '@/lib/baselines/compare';
+import { formerResultIn } from './former-result';
 
 type ListedSubmission = Awaited<ReturnType<typeof submissionsOfProgram>>[number];
 
@@ -13,9 +14,10 @@ export function loadWaiting(db: Db, waiting: readonly ListedSubmission[]) {
       const former = newest !== null && !newest.withdrawn ? newest : null;
       const [result, formerResult] = await Promise.all([
         resultOfSubmission(db, submission.id),
-        former && resultOfSubmission(db, former.submission_id),
+        former &&
+          formerResultIn(db, former.submission_id, await issueOfSubmission(db, submission.id), submission.id),
       ]);
-      const [change] = compareResults(formerResult, result).conditions;
+      const [change] = compareResults(formerResult?.result ?? null, result).conditions;
       return { submission, former, change: change ?? null };
     }),
   );

@@ -1,7 +1,7 @@
 import { type Transaction, sql } from 'kysely';
 import { type Db } from '@/db/client';
 import { findSubmission, lockBaselines, newestBaseline, revisionsOfSubmission } from '@/db/queries/baselines';
-import { findFrameIssue } from '@/db/queries/frames';
+import { type ProgramFrames, programFrames } from '@/db/queries/program-frames';
 import { type Database } from '@/db/schema/database';
 import { CAUTION } from '@/lib/baselines/caution';
 import { handoffDocument } from '@/lib/baselines/handoff-document';
@@ -128,7 +128,8 @@ async function documentOf(
   submission: SubmissionFound,
   made: { person: Person; number: number; supersedes: number | null; at: Date },
 ) {
-  const issue = await findFrameIssue(trx, submission.frame_issue_id);
+  const frames = await programFrames(trx, submission.program_id);
+  const issue = frames.issue(submission.frame_issue_id);
   const points = await trx
     .selectFrom('reference_points')
     .select(['code', 'place'])
@@ -164,8 +165,15 @@ async function documentOf(
       contentSha256: revision.content_sha256,
       fileSha256: revision.file_sha256,
       rows: revision.rows,
+      converted: convertedFrom(frames, revision.frame_issue_id, submission.frame_issue_id),
     })),
   });
+}
+
+function convertedFrom(frames: ProgramFrames, statedIn: string, issueId: string) {
+  if (statedIn === issueId) return null;
+  const { number, title } = frames.issue(statedIn);
+  return { frameIssue: `${number}: ${title}`, change: frames.conversion(statedIn, issueId).change };
 }
 
 async function tell(

@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto';
+import { sql } from 'kysely';
 import { type Db } from '@/db/client';
 import { digestOf, canonicalText } from './digest';
 import { verifyAgainstTrail } from './verify-against-trail';
@@ -36,6 +37,8 @@ interface SourceMember {
   readonly list: string;
   readonly revision: number;
   readonly sha256: string;
+  /** Number and title of the frame issue that it was converted from. */
+  readonly converted?: { readonly frameIssue?: unknown };
 }
 
 async function verifyBaselines(db: Db, breaches: Breach[]): Promise<number> {
@@ -113,18 +116,36 @@ async function compareSources(
     .selectFrom('submission_revisions')
     .innerJoin('list_revisions', 'list_revisions.id', 'submission_revisions.revision_id')
     .innerJoin('lists', 'lists.id', 'submission_revisions.list_id')
+    .innerJoin('submissions', 'submissions.id', 'submission_revisions.submission_id')
+    .innerJoin('frame_issues as stated', 'stated.id', 'list_revisions.frame_issue_id')
     .select([
       'lists.code as list',
       'list_revisions.number as revision',
       'list_revisions.content_sha256 as sha256',
+      sql<
+        string | null
+      >`case when stated.id = submissions.frame_issue_id then null else stated.number || ': ' || stated.title end`.as(
+        'converted',
+      ),
     ])
     .where('submission_id', '=', submissionId)
     .orderBy('lists.code')
     .execute();
   const { sources = [] } = document as { readonly sources?: readonly SourceMember[] };
-  const named = sources.map(({ list, revision, sha256 }) => ({ list, revision, sha256 }));
+  const named = sources.map(({ list, revision, sha256, converted }) => ({
+    list,
+    revision,
+    sha256,
+    converted: converted?.frameIssue ?? null,
+  }));
   if (canonicalText(named) === canonicalText(held)) return [];
-  return [{ what, detail: 'its sources are not the list revisions that were submitted' }];
+  return [
+    {
+      what,
+      detail:
+        'its sources are not the list revisions that were submitted, or not stated in the frame issue that it names',
+    },
+  ];
 }
 
 async function verifyRevisions(db: Db, breaches: Breach[]): Promise<number> {

@@ -6,11 +6,13 @@ import {
   conditionChoiceSchema,
   conditionFormSchema,
   configurationSeenSchema,
+  frameChoiceSchema,
   newConfigurationSchema,
   pinsFormSchema,
   takeNewestSchema,
 } from '@/lib/contracts/configuration-forms';
 import { fieldError } from '@/lib/errors';
+import { chooseFrame } from '@/lib/server/configurations/choose-frame';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
 import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
 import { reachConfiguration } from '@/lib/server/configurations/reach-configuration';
@@ -30,6 +32,7 @@ export const createConfigurationAction = programAction(
       buildCode: input.build,
       code: input.code,
       title: input.title,
+      ...(input.frame_issue === null ? {} : { frameIssue: input.frame_issue }),
     });
     redirect(`/programs/${program.code}/configurations/${input.code}`);
   },
@@ -61,6 +64,17 @@ export const pinRevisionsAction = programAction(
     const { version, revisions, rotors } = input;
     const configuration = await reachConfiguration(serverDb(), program.id, input.configuration);
     await pinRevisions(serverDb(), { person, configuration, version, revisions, rotors });
+    redirect(`/programs/${program.code}/configurations/${configuration.code}`);
+  },
+);
+
+export const chooseFrameAction = programAction(
+  'configurations.keep',
+  frameChoiceSchema,
+  async ({ input, person, program }) => {
+    const { version, frame_issue: frameIssue } = input;
+    const configuration = await reachConfiguration(serverDb(), program.id, input.configuration);
+    await chooseFrame(serverDb(), { person, configuration, version, frameIssue });
     redirect(`/programs/${program.code}/configurations/${configuration.code}`);
   },
 );

@@ -1,6 +1,6 @@
 import { type Metadata } from 'next';
 import { configurationsOfProgram } from '@/db/queries/configurations';
-import { currentFrameIssue } from '@/db/queries/frames';
+import { programFrames } from '@/db/queries/program-frames';
 import { buildsOf } from '@/db/queries/settings';
 import { ConfigurationForm } from '@/components/configurations/configuration-form';
 import { ConfigurationTable } from '@/components/configurations/configuration-table';
@@ -20,11 +20,12 @@ export default async function ConfigurationsPage({
   const access = await requireProgram((await params).program, 'configurations.read');
   const { program, can } = access;
   const home = `/programs/${program.code}/configurations`;
-  const [configurations, builds, issue] = await Promise.all([
+  const [configurations, builds, { issues }] = await Promise.all([
     configurationsOfProgram(serverDb(), program.id),
     buildsOf(serverDb(), program.id),
-    currentFrameIssue(serverDb(), program.id),
+    programFrames(serverDb(), program.id),
   ]);
+  const [issue] = issues;
   const keeps = can('configurations.keep') && issue !== undefined;
   return (
     <ProgramFrame access={access} current="configurations">
@@ -51,11 +52,19 @@ export default async function ConfigurationsPage({
       {keeps ? (
         <Section
           title="Make a configuration"
-          lead={`In frame issue ${issue.number}, from the newest revisions there are. Both can be looked at and changed on its page.`}
+          lead={
+            issues.length > 1
+              ? 'From the newest revisions there are. Frame issue and revisions can be looked at and changed on its page.'
+              : `In frame issue ${issue.number}, from the newest revisions there are. Both can be looked at and changed on its page.`
+          }
         >
           <ConfigurationForm
             action={createConfigurationAction}
             program={program.code}
+            issues={issues.map(({ number, title }, index) => ({
+              value: String(number),
+              label: `${number}: ${title}${index === 0 ? ', in force' : ''}`,
+            }))}
             builds={builds.map(({ code, title }) => ({ value: code, label: title }))}
           />
         </Section>

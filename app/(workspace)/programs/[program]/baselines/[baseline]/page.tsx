@@ -211,6 +211,7 @@ export default async function BaselinePage({
                 fileSha256: source.fileSha256 ?? null,
                 author: null,
                 marking: signed.markings.get(source.list) ?? null,
+                convertedFrom: source.converted?.frameIssue ?? null,
               }))}
             />
             <p className="text-ink-2">

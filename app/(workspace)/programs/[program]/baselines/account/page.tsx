@@ -62,7 +62,7 @@ export default async function AccountPage({
     );
   const quantity = ACCOUNT_QUANTITIES.find((one) => one === asked['quantity']) ?? 'mass';
   const within = typeof asked['within'] === 'string' && asked['within'] !== '' ? asked['within'] : null;
-  const { conditions, condition, outcome } = await orShow(() =>
+  const { conditions, condition, outcome, converted } = await orShow(() =>
     loadAccount(serverDb(), program.id, { ...sides, condition: asked['condition'], quantity, within }),
   );
   const system = askedSystem(asked['units']);
@@ -129,6 +129,7 @@ export default async function AccountPage({
               ? ' Inertia is about the CG in body axes, products are positive integrals.'
               : null}
             {quantity.startsWith('cg') ? ' The CG is in airframe axes, from the datum.' : null}
+            {converted === null ? null : ` ${converted}`}
           </p>
         }
       >

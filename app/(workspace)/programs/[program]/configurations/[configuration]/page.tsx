@@ -9,6 +9,7 @@ import {
   pinnedRevisions,
   rotorRevisionsOf,
 } from '@/db/queries/configurations';
+import { programFrames } from '@/db/queries/program-frames';
 import { limitsInForce } from '@/db/queries/settings';
 import { OneButtonForm } from '@/components/forms/one-button-form';
 import { viewAsked, viewHref } from '@/components/configurations/address';
@@ -33,7 +34,7 @@ import { configurationSource } from '@/lib/server/three-views/sources';
 import { OUTPUT_UNITS } from '@/lib/units/names';
 import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
-import { rollUpAction, takeRevisionAction } from '../actions';
+import { chooseFrameAction, rollUpAction, takeRevisionAction } from '../actions';
 
 type Props = PageProps<'/programs/[program]/configurations/[configuration]'>;
 
@@ -52,14 +53,16 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
   const db = serverDb();
   const configuration = await findConfiguration(db, program.id, code);
   if (configuration === undefined) notFound();
-  const [pins, rotorRevisions, conditions, rollUp, allowances, limits] = await Promise.all([
+  const [pins, rotorRevisions, conditions, rollUp, allowances, limits, { issues }] = await Promise.all([
     pinnedRevisions(db, configuration.id),
     rotorRevisionsOf(db, program.id),
     conditionsOf(db, configuration.id),
     latestRollUp(db, configuration.id),
     allowancesOf(db, program.id),
     limitsInForce(db, program.id),
+    programFrames(db, program.id),
   ]);
+  const [inForce] = issues;
   const station = `/programs/${program.code}/configurations`;
   const home = `${station}/${configuration.code}`;
   const view = viewAsked(await searchParams);
@@ -156,10 +159,27 @@ export default async function ConfigurationPage({ params, searchParams }: Props)
             aside={keeps ? <TextLink href={`${home}/inputs`}>Choose revisions</TextLink> : null}
           >
             <MadeFrom
-              pins={pinsOnPage(program.code, pins, configuration, rotorRevisions)}
+              pins={pinsOnPage(program.code, pins, configuration, rotorRevisions, issues)}
               take={keeps ? { action: takeRevisionAction, fields } : null}
             />
           </Section>
+          {inForce === undefined || inForce.id === configuration.frame_issue_id ? null : (
+            <Section title="Frame">
+              <p>
+                This configuration stands in frame issue {configuration.frame_issue_number}; issue{' '}
+                {inForce.number}, {inForce.title}, is in force. Put into it, the same aircraft is stated from
+                its datum; nothing moves.
+              </p>
+              {keeps ? (
+                <OneButtonForm
+                  action={chooseFrameAction}
+                  fields={{ ...fields, frame_issue: String(inForce.number) }}
+                  words={`Put into frame issue ${inForce.number}`}
+                  pendingWords="Putting it there"
+                />
+              ) : null}
+            </Section>
+          )}
           <Section
             title="On board"
             aside={keeps ? <TextLink href={`${home}/conditions`}>Change conditions</TextLink> : null}

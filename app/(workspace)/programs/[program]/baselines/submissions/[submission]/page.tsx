@@ -138,7 +138,7 @@ export default async function SubmissionPage({
             lead={
               former === null
                 ? 'The build has no current baseline: everything is new.'
-                : `Against baseline ${former.number}, ${former.title}.`
+                : `Against baseline ${former.number}, ${former.title}. ${review.formerConverted ?? ''}`
             }
           >
             {change === null ? null : <ChangeTable change={change} units={units} {...sides} />}
@@ -211,6 +211,10 @@ export default async function SubmissionPage({
                 fileSha256: one.file_sha256,
                 author: one.author,
                 marking: one.marking,
+                convertedFrom:
+                  one.frame_issue_id === submission.frame_issue_id
+                    ? null
+                    : `${one.frame_issue_number}: ${one.frame_issue_title}`,
               }))}
             />
             {rotors === null ? null : (

@@ -3,14 +3,15 @@ import { notFound } from 'next/navigation';
 import { findConfiguration, pinnedRevisions, rotorRevisionsOf } from '@/db/queries/configurations';
 import { revisionsOfProgram } from '@/db/queries/list-revisions';
 import { programFrames } from '@/db/queries/program-frames';
+import { FrameChoice } from '@/components/configurations/frame-choice';
 import { PinsForm, type PinChoice } from '@/components/configurations/pins-form';
 import { EmptyPlace } from '@/components/ui/empty-place';
-import { PageHead } from '@/components/ui/section';
+import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { ProgramFrame } from '../../../frame';
-import { pinRevisionsAction } from '../../actions';
+import { chooseFrameAction, pinRevisionsAction } from '../../actions';
 
 export const metadata: Metadata = { title: 'Choose revisions' };
 
@@ -86,6 +87,24 @@ export default async function InputsPage({
           choices={choices}
           backHref={home}
         />
+      )}
+      {frames.issues.length < 2 ? null : (
+        <Section title="Frame issue">
+          <FrameChoice
+            key={configuration.version}
+            action={chooseFrameAction}
+            fields={{
+              program: program.code,
+              configuration: configuration.code,
+              version: String(configuration.version),
+            }}
+            present={String(configuration.frame_issue_number)}
+            options={frames.issues.map(({ number, title }, index) => ({
+              value: String(number),
+              label: `${number}: ${title}${index === 0 ? ', in force' : ''}`,
+            }))}
+          />
+        </Section>
       )}
     </ProgramFrame>
   );
