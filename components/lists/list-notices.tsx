@@ -7,10 +7,12 @@ interface ListNoticesProps {
   readonly shown: number;
   readonly newest: number;
   readonly import: { readonly id: string; readonly state: string; readonly file_name: string } | null;
+  /** Files that wait for a mapping, newest first. */
+  readonly uploads?: readonly { readonly id: string; readonly file_name: string; readonly author: string }[];
 }
 
 /** What a reader of a list must know first: that a newer revision is there, that a file is on its way, or was refused. */
-export function ListNotices({ listHref, shown, newest, import: found }: ListNoticesProps) {
+export function ListNotices({ listHref, shown, newest, import: found, uploads = [] }: ListNoticesProps) {
   const open = found?.state === 'waiting' || found?.state === 'running';
   return (
     <>
@@ -25,6 +27,18 @@ export function ListNotices({ listHref, shown, newest, import: found }: ListNoti
           </p>
         </Banner>
       )}
+      {uploads.map(({ id, file_name: file, author }) => (
+        <Banner
+          key={id}
+          severity="note"
+          word="To be mapped"
+          action={<ButtonLink href={`${listHref}/uploads/${id}`}>Map its columns</ButtonLink>}
+        >
+          <p>
+            {file}, uploaded by {author}, waits until someone says what its columns are.
+          </p>
+        </Banner>
+      ))}
       {found !== null && (open || found.state === 'failed') ? (
         <Banner
           severity={open ? 'note' : 'warning'}

@@ -17,6 +17,8 @@ export interface RevisionLine {
   readonly file: string | null;
   /** The revision that it brings back. */
   readonly restoredFrom: number | null;
+  /** The import that read its file by a mapping; null for a file of the contract. */
+  readonly mappedBy: string | null;
 }
 
 interface RevisionTableProps {
@@ -66,9 +68,16 @@ export function RevisionTable({ revisions, newest, mayRestore, listHref, route }
               ) : revision.file === null ? (
                 'Edits'
               ) : (
-                <a href={`${route}/${revision.number}/file`} download className={LINK_CLASS}>
-                  {revision.file}
-                </a>
+                <>
+                  <a href={`${route}/${revision.number}/file`} download className={LINK_CLASS}>
+                    {revision.file}
+                  </a>
+                  {revision.mappedBy === null ? null : (
+                    <span className="block text-note">
+                      <TextLink href={`${listHref}/imports/${revision.mappedBy}`}>How it was read</TextLink>
+                    </span>
+                  )}
+                </>
               )}
             </Cell>
             <Cell side="right" className="num">

@@ -3,22 +3,30 @@
 import { useRouter } from 'next/navigation';
 import { type FormEvent, useEffect, useRef, useState } from 'react';
 import { problemWords } from '@/components/lists/ask';
+import { type Peek, peekFile } from '@/components/lists/mapping/peek-file';
 import { Actions } from '@/components/ui/actions';
 import { Banner } from '@/components/ui/banner';
 import { Button, ButtonLink } from '@/components/ui/button';
+import { Checkbox } from '@/components/ui/choice';
 import { FileField } from '@/components/ui/file-field';
 import { FormGrid } from '@/components/ui/form-grid';
 import { ProgressBar } from '@/components/ui/progress-bar';
 import { TextArea } from '@/components/ui/text-area';
-import { importStartedSchema } from '@/lib/contracts/list-imports';
+import { fileTakenSchema } from '@/lib/contracts/list-imports';
 
 interface UploadFormProps {
   /** The internal route that takes the file. */
   readonly to: string;
-  /** The page of an import, its id to be added. */
-  readonly importsHref: string;
+  /** The list's page; those of its imports and pending uploads stand below it. */
+  readonly listHref: string;
   readonly cancelHref: string;
 }
+
+const PEEK_WORDS: Readonly<Record<Peek, string>> = {
+  contract: 'Its headings are those of the contract: it is read as it stands.',
+  other: 'Its headings are not those of the contract. It is stored first; then you say what each column is.',
+  workbook: 'A workbook. It is stored first; then you choose the sheet and say what each column is.',
+};
 
 interface Sending {
   readonly sent: number;
@@ -26,9 +34,10 @@ interface Sending {
 }
 
 /** Sends a file to a list, with the reason for the revision it becomes, and leads on to the page of its import. */
-export function UploadForm({ to, importsHref, cancelHref }: UploadFormProps) {
+export function UploadForm({ to, listHref, cancelHref }: UploadFormProps) {
   const router = useRouter();
   const [file, setFile] = useState<File | null>(null);
+  const [peek, setPeek] = useState<Peek | null>(null);
   const [sending, setSending] = useState<Sending | null>(null);
   const [failure, setFailure] = useState<string | null>(null);
   const request = useRef<XMLHttpRequest | null>(null);
@@ -37,15 +46,17 @@ export function UploadForm({ to, importsHref, cancelHref }: UploadFormProps) {
   const send = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();
     if (file === null) return;
-    const reason = String(new FormData(event.currentTarget).get('reason') ?? '');
+    const form = new FormData(event.currentTarget);
+    const asked = new URLSearchParams({ reason: String(form.get('reason') ?? '') });
+    if (form.get('by-hand') !== null) asked.set('by', 'hand');
     setFailure(null);
     setSending({ sent: 0, size: file.size });
-    const started = sendFile(`${to}?${new URLSearchParams({ reason }).toString()}`, file, (sent) =>
+    const started = sendFile(`${to}?${asked.toString()}`, file, (sent) =>
       setSending({ sent, size: file.size }),
     );
     request.current = started.request;
     started.answer.then(
-      (id) => router.push(`${importsHref}/${id}`),
+      (page) => router.push(`${listHref}/${page}`),
       (error: unknown) => {
         setSending(null);
         setFailure(error instanceof Error ? error.message : String(error));
@@ -64,12 +75,29 @@ export function UploadForm({ to, importsHref, cancelHref }: UploadFormProps) {
         <FileField
           name="file"
           label="File"
-          hint="CSV in UTF-8 with one header row, up to 1 GiB. Commas, semicolons or tabs."
-          accept=".csv,.txt,.tsv,text/csv,text/tab-separated-values,text/plain"
+          hint="CSV in UTF-8, with commas, semicolons or tabs, up to 1 GiB; or a sheet of an .xlsx workbook, up to 32 MiB and 100,000 rows."
+          accept=".csv,.txt,.tsv,.xlsx,text/csv,text/tab-separated-values,text/plain"
           required
           disabled={sending !== null}
-          onFile={setFile}
+          onFile={(chosen) => {
+            setFile(chosen);
+            setPeek(null);
+            if (chosen !== null)
+              peekFile(chosen).then(setPeek, (error: unknown) => setFailure(String(error)));
+          }}
         />
+        {peek === null ? null : (
+          <p role="status" className="measure text-note text-ink-2">
+            {PEEK_WORDS[peek]}
+          </p>
+        )}
+        {peek === 'contract' ? (
+          <Checkbox
+            name="by-hand"
+            label="Map its columns by hand all the same"
+            hint="For thousands separators, totals rows, or units by column."
+          />
+        ) : null}
         <TextArea
           name="reason"
           label="Reason for this revision"
@@ -106,7 +134,7 @@ export function UploadForm({ to, importsHref, cancelHref }: UploadFormProps) {
   );
 }
 
-/** fetch tells nothing of what has been sent; XMLHttpRequest does. */
+/** Answers with the page, below the list's, that goes on with the file. fetch tells nothing of what has been sent; XMLHttpRequest does. */
 function sendFile(
   url: string,
   file: File,
@@ -118,8 +146,9 @@ function sendFile(
     request.onabort = () => reject(new Error('The upload was stopped. Nothing was stored.'));
     request.onerror = () => reject(new Error(problemWords(null, 0)));
     request.onload = () => {
-      const started = importStartedSchema.safeParse(request.response);
-      if (request.status === 202 && started.success) resolve(started.data.import);
+      const taken = fileTakenSchema.safeParse(request.response);
+      if (request.status === 202 && taken.success)
+        resolve('import' in taken.data ? `imports/${taken.data.import}` : `uploads/${taken.data.upload}`);
       else reject(new Error(problemWords(request.response, request.status)));
     };
     request.open('POST', url);

@@ -47,6 +47,18 @@ export async function mappedImportOf(db: Db, revisionId: string): Promise<string
   return found?.id ?? null;
 }
 
+/** Of a list's revisions that were read by a mapping: the import of each, by the revision's id. */
+export async function mappedImportsOf(db: Db, listId: string): Promise<Map<string, string>> {
+  const found = await db
+    .selectFrom('imports')
+    .innerJoin('import_mappings', 'import_mappings.import_id', 'imports.id')
+    .select(['imports.id', 'revision_id'])
+    .where('list_id', '=', listId)
+    .where('revision_id', 'is not', null)
+    .execute();
+  return new Map(found.map(({ id, revision_id: revision }) => [revision ?? '', id]));
+}
+
 export function findPendingUpload(db: Db, id: string): Promise<PendingUpload | undefined> {
   return db.selectFrom('pending_uploads').selectAll().where('id', '=', id).executeTakeFirst();
 }

@@ -3,7 +3,7 @@ import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { GET as readImportRoute } from '@/app/api/v1/imports/[id]/route';
 import { POST as addRevisionRoute } from '@/app/api/v1/programs/[program]/lists/[list]/revisions/route';
 import { findImport } from '@/db/queries/lists';
-import { findPendingUpload, mappedImportOf, mappingOfImport, openUploadsOf } from '@/db/queries/mappings';
+import { findPendingUpload, mappedImportsOf, mappingOfImport, openUploadsOf } from '@/db/queries/mappings';
 import { importEndpoint } from '@/lib/contracts/api/imports';
 import { addRevisionEndpoint } from '@/lib/contracts/api/revisions';
 import { mappingSchema } from '@/lib/contracts/list-mapping';
@@ -134,7 +134,7 @@ describe('a file of other headings', () => {
     // 12.5 lb and 200 in, by the factors of NIST SP 811.
     expect(rows[0]?.mass).toBe(12.5 * 0.45359237);
     expect(rows[0]?.x).toBe(200 * 0.0254);
-    expect(await mappedImportOf(test.db, end.revision_id ?? '')).toBe(importId);
+    expect(await mappedImportsOf(test.db, list.id)).toEqual(new Map([[end.revision_id, importId]]));
     expect(await mappingOfImport(test.db, importId)).toMatchObject({
       mapping,
       author: 'weights',

@@ -4,6 +4,7 @@ import { subtotalsOf } from '@/db/queries/configurations';
 import { ownColumnsOf } from '@/db/queries/list-rows';
 import { type PinnedWhole, wholesWithRevision } from '@/db/queries/pinned-wholes';
 import { findNewestImport, findRevisionAuthor, type List, type ListRevision } from '@/db/queries/lists';
+import { openUploadsOf } from '@/db/queries/mappings';
 import { Declared } from '@/components/lists/declared';
 import { FindingsPanel } from '@/components/lists/findings-panel';
 import { GroupTable } from '@/components/lists/group-table';
@@ -45,6 +46,7 @@ export default async function ListPage({ params, searchParams }: Props) {
   const above = <TextLink href={home}>Lists</TextLink>;
   const db = serverDb();
   const newestImport = await findNewestImport(db, list.id);
+  const uploads = keeps ? await openUploadsOf(db, list.id) : [];
   const upload = (
     <ButtonLink kind={list.last_revision === 0 ? 'primary' : 'secondary'} href={`${listHref}/upload`}>
       Upload a file
@@ -60,7 +62,7 @@ export default async function ListPage({ params, searchParams }: Props) {
             keeps ? <ButtonLink href={`${listHref}/declarations`}>Change declarations</ButtonLink> : null
           }
         />
-        <ListNotices listHref={listHref} shown={0} newest={0} import={newestImport} />
+        <ListNotices listHref={listHref} shown={0} newest={0} import={newestImport} uploads={uploads} />
         <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
           <EmptyPlace title="This list has no revision yet" action={keeps ? upload : null}>
             <p>Upload a CSV file: it is checked row by row and becomes revision 1, whole or not at all.</p>
@@ -79,7 +81,10 @@ export default async function ListPage({ params, searchParams }: Props) {
   const geometry = await geometryOfRevision(db, revision);
   const [author, totals, own, source, pinned] = await Promise.all([
     findRevisionAuthor(db, revision.id),
-    totalsOfRevision(db, revision.id, revision.frame_issue_id, { declarations: revision.declarations, geometry }),
+    totalsOfRevision(db, revision.id, revision.frame_issue_id, {
+      declarations: revision.declarations,
+      geometry,
+    }),
     ownColumnsOf(db, revision.id),
     listSource(list, revision, geometry),
     wholesWithRevision(db, revision.id, revision.frame_issue_id),
@@ -112,6 +117,7 @@ export default async function ListPage({ params, searchParams }: Props) {
         shown={revision.number}
         newest={list.last_revision}
         import={newestImport}
+        uploads={uploads}
       />
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
         <Section title="Findings">

@@ -1,5 +1,6 @@
 import { type Metadata } from 'next';
 import { revisionsOfList } from '@/db/queries/lists';
+import { mappedImportsOf } from '@/db/queries/mappings';
 import { CompareForm } from '@/components/lists/compare-form';
 import { QueryRoot } from '@/components/lists/query-root';
 import { RevisionTable } from '@/components/lists/revision-table';
@@ -22,7 +23,10 @@ export default async function RevisionsPage({
   searchParams,
 }: PageProps<'/programs/[program]/lists/[list]/revisions'>) {
   const { access, list, listHref, route } = await requireList(params, 'lists.read');
-  const all = await revisionsOfList(serverDb(), list.id);
+  const [all, mapped] = await Promise.all([
+    revisionsOfList(serverDb(), list.id),
+    mappedImportsOf(serverDb(), list.id),
+  ]);
   const page = pageOf((await searchParams)['page'], all.length, PER_PAGE, `${listHref}/revisions?`);
   return (
     <ProgramFrame access={access} current="lists">
@@ -49,6 +53,7 @@ export default async function RevisionsPage({
               findings: revision.findings,
               file: revision.file_name,
               restoredFrom: revision.restored_from,
+              mappedBy: mapped.get(revision.id) ?? null,
             }))}
           />
         </QueryRoot>

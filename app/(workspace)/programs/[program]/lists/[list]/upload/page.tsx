@@ -18,14 +18,15 @@ export default async function UploadPage({ params }: PageProps<'/programs/[progr
         lead={`It becomes revision ${list.last_revision + 1}, whole or not at all: one wrong row refuses the file, and its page of problems says what would be right.`}
       />
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
-        <UploadForm to={`${route}/revisions`} importsHref={`${listHref}/imports`} cancelHref={listHref} />
+        <UploadForm to={`${route}/revisions`} listHref={listHref} cancelHref={listHref} />
         <Section
           title="Its figures are read as declared"
           aside={<TextLink href={`${listHref}/declarations`}>Change declarations</TextLink>}
         >
           <Declared declarations={list.declarations} />
           <p className="text-note text-ink-2">
-            Needed are the columns item (or a unique part_number), mass, x, y and z.{' '}
+            Needed are the columns item (or a unique part_number), mass, x, y and z. Files of other headings
+            are mapped in the next step, and the list remembers how.{' '}
             <a
               href={`/api/internal/programs/${access.program.code}/lists/example`}
               download

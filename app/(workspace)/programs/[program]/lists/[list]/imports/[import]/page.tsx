@@ -1,4 +1,6 @@
 import { type Metadata } from 'next';
+import { mappingOfImport } from '@/db/queries/mappings';
+import { HowItWasRead } from '@/components/lists/mapping/how-it-was-read';
 import { ImportWatch } from '@/components/lists/import-watch';
 import { QueryRoot } from '@/components/lists/query-root';
 import { PageHead } from '@/components/ui/section';
@@ -18,6 +20,7 @@ export default async function ImportPage({
   const { access, list, listHref, route } = await requireList(params, 'lists.read');
   const { import: id } = await params;
   const found = importOf(await orNotFound(() => reachImport(serverDb(), list, id)), list, new Date());
+  const mapped = await mappingOfImport(serverDb(), found.import);
   return (
     <ProgramFrame access={access} current="lists">
       <PageHead
@@ -33,6 +36,16 @@ export default async function ImportPage({
           mayUpload={access.can('lists.keep')}
         />
       </QueryRoot>
+      {mapped === undefined ? null : (
+        <HowItWasRead
+          mapping={mapped.mapping}
+          author={mapped.author}
+          at={mapped.created_at}
+          leftOut={mapped.left_out}
+          totals={mapped.totals}
+          acceptTotals={mapped.accept_totals}
+        />
+      )}
     </ProgramFrame>
   );
 }
