@@ -3,16 +3,15 @@ import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
 import { LIMIT_RULES } from '@/lib/findings/limits/rules';
 import { unknownGroup } from '@/lib/findings/rows/groups';
 import { type PlacedFinding } from '@/lib/findings/finding';
-import { bySeverity } from '@/lib/findings/look';
 
-/** Findings of a roll-up, blockers first, each with where it was seen and the way to its rows. */
+/** Findings of a roll-up, each with where it was seen and the way to its rows; without a configuration to look into, none to groups of a condition. */
 export function placedFindings(
   findings: readonly PlacedFinding[],
   program: string,
   conditions: readonly { readonly code: string; readonly title: string }[],
-  configuration: string,
+  configuration: string | null,
 ): FindingLine[] {
-  return [...findings].sort(bySeverity).map((finding) => ({
+  return findings.map((finding) => ({
     ...finding,
     seen: seenAt(finding.where, conditions),
     href: rowsHref(finding, program),
@@ -23,9 +22,10 @@ export function placedFindings(
 const LIMITS: readonly string[] = Object.values(LIMIT_RULES).map(({ id }) => id);
 
 /** Findings that name groups instead of rows lead to the rows of each group. */
-function groupLinks({ rule, rows, where }: PlacedFinding, program: string, configuration: string) {
+function groupLinks({ rule, rows, where }: PlacedFinding, program: string, configuration: string | null) {
   const home = `/programs/${program}`;
   if (where.kind === 'condition' && LIMITS.includes(rule)) {
+    if (configuration === null) return null;
     const views = `${home}/configurations/${configuration}/views`;
     return (rows.length === 0 ? [''] : rows).map((group) => ({
       words: group === '' ? 'Components of this condition' : `Components of ${group}`,
@@ -47,7 +47,11 @@ function seenAt(
   return kind === 'list' ? `List ${code}, revision ${revision}` : `Rotating parts, revision ${revision}`;
 }
 
-function rowsHref({ rule, where }: PlacedFinding, program: string): string | null {
+/** The page with the rows of a finding; null where it names none. */
+export function rowsHref(
+  { rule, where }: Pick<PlacedFinding, 'rule' | 'where'>,
+  program: string,
+): string | null {
   if (where.kind === 'condition') return null;
   if (where.kind === 'rotors') return `/programs/${program}/rotating-parts?revision=${where.revision}`;
   const query = new URLSearchParams({ revision: String(where.revision), finding: rule });

@@ -2,6 +2,7 @@ import { type DriverLine } from '@/components/drivers/driver-lines';
 import { NumberName, unitOf, type TenUnits } from '@/components/drivers/number-words';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
+import { classes } from '@/components/ui/classes';
 import { Cell, ColumnHead } from '@/components/ui/table';
 import { type Drivers } from '@/lib/drivers/drivers';
 import { fromSi } from '@/lib/units/convert';
@@ -53,11 +54,13 @@ export function DriverTable({ drivers, lines, units, picked, onPick }: DriverTab
               <span className="sr-only">Share drawn</span>
             </th>
             {number === 'mass' ? null : (
-              <ColumnHead side="right" unit={unitLabel(units.mass)}>
-                Mass
-              </ColumnHead>
+              <th scope="col" className="text-right max-sm:hidden">
+                Mass <span className="font-normal text-ink-2">{unitLabel(units.mass)}</span>
+              </th>
             )}
-            <ColumnHead side={ofRows ? 'left' : 'right'}>{ofRows ? 'Group' : 'Rows'}</ColumnHead>
+            <th scope="col" className={classes('max-sm:hidden', ofRows ? 'text-left' : 'text-right')}>
+              {ofRows ? 'Group' : 'Rows'}
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -90,18 +93,18 @@ export function DriverTable({ drivers, lines, units, picked, onPick }: DriverTab
                 <ShareBar share={share / widest} />
               </td>
               {number === 'mass' ? null : (
-                <Cell side="right">
+                <Cell side="right" className="max-sm:hidden">
                   <Num value={mass} unit={units.mass} decimals={massDecimals} />
                 </Cell>
               )}
               {ofRows ? (
-                <Cell>
+                <Cell className="max-sm:hidden">
                   <span className="block max-w-56 truncate" title={part.group ?? 'Items on board'}>
                     {part.group ?? 'Items on board'}
                   </span>
                 </Cell>
               ) : (
-                <Cell side="right">
+                <Cell side="right" className="max-sm:hidden">
                   <Num value={part.rows} decimals={0} />
                 </Cell>
               )}

@@ -54,14 +54,21 @@ function Sums({ drivers, units }: { readonly drivers: Drivers; readonly units: T
   const decimals = sharedDecimals([fromSi(gross, unit)]);
   // What is left of levers that balance is rounding.
   const all = Math.abs(sum) <= 1e-9 * gross ? 0 : sum;
-  const what = by === 'rows' ? 'rows and items on board' : 'groups';
+  const cancels = Math.abs(gross - all) > 1e-9 * gross;
+  const what = by === 'rows' ? 'parts' : 'groups';
   return (
     <p className="measure text-note text-ink-2">
       {parts.length < of ? `The first ${parts.length} of ${countWords(of)} ${what}. ` : ''}
       All {countWords(of)} {what} add up to <NumberName number={number} axes={geometry.axes} />{' '}
-      <Num value={all} unit={unit} decimals={decimals} /> {unitLabel(unit)}, without their signs to{' '}
-      <Num value={gross} unit={unit} decimals={decimals} /> {unitLabel(unit)}: shares are of the latter, so
-      that what cancels shows.
+      <Num value={all} unit={unit} decimals={decimals} /> {unitLabel(unit)}
+      {cancels ? (
+        <>
+          , without their signs to <Num value={gross} unit={unit} decimals={decimals} /> {unitLabel(unit)}:
+          shares are of the latter, so that what cancels shows.
+        </>
+      ) : (
+        ': shares are of that.'
+      )}
     </p>
   );
 }

@@ -31,7 +31,7 @@ export function DriversStation({ drivers, units, listsHref }: DriversStationProp
       />
       {part === undefined ? (
         <p className="text-ink-2">
-          Choose a {drivers.by === 'rows' ? 'row' : 'group'} to see the aircraft without it, or with it moved.
+          Choose a {drivers.by === 'rows' ? 'row' : 'group'} to see the whole without it, or with it moved.
         </p>
       ) : (
         <EffectPanel

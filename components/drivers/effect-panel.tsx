@@ -1,11 +1,18 @@
 'use client';
 
+import { type ReactNode } from 'react';
 import { effectsOf, type State, typedMove } from '@/components/drivers/effects';
-import { NumberName, unitOf, type TenUnits } from '@/components/drivers/number-words';
+import {
+  type KindOfNumber,
+  kindOf,
+  NumberName,
+  unitOf,
+  type TenUnits,
+} from '@/components/drivers/number-words';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
 import { Button } from '@/components/ui/button';
-import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
+import { Cell, ColumnHead, Table } from '@/components/ui/table';
 import { NumberField } from '@/components/ui/text-field';
 import { TextLink } from '@/components/ui/text-link';
 import { type DriverPart, type Drivers } from '@/lib/drivers/drivers';
@@ -35,14 +42,21 @@ export function EffectPanel({ drivers, part, units, by, onBy, onClose, href }: E
   const move: Vec3 | null =
     typeof dx === 'number' && typeof dy === 'number' && typeof dz === 'number' ? [dx, dy, dz] : null;
   const { now, removed, moved } = effectsOf(drivers, part, move);
+  const others = [removed, moved];
+  const decimals = decimalsByKind([now, ...others], units);
   const head = (words: string) => <ColumnHead side="right">{words}</ColumnHead>;
   return (
     <section
       aria-label={`Effect of ${part.name}`}
-      className="grid min-w-0 gap-4 border border-ink-2 bg-sheet p-4"
+      className="grid min-w-0 gap-4 border border-ink-2 bg-sheet p-2 sm:p-4"
     >
       <header className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1">
-        <h3 className="text-lead font-semibold wrap-anywhere">{part.name}</h3>
+        <h3 className="text-lead font-semibold wrap-anywhere">
+          {part.name}
+          {part.description === null ? null : (
+            <span className="ml-2 text-body font-normal text-ink-2">{part.description}</span>
+          )}
+        </h3>
         <div className="flex flex-wrap items-baseline gap-x-4">
           {href === null ? null : <TextLink href={href}>Show in its list</TextLink>}
           <Button kind="quiet" onClick={onClose}>
@@ -52,7 +66,7 @@ export function EffectPanel({ drivers, part, units, by, onBy, onClose, href }: E
       </header>
       <fieldset className="grid gap-2">
         <legend className="mb-1 font-semibold">Move it by, along the airframe axes</legend>
-        <div className="grid grid-cols-[repeat(auto-fit,minmax(104px,1fr))] gap-3">
+        <div className="grid grid-cols-3 gap-2 sm:gap-3">
           {([0, 1, 2] as const).map((k) => (
             <NumberField
               key={k}
@@ -82,24 +96,23 @@ export function EffectPanel({ drivers, part, units, by, onBy, onClose, href }: E
           </tr>
         </thead>
         <tbody aria-live="polite">
-          {TEN.map((number) => {
-            const unit = unitOf(number, units);
-            return (
-              <Line
-                key={number}
-                name={<NumberName number={number} axes={axes} />}
-                unit={unit}
-                now={now.ten?.[number] ?? null}
-                others={[removed, moved].map((state) => state?.ten?.[number] ?? null)}
-              />
-            );
-          })}
+          {TEN.map((number) => (
+            <Line
+              key={number}
+              name={<NumberName number={number} axes={axes} />}
+              unit={unitOf(number, units)}
+              decimals={decimals[kindOf(number)]}
+              now={now.ten?.[number] ?? null}
+              others={others.map((state) => state?.ten?.[number] ?? null)}
+            />
+          ))}
           {mac > 0 ? (
             <Line
               name="CG"
               unit={null}
+              decimals={2}
               now={now.percentMac}
-              others={[removed, moved].map((state: State | null) => state?.percentMac ?? null)}
+              others={others.map((state) => state?.percentMac ?? null)}
             />
           ) : null}
         </tbody>
@@ -118,36 +131,59 @@ function moveWords({ image }: DriverPart, by: Drivers['by']): string {
     : 'The row stands for its mirror image too: across the plane of symmetry the image moves the other way.';
 }
 
+/** Numbers of a kind share their decimals: the largest shows seven digits. */
+function decimalsByKind(states: readonly (State | null)[], units: TenUnits): Record<KindOfNumber, number> {
+  const of = (kinds: readonly KindOfNumber[], digits: number): number =>
+    sharedDecimals(
+      states.flatMap((state) =>
+        TEN.flatMap((number) =>
+          state?.ten && kinds.includes(kindOf(number))
+            ? [fromSi(state.ten[number], unitOf(number, units))]
+            : [],
+        ),
+      ),
+      [],
+      digits,
+    );
+  const inertia = of(['moment', 'product'], 7);
+  return { mass: of(['mass'], 6), place: of(['place'], 6), moment: inertia, product: inertia };
+}
+
 interface LineProps {
-  readonly name: React.ReactNode;
+  readonly name: ReactNode;
   /** Null for per cent of the chord. */
   readonly unit: Unit | null;
+  readonly decimals: number;
   readonly now: number | null;
   readonly others: readonly (number | null)[];
 }
 
-function Line({ name, unit, now, others }: LineProps) {
-  const shown = (value: number): number => (unit === null ? value : fromSi(value, unit));
-  const decimals =
-    unit === null ? 2 : sharedDecimals([now, ...others].flatMap((v) => (v === null ? [] : [shown(v)])));
+function Line({ name, unit, decimals, now, others }: LineProps) {
+  const shown = (value: number | null): number | null =>
+    value === null || unit === null ? value : fromSi(value, unit);
+  const before = shown(now);
   return (
     <tr>
-      <RowHead>
-        {name} <span className="text-note text-ink-2">{unit === null ? '% MAC' : unitLabel(unit)}</span>
-      </RowHead>
+      <th scope="row" className="text-left font-normal">
+        {name}{' '}
+        <span className="text-note text-ink-2 max-sm:block">{unit === null ? '% MAC' : unitLabel(unit)}</span>
+      </th>
       <Cell side="right">
-        <Num value={now === null ? null : shown(now)} decimals={decimals} />
+        <Num value={before} decimals={decimals} className="max-sm:text-note" />
       </Cell>
-      {others.map((value, column) => (
-        <Cell key={column} side="right">
-          <Num value={value === null ? null : shown(value)} decimals={decimals} />
-          {value === null || now === null ? null : (
-            <div className="text-note text-ink-2">
-              <Num value={shown(value) - shown(now)} decimals={decimals} plus />
-            </div>
-          )}
-        </Cell>
-      ))}
+      {others.map((value, column) => {
+        const after = shown(value);
+        return (
+          <Cell key={column} side="right">
+            <Num value={after} decimals={decimals} className="max-sm:text-note" />
+            {after === null || before === null ? null : (
+              <div className="text-note text-ink-2">
+                <Num value={after - before} decimals={decimals} plus />
+              </div>
+            )}
+          </Cell>
+        );
+      })}
     </tr>
   );
 }

@@ -1,6 +1,9 @@
+import { counted } from '@/components/lists/list-words';
+import { Quoted } from '@/components/lists/quoted';
 import { SeverityWord } from '@/components/ui/severity';
 import { TextLink } from '@/components/ui/text-link';
 import { type Finding } from '@/lib/findings/finding';
+import { bySeverity } from '@/lib/findings/look';
 import { ruleOf } from '@/lib/findings/rules';
 
 export interface FindingLine extends Finding {
@@ -10,23 +13,33 @@ export interface FindingLine extends Finding {
   readonly href: string | null;
   /** Where the finding names groups: the rows of each. */
   readonly groups?: readonly { readonly words: string; readonly href: string }[] | null;
+  /** What the submitter wrote to it. */
+  readonly answer?: string | null;
 }
 
-/** Findings in the order given, each with its rows one click away and its reason folded beneath. */
+/** Findings, blockers first, each with its rows one click away, its answer where it has one, and its reason folded beneath. */
 export function FindingLines({ findings }: { readonly findings: readonly FindingLine[] }) {
   if (findings.length === 0) return <p className="text-ink-2">The checks saw nothing to tell of.</p>;
   return (
     <ul className="grid border-t border-rule">
-      {findings.map((finding) => (
+      {[...findings].sort(bySeverity).map((finding, index) => (
         <li
-          key={`${finding.seen ?? ''} ${finding.rule}`}
+          key={index}
           className="keep-together grid gap-x-4 gap-y-1 border-b border-rule py-2 sm:grid-cols-[88px_1fr]"
         >
           <SeverityWord severity={finding.severity} />
           <div className="measure grid min-w-0 gap-1 wrap-anywhere">
             {finding.seen === null ? null : <p className="text-note text-ink-2">{finding.seen}</p>}
-            <p>{finding.message}</p>
+            <p>
+              <Quoted text={finding.message} />
+            </p>
             <Rows finding={finding} />
+            {finding.answer ? (
+              <p className="border-l-2 border-ink-2 pl-3">
+                <span className="text-ink-2">Answer: </span>
+                {finding.answer}
+              </p>
+            ) : null}
             <Why rule={finding.rule} />
           </div>
         </li>
@@ -54,8 +67,8 @@ function Rows({ finding: { rows, count, href, groups } }: { readonly finding: Fi
       <p>
         <TextLink href={href}>
           {count > rows.length
-            ? `Show the first ${rows.length} of ${count} rows`
-            : `Show ${count} ${count === 1 ? 'row' : 'rows'}`}
+            ? `Show the first ${rows.length} of ${counted(count, 'row')}`
+            : `Show ${counted(count, 'row')}`}
         </TextLink>
       </p>
     );

@@ -1,5 +1,5 @@
 import { OwnTensor } from '@/components/lists/own-tensor';
-import { rowFieldGroups, type RowField } from '@/components/lists/row-fields';
+import { rowFieldGroups, type RowField, type RowFieldGroup } from '@/components/lists/row-fields';
 import { placeInAirframe } from '@/components/lists/row-place';
 import { RowShares, type WholeOnPage } from '@/components/lists/row-shares';
 import { RowViews } from '@/components/lists/row-views';
@@ -25,6 +25,10 @@ interface RowInspectorProps {
 /** What one row says, in full: fields that hold something, its own tensor, its place in the airframe, where it came from. */
 export function RowInspector({ row, declarations, geometry, wholes, file }: RowInspectorProps) {
   const own = Object.entries(row.own);
+  const fieldGroups = rowFieldGroups(declarations);
+  const group = ({ title, fields }: RowFieldGroup) => (
+    <Fields key={title} title={title} items={fields.flatMap((field) => stated(field, row))} />
+  );
   return (
     <div className="grid gap-6">
       <header className="grid gap-1">
@@ -33,13 +37,12 @@ export function RowInspector({ row, declarations, geometry, wholes, file }: RowI
           {file === null ? 'As edited or brought back' : `As in ${file}`}
         </p>
       </header>
-      {rowFieldGroups(declarations).map(({ title, fields }) => (
-        <Fields key={title} title={title} items={fields.flatMap((field) => stated(field, row))} />
-      ))}
-      <OwnTensor row={row} declarations={declarations} />
-      <Fields title="Place in the airframe" items={placeInAirframe(row, declarations, geometry)} />
+      {fieldGroups.slice(0, 2).map(group)}
       <RowViews {...{ row, declarations, geometry }} cg={cgOf(wholes[0], geometry)} />
       <RowShares {...{ row, declarations, geometry, wholes }} />
+      {fieldGroups.slice(2).map(group)}
+      <OwnTensor row={row} declarations={declarations} />
+      <Fields title="Place in the airframe" items={placeInAirframe(row, declarations, geometry)} />
       <Fields title="Columns of the list's own" items={own.map(([term, value]) => ({ term, value }))} />
     </div>
   );

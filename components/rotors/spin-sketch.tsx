@@ -39,7 +39,7 @@ export function SpinSketch({ spin, label }: { readonly spin: BodyVec; readonly l
   return (
     <figure className="grid content-start gap-1">
       <svg
-        viewBox="-4 10 248 180"
+        viewBox="-4 34 248 144"
         role="img"
         aria-label={label}
         className="block w-full max-w-72 overflow-visible"

@@ -122,7 +122,7 @@ export async function addPerson(db: Db, name: string, isAdmin: boolean): Promise
 
 /** Makes the list if it is new, and a revision of it from the text of a CSV file, as an import would. */
 export async function reviseList(
-  test: ProgramUnderTest,
+  test: Pick<ProgramUnderTest, 'db' | 'pool' | 'program' | 'frameIssueId'>,
   author: Person,
   code: string,
   csv: string,

@@ -6,7 +6,6 @@ import { statedSigma } from '@/components/rotors/stated-sigma';
 import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
 import { standingsOf } from '@/lib/loading/configuration';
 import { keptStandings } from '@/lib/baselines/limit-members';
-import { AnsweredFindings } from '@/components/baselines/answered-findings';
 import { cgLimits } from '@/components/baselines/cg-limits';
 import { chosen } from '@/components/baselines/choose';
 import { ConditionChoice } from '@/components/baselines/condition-choice';
@@ -20,6 +19,7 @@ import { SourceList } from '@/components/baselines/source-list';
 import { StateBanner } from '@/components/baselines/state-banner';
 import { StateWord } from '@/components/baselines/state-word';
 import { TitleBlock } from '@/components/baselines/title-block';
+import { FindingLines } from '@/components/findings/finding-lines';
 import { ButtonLink } from '@/components/ui/button';
 import { Caution } from '@/components/ui/caution';
 import { DialogButton } from '@/components/ui/dialog-button';
@@ -195,11 +195,15 @@ export default async function BaselinePage({
             )}
           </Section>
           <Section title="Findings answered">
-            <AnsweredFindings
-              findings={document.findings.map(({ severity, message, answer }, index) => ({
+            <FindingLines
+              findings={document.findings.map(({ rule, severity, message, answer }, index) => ({
+                rule,
                 severity,
                 message,
-                where: signed.whereOf(index),
+                rows: [],
+                count: 0,
+                seen: signed.whereOf(index),
+                href: null,
                 answer: answer ?? null,
               }))}
             />

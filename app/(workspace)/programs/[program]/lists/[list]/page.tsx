@@ -5,8 +5,10 @@ import { ownColumnsOf } from '@/db/queries/list-rows';
 import { type PinnedWhole, wholesWithRevision } from '@/db/queries/pinned-wholes';
 import { findNewestImport, findRevisionAuthor, type List, type ListRevision } from '@/db/queries/lists';
 import { openUploadsOf } from '@/db/queries/mappings';
+import { placedFindings } from '@/components/configurations/placed-findings';
+import { type FindingLine, FindingLines } from '@/components/findings/finding-lines';
 import { Declared } from '@/components/lists/declared';
-import { FindingsPanel } from '@/components/lists/findings-panel';
+import { FindingCounts } from '@/components/lists/finding-counts';
 import { GroupTable } from '@/components/lists/group-table';
 import { ListNotices } from '@/components/lists/list-notices';
 import { counted } from '@/components/lists/list-words';
@@ -120,11 +122,8 @@ export default async function ListPage({ params, searchParams }: Props) {
         uploads={uploads}
       />
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
-        <Section title="Findings">
-          <FindingsPanel
-            findings={revision.findings}
-            hrefOf={(rule) => `${here}&finding=${encodeURIComponent(rule)}#rows`}
-          />
+        <Section title="Findings" aside={<FindingCounts findings={revision.findings} />}>
+          <FindingLines findings={findingsOnPage(revision, list.code, access.program.code)} />
         </Section>
         <Section title="As declared">
           <Declared declarations={revision.declarations} />
@@ -208,4 +207,11 @@ function wholesOnPage(
       categories: one.categories,
     })),
   ];
+}
+
+/** Where they were seen is the page itself. */
+function findingsOnPage({ findings, number }: ListRevision, list: string, program: string): FindingLine[] {
+  const where = { kind: 'list' as const, code: list, revision: number };
+  const placed = findings.map((finding) => ({ ...finding, where }));
+  return placedFindings(placed, program, [], null).map((line) => ({ ...line, seen: null }));
 }

@@ -3,7 +3,6 @@ import { limitsInForce } from '@/db/queries/settings';
 import { StandingTable } from '@/components/limits/standing-table';
 import { MaturitySection } from '@/components/mass/maturity-section';
 import { standingsOf } from '@/lib/loading/configuration';
-import { AnsweredFindings } from '@/components/baselines/answered-findings';
 import { ChangeTable, MomentumChangeTable } from '@/components/baselines/change-table';
 import { chosen } from '@/components/baselines/choose';
 import { ConditionChoice } from '@/components/baselines/condition-choice';
@@ -23,6 +22,8 @@ import { TitleBlock } from '@/components/baselines/title-block';
 import { whereWords } from '@/lib/findings/where-words';
 import { Banner } from '@/components/ui/banner';
 import { ChoiceLinks } from '@/components/ui/choice-links';
+import { placedFindings } from '@/components/configurations/placed-findings';
+import { FindingLines } from '@/components/findings/finding-lines';
 import { Caution } from '@/components/ui/caution';
 import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
@@ -67,6 +68,8 @@ export default async function SubmissionPage({
     ...revisions.map((one) => [one.list_code, one.list_title] as const),
     ...result.conditions.map((one) => [one.code, one.title] as const),
   ]);
+  const seenWords = submission.findings.map(({ where }) => whereWords(where, titles));
+  const answers = submission.findings.map((finding) => submission.answers[findingKey(finding)]);
   const maySign = obstacles.length === 0;
   const sides = { before: former ? `Baseline ${former.number}` : 'Before', after: 'Submitted' };
   const rows = (narrowed: { list?: string; group?: string }) =>
@@ -187,12 +190,11 @@ export default async function SubmissionPage({
             />
           </Section>
           <Section title="Findings and answers">
-            <AnsweredFindings
-              findings={submission.findings.map((finding) => ({
-                severity: finding.severity,
-                message: finding.message,
-                where: whereWords(finding.where, titles),
-                answer: submission.answers[findingKey(finding)] ?? null,
+            <FindingLines
+              findings={placedFindings(submission.findings, program.code, [], null).map((line, index) => ({
+                ...line,
+                seen: seenWords[index] ?? null,
+                answer: answers[index] ?? null,
               }))}
             />
           </Section>
