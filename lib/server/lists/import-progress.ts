@@ -17,7 +17,7 @@ export function progressTeller(db: Db, importId: string): (rows: number) => void
   let cancelled = false;
   return (rows) => {
     if (cancelled) throw new ImportCancelled();
-    if (telling || Date.now() < next) return;
+    if (rows === 0 || telling || Date.now() < next) return;
     telling = true;
     next = Date.now() + EVERY_MS;
     db.updateTable('imports')

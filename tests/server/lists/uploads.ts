@@ -40,7 +40,8 @@ export async function waitForImport(
   throw new Error(`the import ${id} did not come that far within a minute`);
 }
 
-export const settled = ({ state }: Pick<Import, 'state'>): boolean => state === 'done' || state === 'failed';
+export const settled = ({ state }: Pick<Import, 'state'>): boolean =>
+  state !== 'waiting' && state !== 'running';
 
 /** A process of its own that runs the queue of this test's database; with `stall` its store stops in the middle of a file. */
 export function startJobProcess(
