@@ -148,12 +148,8 @@ describe('a weights engineer with a supplier’s file', () => {
   });
 
   it('reads on the page of the import how the file was read and what was left out', async () => {
-    const { id } = await people.db
-      .selectFrom('imports')
-      .select('id')
-      .where('state', '=', 'done')
-      .executeTakeFirstOrThrow();
-    await page.goto(`${list}/imports/${id}`);
+    await page.goto(`${list}/revisions`);
+    await page.getByRole('link', { name: 'How it was read' }).click();
     await page.getByRole('heading', { name: 'How its columns are read' }).waitFor();
     await page.getByText('9 (totals)').waitFor();
     await page.getByText('mass of a piece, lb').waitFor();
