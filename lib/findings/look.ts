@@ -1,9 +1,11 @@
+import { type RowBlock } from '@/lib/ingest/blocks/row-block';
 import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry, bareGeometry } from '@/lib/mass/geometry';
 import { Placement } from '@/lib/mass/place';
 import { type RollUp } from '@/lib/mass/roll-up';
 
+import { CheckBlock } from './columns/check-block';
 import { type RowChange, type RowContext } from './context';
 import { type Finding, type Severity } from './finding';
 import { RowFacts } from './row-facts';
@@ -30,6 +32,8 @@ function findingsOf(seen: readonly (readonly [Rule, Sighting | null])[]): Findin
 export class RowChecks {
   readonly #placement: Placement;
   readonly #watches;
+  readonly #context: RowContext;
+  #block: CheckBlock | null = null;
 
   constructor(
     readonly declarations: ListDeclarations,
@@ -39,12 +43,25 @@ export class RowChecks {
     const placement = new Placement(declarations, geometry);
     const books = new SharedBooks();
     this.#placement = placement;
+    this.#context = context;
     this.#watches = ROW_RULES.map((rule) => [rule, rule.watch({ ...context, placement, books })] as const);
   }
 
+  /** Shows a row; rows come either so, or in blocks. */
   see(component: Component): void {
     const row = new RowFacts(component, this.#placement);
     for (const [, watch] of this.#watches) watch.see(row);
+  }
+
+  /** Shows the rows of a block, always the same one. */
+  seeBlock(rows: RowBlock): void {
+    this.#block ??= new CheckBlock(rows, this.#placement, this.#context);
+    const block = this.#block;
+    block.load();
+    for (const [, watch] of this.#watches) {
+      if (watch.block !== undefined) watch.block(block);
+      else for (let row = 0; row < rows.rows; row += 1) watch.see(block.facts(row));
+    }
   }
 
   /** After the last row, before `findings`: a row whose figures changed since the revision before, in any order. */

@@ -4,6 +4,7 @@ import { type RollUp } from '@/lib/mass/roll-up';
 import { type Sym3 } from '@/lib/numerics/sym3';
 import { type OperatingPoint, type Rotor } from '@/lib/rotors/rotor';
 
+import { type CheckBlock } from './columns/check-block';
 import { type RowChange, type RowContext } from './context';
 import { type Severity } from './finding';
 import { type RowFacts } from './row-facts';
@@ -31,6 +32,11 @@ export interface Sighting {
 /** Watches the rows of one list go by, one at a time. */
 export interface Watch {
   see(row: RowFacts): void;
+  /**
+   * The same for all rows of a block, which come in the order of the list: those that matter as objects are shown to `see`, the others
+   * are taken in from their columns. Without it, `see` is shown every row. Rows come in one of the two ways, never in both.
+   */
+  block?(rows: CheckBlock): void;
   /** After the last row, once for each row whose figures changed since the revision before. */
   change?(change: RowChange): void;
   /** After the last row; null when there is nothing to say. */

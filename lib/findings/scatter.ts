@@ -17,6 +17,16 @@ export class Scatter<T> {
   readonly #low: Ranked<T>[] = [];
   readonly #high: Ranked<T>[] = [];
   count = 0;
+  /** Values from here to there only count: the ends are beyond them. */
+  #from = Infinity;
+  #to = -Infinity;
+
+  /** Takes a value in where it is none of the ends; false where it has to be added. */
+  pass(value: number): boolean {
+    if (!(value >= this.#from && value <= this.#to)) return false;
+    this.count += 1;
+    return true;
+  }
 
   add(value: number, of: T): void {
     this.count += 1;
@@ -26,6 +36,9 @@ export class Scatter<T> {
     const highest = this.#high.at(-1);
     if (this.#high.length <= ENDS || (highest !== undefined && value > highest.value))
       keep(this.#high, { value, of }, (a, b) => b.value - a.value);
+    if (this.#low.length <= ENDS) return;
+    this.#from = this.#low.at(-1)?.value ?? Infinity;
+    this.#to = this.#high.at(-1)?.value ?? -Infinity;
   }
 
   /** The values between the three lowest and the three highest; null where there are too few rows. */

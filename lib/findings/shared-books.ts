@@ -1,3 +1,4 @@
+import { type CheckBlock } from './columns/check-block';
 import { type RowFacts } from './row-facts';
 
 /** What several rules keep of the rows of one list, kept once: each rule enters every row, and the first entry counts. */
@@ -15,6 +16,19 @@ export abstract class Book<T> {
   }
 
   protected abstract take(row: RowFacts): T;
+}
+
+/** The same for rows that come in blocks: each rule enters every block, and the first entry counts. */
+export abstract class BlockBook {
+  #serial = 0;
+
+  enter(block: CheckBlock): void {
+    if (block.serial === this.#serial) return;
+    this.#serial = block.serial;
+    this.take(block);
+  }
+
+  protected abstract take(block: CheckBlock): void;
 }
 
 /** The books of one list, one of each kind. */

@@ -179,6 +179,7 @@ class BlockReading {
       if (header === null) return false;
       this.#hasHeader = true;
       this.#block.setOwnColumns(this.#list.ownColumns);
+      this.#block.hasParents = header.positions.has('parent');
       const { declarations } = this;
       this.#parser = new RowParser(
         this.#list,

@@ -33,7 +33,7 @@ export async function rollUpList(
   const { problems, problemCounts } = await readMassListBlocks(bytes, declarations, {
     onBlock(block) {
       sum.addRows(block);
-      for (let row = 0; row < block.rows; row += 1) checks.see(block.component(row));
+      checks.seeBlock(block);
     },
   });
   if (problems.length > 0) return { problems, problemCounts };

@@ -5,7 +5,7 @@ export function sumError(a: number, b: number, sum: number): number {
 }
 
 // 2^27 + 1 halves a double's 53-bit significand (Veltkamp).
-const SPLITTER = 134217729;
+export const SPLITTER = 134217729;
 
 /** a b = product + error exactly (Dekker 1971), as long as no term over- or underflows. */
 export function productError(a: number, b: number, product: number): number {

@@ -5,6 +5,8 @@ import { type Component } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { aComponent, declarations, diagonal, geometry } from '@/tests/support/mass';
+import { inBlocks } from '@/tests/support/row-blocks';
+import { expect } from 'vitest';
 
 /** A light row with moments, wherever it is put: nothing to find. */
 export const SOUND = { mass: 10, moments: diagonal([1, 1, 1]) };
@@ -28,9 +30,21 @@ export function found(
   list: Partial<ListDeclarations> = {},
   context: RowContext = {},
 ): Finding[] {
-  const checks = new RowChecks(declarations(list), context);
-  for (const row of keptRows(rows)) checks.see(row);
-  return checks.findings();
+  return foundBothWays(keptRows(rows), declarations(list), context);
+}
+
+/** The findings of a list; shown row by row and in blocks, they must be the same. */
+export function foundBothWays(
+  rows: readonly Component[],
+  list: ListDeclarations,
+  context: RowContext = {},
+): Finding[] {
+  const [byRow, byBlock] = [new RowChecks(list, context), new RowChecks(list, context)];
+  for (const row of rows) byRow.see(row);
+  for (const block of inBlocks(rows)) byBlock.seeBlock(block);
+  const findings = byRow.findings();
+  expect(byBlock.findings()).toEqual(findings);
+  return findings;
 }
 
 export const ids = (findings: readonly Finding[]): string[] => findings.map(({ rule }) => rule);

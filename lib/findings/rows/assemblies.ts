@@ -1,5 +1,11 @@
-import { BoundedMap, KEPT } from '../bounded-map';
+import { ItemIndex, hashOf } from '@/lib/ingest/blocks/item-index';
+
+import { KEPT } from '../bounded-map';
+import { type CheckBlock } from '../columns/check-block';
+import { decoded, encoded } from '../columns/text-bytes';
+import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
+import { BlockBook, Book } from '../shared-books';
 import { Seen, counted, inUnit } from '../watch';
 
 interface Assembly {
@@ -20,46 +26,102 @@ interface Whole extends Assembly {
 
 const KEEPS = `Mass and counting of the first ${KEPT} rows and parents, and the sums of their children.`;
 
-/** Gathers rows under the parents they name, then shows `judge` each parent that stands in the list and has children. */
+/** Gathers rows under the parents they name. */
+class AssemblyBook extends Book<true> {
+  readonly #index = new ItemIndex();
+  readonly #assemblies: Assembly[] = [];
+  readonly blocks = new AssemblyBlockBook(this);
+
+  protected take(row: RowFacts): true {
+    const { item, parent, quantity, mass } = row.component;
+    this.add(encoded(item), parent === null ? null : encoded(parent), {
+      isCounted: row.isCounted,
+      mass: row.totalMass,
+      oneSide: quantity * mass,
+    });
+    return true;
+  }
+
+  add(item: Uint8Array, parent: Uint8Array | null, own: NonNullable<Assembly['own']>): void {
+    const self = this.#reach(item);
+    if (self !== null) self.own = own;
+    const assembly = parent === null ? null : this.#reach(parent);
+    if (assembly === null) return;
+    assembly.children += 1;
+    assembly.childrenMass += own.mass;
+    if (!own.isCounted) return;
+    assembly.countedChildren += 1;
+    assembly.countedMass += own.mass;
+    assembly.countedOneSide += own.oneSide;
+  }
+
+  /** The assemblies that stand in the list and have children, in the order in which their items first came. */
+  wholes(): { readonly item: string; readonly assembly: Whole }[] {
+    return this.#assemblies.flatMap((assembly, ordinal) => {
+      const { own } = assembly;
+      if (own === null || assembly.children === 0) return [];
+      return [{ item: decoded(this.#index.bytesOf(ordinal)), assembly: { ...assembly, own } }];
+    });
+  }
+
+  /** Null for one that is new when as many are known as are kept. */
+  #reach(name: Uint8Array): Assembly | null {
+    const hash = hashOf(name, 0, name.length);
+    const isFull = this.#index.count >= KEPT;
+    const known = isFull
+      ? this.#index.find(name, 0, name.length, hash)
+      : this.#index.add(name, 0, name.length, hash);
+    if (known !== -1) return this.#assemblies[known] ?? null;
+    if (isFull) return null;
+    const assembly: Assembly = {
+      own: null,
+      children: 0,
+      countedChildren: 0,
+      childrenMass: 0,
+      countedMass: 0,
+      countedOneSide: 0,
+    };
+    this.#assemblies.push(assembly);
+    return assembly;
+  }
+}
+
+/** The same of rows that come in blocks. In a list without parents there is nothing to gather. */
+class AssemblyBlockBook extends BlockBook {
+  constructor(private readonly book: AssemblyBook) {
+    super();
+  }
+
+  protected take({ rows, counted: isCounted, total }: CheckBlock): void {
+    if (!rows.hasParents) return;
+    const { quantity, mass } = rows.numbers;
+    for (let row = 0; row < rows.rows; row += 1) {
+      const parent = rows.textBytes('parent', row);
+      this.book.add(rows.textBytes('item', row), parent.length === 0 ? null : parent, {
+        isCounted: isCounted[row] === 1,
+        mass: total[row] ?? NaN,
+        oneSide: (quantity[row] ?? NaN) * (mass[row] ?? NaN),
+      });
+    }
+  }
+}
+
+/** Shows `judge` each parent that stands in the list and has children. */
 function watchAssemblies(
   judge: (assembly: Whole, list: WatchedList) => string | null,
   headline: (count: number) => string,
 ): (list: WatchedList) => Watch {
   return (list) => {
-    const known = new BoundedMap<Assembly>();
-    const reach = (item: string): Assembly => {
-      const found = known.get(item) ?? {
-        own: null,
-        children: 0,
-        countedChildren: 0,
-        childrenMass: 0,
-        countedMass: 0,
-        countedOneSide: 0,
-      };
-      known.set(item, found);
-      return found;
-    };
+    const book = list.books.of(AssemblyBook);
     return {
       see: (row) => {
-        const { item, parent, quantity } = row.component;
-        const mass = row.totalMass;
-        const oneSide = quantity * row.component.mass;
-        reach(item).own = { isCounted: row.isCounted, mass, oneSide };
-        if (parent === null) return;
-        const assembly = reach(parent);
-        assembly.children += 1;
-        assembly.childrenMass += mass;
-        if (!row.isCounted) return;
-        assembly.countedChildren += 1;
-        assembly.countedMass += mass;
-        assembly.countedOneSide += oneSide;
+        book.enter(row);
       },
+      block: (block) => book.blocks.enter(block),
       report: () => {
         const seen = new Seen();
-        for (const [item, assembly] of known.entries()) {
-          const { own } = assembly;
-          if (own === null || assembly.children === 0) continue;
-          const what = judge({ ...assembly, own }, list);
+        for (const { item, assembly } of book.wholes()) {
+          const what = judge(assembly, list);
           if (what !== null) seen.add(item, what);
         }
         return seen.report(headline);

@@ -1,16 +1,29 @@
+import { TRAITS } from '../columns/traits';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
-import { FIRST_ROWS, Seen, counted, eachRow, inUnit, shown } from '../watch';
+import { FIRST_ROWS, Seen, counted, eachRow, eachWith, inUnit, shown } from '../watch';
 
 /** A watch on the rows for which `is` holds, which says what share of the list's mass they are. */
 function shareOfMass(
   is: (row: RowFacts) => boolean,
   headline: (count: number) => string,
+  trait: number,
 ): (list: WatchedList) => Watch {
   return ({ placement: { declarations } }) => {
     const seen = new Seen();
     let [all, some] = [0, 0];
     return {
+      block: ({ rows, counted: isCounted, total, traits, facts }) => {
+        for (let row = 0; row < rows.rows; row += 1) {
+          if (isCounted[row] === 0) continue;
+          const mass = Math.abs(total[row] ?? NaN);
+          all += mass;
+          if (((traits[row] ?? 0) & trait) === 0) continue;
+          some += mass;
+          if (seen.isFull) seen.count += 1;
+          else seen.add(facts(row).component.item, inUnit(total[row] ?? NaN, declarations.massUnit));
+        }
+      },
       see: (row) => {
         if (!row.isCounted) return;
         const mass = Math.abs(row.totalMass);
@@ -42,6 +55,7 @@ export const withoutMaturity: RowRule = {
   watch: shareOfMass(
     ({ component }) => component.maturity === null,
     (count) => counted(count, 'row states no maturity', 'rows state no maturity'),
+    TRAITS.noMaturity,
   ),
 };
 
@@ -56,6 +70,7 @@ export const withoutGroup: RowRule = {
   watch: shareOfMass(
     ({ component }) => component.group === 'Ungrouped',
     (count) => counted(count, 'row states no group', 'rows state no group'),
+    TRAITS.noGroup,
   ),
 };
 
@@ -73,6 +88,7 @@ export const actualWithGrowth: RowRule = {
         ? `growth ${shown(100 * growth)} %`
         : null,
     (count) => counted(count, 'weighed row states growth', 'weighed rows state growth'),
+    { traits: TRAITS.grownActual, isAll: true },
   ),
 };
 
@@ -90,6 +106,7 @@ export const estimatedWithoutGrowth: RowRule = {
         ? `${inUnit(mass, declarations.massUnit)}, growth ${shown(100 * growth)} %`
         : null,
     (count) => counted(count, 'estimated row states no growth', 'estimated rows state no growth'),
+    { traits: TRAITS.ungrownEstimate, isAll: true },
   ),
 };
 
@@ -121,6 +138,7 @@ export const sigmaBeyondValue: RowRule = {
         'row has a σ larger than its value',
         'rows have a σ larger than the value it belongs to',
       ),
+    { traits: TRAITS.vague },
   ),
 };
 
@@ -135,14 +153,16 @@ export const adjustmentsLeftOut: RowRule = {
   watch: ({ placement: { declarations } }) => {
     const seen = new Seen();
     let mass = 0;
+    const see = (row: RowFacts): void => {
+      const { status, changeRef } = row.component;
+      if (!row.isCounted || status === 'approved') return;
+      mass += row.totalMass;
+      const change = changeRef === null ? '' : `, change ${changeRef}`;
+      seen.add(row.component.item, `${status}, ${inUnit(row.totalMass, declarations.massUnit)}${change}`);
+    };
     return {
-      see: (row) => {
-        const { status, changeRef } = row.component;
-        if (!row.isCounted || status === 'approved') return;
-        mass += row.totalMass;
-        const change = changeRef === null ? '' : `, change ${changeRef}`;
-        seen.add(row.component.item, `${status}, ${inUnit(row.totalMass, declarations.massUnit)}${change}`);
-      },
+      see,
+      block: (block) => eachWith(TRAITS.waiting, block, (row) => see(block.facts(row))),
       report: () =>
         seen.report((count) => {
           const headline = counted(count, 'adjustment is left out', 'adjustments are left out');

@@ -32,6 +32,7 @@ function watchChanges(
     const judge = judgeOf(list);
     return {
       see: () => undefined,
+      block: () => undefined,
       change: (change) => {
         const what = judge(change);
         if (what !== null) seen.add(change.item, what);

@@ -1,3 +1,4 @@
+import { TRAITS } from '../columns/traits';
 import { type RowRule } from '../rule';
 import { FIRST_ROWS, counted, eachRow } from '../watch';
 
@@ -15,6 +16,7 @@ export const memoRows: RowRule = {
       return component.parent === null ? 'memo' : `memo, parent ${component.parent}`;
     },
     (count) => counted(count, 'memo row is not summed', 'memo rows are not summed'),
+    { traits: TRAITS.memo, isAll: true },
   ),
 };
 
@@ -35,5 +37,6 @@ export const pairInHalfList: RowRule = {
         'row is marked as a pair in a list of one half',
         'rows are marked as pairs in a list of one half',
       ),
+    { traits: TRAITS.pair },
   ),
 };

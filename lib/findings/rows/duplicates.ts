@@ -1,9 +1,14 @@
 import { normVec, subVec } from '@/lib/numerics/vec3';
 
 import { BoundedMap, KEPT } from '../bounded-map';
+import { addName } from '../columns/add-name';
+import { type CheckBlock } from '../columns/check-block';
+import { type KeptRow } from '../columns/kept-rows';
+import { NameIndex } from '../columns/name-index';
+import { PlaceIndex } from '../columns/place-index';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
-import { Book } from '../shared-books';
+import { BlockBook, Book } from '../shared-books';
 import { Seen, counted, inUnit } from '../watch';
 
 /** What is kept of a row that another may repeat. */
@@ -47,6 +52,7 @@ interface Repeat {
 
 class Repeats extends Book<Repeat | null> {
   readonly #known = new BoundedMap<Former>();
+  readonly blocks = new RepeatBlocks();
 
   protected take(row: RowFacts): Repeat | null {
     if (!row.isCounted || row.component.mass === 0) return null;
@@ -55,6 +61,49 @@ class Repeats extends Book<Repeat | null> {
     if (before !== undefined) return { now, before };
     this.#known.set(key, now);
     return null;
+  }
+}
+
+/** The former of a row that was kept as bytes and numbers. */
+function formerOfKept(kept: KeptRow): Former {
+  const { item, description, partNumber, group, right, isMirrored, mass, moments } = kept;
+  const [ixx, iyy, izz] = moments;
+  const square = moments.some((moment) => moment !== 0) ? (ixx + iyy + izz) / (2 * mass) : 0;
+  return {
+    item,
+    name: description ?? item,
+    partNumber,
+    group,
+    side: Math.abs(right) < 1e-4 ? 0 : Math.sign(right),
+    isMirrored,
+    radius: square > 0 ? Math.sqrt(square) : null,
+  };
+}
+
+/** The same of rows that come in blocks: `found` are those of the block at hand. */
+class RepeatBlocks extends BlockBook {
+  found: { readonly row: RowFacts; readonly repeat: Repeat }[] = [];
+  readonly #known = new PlaceIndex();
+
+  protected take(block: CheckBlock): void {
+    this.found = [];
+    const { rows, counted: isCounted, place, right, placement } = block;
+    const { mass: masses } = rows.numbers;
+    const tenths = (value: number | undefined): number => Math.round(1e4 * (value ?? NaN));
+    const [first, second] = [0, 1, 2].filter((k) => k !== placement.lateral);
+    const [a, b] = [place[first === 1 ? 1 : 0], place[second === 1 ? 1 : 2]];
+    for (let row = 0; row < rows.rows; row += 1) {
+      const mass = masses[row] ?? NaN;
+      if (isCounted[row] === 0 || mass === 0) continue;
+      const [along, up, across] = [tenths(a[row]), tenths(b[row]), tenths(Math.abs(right[row] ?? NaN))];
+      const before = this.#known.known(along, up, across, mass, () => block.kept.keep(block, row));
+      if (before === -1) continue;
+      const facts = block.facts(row);
+      this.found.push({
+        row: facts,
+        repeat: { now: formerOf(facts), before: formerOfKept(block.kept.row(before)) },
+      });
+    }
   }
 }
 
@@ -71,6 +120,13 @@ function watchRepeats(
         if (repeat === null) return;
         const what = judge(repeat.now, repeat.before, row);
         if (what !== null) seen.add(row.component.item, what);
+      },
+      block: (block) => {
+        repeats.blocks.enter(block);
+        for (const { row, repeat } of repeats.blocks.found) {
+          const what = judge(repeat.now, repeat.before, row);
+          if (what !== null) seen.add(row.component.item, what);
+        }
       },
       report: () => seen.report(headline),
     };
@@ -148,7 +204,37 @@ export const nearDuplicate: RowRule = {
       readonly mass: number;
       readonly at: RowFacts['place'];
     }>();
+    const judge = (row: RowFacts, before: { item: string; mass: number; at: RowFacts['place'] }): void => {
+      const { item, mass } = row.component;
+      const apart = normVec(subVec(row.place, before.at));
+      const differs = Math.abs(mass / before.mass - 1);
+      if (differs > NEAR_MASS || apart > NEAR_PLACE || (differs < 1e-6 && apart < 1e-4)) return;
+      const { massUnit, lengthUnit } = row.declarations;
+      seen.add(
+        item,
+        `“${row.name}”, ${inUnit(mass, massUnit)} against ${inUnit(before.mass, massUnit)} of ${before.item}, ${inUnit(apart, lengthUnit)} apart`,
+      );
+    };
+    const names = new NameIndex();
     return {
+      block: (block) => {
+        const { rows, counted: isCounted, place, kept } = block;
+        const { mass: masses } = rows.numbers;
+        for (let row = 0; row < rows.rows; row += 1) {
+          const mass = masses[row] ?? NaN;
+          if (isCounted[row] === 0 || mass === 0) continue;
+          names.begin().number(rows.group[row] ?? 0);
+          addName(names, rows, row);
+          const before = names.known(() => kept.keep(block, row));
+          if (before === -1 || Math.abs(mass / kept.mass(before) - 1) > NEAR_MASS) continue;
+          const isNear = place.every(
+            (along, k) => Math.abs((along[row] ?? NaN) - kept.place(before, k)) <= NEAR_PLACE,
+          );
+          if (!isNear) continue;
+          const { item, mass: was, place: at } = kept.row(before);
+          judge(block.facts(row), { item, mass: was, at: at as RowFacts['place'] });
+        }
+      },
       see: (row) => {
         const { item, mass, group } = row.component;
         if (!row.isCounted || mass === 0) return;
@@ -158,14 +244,7 @@ export const nearDuplicate: RowRule = {
           known.set(key, { item, mass, at: row.place });
           return;
         }
-        const apart = normVec(subVec(row.place, before.at));
-        const differs = Math.abs(mass / before.mass - 1);
-        if (differs > NEAR_MASS || apart > NEAR_PLACE || (differs < 1e-6 && apart < 1e-4)) return;
-        const { massUnit, lengthUnit } = row.declarations;
-        seen.add(
-          item,
-          `“${row.name}”, ${inUnit(mass, massUnit)} against ${inUnit(before.mass, massUnit)} of ${before.item}, ${inUnit(apart, lengthUnit)} apart`,
-        );
+        judge(row, before);
       },
       report: () => seen.report((count) => counted(count, 'row is nearly another', 'rows are nearly others')),
     };

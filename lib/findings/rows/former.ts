@@ -46,11 +46,34 @@ function beforeOf(former: readonly FormerSubtotal[], list: WatchedList): Change[
 function watchChange(judge: (change: Change, list: WatchedList) => Sighting | null): RowRule['watch'] {
   return (list): Watch => {
     const { former } = list;
-    if (former === undefined || former.length === 0) return { see: () => undefined, report: () => null };
+    if (former === undefined || former.length === 0)
+      return { see: () => undefined, block: () => undefined, report: () => null };
     const [a, b] = inPlane(list);
     const groups = new BoundedMap<Amount>(GROUPS);
     const now = { mass: 0, rows: 0, along: 0, up: 0 };
+    const amountOf = (group: string): Amount => {
+      const sums = groups.get(group) ?? { mass: 0, rows: 0 };
+      groups.set(group, sums);
+      return sums;
+    };
+    /** By the number of a group in blocks. */
+    const numbered: Amount[] = [];
     return {
+      block: ({ rows, counted: isCounted, total, place }) => {
+        const [along, up] = [place[a], place[b]];
+        for (let row = 0; row < rows.rows; row += 1) {
+          if (isCounted[row] === 0) continue;
+          const mass = total[row] ?? NaN;
+          now.mass += mass;
+          now.rows += 1;
+          now.along += mass * (along[row] ?? NaN);
+          now.up += mass * (up[row] ?? NaN);
+          const group = rows.group[row] ?? 0;
+          const sums = (numbered[group] ??= amountOf(rows.groups[group] ?? ''));
+          sums.mass += mass;
+          sums.rows += 1;
+        }
+      },
       see: (row) => {
         if (!row.isCounted) return;
         const mass = row.totalMass;
@@ -59,8 +82,7 @@ function watchChange(judge: (change: Change, list: WatchedList) => Sighting | nu
         // Along the plane of symmetry a row and its mirror image have the same place.
         now.along += mass * row.place[a];
         now.up += mass * row.place[b];
-        const sums = groups.get(row.component.group) ?? { mass: 0, rows: 0 };
-        groups.set(row.component.group, sums);
+        const sums = amountOf(row.component.group);
         sums.mass += mass;
         sums.rows += 1;
       },

@@ -2,10 +2,11 @@ import { fromSi } from '@/lib/units/convert';
 import { INERTIA_UNITS, type InertiaUnit } from '@/lib/units/table';
 
 import { BoundedMap } from '../bounded-map';
+import { type CheckBlock } from '../columns/check-block';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
 import { Scatter, outside } from '../scatter';
-import { Book } from '../shared-books';
+import { BlockBook, Book } from '../shared-books';
 import { type UnitSlip, slipWords, unitSlips } from '../unit-slips';
 import { Seen, counted, inUnit, shown } from '../watch';
 import { type Core, GROUPS, KEEPS, PlaceBook, type Spread } from './neighbours';
@@ -46,15 +47,45 @@ interface Misfit {
 /** The radii of gyration of the rows of each group. */
 class SizeBook extends Book<Scatter<Sized> | null> {
   readonly groups = new BoundedMap<Scatter<Sized>>(GROUPS);
+  readonly blocks: SizeBlockBook = new SizeBlockBook(this);
 
   protected take(row: RowFacts): Scatter<Sized> | null {
     const { item, group, mass } = row.component;
     const { radius } = row;
     if (!row.isCounted || radius === null) return null;
-    const scatter = this.groups.get(group) ?? new Scatter<Sized>();
-    this.groups.set(group, scatter);
+    const scatter = this.scatterOf(group);
     scatter.add(Math.log(radius), { item, mass, radius });
     return scatter;
+  }
+
+  scatterOf(group: string): Scatter<Sized> {
+    const scatter = this.groups.get(group) ?? new Scatter<Sized>();
+    this.groups.set(group, scatter);
+    return scatter;
+  }
+}
+
+/** The same of rows that come in blocks. */
+class SizeBlockBook extends BlockBook {
+  readonly #numbered: Scatter<Sized>[] = [];
+
+  constructor(private readonly book: SizeBook) {
+    super();
+  }
+
+  protected take({ rows, counted: isCounted }: CheckBlock): void {
+    const { mass: masses, ixx, iyy, izz } = rows.numbers;
+    for (let row = 0; row < rows.rows; row += 1) {
+      const mass = masses[row] ?? NaN;
+      if (isCounted[row] === 0 || mass === 0 || rows.hasMoments[row] === 0) continue;
+      const square = ((ixx[row] ?? NaN) + (iyy[row] ?? NaN) + (izz[row] ?? NaN)) / (2 * mass);
+      if (!(square > 0)) continue;
+      const radius = Math.sqrt(square);
+      const group = rows.group[row] ?? 0;
+      const scatter = (this.#numbered[group] ??= this.book.scatterOf(rows.groups[group] ?? ''));
+      const value = Math.log(radius);
+      if (!scatter.pass(value)) scatter.add(value, { item: rows.text('item', row) ?? '', mass, radius });
+    }
   }
 }
 
@@ -91,6 +122,10 @@ function watchSizes(
       see: (row) => {
         places.enter(row);
         sizes.enter(row);
+      },
+      block: (block) => {
+        places.blocks.enter(block);
+        sizes.blocks.enter(block);
       },
       report: () => {
         const seen = new Seen();

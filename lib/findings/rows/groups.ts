@@ -1,3 +1,4 @@
+import { TRAITS } from '../columns/traits';
 import { type RowRule } from '../rule';
 import { FIRST_ROWS, counted, eachRow } from '../watch';
 
@@ -18,5 +19,6 @@ export const unknownGroup: RowRule = {
         'row is in a group that the breakdown does not have',
         'rows are in groups that the breakdown does not have',
       ),
+    { traits: TRAITS.unknownGroup, isAll: true },
   ),
 };

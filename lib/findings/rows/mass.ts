@@ -1,6 +1,7 @@
 import { fromSi } from '@/lib/units/convert';
 import { type MassUnit } from '@/lib/units/table';
 
+import { TRAITS } from '../columns/traits';
 import { type RowRule } from '../rule';
 import { FIRST_ROWS, counted, eachRow, shown } from '../watch';
 
@@ -16,6 +17,7 @@ export const masslessTensor: RowRule = {
     (row) =>
       row.isCounted && row.component.mass === 0 && row.hasOwnMoments ? 'zero mass, moments not zero' : null,
     (count) => counted(count, 'row has moments and no mass', 'rows have moments and no mass'),
+    { traits: TRAITS.massless },
   ),
 };
 
@@ -30,6 +32,7 @@ export const masslessRow: RowRule = {
   watch: eachRow(
     (row) => (row.isCounted && row.component.mass === 0 && !row.hasOwnMoments ? 'zero mass' : null),
     (count) => counted(count, 'row has no mass', 'rows have no mass'),
+    { traits: TRAITS.massless },
   ),
 };
 
@@ -52,6 +55,7 @@ export const negativeMassOutsideAdjustments: RowRule = {
         'row of a component list has negative mass',
         'rows of a component list have negative mass',
       ),
+    { traits: TRAITS.negative },
   ),
 };
 
@@ -73,6 +77,10 @@ export const heavyPoint: RowRule = {
     let heavy: { readonly item: string; readonly mass: number }[] = [];
     let unit: MassUnit = 'kg';
     const stillHeavy = (): typeof heavy => heavy.filter(({ mass }) => mass >= HEAVY_SHARE * sum);
+    const keep = (item: string, mass: number): void => {
+      heavy.push({ item, mass });
+      if (heavy.length > KEPT_ROWS) heavy = stillHeavy();
+    };
     return {
       see: (row) => {
         if (!row.isCounted) return;
@@ -81,8 +89,17 @@ export const heavyPoint: RowRule = {
         sum += mass;
         unit = row.declarations.massUnit;
         if (row.hasOwnMoments || mass === 0 || mass < HEAVY_SHARE * sum) return;
-        heavy.push({ item: row.component.item, mass });
-        if (heavy.length > KEPT_ROWS) heavy = stillHeavy();
+        keep(row.component.item, mass);
+      },
+      block: ({ rows, counted: isCounted, total, placement, facts }) => {
+        unit = placement.declarations.massUnit;
+        for (let row = 0; row < rows.rows; row += 1) {
+          if (isCounted[row] === 0) continue;
+          const mass = Math.abs(total[row] ?? NaN);
+          sum += mass;
+          if (rows.hasMoments[row] === 1 || mass === 0 || mass < HEAVY_SHARE * sum) continue;
+          keep(facts(row).component.item, mass);
+        }
       },
       report: () => {
         const found = stillHeavy().sort((a, b) => b.mass - a.mass);

@@ -4,10 +4,11 @@ import { fromSi } from '@/lib/units/convert';
 import { LENGTH_UNITS } from '@/lib/units/table';
 
 import { BoundedMap } from '../bounded-map';
+import { type CheckBlock } from '../columns/check-block';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
 import { Scatter, outside } from '../scatter';
-import { Book } from '../shared-books';
+import { BlockBook, Book } from '../shared-books';
 import { slipWords, unitSlips } from '../unit-slips';
 import { Seen, counted, inUnit, shown } from '../watch';
 
@@ -92,12 +93,50 @@ function strayWords({ row, axis, cores }: Stray, list: WatchedList): string {
 /** Where the rows of each group are. */
 export class PlaceBook extends Book<Spread | null> {
   readonly groups = new BoundedMap<Spread>(GROUPS);
+  readonly blocks = new PlaceBlockBook(this);
 
   protected take({ isCounted, component: { item, group, position, mass } }: RowFacts): Spread | null {
     if (!isCounted || mass === 0) return null;
+    const spread = this.spreadOf(group);
+    for (const axis of AXES) spread[axis].add(position[axis], { item, position });
+    return spread;
+  }
+
+  spreadOf(group: string): Spread {
     const spread: Spread = this.groups.get(group) ?? [new Scatter(), new Scatter(), new Scatter()];
     this.groups.set(group, spread);
-    for (const axis of AXES) spread[axis].add(position[axis], { item, position });
+    return spread;
+  }
+}
+
+/** The same of rows that come in blocks. */
+export class PlaceBlockBook extends BlockBook {
+  readonly #numbered: Spread[] = [];
+
+  constructor(private readonly book: PlaceBook) {
+    super();
+  }
+
+  protected take({ rows, counted: isCounted }: CheckBlock): void {
+    const { mass, x, y, z } = rows.numbers;
+    for (let row = 0; row < rows.rows; row += 1) {
+      if (isCounted[row] === 0 || mass[row] === 0) continue;
+      const spread = this.#spreadOf(rows, rows.group[row] ?? 0);
+      const position: Vec3 = [x[row] ?? NaN, y[row] ?? NaN, z[row] ?? NaN];
+      let item: string | null = null;
+      for (const axis of AXES) {
+        if (spread[axis].pass(position[axis])) continue;
+        item ??= rows.text('item', row) ?? '';
+        spread[axis].add(position[axis], { item, position });
+      }
+    }
+  }
+
+  #spreadOf(rows: CheckBlock['rows'], group: number): Spread {
+    const known = this.#numbered[group];
+    if (known !== undefined) return known;
+    const spread = this.book.spreadOf(rows.groups[group] ?? '');
+    this.#numbered[group] = spread;
     return spread;
   }
 }
@@ -113,6 +152,7 @@ function watchPlaces(
       see: (row) => {
         book.enter(row);
       },
+      block: (block) => book.blocks.enter(block),
       report: () => {
         const seen = new Seen();
         for (const [, spread] of book.groups.entries())

@@ -40,7 +40,40 @@ export const omittedInertia: RowRule = {
     const whole = nothing();
     let origin: Vec3 | null = null;
     let own = 0;
+    /** By the number of a group in blocks. */
+    const numbered: Masses[] = [];
+    const take = (sums: Masses, all: number, at: Vec3, isBare: boolean): void => {
+      sums.all += all;
+      for (const k of AXES) sums.first[k] += all * at[k];
+      sums.second += all * (at[0] ** 2 + at[1] ** 2 + at[2] ** 2);
+      if (!isBare) return;
+      sums.bare += all;
+      sums.bareRows += 1;
+    };
     return {
+      block: ({ rows, counted: isCounted }) => {
+        const { mass, quantity, x, y, z, ixx, iyy, izz } = rows.numbers;
+        for (let row = 0; row < rows.rows; row += 1) {
+          const one = mass[row] ?? NaN;
+          if (isCounted[row] === 0 || one <= 0) continue;
+          const group = rows.group[row] ?? 0;
+          const position: Vec3 = [x[row] ?? NaN, y[row] ?? NaN, z[row] ?? NaN];
+          origin ??= position;
+          const pieces = quantity[row] ?? NaN;
+          const at: Vec3 = [position[0] - origin[0], position[1] - origin[1], position[2] - origin[2]];
+          own += (pieces * ((ixx[row] ?? NaN) + (iyy[row] ?? NaN) + (izz[row] ?? NaN))) / 2;
+          let sums = numbered[group];
+          if (sums === undefined) {
+            const path = rows.groups[group] ?? '';
+            sums = groups.get(path) ?? nothing();
+            groups.set(path, sums);
+            numbered[group] = sums;
+          }
+          const isBare = rows.hasMoments[row] === 0;
+          take(sums, one * pieces, at, isBare);
+          take(whole, one * pieces, at, isBare);
+        }
+      },
       see: (row) => {
         const { mass, position, moments, group, quantity } = row.component;
         if (!row.isCounted || mass <= 0) return;
@@ -50,14 +83,7 @@ export const omittedInertia: RowRule = {
         own += (quantity * (moments.ixx + moments.iyy + moments.izz)) / 2;
         const sums = groups.get(group) ?? nothing();
         groups.set(group, sums);
-        for (const each of [sums, whole]) {
-          each.all += all;
-          for (const k of AXES) each.first[k] += all * at[k];
-          each.second += all * (at[0] ** 2 + at[1] ** 2 + at[2] ** 2);
-          if (row.hasOwnMoments) continue;
-          each.bare += all;
-          each.bareRows += 1;
-        }
+        for (const each of [sums, whole]) take(each, all, at, !row.hasOwnMoments);
       },
       report: () => {
         const total = aboutCentre(whole) + own;

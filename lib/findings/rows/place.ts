@@ -3,11 +3,12 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { scaleVec } from '@/lib/numerics/vec3';
 import { LENGTH_UNITS } from '@/lib/units/table';
 
+import { TRAITS } from '../columns/traits';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
 import { Book } from '../shared-books';
 import { slipWords, unitSlips } from '../unit-slips';
-import { FIRST_ROWS, Seen, counted, eachRow, inUnit } from '../watch';
+import { FIRST_ROWS, Seen, counted, eachRow, eachWith, inUnit } from '../watch';
 
 /**
  * How far a place is beyond the aircraft: 1 at the end of what can be part of it. The leading edge of the mean chord is part of
@@ -64,11 +65,13 @@ function watchBeyond(
   return ({ books }) => {
     const seen = new Seen();
     const book = books.of(BeyondBook);
+    const see = (row: RowFacts): void => {
+      const beyond = book.enter(row);
+      if (beyond !== null && is(beyond)) seen.add(row.component.item, placeWords(row));
+    };
     return {
-      see: (row) => {
-        const beyond = book.enter(row);
-        if (beyond !== null && is(beyond)) seen.add(row.component.item, placeWords(row));
-      },
+      see,
+      block: (block) => eachWith(TRAITS.outside, block, (row) => see(block.facts(row))),
       report: () => seen.report(headline),
     };
   };
@@ -123,5 +126,6 @@ export const onDatum: RowRule = {
       return `${inUnit(row.totalMass, massUnit)} at 0, 0, 0`;
     },
     (count) => counted(count, 'row lies exactly on the datum', 'rows lie exactly on the datum'),
+    { traits: TRAITS.onDatum, isAll: true },
   ),
 };

@@ -1,3 +1,5 @@
+import { ASK_THE_TEXT, NAMES_NO_SIDE, NAMES_RIGHT } from '../columns/side-in-bytes';
+import { TRAITS } from '../columns/traits';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch } from '../rule';
 import { FIRST_ROWS, Seen, counted, eachRow, inUnit } from '../watch';
@@ -26,12 +28,23 @@ function where(row: RowFacts): string {
 function watchSides(report: (seen: Seen, judged: number) => ReturnType<Watch['report']>): Watch {
   const seen = new Seen();
   let judged = 0;
+  const see = (row: RowFacts): void => {
+    const wrong = isWrong(row);
+    if (wrong === null) return;
+    judged += 1;
+    if (wrong) seen.add(row.component.item, where(row));
+  };
   return {
-    see: (row) => {
-      const wrong = isWrong(row);
-      if (wrong === null) return;
-      judged += 1;
-      if (wrong) seen.add(row.component.item, where(row));
+    see,
+    block: ({ rows, counted: isCounted, isMirrored, side, right, facts }) => {
+      for (let row = 0; row < rows.rows; row += 1) {
+        const told = side[row] ?? NAMES_NO_SIDE;
+        if (told === NAMES_NO_SIDE || isCounted[row] === 0 || isMirrored[row] === 1) continue;
+        const away = right[row] ?? NaN;
+        if (Math.abs(away) <= NEAR_PLANE) continue;
+        if (told !== ASK_THE_TEXT && away > 0 === (told === NAMES_RIGHT)) judged += 1;
+        else see(facts(row));
+      }
     },
     report: () => report(seen, judged),
   };
@@ -94,6 +107,14 @@ export const halfOnOtherSide: RowRule = {
         mass += row.totalMass;
         moment += row.totalMass * row.right;
       },
+      block: ({ rows, counted: isCounted, total, right }) => {
+        if (declarations.extent === 'whole') return;
+        for (let row = 0; row < rows.rows; row += 1) {
+          if (isCounted[row] === 0) continue;
+          mass += total[row] ?? NaN;
+          moment += (total[row] ?? NaN) * (right[row] ?? NaN);
+        }
+      },
       report: () => {
         const { extent, lengthUnit } = declarations;
         if (extent === 'whole' || mass <= 0) return null;
@@ -110,7 +131,7 @@ export const halfOnOtherSide: RowRule = {
 };
 
 /** A CG nearer to the plane than this, m, is on it. */
-const ON_PLANE = 5e-4;
+export const ON_PLANE = 5e-4;
 
 export const mirroredOnPlane: RowRule = {
   id: 'mirrored-on-plane',
@@ -127,5 +148,6 @@ export const mirroredOnPlane: RowRule = {
         ? `“${row.name}”, ${inUnit(row.component.mass, row.declarations.massUnit)}, counts twice on the plane of symmetry`
         : null,
     (count) => counted(count, 'row in the middle is mirrored', 'rows in the middle are mirrored'),
+    { traits: TRAITS.onPlane },
   ),
 };

@@ -1,5 +1,6 @@
 import { INERTIA_UNITS, type InertiaUnit } from '@/lib/units/table';
 
+import { TRAITS } from '../columns/traits';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type WatchedList } from '../rule';
 import { unitSlips } from '../unit-slips';
@@ -64,6 +65,7 @@ export const largerThanAircraft: RowRule = {
         'row has moments that no part of this aircraft can have',
         'rows have moments that no part of this aircraft can have',
       ),
+    { traits: TRAITS.reach },
   ),
 };
 
@@ -105,12 +107,13 @@ export const denserThanMetal: RowRule = {
         'row has moments smaller than a ball of the densest metal',
         'rows have moments smaller than a ball of the densest metal',
       ),
+    { traits: TRAITS.dense },
   ),
 };
 
-/** Moments that are at least this share of m r² about every axis, and at most `MOST` of it in sum, are those of a transfer. */
-const LEAST = 0.95;
-const MOST = 1.2;
+/** Moments that are at least this share of m r² about every axis, and at most `MOST_TRANSFER` of it in sum, are those of a transfer. */
+export const LEAST_TRANSFER = 0.95;
+export const MOST_TRANSFER = 1.2;
 
 export const momentsAboutDatum: RowRule = {
   id: 'moments-about-datum',
@@ -131,8 +134,8 @@ export const momentsAboutDatum: RowRule = {
       const { ixx, iyy, izz } = moments;
       const diagonal = [iyy + izz - ixx, ixx + izz - iyy, ixx + iyy - izz].map((twice) => twice / (2 * mass));
       const sum = diagonal.reduce((total, each) => total + each, 0);
-      if (square === 0 || sum < LEAST * square || sum > MOST * square) return null;
-      const holds = [x, y, z].every((along, k) => (diagonal[k] ?? NaN) >= LEAST * along * along);
+      if (square === 0 || sum < LEAST_TRANSFER * square || sum > MOST_TRANSFER * square) return null;
+      const holds = [x, y, z].every((along, k) => (diagonal[k] ?? NaN) >= LEAST_TRANSFER * along * along);
       if (!holds) return null;
       const { lengthUnit } = row.declarations;
       return (
@@ -146,5 +149,6 @@ export const momentsAboutDatum: RowRule = {
         'row states moments that look taken about the datum',
         'rows state moments that look taken about the datum',
       ),
+    { traits: TRAITS.transfer },
   ),
 };

@@ -1,5 +1,6 @@
 import { fromSi } from '@/lib/units/convert';
 
+import { TRAITS } from '../columns/traits';
 import { type RowFacts } from '../row-facts';
 import { type RowRule } from '../rule';
 import { FIRST_ROWS, counted, eachRow, shown } from '../watch';
@@ -27,6 +28,7 @@ export const impossibleTensor: RowRule = {
     (row) => (row.isCounted && row.ownCheck.verdict === 'impossible' ? leastMoment(row) : null),
     (count) =>
       counted(count, 'row states moments that no body can have', 'rows state moments that no body can have'),
+    { traits: TRAITS.tensor },
   ),
 };
 
@@ -46,6 +48,7 @@ export const tensorWithinRounding: RowRule = {
         'row states moments that are possible only within rounding',
         'rows state moments that are possible only within rounding',
       ),
+    { traits: TRAITS.tensor },
   ),
 };
 
@@ -85,5 +88,6 @@ export const productBounds: RowRule = {
         'row has a product larger than its moment allows',
         'rows have a product larger than its moment allows',
       ),
+    { traits: TRAITS.tensor },
   ),
 };

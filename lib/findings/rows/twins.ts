@@ -5,10 +5,16 @@ import { type Sym3, congruence, halfTraceMinus } from '@/lib/numerics/sym3';
 import { INERTIA_UNITS, MASS_UNITS } from '@/lib/units/table';
 
 import { BoundedMap, KEPT } from '../bounded-map';
+import { type CheckBlock } from '../columns/check-block';
+import { type KeptRow } from '../columns/kept-rows';
+import { NameIndex } from '../columns/name-index';
+import { addNameWithoutSide } from '../columns/name-without-side';
+import { ASK_THE_TEXT, NAMES_NO_SIDE } from '../columns/side-in-bytes';
+import { encoded } from '../columns/text-bytes';
 import { withoutSide } from '../named-side';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
-import { Book } from '../shared-books';
+import { BlockBook, Book } from '../shared-books';
 import { slipOfTwo, slipWords, slipsOfOneThing } from '../unit-slips';
 import { Seen, counted, inUnit } from '../watch';
 
@@ -54,6 +60,7 @@ interface Twins {
 }
 
 class TwinBook extends Book<Twins | null> {
+  readonly blocks = new TwinBlocks();
   readonly #numbers = new BoundedMap<Twin>();
   readonly #names = new BoundedMap<Twin>();
 
@@ -75,6 +82,85 @@ class TwinBook extends Book<Twins | null> {
   }
 }
 
+/** A twin that was kept as bytes and numbers. */
+function twinOfKept({ item, side, right, mass, moments, turn }: KeptRow): Twin {
+  const [ixx, iyy, izz, ixy, ixz, iyz] = moments;
+  const [yaw, pitch, roll] = turn;
+  return {
+    item,
+    side,
+    right,
+    mass,
+    own: { ixx, iyy, izz, ixy, ixz, iyz },
+    orientation: { yaw, pitch, roll },
+  };
+}
+
+/** The same of rows that come in blocks: `found` are those of the block at hand whose twin is not plainly like them. */
+class TwinBlocks extends BlockBook {
+  found: { readonly row: RowFacts; readonly twins: Twins }[] = [];
+  readonly #numbers = new NameIndex();
+  readonly #names = new NameIndex();
+
+  protected take(block: CheckBlock): void {
+    this.found = [];
+    const { rows, counted: isCounted, side, kept, facts } = block;
+    const { start, end } = rows.texts.part_number;
+    const { mass } = rows.numbers;
+    for (let row = 0; row < rows.rows; row += 1) {
+      if (isCounted[row] === 0 || mass[row] === 0) continue;
+      const hasNumber = start[row] !== end[row];
+      const told = side[row] === ASK_THE_TEXT ? facts(row).side !== null : side[row] !== NAMES_NO_SIDE;
+      let [byNumber, byName] = [-1, -1];
+      if (hasNumber) byNumber = this.#byNumber(block, row);
+      if (told) byName = this.#byName(block, row);
+      const isPlain =
+        (byNumber === -1 || isAlike(block, row, byNumber)) &&
+        (byName === -1 || (isAlike(block, row, byName) && !mayBeMirrored(block, row, byName)));
+      if (isPlain) continue;
+      const twin = (id: number): Twin | undefined => (id === -1 ? undefined : twinOfKept(kept.row(id)));
+      const twins = { now: twinOf(facts(row)), byNumber: twin(byNumber), byName: twin(byName) };
+      this.found.push({ row: facts(row), twins });
+    }
+  }
+
+  #byNumber(block: CheckBlock, row: number): number {
+    const key = this.#numbers.begin();
+    const { rows } = block;
+    const number = rows.textBytes('part_number', row);
+    const revision = rows.textBytes('part_revision', row);
+    // A NUL stands in no text.
+    key.bytes(number, 0, number.length).byte(0).bytes(revision, 0, revision.length);
+    return key.known(() => block.kept.keep(block, row));
+  }
+
+  #byName(block: CheckBlock, row: number): number {
+    const { rows } = block;
+    const key = this.#names.begin().number(rows.group[row] ?? 0);
+    if (!addNameWithoutSide(key, rows, row)) {
+      const name = encoded(withoutSide(block.facts(row).name));
+      key.bytes(name, 0, name.length);
+    }
+    return key.known(() => block.kept.keep(block, row));
+  }
+}
+
+const sumAt = ({ numbers: { ixx, iyy, izz } }: CheckBlock['rows'], row: number): number =>
+  (ixx[row] ?? NaN) + (iyy[row] ?? NaN) + (izz[row] ?? NaN);
+
+/** Whether mass and moments are so near to a kept row's that no factor of a unit lies between, nor anything else to speak of. */
+function isAlike({ rows, kept }: CheckBlock, row: number, id: number): boolean {
+  if (!(Math.abs((rows.numbers.mass[row] ?? NaN) / kept.mass(id) - 1) < AT_FACTOR)) return false;
+  const [sum, former] = [sumAt(rows, row), kept.moment(id, 0) + kept.moment(id, 1) + kept.moment(id, 2)];
+  return sum === 0 || former === 0 || Math.abs(sum / former - 1) < SAME_PART;
+}
+
+/** Whether a row and a kept one may be mirror images with products. */
+function mayBeMirrored({ rows, kept, right, side }: CheckBlock, row: number, id: number): boolean {
+  if (rows.hasMoments[row] === 0 || (right[row] ?? NaN) * kept.right(id) >= 0) return false;
+  return side[row] === ASK_THE_TEXT || kept.side(id) === ASK_THE_TEXT || side[row] !== kept.side(id);
+}
+
 /** Shows `judge` each counted row with mass together with the first of its part number, then with its twin by name. */
 function watchTwins(
   by: readonly ('byNumber' | 'byName')[],
@@ -85,16 +171,22 @@ function watchTwins(
     const seen = new Seen();
     const book = list.books.of(TwinBook);
     const judge = judgeOf(list);
+    const look = (row: RowFacts, twins: Twins): void => {
+      let what: string | null = null;
+      for (const kind of by) {
+        const before = twins[kind];
+        if (before !== undefined) what ??= judge(twins.now, before);
+      }
+      if (what !== null) seen.add(row.component.item, what);
+    };
     return {
       see: (row) => {
         const twins = book.enter(row);
-        if (twins === null) return;
-        let what: string | null = null;
-        for (const kind of by) {
-          const before = twins[kind];
-          if (before !== undefined) what ??= judge(twins.now, before);
-        }
-        if (what !== null) seen.add(row.component.item, what);
+        if (twins !== null) look(row, twins);
+      },
+      block: (block) => {
+        book.blocks.enter(block);
+        for (const { row, twins } of book.blocks.found) look(row, twins);
       },
       report: () => seen.report(headline),
     };

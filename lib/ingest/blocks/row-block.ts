@@ -91,6 +91,8 @@ export function blankValue(column: NumberColumn): number {
 export class RowBlock {
   /** Rows in use. */
   rows = 0;
+  /** False where the list has no column of parents. */
+  hasParents = true;
   /** Right rows of the list before this block. */
   first = 0;
   /** UTF-8; what the ranges of texts point into. */
@@ -194,6 +196,13 @@ export class RowBlock {
     if (to >= 0) return from === to ? null : decoder.decode(this.bytes.subarray(from, to));
     const text = fieldText(this.bytes, from, ~to).trim();
     return text === '' ? null : restoreFormula(text);
+  }
+
+  /** The same in UTF-8, empty where there is none; good as long as the block is. */
+  textBytes(column: TextColumn, row: number): Uint8Array {
+    const { start, end } = this.texts[column];
+    const [from, to] = [start[row] ?? 0, end[row] ?? 0];
+    return to >= 0 ? this.bytes.subarray(from, to) : encoder.encode(this.text(column, row) ?? '');
   }
 
   /** The row as an object. */

@@ -4,34 +4,27 @@ import { type Placement } from '@/lib/mass/place';
 import { type Subtotal, type SubtotalKey } from '@/lib/mass/subtotals';
 import { type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
 import { type AccountUncertainty, CERTAIN } from '@/lib/mass/uncertainty/sums';
-import { CompensatedSums, productError, sumError } from '@/lib/numerics/sums';
+import { sumError } from '@/lib/numerics/sums';
 
 import { RowAccounts } from './row-accounts';
 import { type RowColumns } from './row-columns';
-import { RowCovariances } from './row-covariances';
+import { RowCovariances, TRIANGLE } from './row-covariances';
+import { addAll, addAllTimes, addOne, addOneTimes, doubled } from './running-sums';
 
 const TEN = 10;
-/** Three accounts, each ten sums and what was lost of them; then three pairs of masses, all and with a σ, with what was lost. */
+/** An account's ten sums and what was lost of them; the same of the mass, and of the mass with a σ. */
+const PART = 2 * TEN + 4;
+const MASS = 2 * TEN;
+const MASS_WITH_SIGMA = MASS + 2;
+/** The parts of an entry. */
 const BASIC = 0;
-const STATED = 2 * TEN;
-const UNSTATED = 4 * TEN;
-const MASSES = 6 * TEN;
-const STRIDE = MASSES + 12;
+const STATED = 1;
+const UNSTATED = 2;
+const PARTS = 3;
+/** Counts of an entry: rows, pieces, memo rows. */
+const COUNTS = 3;
 
 const KEYS = CATEGORIES.length * (MATURITIES.length + 1) * CHANGE_STATUSES.length;
-
-/** Covariances of a subtotal of which some row states a σ. */
-interface Covariances {
-  readonly basic: CompensatedSums;
-  readonly stated: CompensatedSums;
-  readonly unstated: CompensatedSums;
-}
-
-const newCovariances = (): Covariances => ({
-  basic: new CompensatedSums(CERTAIN.covariance.length),
-  stated: new CompensatedSums(CERTAIN.covariance.length),
-  unstated: new CompensatedSums(CERTAIN.covariance.length),
-});
 
 /**
  * `SubtotalBook` and `UncertaintyBook` in one for rows that come by column: the same sums in the same order, so the same bits. Like
@@ -43,10 +36,12 @@ export class ColumnBook {
   readonly #keys: SubtotalKey[] = [];
   /** By group, then by the other parts of the key: number of the entry + 1. */
   readonly #entries: Uint32Array[] = [];
-  #sums = new Float64Array(16 * STRIDE);
-  /** Rows, pieces, memo rows of each entry. */
-  #counts = new Float64Array(16 * 3);
-  readonly #byEntry: (Covariances | undefined)[] = [];
+  #sums = new Float64Array(16 * PARTS * PART);
+  #counts = new Float64Array(16 * COUNTS);
+  /** Covariances by part, their sums and what was lost of them, where some row states a σ. */
+  readonly #triangles: (Float64Array | undefined)[] = [];
+  /** Whether a row of the entry stated growth. Until one does, basic is unstated, and only that is kept. */
+  readonly #isSplit: boolean[] = [];
 
   constructor(readonly placement: Placement) {
     this.#accounts = new RowAccounts(placement);
@@ -55,26 +50,27 @@ export class ColumnBook {
 
   add(rows: RowColumns): void {
     const accounts = this.#accounts;
+    const { growth, quantity } = rows.numbers;
     for (let row = 0; row < rows.rows; row += 1) {
       const entry = this.#entryOf(rows, row);
       const counts = this.#counts;
+      const count = entry * COUNTS;
       if (rows.memo[row] === 1) {
-        counts[3 * entry + 2] = (counts[3 * entry + 2] ?? NaN) + 1;
+        counts[count + 2] = (counts[count + 2] ?? NaN) + 1;
         continue;
       }
-      const pieces = (rows.numbers.quantity[row] ?? NaN) * (accounts.isMirrored(rows, row) ? 2 : 1);
-      counts[3 * entry] = (counts[3 * entry] ?? NaN) + 1;
-      counts[3 * entry + 1] = (counts[3 * entry + 1] ?? NaN) + pieces;
+      const pieces = (quantity[row] ?? NaN) * (accounts.isMirrored(rows, row) ? 2 : 1);
+      counts[count] = (counts[count] ?? NaN) + 1;
+      counts[count + 1] = (counts[count + 1] ?? NaN) + pieces;
       accounts.take(rows, row);
-      const growth = rows.numbers.growth[row] ?? NaN;
-      const isStated = !Number.isNaN(growth);
-      const factor = isStated ? 1 + growth : 1;
-      const at = entry * STRIDE;
-      const { numbers, rest } = accounts;
-      addTen(this.#sums, at + BASIC, numbers, rest);
-      if (!isStated) addTen(this.#sums, at + UNSTATED, numbers, rest);
-      else addTenTimes(this.#sums, at + STATED, factor, numbers, rest);
-      this.#addMasses(rows, row, entry, pieces, isStated, factor);
+      const stated = growth[row] ?? NaN;
+      const factor = 1 + stated;
+      const isStated = !Number.isNaN(stated);
+      if (isStated && this.#isSplit[entry] === false) this.#split(entry);
+      if (isStated) this.#addTo(entry, STATED, factor, rows, row, pieces);
+      else this.#addTo(entry, UNSTATED, 1, rows, row, pieces);
+      if (this.#isSplit[entry] === true) this.#addTo(entry, BASIC, 1, rows, row, pieces);
+      if (rows.hasSigma[row] === 1) this.#addTriangle(entry, isStated ? factor : null, rows, row);
     }
   }
 
@@ -82,10 +78,10 @@ export class ColumnBook {
   subtotals(): Subtotal[] {
     return this.#keys.map((key, entry) => ({
       ...key,
-      rows: this.#counts[3 * entry] ?? NaN,
-      pieces: this.#counts[3 * entry + 1] ?? NaN,
-      memoRows: this.#counts[3 * entry + 2] ?? NaN,
-      basic: this.#account(entry, BASIC),
+      rows: this.#counts[entry * COUNTS] ?? NaN,
+      pieces: this.#counts[entry * COUNTS + 1] ?? NaN,
+      memoRows: this.#counts[entry * COUNTS + 2] ?? NaN,
+      basic: this.#account(entry, this.#basicOf(entry)),
       statedPredicted: this.#account(entry, STATED),
       unstatedBasic: this.#account(entry, UNSTATED),
     }));
@@ -93,79 +89,84 @@ export class ColumnBook {
 
   /** In the order of `subtotals`. */
   uncertainties(): UncertaintySubtotal[] {
-    return this.#keys.map((key, entry) => {
-      const covariances = this.#byEntry[entry];
-      return {
-        ...key,
-        basic: this.#uncertainty(entry, 0, covariances?.basic),
-        statedPredicted: this.#uncertainty(entry, 1, covariances?.stated),
-        unstatedBasic: this.#uncertainty(entry, 2, covariances?.unstated),
-      };
-    });
+    return this.#keys.map((key, entry) => ({
+      ...key,
+      basic: this.#uncertainty(entry, this.#basicOf(entry)),
+      statedPredicted: this.#uncertainty(entry, STATED),
+      unstatedBasic: this.#uncertainty(entry, UNSTATED),
+    }));
+  }
+
+  #basicOf(entry: number): number {
+    return this.#isSplit[entry] === true ? BASIC : UNSTATED;
   }
 
   #account(entry: number, part: number): Subtotal['basic'] {
-    const from = entry * STRIDE + part;
+    const from = (entry * PARTS + part) * PART;
     const sums = this.#sums.subarray(from, from + TEN);
     const lost = this.#sums.subarray(from + TEN, from + 2 * TEN);
-    const values = Array.from(sums, (sum, i) => sum + (lost[i] ?? NaN));
+    const values = valuesOf(sums, lost);
     const rests = Array.from(sums, (sum, i) => sumError(sum, lost[i] ?? NaN, values[i] ?? NaN));
     return fromNumbers([...values, ...rests]);
   }
 
-  #uncertainty(entry: number, part: number, covariance: CompensatedSums | undefined): AccountUncertainty {
-    const from = entry * STRIDE + MASSES + 4 * part;
-    const [mass = NaN, lost = NaN, withSigma = NaN, withSigmaLost = NaN] = this.#sums.subarray(
-      from,
-      from + 4,
-    );
+  #uncertainty(entry: number, part: number): AccountUncertainty {
+    const from = (entry * PARTS + part) * PART;
+    const at = (k: number): number => this.#sums[from + k] ?? NaN;
+    const triangle = this.#triangles[entry * PARTS + part];
     return {
-      mass: mass + lost,
-      massWithSigma: withSigma + withSigmaLost,
-      covariance: covariance?.values ?? CERTAIN.covariance,
+      mass: at(MASS) + at(MASS + 1),
+      massWithSigma: at(MASS_WITH_SIGMA) + at(MASS_WITH_SIGMA + 1),
+      covariance:
+        triangle === undefined
+          ? CERTAIN.covariance
+          : valuesOf(triangle.subarray(0, TRIANGLE), triangle.subarray(TRIANGLE)),
     };
   }
 
-  #addMasses(
-    rows: RowColumns,
-    row: number,
-    entry: number,
-    pieces: number,
-    isStated: boolean,
-    factor: number,
-  ): void {
-    const { numbers } = rows;
+  /** Adds k times the row at hand to a part, but for its covariance. */
+  #addTo(entry: number, part: number, k: number, rows: RowColumns, row: number, pieces: number): void {
     const sums = this.#sums;
-    const mass = Math.abs(numbers.mass[row] ?? NaN) * pieces;
-    const at = entry * STRIDE + MASSES;
-    const part = at + (isStated ? 4 : 8);
+    const at = (entry * PARTS + part) * PART;
+    const { numbers, rest } = this.#accounts;
+    if (k === 1) addAll(sums, at, TEN, numbers, rest);
+    else addAllTimes(sums, at, TEN, k, numbers, rest);
+    const mass = Math.abs(rows.numbers.mass[row] ?? NaN) * pieces;
     if (rows.hasSigma[row] === 0) {
-      addTo(sums, at, mass, 0);
-      addTo(sums, part, Math.abs(factor * mass), 0);
+      addOne(sums, at + MASS, Math.abs(k * mass));
       return;
     }
-    const massWithSigma = Number.isNaN(numbers.mass_sigma[row]) ? 0 : mass;
-    addTo(sums, at, mass, 0);
-    addTo(sums, at + 2, massWithSigma, 0);
-    const size = Math.abs(factor);
-    const errorOf = (value: number): number => (size === 1 ? 0 : productError(size, value, size * value));
-    addTo(sums, part, size * mass, errorOf(mass));
-    addTo(sums, part + 2, size * massWithSigma, errorOf(massWithSigma));
+    addOneTimes(sums, at + MASS, Math.abs(k), mass);
+    if (!Number.isNaN(rows.numbers.mass_sigma[row]))
+      addOneTimes(sums, at + MASS_WITH_SIGMA, Math.abs(k), mass);
+  }
+
+  #addTriangle(entry: number, stated: number | null, rows: RowColumns, row: number): void {
     this.#covariances.take(rows, row);
     const { triangle } = this.#covariances;
-    const covariances = (this.#byEntry[entry] ??= newCovariances());
-    covariances.basic.add(triangle);
-    if (isStated) covariances.stated.add(triangle, factor * factor);
-    else covariances.unstated.add(triangle);
+    if (stated === null) addAll(this.#triangle(entry, UNSTATED), 0, TRIANGLE, triangle, null);
+    else addAllTimes(this.#triangle(entry, STATED), 0, TRIANGLE, stated * stated, triangle, null);
+    if (this.#isSplit[entry] === true) addAll(this.#triangle(entry, BASIC), 0, TRIANGLE, triangle, null);
+  }
+
+  #triangle(entry: number, part: number): Float64Array {
+    return (this.#triangles[entry * PARTS + part] ??= new Float64Array(2 * TRIANGLE));
+  }
+
+  /** Keeps basic apart from unstated from now on. */
+  #split(entry: number): void {
+    const from = entry * PARTS * PART;
+    const unstated = from + UNSTATED * PART;
+    this.#sums.copyWithin(from + BASIC * PART, unstated, unstated + PART);
+    this.#triangles[entry * PARTS + BASIC] = this.#triangles[entry * PARTS + UNSTATED]?.slice();
+    this.#isSplit[entry] = true;
   }
 
   #entryOf(rows: RowColumns, row: number): number {
     const group = rows.group[row] ?? 0;
-    const [category, maturity, status] = [
-      rows.category[row] ?? 0,
-      rows.maturity[row] ?? 0,
-      rows.status[row] ?? 0,
-    ];
+    const category = rows.category[row] ?? 0;
+    const maturity = rows.maturity[row] ?? 0;
+    const status = rows.status[row] ?? 0;
     const key = (category * (MATURITIES.length + 1) + maturity) * CHANGE_STATUSES.length + status;
     const entries = (this.#entries[group] ??= new Uint32Array(KEYS));
     const known = entries[key] ?? 0;
@@ -176,8 +177,9 @@ export class ColumnBook {
       maturity: MATURITIES[maturity] ?? null,
       status: CHANGE_STATUSES[status] ?? 'approved',
     });
+    this.#isSplit.push(false);
     entries[key] = this.#keys.length;
-    if (this.#keys.length * STRIDE > this.#sums.length) {
+    if (this.#keys.length * PARTS * PART > this.#sums.length) {
       this.#sums = doubled(this.#sums);
       this.#counts = doubled(this.#counts);
     }
@@ -185,50 +187,6 @@ export class ColumnBook {
   }
 }
 
-/** Adds a term, of which `error` was rounded away, to a compensated sum (Neumaier 1974); what is lost stands behind the sum. */
-function addTo(sums: Float64Array, at: number, term: number, error: number): void {
-  const before = sums[at] ?? NaN;
-  const sum = before + term;
-  sums[at + 1] = (sums[at + 1] ?? NaN) + (sumError(before, term, sum) + error);
-  sums[at] = sum;
-}
-
-/** `CompensatedSums.add` of ten sums at `at`, what was lost of them behind. */
-function addTen(sums: Float64Array, at: number, numbers: Float64Array, rest: Float64Array): void {
-  for (let i = 0; i < TEN; i += 1) {
-    const before = sums[at + i] ?? NaN;
-    const term = numbers[i] ?? NaN;
-    const sum = before + term;
-    sums[at + TEN + i] = (sums[at + TEN + i] ?? NaN) + (sumError(before, term, sum) + (rest[i] ?? NaN));
-    sums[at + i] = sum;
-  }
-}
-
-/** The same of k times the numbers. */
-function addTenTimes(
-  sums: Float64Array,
-  at: number,
-  k: number,
-  numbers: Float64Array,
-  rest: Float64Array,
-): void {
-  if (k === 1) {
-    addTen(sums, at, numbers, rest);
-    return;
-  }
-  for (let i = 0; i < TEN; i += 1) {
-    const before = sums[at + i] ?? NaN;
-    const number = numbers[i] ?? NaN;
-    const term = k * number;
-    const sum = before + term;
-    const error = sumError(before, term, sum) + productError(k, number, term) + k * (rest[i] ?? NaN);
-    sums[at + TEN + i] = (sums[at + TEN + i] ?? NaN) + error;
-    sums[at + i] = sum;
-  }
-}
-
-function doubled(array: Float64Array<ArrayBuffer>): Float64Array<ArrayBuffer> {
-  const larger = new Float64Array(2 * array.length);
-  larger.set(array);
-  return larger;
+function valuesOf(sums: Float64Array, lost: Float64Array): number[] {
+  return Array.from(sums, (sum, i) => sum + (lost[i] ?? NaN));
 }
