@@ -101,10 +101,8 @@ export class RevisionWriter {
 
   /** Instead of `add` for every row: the right rows of a block, which may be used again when the promise, if any, is kept. */
   addBlock(block: RowBlock): Promise<void> | undefined {
-    for (let row = 0; row < block.rows; row += 1) {
-      this.store.block.addFrom(block, row);
-      this.#rules.see(block.component(row));
-    }
+    for (let row = 0; row < block.rows; row += 1) this.store.block.addFrom(block, row);
+    this.#rules.seeBlock(block);
     this.#columns ??= new ColumnBook(this.#book.placement);
     this.#columns.add(block);
     return this.store.took();

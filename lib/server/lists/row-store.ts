@@ -112,8 +112,10 @@ export class RowStore {
     this.#hash.update(block.written);
     this.#rows += block.starts.length;
     if (this.#plan === null) {
-      for (const [k, start] of block.starts.entries()) {
-        this.#identify(start, block.starts[k + 1] ?? block.end);
+      const { starts } = block;
+      for (let k = 0; k < starts.length; k += 1) {
+        const start = starts[k] ?? 0;
+        this.#identify(start, starts[k + 1] ?? block.end);
         this.#place(block, start, SPACING * (this.#lastRow - this.list.lastRow + 1));
       }
       await this.#send(block.take(2 * BLOCK));
@@ -126,8 +128,10 @@ export class RowStore {
 
   #compare(plan: RowPlan): void {
     const { block } = this;
-    for (const [k, start] of block.starts.entries()) {
-      const end = block.starts[k + 1] ?? block.end;
+    const { starts } = block;
+    for (let k = 0; k < starts.length; k += 1) {
+      const start = starts[k] ?? 0;
+      const end = starts[k + 1] ?? block.end;
       this.#identify(start, end);
       const index = this.former?.find(this.#print) ?? -1;
       if (index >= 0) plan.known(index);
