@@ -14,6 +14,10 @@ import { submitConfiguration } from '@/lib/server/baselines/submit-configuration
 import { withdrawBaseline } from '@/lib/server/baselines/withdraw-baseline';
 import { NO_POSE } from '@/lib/frames/pose';
 import { chooseFrame } from '@/lib/server/configurations/choose-frame';
+import { limitsOf } from '@/db/queries/settings';
+import { changeGroups } from '@/lib/server/programs/change-groups';
+import { removeAllowance, setAllowance } from '@/lib/server/programs/set-allowance';
+import { removeLimit, stateLimit } from '@/lib/server/programs/set-limit';
 import { createConfiguration } from '@/lib/server/configurations/create-configuration';
 import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
 import { rollUpConfiguration } from '@/lib/server/configurations/roll-up-configuration';
@@ -183,6 +187,54 @@ const STEPS: Readonly<Record<string, (db: Db) => Promise<unknown>>> = {
     }),
   'put a configuration into another frame issue': async (db) =>
     chooseFrame(db, { ...(await change('three')), frameIssue: 2 }),
+  'state a limit': (db) =>
+    stateLimit(db, {
+      person: test.crew.chief,
+      programId: test.program.id,
+      id: null,
+      limit: {
+        kind: 'target',
+        quantity: 'mass',
+        sense: 'at-most',
+        value: 9000,
+        group: '',
+        condition: null,
+        source: 'a plan',
+        sourceDate: '2026-01-05',
+        from: '2026-01-05',
+        until: null,
+      },
+    }),
+  'remove a limit': async (db) => {
+    const [limit] = await limitsOf(test.db, test.program.id);
+    return removeLimit(db, { person: test.crew.chief, programId: test.program.id, id: limit?.id ?? '' });
+  },
+  'set an allowance': (db) =>
+    setAllowance(db, {
+      person: test.crew.chief,
+      programId: test.program.id,
+      group: 'Wing',
+      maturity: 'E',
+      fraction: 0.1,
+      source: 'a plan',
+    }),
+  'remove an allowance': (db) =>
+    removeAllowance(db, {
+      person: test.crew.chief,
+      programId: test.program.id,
+      group: 'Wing',
+      maturity: 'E',
+    }),
+  'change the group breakdown': (db) =>
+    changeGroups(db, {
+      person: test.crew.weights,
+      programId: test.program.id,
+      changes: [
+        { kind: 'added', path: 'Wing', to: null, code: '10' },
+        { kind: 'added', path: 'Ungrouped', to: null, code: null },
+        { kind: 'moved', path: 'Wing', to: 'Mainplane', code: null },
+      ],
+    }),
   submit: (db) => submit(db, 'three'),
   sign: (db) => signSubmission(db, { person: test.crew.chief, program: test.program, submissionId }),
   return: (db) =>
@@ -204,6 +256,9 @@ async function everything(): Promise<string> {
     'decisions',
     'frame_issues',
     'frame_steps',
+    'group_changes',
+    'growth_allowances',
+    'limits',
     'lists',
     'reference_points',
     'roll_ups',
@@ -247,7 +302,7 @@ describe.each(Object.keys(STEPS))('to %s', (name) => {
       .where('scope', '=', test.program.id)
       .limit(1)
       .executeTakeFirstOrThrow();
-    expect(last.kind).toMatch(/^(configuration|frame|list|rotors|baseline)\./);
+    expect(last.kind).toMatch(/^(configuration|frame|list|rotors|baseline|limit|allowance|groups)\./);
     if (name === 'sign') submissionId = await waitingSubmission();
   });
 });
