@@ -5,6 +5,7 @@ import { InertiaSymbol } from '@/components/mass/tensor-plate';
 import { PRODUCT_ORDER } from '@/components/mass/tensor-text';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { type Change, type ConditionChange, type PointChange } from '@/lib/baselines/compare';
+import { INCLINATION_SENSES } from '@/lib/mass/inclination';
 import { degrees, fromSi } from '@/lib/units/convert';
 import { type OutputUnits, unitLabel } from '@/lib/units/names';
 
@@ -62,7 +63,7 @@ export function ChangeTable({ change, units, before, after }: ChangeTableProps) 
       name: 'Principal axis',
       unit: 'degrees',
       change: converted(change.inclination, degrees),
-      signs: ['nose up', 'nose down'],
+      signs: INCLINATION_SENSES,
     },
   ];
   return (

@@ -3,9 +3,7 @@ import { CgTable } from '@/components/mass/cg-table';
 import { MassFigure } from '@/components/mass/mass-figure';
 import { Num } from '@/components/mass/num';
 import { TwoTensors } from '@/components/mass/two-tensors';
-import { inclinationWords } from '@/components/baselines/inclination-words';
 import { type Moments } from '@/lib/frames/products';
-import { principalInclination } from '@/lib/mass/inclination';
 import { type Vec3 } from '@/lib/numerics/vec3';
 import { type OutputUnits } from '@/lib/units/names';
 
@@ -102,14 +100,6 @@ export function ConditionSheet({ condition, limits, axes, units }: ConditionShee
             sigma={{ basic: sigma, predicted: sigma?.predicted ?? null }}
             unit={units.inertia}
           />
-          <p>
-            The principal axis nearest x is inclined by{' '}
-            {inclinationWords(principalInclination(properties.principal))}
-            {predicted === null ? null : (
-              <>, predicted by {inclinationWords(principalInclination(predicted.principal))}</>
-            )}
-            .
-          </p>
         </>
       )}
     </div>

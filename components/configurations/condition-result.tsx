@@ -9,13 +9,12 @@ import { MassMargin } from '@/components/configurations/mass-margin';
 import { Banner } from '@/components/ui/banner';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
-import { principalInclination } from '@/lib/mass/inclination';
 import { type MassProperties } from '@/lib/mass/result';
 import { type RollUp } from '@/lib/mass/roll-up';
 import { radiiSigma } from '@/lib/mass/uncertainty/derived';
 import { type MassUncertainty, type PropertiesUncertainty } from '@/lib/mass/uncertainty/uncertainty-of';
 import { type Vec3 } from '@/lib/numerics/vec3';
-import { degrees, fromSi } from '@/lib/units/convert';
+import { fromSi } from '@/lib/units/convert';
 import { type OutputUnits } from '@/lib/units/names';
 
 export interface ProgramLimits {
@@ -89,16 +88,6 @@ export function ConditionResultView({ rollUp, uncertainty, geometry, limits, uni
             unit={units.inertia}
           />
           <SigmaNote share={uncertainty.basic.massShare} />
-          <p className="text-ink-2">
-            <Inclination
-              angle={degrees(principalInclination(properties.principal))}
-              predicted={
-                predicted.properties === null
-                  ? null
-                  : degrees(principalInclination(predicted.properties.principal))
-              }
-            />
-          </p>
           <RadiiTable
             basic={properties}
             predicted={predicted.properties}
@@ -183,22 +172,5 @@ function RadiiTable({ basic, predicted, sigma, units }: TwoResults) {
         ))}
       </tbody>
     </Table>
-  );
-}
-
-/** The trade's inclination of the principal axis, its sense in words. */
-function Inclination({ angle, predicted }: { readonly angle: number; readonly predicted: number | null }) {
-  return (
-    <>
-      Inclination of the principal x axis: <Num value={Math.abs(angle)} decimals={3} />°{' '}
-      {angle === 0 ? 'from body x' : angle > 0 ? 'above body x, nose up' : 'below body x, nose down'}, in the
-      plane of symmetry
-      {predicted === null ? null : (
-        <>
-          ; predicted <Num value={Math.abs(predicted)} decimals={3} />° {predicted < 0 ? 'below' : 'above'}
-        </>
-      )}
-      .
-    </>
   );
 }

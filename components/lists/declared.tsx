@@ -12,7 +12,14 @@ import { DefinitionList } from '@/components/ui/definition-list';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 
 /** What a list declares once for all its rows. */
-export function Declared({ declarations }: { readonly declarations: ListDeclarations }) {
+export function Declared({
+  declarations,
+  issue,
+}: {
+  readonly declarations: ListDeclarations;
+  /** The frame issue that places are stated in. */
+  readonly issue: { readonly number: number; readonly title: string };
+}) {
   const { products, kind, extent, uncertainty, marking, axes } = declarations;
   return (
     <DefinitionList
@@ -29,6 +36,7 @@ export function Declared({ declarations }: { readonly declarations: ListDeclarat
         },
         { term: 'Axes', value: axesWords(axes) },
         { term: 'Frame', value: poseWords(declarations) },
+        { term: 'Frame issue', value: `${issue.number}: ${issue.title}` },
         { term: 'Kind', value: KIND_WORDS[kind] },
         { term: 'Extent', value: EXTENT_WORDS[extent] },
         { term: 'Sigma columns', value: UNCERTAINTY_WORDS[uncertainty] },

@@ -1,8 +1,10 @@
 'use client';
 
-import { useActionState } from 'react';
+import { type ReactNode, useActionState, useState } from 'react';
+import { textsIn } from '@/components/forms/texts-in';
 import { FormAnswer } from '@/components/forms/form-answer';
 import { AxesFields } from '@/components/lists/axes-fields';
+import { type SketchFrame, type TypedExample, TypedListSketch } from '@/components/lists/list-sketch';
 import { EXTENT_WORDS, KIND_WORDS, PRODUCT_MEANING, UNCERTAINTY_WORDS } from '@/components/lists/list-words';
 import { Actions } from '@/components/ui/actions';
 import { ButtonLink } from '@/components/ui/button';
@@ -23,15 +25,21 @@ interface ListFormProps {
   readonly list: string | null;
   readonly values: Readonly<Record<string, string>>;
   readonly cancelHref: string;
+  /** The program's frame issues, newest first; the values name one as `frame_issue`. */
+  readonly issues: readonly (SketchFrame & { readonly number: number; readonly title: string })[];
+  /** A component of the list as it is; null for a new one. */
+  readonly example: TypedExample | null;
 }
 
 /** Declares a list: what its figures mean, said once for all its rows. */
-export function ListForm({ action, program, list, values, cancelHref }: ListFormProps) {
+export function ListForm({ action, program, list, values, cancelHref, issues, example }: ListFormProps) {
   const [state, send] = useActionState(action, IDLE);
   const filled = { ...values, ...state.values };
   const field = (name: string) => ({ name, defaultValue: filled[name], error: state.errors[name] });
+  const [texts, setTexts] = useState<Readonly<Record<string, string>>>(filled);
+  const issue = issues.find(({ number }) => String(number) === texts['frame_issue']) ?? issues[0];
   return (
-    <form action={send}>
+    <form action={send} onChange={(event) => setTexts(textsIn(event.currentTarget))}>
       <FormGrid>
         <FormAnswer state={state} />
         <input type="hidden" name="program" value={program} />
@@ -73,7 +81,20 @@ export function ListForm({ action, program, list, values, cancelHref }: ListForm
           }))}
         />
         <AxesFields values={filled} error={state.errors['axis_x']} />
-        <Frame field={field} />
+        <Frame field={field}>
+          {issues.length < 2 ? null : (
+            <SelectField
+              {...field('frame_issue')}
+              label="Frame issue"
+              hint="Coming files state their places in it. What is stated already stays in the issue that it was read in."
+              options={issues.map(({ number, title }, index) => ({
+                value: String(number),
+                label: `${number}: ${title}${index === 0 ? ', in force' : ''}`,
+              }))}
+            />
+          )}
+        </Frame>
+        {issue === undefined ? null : <TypedListSketch texts={texts} frame={issue} example={example} />}
         <RadioGroup
           {...field('extent')}
           label="Extent"
@@ -147,7 +168,7 @@ function Units({ field }: PartProps) {
   );
 }
 
-function Frame({ field }: PartProps) {
+function Frame({ field, children }: PartProps & { readonly children: ReactNode }) {
   const row = (names: readonly string[], unit: string) => (
     <div className="grid grid-cols-3 items-start gap-4">
       {names.map((name) => (
@@ -174,6 +195,7 @@ function Frame({ field }: PartProps) {
       </p>
       {row(['origin_x', 'origin_y', 'origin_z'], '')}
       {row(['yaw', 'pitch', 'roll'], 'deg')}
+      {children}
     </fieldset>
   );
 }

@@ -1,3 +1,4 @@
+import { PrincipalNotes } from '@/components/mass/principal-notes';
 import { PrincipalTable } from '@/components/mass/principal-table';
 import { TensorPlate } from '@/components/mass/tensor-plate';
 import { type Moments } from '@/lib/frames/products';
@@ -51,6 +52,9 @@ export function TwoTensors({ basic, predicted, sigma, unit }: TwoTensorsProps) {
           />
         </div>
       ))}
+      <div className="col-span-full">
+        <PrincipalNotes basic={basic.principal} predicted={predicted?.principal ?? null} />
+      </div>
     </div>
   );
 }

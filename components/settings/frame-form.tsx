@@ -1,8 +1,10 @@
 'use client';
 
 import { useActionState, useState } from 'react';
+import { textsIn } from '@/components/forms/texts-in';
 import { FormAnswer } from '@/components/forms/form-answer';
 import { AxesSketch } from '@/components/settings/axes-sketch';
+import { FormerFields, type FormerFrame } from '@/components/settings/former-fields';
 import { Actions } from '@/components/ui/actions';
 import { Checkbox } from '@/components/ui/choice';
 import { FieldRow, FormGrid } from '@/components/ui/form-grid';
@@ -23,15 +25,18 @@ export interface FrameFormProps {
   readonly axes: AxisTriple;
   /** Field name -> text, from the newest issue. */
   readonly present: Readonly<Record<string, string>>;
+  /** The issue before; null for the first. */
+  readonly former: FormerFrame | null;
 }
 
 const OPTIONS = DIRECTIONS.map((direction) => ({ value: direction, label: direction }));
 const isDirection = (text: string): text is Direction => DIRECTIONS.some((direction) => direction === text);
 
 /** Issues the airframe frame: axes, mean chord, extent, and the point about which sums are kept. */
-export function FrameForm({ action, program, base, unit, axes: first, present }: FrameFormProps) {
+export function FrameForm({ action, program, base, unit, axes: first, present, former }: FrameFormProps) {
   const [state, send] = useActionState(action, IDLE);
   const [axes, setAxes] = useState<AxisTriple>(base === 0 ? USUAL_AXES : first);
+  const [texts, setTexts] = useState<Readonly<Record<string, string>>>(present);
   const problem = axesProblem(axes);
   const field = (name: string) => ({
     name,
@@ -47,7 +52,7 @@ export function FrameForm({ action, program, base, unit, axes: first, present }:
     if (x && y && z) setAxes([x, y, z]);
   };
   return (
-    <form action={send}>
+    <form action={send} onChange={(event) => setTexts(textsIn(event.currentTarget))}>
       <FormGrid>
         <FormAnswer state={state} />
         <input type="hidden" name="program" value={program} />
@@ -73,6 +78,9 @@ export function FrameForm({ action, program, base, unit, axes: first, present }:
           ))}
         </FieldRow>
         {problem === null ? <AxesSketch axes={axes} /> : null}
+        {former === null ? null : (
+          <FormerFields {...{ former, unit, field, texts }} axes={problem === null ? axes : null} />
+        )}
         <fieldset className="grid gap-4">
           <legend className="mb-1 text-lead font-semibold">Mean aerodynamic chord and extent</legend>
           <FieldRow>
@@ -125,9 +133,9 @@ export function FrameForm({ action, program, base, unit, axes: first, present }:
         {base > 0 ? (
           <Checkbox
             name="carry_points"
-            defaultChecked={state.status === 'failed' ? state.values['carry_points'] === 'on' : false}
-            label={`Take the reference points of issue ${base} over as they stand`}
-            hint="Only when neither the datum nor the axes have changed."
+            defaultChecked={state.status === 'failed' ? state.values['carry_points'] === 'on' : true}
+            label={`Take the reference points of issue ${base} over`}
+            hint="The same points of the aircraft: their places are converted."
           />
         ) : null}
         <TextArea

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { axesProblem } from '@/lib/frames/axes';
 import { codeSchema, reasonSchema, titleSchema } from './codes';
-import { wholeField } from './form-fields';
+import { blankOr, wholeField } from './form-fields';
 import { type ListDeclarationsBody, listDeclarationsSchema } from './list-declarations';
 
 /** Which old revision is brought back, over which newest one, and why. */
@@ -58,6 +58,8 @@ const fields = {
   yaw: typedNumber,
   pitch: typedNumber,
   roll: typedNumber,
+  /** Number of the frame issue that coming files are stated in; left out, as it was. */
+  frame_issue: blankOr(wholeField(1)),
   kind: z.string(),
   extent: z.string(),
   uncertainty: z.string(),
@@ -98,12 +100,14 @@ function toDeclarations(typed: Typed, context: z.RefinementCtx): ListDeclaration
 export const newListSchema = z.object({ code: codeSchema, ...fields }).transform((typed, context) => ({
   code: typed.code,
   title: typed.title,
+  ...(typed.frame_issue === null ? {} : { frameIssue: typed.frame_issue }),
   declarations: toDeclarations(typed, context),
 }));
 
 export const changeListSchema = z.object({ list: z.string(), ...fields }).transform((typed, context) => ({
   list: typed.list,
   title: typed.title,
+  ...(typed.frame_issue === null ? {} : { frameIssue: typed.frame_issue }),
   declarations: toDeclarations(typed, context),
 }));
 
@@ -132,3 +136,12 @@ export function listFormValues(title: string, body: ListDeclarationsBody): Reado
     marking: body.marking ?? '',
   };
 }
+
+/** Carries a list to another frame issue. */
+export const carrySchema = z.object({
+  list: codeSchema,
+  /** The newest revision that the person saw; 0 before the first. */
+  newest: wholeField(0),
+  frame_issue: wholeField(1),
+  reason: reasonSchema,
+});

@@ -12,10 +12,13 @@ export function principalInclination({ axes }: Principal): number {
   return Math.atan2(0 - z, x);
 }
 
+/** What a positive and a negative inclination are called. */
+export const INCLINATION_SENSES = ['nose up', 'nose down'] as const;
+
 /** The sign of an inclination in words; null where there is none. */
-export function inclinationSense(angle: number): 'nose up' | 'nose down' | null {
+export function inclinationSense(angle: number): (typeof INCLINATION_SENSES)[number] | null {
   if (angle === 0) return null;
-  return angle > 0 ? 'nose up' : 'nose down';
+  return angle > 0 ? INCLINATION_SENSES[0] : INCLINATION_SENSES[1];
 }
 
 type BodyAxis = 'x' | 'y' | 'z';

@@ -124,6 +124,7 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/programs/[program]/lists/actions.ts': {
     addListAction: 'program lists.keep',
     declareListAction: 'program lists.keep',
+    carryListAction: 'program lists.keep',
     restoreRevisionAction: 'program lists.keep',
   },
   'app/(workspace)/programs/[program]/lists/new/page.tsx': { page: 'program lists.keep' },

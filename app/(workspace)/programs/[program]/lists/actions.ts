@@ -2,9 +2,10 @@
 
 import { redirect } from 'next/navigation';
 import { declarationsFromBody } from '@/lib/contracts/list-declarations';
-import { changeListSchema, newListSchema, restoreSchema } from '@/lib/contracts/list-form';
+import { carrySchema, changeListSchema, newListSchema, restoreSchema } from '@/lib/contracts/list-form';
 import { serverDb, writerPool } from '@/lib/server/database';
 import { programAction } from '@/lib/server/http/action';
+import { carryList } from '@/lib/server/lists/carry-list';
 import { reachList } from '@/lib/server/lists/reach-list';
 import { restoreRevision } from '@/lib/server/lists/restore-revision';
 import { addList, saveList } from '@/lib/server/lists/save-list';
@@ -15,7 +16,15 @@ export const addListAction = programAction(
   async ({ input, person, program }) => {
     const { code, title } = input;
     const declarations = declarationsFromBody(input.declarations);
-    await addList(serverDb(), { person, programId: program.id, code, title, declarations });
+    const { frameIssue } = input;
+    await addList(serverDb(), {
+      person,
+      programId: program.id,
+      code,
+      title,
+      declarations,
+      ...(frameIssue === undefined ? {} : { frameIssue }),
+    });
     redirect(`/programs/${program.code}/lists/${code}/upload`);
   },
 );
@@ -32,7 +41,21 @@ export const declareListAction = programAction(
       code: list.code,
       title: input.title,
       declarations,
+      ...(input.frameIssue === undefined ? {} : { frameIssue: input.frameIssue }),
     });
+    redirect(`/programs/${program.code}/lists/${list.code}`);
+  },
+);
+
+export const carryListAction = programAction(
+  'lists.keep',
+  carrySchema,
+  async ({ input, person, program }) => {
+    const list = await reachList(serverDb(), program.id, input.list);
+    await carryList(
+      { pool: writerPool(), db: serverDb() },
+      { person, list, baseRevision: input.newest, frameIssue: input.frame_issue, reason: input.reason },
+    );
     redirect(`/programs/${program.code}/lists/${list.code}`);
   },
 );

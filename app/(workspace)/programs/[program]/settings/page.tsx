@@ -1,6 +1,9 @@
 import { type Metadata } from 'next';
 import { geometryOf } from '@/db/queries/frames';
+import { programFrames } from '@/db/queries/program-frames';
 import { frameIssuesOf } from '@/db/queries/settings';
+import { FormerForm } from '@/components/settings/former-form';
+import { FrameChange } from '@/components/settings/frame-change';
 import { FrameFacts } from '@/components/settings/frame-facts';
 import { FrameIssueTable } from '@/components/settings/frame-issue-table';
 import { SettingsNav } from '@/components/settings/settings-nav';
@@ -13,6 +16,7 @@ import { requireProgram } from '@/lib/server/http/page';
 import { askedLength } from '@/lib/units/choice';
 import { LENGTH_UNITS } from '@/lib/units/table';
 import { ProgramFrame } from '../frame';
+import { stateFormerFrameAction } from './actions';
 
 export const metadata: Metadata = { title: 'Airframe frame' };
 
@@ -23,9 +27,14 @@ export default async function FramePage({ params, searchParams }: PageProps<'/pr
   const asked = await searchParams;
   const unit = askedLength(asked['length']);
   const home = `/programs/${program.code}/settings`;
-  const issues = await frameIssuesOf(serverDb(), program.id);
+  const [issues, frames] = await Promise.all([
+    frameIssuesOf(serverDb(), program.id),
+    programFrames(serverDb(), program.id),
+  ]);
   const newest = issues[0];
   const shown = issues.find((issue) => String(issue.number) === asked['issue']) ?? newest;
+  const before = issues.find(({ number }) => number === (shown?.number ?? 0) - 1);
+  const conversion = shown && before ? frames.between(before.id, shown.id) : null;
   const at = (number: number, length: string) =>
     `${home}?${new URLSearchParams({ ...(number === newest?.number ? {} : { issue: String(number) }), length })}`;
   return (
@@ -76,6 +85,35 @@ export default async function FramePage({ params, searchParams }: PageProps<'/pr
           >
             <FrameFacts issue={shown} geometry={geometryOf(shown)} unit={unit} />
           </Section>
+          {before === undefined ? null : (
+            <Section title={`Against issue ${before.number}`}>
+              {conversion === null ? (
+                <>
+                  <p className="measure">
+                    Issue {shown.number} was made without saying how issue {before.number} lies in it. Until
+                    that is said, nothing is converted between them.
+                  </p>
+                  {can('frame.keep') ? (
+                    <FormerForm
+                      key={unit}
+                      action={stateFormerFrameAction}
+                      program={program.code}
+                      number={shown.number}
+                      geometry={frames.geometry(shown.id)}
+                      former={{
+                        number: before.number,
+                        geometry: frames.geometry(before.id),
+                        example: { item: 'LEMAC', place: frames.geometry(before.id).lemac },
+                      }}
+                      unit={unit}
+                    />
+                  ) : null}
+                </>
+              ) : (
+                <FrameChange conversion={conversion} former={before.number} unit={unit} />
+              )}
+            </Section>
+          )}
           <Section title="Issues">
             <FrameIssueTable
               issues={issues.map((issue) => ({

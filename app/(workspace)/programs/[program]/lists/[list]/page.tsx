@@ -2,6 +2,8 @@ import { type Metadata } from 'next';
 import { Suspense } from 'react';
 import { subtotalsOf } from '@/db/queries/configurations';
 import { ownColumnsOf } from '@/db/queries/list-rows';
+import { programFrames } from '@/db/queries/program-frames';
+import { exampleRow } from '@/db/queries/example-row';
 import { type PinnedWhole, wholesWithRevision } from '@/db/queries/pinned-wholes';
 import { findNewestImport, findRevisionAuthor, type List, type ListRevision } from '@/db/queries/lists';
 import { openUploadsOf } from '@/db/queries/mappings';
@@ -12,6 +14,7 @@ import { FindingCounts } from '@/components/lists/finding-counts';
 import { GroupTable } from '@/components/lists/group-table';
 import { ListNotices } from '@/components/lists/list-notices';
 import { counted } from '@/components/lists/list-words';
+import { ListSketch } from '@/components/lists/list-sketch';
 import { QueryRoot } from '@/components/lists/query-root';
 import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowsStation } from '@/components/lists/rows-station';
@@ -28,7 +31,8 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { noConversion } from '@/lib/mass/issue-conversion';
 import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { serverDb } from '@/lib/server/database';
-import { geometryOfRevision, reachRevision } from '@/lib/server/lists/reach-list';
+import { reachRevision } from '@/lib/server/lists/reach-list';
+import { typedExample } from '@/lib/server/lists/typed-example';
 import { totalsOfRevision } from '@/lib/server/lists/row-totals';
 import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
@@ -47,6 +51,8 @@ export default async function ListPage({ params, searchParams }: Props) {
   const keeps = access.can('lists.keep');
   const above = <TextLink href={home}>Lists</TextLink>;
   const db = serverDb();
+  const frames = await programFrames(db, access.program.id);
+  const [inForce] = frames.issues;
   const newestImport = await findNewestImport(db, list.id);
   const uploads = keeps ? await openUploadsOf(db, list.id) : [];
   const upload = (
@@ -70,7 +76,12 @@ export default async function ListPage({ params, searchParams }: Props) {
             <p>Upload a CSV file: it is checked row by row and becomes revision 1, whole or not at all.</p>
           </EmptyPlace>
           <Section title="As declared">
-            <Declared declarations={list.declarations} />
+            <Declared declarations={list.declarations} issue={frames.issue(list.frame_issue_id)} />
+            <ListSketch
+              declarations={list.declarations}
+              frame={frames.geometry(list.frame_issue_id)}
+              example={null}
+            />
           </Section>
         </div>
       </ProgramFrame>
@@ -80,8 +91,9 @@ export default async function ListPage({ params, searchParams }: Props) {
   const asked = search['revision'];
   const number = typeof asked === 'string' ? asked : String(list.last_revision);
   const revision = await orNotFound(() => reachRevision(db, list, number));
-  const geometry = await geometryOfRevision(db, revision);
-  const [author, totals, own, source, pinned] = await Promise.all([
+  const issue = frames.issue(revision.frame_issue_id);
+  const geometry = frames.geometry(issue.id);
+  const [author, totals, own, source, pinned, row] = await Promise.all([
     findRevisionAuthor(db, revision.id),
     totalsOfRevision(db, revision.id, revision.frame_issue_id, {
       declarations: revision.declarations,
@@ -90,6 +102,7 @@ export default async function ListPage({ params, searchParams }: Props) {
     ownColumnsOf(db, revision.id),
     listSource(list, revision, geometry),
     wholesWithRevision(db, revision.id, revision.frame_issue_id),
+    exampleRow(db, revision.id),
   ]);
   const wholes = wholesOnPage(revision.number, source, pinned);
   const here = `${listHref}?revision=${revision.number}`;
@@ -126,7 +139,23 @@ export default async function ListPage({ params, searchParams }: Props) {
           <FindingLines findings={findingsOnPage(revision, list.code, access.program.code)} />
         </Section>
         <Section title="As declared">
-          <Declared declarations={revision.declarations} />
+          <Declared declarations={revision.declarations} issue={issue} />
+          {inForce === undefined || inForce.id === issue.id ? null : (
+            <p className="measure">
+              Frame issue {inForce.number}, {inForce.title}, is in force. A configuration that stands in it
+              converts this revision at roll-up.{' '}
+              {keeps ? (
+                <TextLink
+                  href={`${listHref}/declarations`}
+                >{`Carry the list to issue ${inForce.number}`}</TextLink>
+              ) : null}
+            </p>
+          )}
+          <ListSketch
+            declarations={revision.declarations}
+            frame={geometry}
+            example={row === undefined ? null : typedExample(row, revision.declarations)}
+          />
         </Section>
       </div>
       <div id="rows" className="grid min-w-0 gap-8">

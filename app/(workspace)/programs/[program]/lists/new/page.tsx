@@ -1,7 +1,9 @@
 import { type Metadata } from 'next';
+import { programFrames } from '@/db/queries/program-frames';
 import { ListForm } from '@/components/lists/list-form';
 import { PageHead } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
+import { serverDb } from '@/lib/server/database';
 import { requireProgram } from '@/lib/server/http/page';
 import { ProgramFrame } from '../../frame';
 import { addListAction } from '../actions';
@@ -20,6 +22,7 @@ const BEGINNING = {
 
 export default async function NewListPage({ params }: PageProps<'/programs/[program]/lists/new'>) {
   const access = await requireProgram((await params).program, 'lists.keep');
+  const frames = await programFrames(serverDb(), access.program.id);
   const home = `/programs/${access.program.code}/lists`;
   return (
     <ProgramFrame access={access} current="lists" width="narrow">
@@ -32,7 +35,9 @@ export default async function NewListPage({ params }: PageProps<'/programs/[prog
         action={addListAction}
         program={access.program.code}
         list={null}
-        values={BEGINNING}
+        issues={frames.issues.map((issue) => ({ ...issue, ...frames.geometry(issue.id) }))}
+        example={null}
+        values={{ ...BEGINNING, frame_issue: String(frames.issues[0]?.number ?? '') }}
         cancelHref={home}
       />
     </ProgramFrame>

@@ -1,8 +1,10 @@
 import { type Metadata } from 'next';
+import { findFrameIssue } from '@/db/queries/frames';
 import { Declared } from '@/components/lists/declared';
 import { UploadForm } from '@/components/lists/upload-form';
 import { PageHead, Section } from '@/components/ui/section';
 import { LINK_CLASS, TextLink } from '@/components/ui/text-link';
+import { serverDb } from '@/lib/server/database';
 import { ProgramFrame } from '../../../frame';
 import { requireList } from '../list-page';
 
@@ -10,6 +12,7 @@ export const metadata: Metadata = { title: 'Upload a file' };
 
 export default async function UploadPage({ params }: PageProps<'/programs/[program]/lists/[list]/upload'>) {
   const { access, list, listHref, route } = await requireList(params, 'lists.keep');
+  const issue = await findFrameIssue(serverDb(), list.frame_issue_id);
   return (
     <ProgramFrame access={access} current="lists">
       <PageHead
@@ -23,7 +26,7 @@ export default async function UploadPage({ params }: PageProps<'/programs/[progr
           title="Its figures are read as declared"
           aside={<TextLink href={`${listHref}/declarations`}>Change declarations</TextLink>}
         >
-          <Declared declarations={list.declarations} />
+          <Declared declarations={list.declarations} issue={issue} />
           <p className="text-note text-ink-2">
             Needed are the columns item (or a unique part_number), mass, x, y and z. Files of other headings
             are mapped in the next step, and the list remembers how.{' '}

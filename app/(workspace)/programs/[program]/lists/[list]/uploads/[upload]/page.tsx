@@ -1,5 +1,6 @@
 import { type Metadata } from 'next';
 import { redirect } from 'next/navigation';
+import { findFrameIssue } from '@/db/queries/frames';
 import { Declared } from '@/components/lists/declared';
 import { MappingDesk } from '@/components/lists/mapping/mapping-desk';
 import { Banner } from '@/components/ui/banner';
@@ -69,7 +70,10 @@ export default async function MappingPage({
             title="Declared for the list"
             aside={<TextLink href={`${listHref}/declarations`}>Change declarations</TextLink>}
           >
-            <Declared declarations={list.declarations} />
+            <Declared
+              declarations={list.declarations}
+              issue={await findFrameIssue(serverDb(), list.frame_issue_id)}
+            />
             <p className="text-note text-ink-2">
               Figures are in these units unless a column says another. The file is kept; you can leave this
               page and find it again on the list.
