@@ -22,6 +22,9 @@ import { createConfiguration } from '@/lib/server/configurations/create-configur
 import { pinRevisions } from '@/lib/server/configurations/pin-revisions';
 import { rollUpConfiguration } from '@/lib/server/configurations/roll-up-configuration';
 import { removeCondition, saveCondition } from '@/lib/server/configurations/save-condition';
+import { type Mapping } from '@/lib/ingest/mapping/mapping';
+import { importMapped } from '@/lib/server/lists/mapping/import-mapped';
+import { dropUpload, keepUpload } from '@/lib/server/lists/mapping/keep-upload';
 import { saveList } from '@/lib/server/lists/save-list';
 import { issueFrame } from '@/lib/server/programs/issue-frame';
 import { reviseRotors } from '@/lib/server/rotors/revise-rotors';
@@ -108,6 +111,36 @@ const change = async (code: string) => {
   return { person: test.crew.weights, configuration: found, version: found.version };
 };
 
+const MAPPING: Mapping = {
+  version: 1,
+  delimiter: ',',
+  sheet: null,
+  header: { first: 1, last: 1 },
+  columns: (['item', 'mass', 'x', 'y', 'z'] as const).map((column) => ({
+    heading: column,
+    to: { use: 'column', column, unit: null },
+  })),
+  numbers: { decimal: '.', thousands: '' },
+  per: 'piece',
+  leaveOut: { totals: true, texts: true, headings: true },
+};
+
+async function sentFile() {
+  const { id, code, program_id } = await test.db
+    .selectFrom('lists')
+    .selectAll()
+    .where('code', '=', 'all')
+    .executeTakeFirstOrThrow();
+  return {
+    person: test.crew.weights,
+    list: { id, code, programId: program_id },
+    file: { sha256: 'b'.repeat(64), bytes: 1, name: 'supplier.csv', lines: 2 },
+  };
+}
+
+const newestUpload = () =>
+  test.db.selectFrom('pending_uploads').selectAll().orderBy('created_at', 'desc').executeTakeFirstOrThrow();
+
 /** Each step of the product that writes, run to its end on a database that fails after some write. */
 const STEPS: Readonly<Record<string, (db: Db) => Promise<unknown>>> = {
   'create a configuration': (db) => create(db, 'four'),
@@ -154,6 +187,16 @@ const STEPS: Readonly<Record<string, (db: Db) => Promise<unknown>>> = {
       declarations: list.declarations,
     });
   },
+  'keep a file for a mapping': async (db) => keepUpload(db, { ...(await sentFile()), reason: 'test' }),
+  'drop it': async (db) => dropUpload(db, { ...(await sentFile()), upload: await newestUpload() }),
+  'keep another': async (db) => keepUpload(db, { ...(await sentFile()), reason: 'test' }),
+  'import it by a mapping': async (db) =>
+    importMapped(db, {
+      ...(await sentFile()),
+      upload: await newestUpload(),
+      mapping: MAPPING,
+      acceptTotals: false,
+    }),
   'revise the rotating parts': (db) =>
     reviseRotors(db, {
       person: test.crew.weights,
@@ -259,7 +302,11 @@ async function everything(): Promise<string> {
     'group_changes',
     'growth_allowances',
     'limits',
+    'import_mappings',
+    'imports',
+    'list_mappings',
     'lists',
+    'pending_uploads',
     'reference_points',
     'roll_ups',
     'rotor_revisions',
@@ -302,7 +349,7 @@ describe.each(Object.keys(STEPS))('to %s', (name) => {
       .where('scope', '=', test.program.id)
       .limit(1)
       .executeTakeFirstOrThrow();
-    expect(last.kind).toMatch(/^(configuration|frame|list|rotors|baseline|limit|allowance|groups)\./);
+    expect(last.kind).toMatch(/^(configuration|frame|import|upload|list|rotors|baseline|limit|allowance|groups)\./);
     if (name === 'sign') submissionId = await waitingSubmission();
   });
 });
