@@ -349,7 +349,9 @@ describe.each(Object.keys(STEPS))('to %s', (name) => {
       .where('scope', '=', test.program.id)
       .limit(1)
       .executeTakeFirstOrThrow();
-    expect(last.kind).toMatch(/^(configuration|frame|import|upload|list|rotors|baseline|limit|allowance|groups)\./);
+    expect(last.kind).toMatch(
+      /^(configuration|frame|import|upload|list|rotors|baseline|limit|allowance|groups)\./,
+    );
     if (name === 'sign') submissionId = await waitingSubmission();
   });
 });
