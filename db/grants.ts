@@ -34,6 +34,7 @@ export const APPLICATION_RIGHTS: Readonly<Record<keyof Database, readonly Right[
   imports: ['select', 'insert', 'update'],
   list_drafts: ['select', 'insert', 'update', 'delete'],
   list_draft_edits: ['select', 'insert', 'update', 'delete'],
+  list_views: ['select', 'insert', 'update', 'delete'],
   list_mappings: ['select', 'insert'],
   import_mappings: ['select', 'insert'],
   import_readings: ['select', 'insert'],

@@ -14,7 +14,7 @@ import {
 } from '@tanstack/react-table';
 import { useMemo } from 'react';
 import { type DataColumn } from '@/components/data-table/column';
-import { inGroup, type TableView } from '@/components/data-table/view';
+import { columnsShown, inGroup, type TableView } from '@/components/data-table/view';
 
 const features = tableFeatures({
   columnVisibilityFeature,
@@ -90,9 +90,9 @@ export function useTableRows<Row extends RowData>(options: TableRowsOptions<Row>
   });
   const model = table.getRowModel();
   const shown = useMemo(() => model.rows.map((row) => row.original), [model]);
-  const visible = useMemo(() => {
-    const ids = new Set(hidden.split('\n'));
-    return columns.filter((column, index) => index === 0 || !ids.has(column.id));
-  }, [columns, hidden]);
+  const visible = useMemo(
+    () => columnsShown(columns, { shown: view.shown, hidden: view.hidden }),
+    [columns, view.shown, view.hidden],
+  );
   return { shown, visible };
 }

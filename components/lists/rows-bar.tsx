@@ -1,8 +1,9 @@
 'use client';
 
-import { useId } from 'react';
+import { type ReactNode, useId } from 'react';
 import { type DataColumn } from '@/components/data-table/column';
-import { ColumnChoice, Find } from '@/components/data-table/toolbar';
+import { ColumnChooser } from '@/components/lists/column-chooser';
+import { Find } from '@/components/data-table/toolbar';
 import { type TableView } from '@/components/data-table/view';
 import { Button } from '@/components/ui/button';
 import { buttonClass } from '@/components/ui/button-style';
@@ -12,11 +13,15 @@ import { type ListRow } from '@/lib/contracts/list-rows';
 
 interface RowsBarProps {
   readonly columns: readonly DataColumn<ListRow>[];
+  /** Those shown, in order. */
+  readonly visible: readonly DataColumn<ListRow>[];
   readonly view: TableView;
   readonly onView: (view: TableView) => void;
   readonly groups: readonly string[];
   /** What the finding says whose rows alone are shown; null: no such filter. */
   readonly finding: string | null;
+  /** The value of a column by which rows are chosen, in words; null: no such filter. */
+  readonly only: string | null;
   /** The address of all rows. */
   readonly plainHref: string;
   readonly status: string;
@@ -24,12 +29,27 @@ interface RowsBarProps {
   readonly exportHref: (all: boolean) => string;
   /** Whether the view is another than the whole list in its own order. */
   readonly differs: boolean;
+  readonly views: ReactNode;
   readonly onAdd: (() => void) | null;
 }
 
 /** Find, group, columns, export, add: what changes the view of the rows, or goes with them. */
 export function RowsBar(props: RowsBarProps) {
-  const { columns, view, onView, groups, finding, plainHref, status, exportHref, differs, onAdd } = props;
+  const {
+    columns,
+    visible,
+    view,
+    onView,
+    groups,
+    finding,
+    only,
+    plainHref,
+    status,
+    exportHref,
+    differs,
+    views,
+    onAdd,
+  } = props;
   const id = useId();
   return (
     <div className="no-print grid gap-2">
@@ -54,7 +74,8 @@ export function RowsBar(props: RowsBarProps) {
             </SelectControl>
           </div>
         ) : null}
-        <ColumnChoice columns={columns} view={view} onView={onView} />
+        <ColumnChooser columns={columns} visible={visible} view={view} onView={onView} />
+        {views}
         <p role="status" className="flex min-h-8 items-center text-ink-2">
           {status}
         </p>
@@ -70,6 +91,15 @@ export function RowsBar(props: RowsBarProps) {
           {onAdd === null ? null : <Button onClick={onAdd}>Add row</Button>}
         </div>
       </div>
+      {only === null ? null : (
+        <p className="flex flex-wrap items-baseline gap-x-3 border-y border-rule py-1">
+          <span className="text-ink-2">Only rows with</span>
+          <span className="measure min-w-0 wrap-anywhere">{only}</span>
+          <Button kind="quiet" onClick={() => onView({ ...view, only: null })}>
+            Show the others too
+          </Button>
+        </p>
+      )}
       {finding === null ? null : (
         <p className="flex flex-wrap items-baseline gap-x-3 border-y border-rule py-1">
           <span className="text-ink-2">Only the rows of a finding:</span>

@@ -4,21 +4,32 @@ import { useRouter, useSearchParams } from 'next/navigation';
 import { useMemo, useRef, useState } from 'react';
 import { Grid } from '@/components/data-table/grid';
 import { Inspector } from '@/components/data-table/inspector';
+import { columnsShown } from '@/components/data-table/view';
 import { useUrlView } from '@/components/data-table/use-url-view';
 import { counted } from '@/components/lists/list-words';
+import { GroupsSection } from '@/components/lists/groups-section';
 import { PendingPanel } from '@/components/lists/pending-panel';
-import { rowColumns, totalCells } from '@/components/lists/row-columns';
+import {
+  groupingColumns,
+  isUsual,
+  type RowColumn,
+  rowColumns,
+  totalCells,
+} from '@/components/lists/row-columns';
 import { type Beside, RowBeside } from '@/components/lists/row-beside';
 import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowsBar } from '@/components/lists/rows-bar';
 import { usePendingEdits } from '@/components/lists/use-pending-edits';
 import { rowIdOf, useRowPages, useRowTotals } from '@/components/lists/use-row-pages';
+import { SavedViews } from '@/components/lists/saved-views';
 import { Banner } from '@/components/ui/banner';
 import { Button } from '@/components/ui/button';
 import { Section } from '@/components/ui/section';
 import { type EditProblem, EDITS_AT_ONCE, itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
+import { type RowGroups } from '@/lib/contracts/list-groups';
 import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
-import { isFiltered, listViewOf, viewQuery } from '@/lib/contracts/list-view';
+import { isFiltered, type ListView, listViewOf, viewQuery } from '@/lib/contracts/list-view';
+import { type SavedView } from '@/lib/contracts/saved-view';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 
@@ -36,7 +47,9 @@ export interface RowsStationProps {
   readonly wholes: readonly WholeOnPage[];
   readonly totals: RowTotals;
   readonly rows: number;
-  readonly groups: readonly string[];
+  /** By group, of all rows. */
+  readonly groups: RowGroups;
+  readonly views: readonly SavedView[];
   readonly findings: readonly { readonly rule: string; readonly message: string }[];
   readonly own: readonly string[];
   readonly file: string | null;
@@ -57,18 +70,21 @@ export function RowsStation(props: RowsStationProps) {
     for (const [key, value] of [
       ['find', view.text],
       ['group', view.group],
+      ['where', view.only?.column],
+      ['is', view.only?.value],
       ['sort', view.sort ? `${view.sort.descending ? '-' : ''}${view.sort.column}` : ''],
     ] as const) {
       if (value) asked.set(key, value);
       else asked.delete(key);
     }
     return asked.toString();
-  }, [params, view.text, view.group, view.sort]);
+  }, [params, view.text, view.group, view.only, view.sort]);
   const listView = useMemo(() => listViewOf(new URLSearchParams(query)), [query]);
   const filtered = isFiltered(listView);
   const pages = useRowPages(revisionRoute, query);
   const { totals, error } = useRowTotals(revisionRoute, query, props.totals, filtered);
 
+  const [views, setViews] = useState(props.views);
   const [pending, setPending] = usePendingEdits(props.listKey);
   const [problems, setProblems] = useState<readonly EditProblem[]>([]);
   const [editing, setEditing] = useState<string | null>(null);
@@ -76,11 +92,12 @@ export function RowsStation(props: RowsStationProps) {
   const plainHref = `${props.listHref}?revision=${revision}`;
   const mayEdit = props.mayEdit && revision === newest;
   const edits = pending?.edits ?? NO_EDITS;
-  const columns = useMemo(() => rowColumns(declarations, edits), [declarations, edits]);
+  const columns = useMemo(() => rowColumns(declarations, edits, props.own), [declarations, edits, props.own]);
   const visible = useMemo(
-    () => columns.filter((column, index) => index === 0 || !view.hidden.includes(column.id)),
-    [columns, view.hidden],
+    () => columnsShown(columns, { shown: view.shown, hidden: view.hidden }, isUsual),
+    [columns, view.shown, view.hidden],
   );
+  const grouping = useMemo(() => groupingColumns(columns), [columns]);
   const typed = useRef(false);
   /** Goes elsewhere, unless that would lose what has been typed. */
   const leaving = (go: () => void) => {
@@ -127,14 +144,24 @@ export function RowsStation(props: RowsStationProps) {
       <Section title="Rows" {...(said === '' ? {} : { aside: <span role="status">{said}</span> })}>
         <RowsBar
           columns={columns}
+          visible={visible}
           view={view}
           onView={setView}
-          groups={props.groups}
+          only={onlyWords(listView, columns)}
+          groups={props.groups.groups.map(({ value }) => value)}
           plainHref={plainHref}
           finding={findings.find(({ rule }) => rule === listView.finding)?.message ?? null}
           status={statusWords(pages.total, props.rows, filtered)}
-          exportHref={(all) => `${revisionRoute}/export${all || query === '' ? '' : `?${query}`}`}
-          differs={query !== ''}
+          exportHref={(all) => `${revisionRoute}/export${all ? '' : `?${shownQuery(query, visible)}`}`}
+          differs={query !== '' || view.shown.length > 0 || view.hidden.length > 0}
+          views={
+            <SavedViews
+              views={views}
+              onViews={setViews}
+              route={`${props.listRoute}/views`}
+              plainHref={plainHref}
+            />
+          }
           onAdd={
             mayEdit && edits.length < EDITS_AT_ONCE
               ? () =>
@@ -202,6 +229,16 @@ export function RowsStation(props: RowsStationProps) {
         </div>
         <p className="measure text-note text-ink-2">{footWords(totals)}</p>
       </Section>
+      <GroupsSection
+        columns={grouping}
+        view={view}
+        listView={listView}
+        onView={setView}
+        revisionRoute={revisionRoute}
+        query={query}
+        start={props.groups}
+        declarations={declarations}
+      />
     </>
   );
 }
@@ -224,6 +261,20 @@ function besideOf(
 function statusWords(shown: number | null, all: number, filtered: boolean): string {
   if (shown === null) return 'Loading rows';
   return filtered ? `${shown} of ${counted(all, 'row')}` : counted(all, 'row');
+}
+
+/** The export of a view: its rows, and the columns shown. */
+function shownQuery(query: string, visible: readonly RowColumn[]): string {
+  const asked = new URLSearchParams(query);
+  for (const { id } of visible) asked.append('column', id);
+  return asked.toString();
+}
+
+/** `Supplier: Tern Metals`, where rows are chosen by the value of a column; null where they are not. */
+function onlyWords(view: ListView, columns: readonly RowColumn[]): string | null {
+  const column = columns.find(({ id }) => id === view.where);
+  if (column === undefined) return null;
+  return view.is === '' ? `${column.title} blank` : `${column.title}: ${view.is}`;
 }
 
 /** What the foot of the table adds up, and what it leaves out. */

@@ -42,6 +42,7 @@ import {
   type UsersTable,
 } from './people';
 import { type ListDraftEditsTable, type ListDraftsTable } from './drafts';
+import { type ListViewsTable } from './list-views';
 import {
   type BuildsTable,
   type FrameIssuesTable,
@@ -83,6 +84,7 @@ export interface Database {
   imports: ImportsTable;
   list_drafts: ListDraftsTable;
   list_draft_edits: ListDraftEditsTable;
+  list_views: ListViewsTable;
   list_mappings: ListMappingsTable;
   import_mappings: ImportMappingsTable;
   import_readings: ImportReadingsTable;

@@ -172,6 +172,14 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/rows/route.ts': {
     GET: 'program lists.read',
   },
+  'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/groups/route.ts': {
+    GET: 'program lists.read',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/views/route.ts': { POST: 'program lists.read' },
+  'app/api/internal/programs/[program]/lists/[list]/views/[view]/route.ts': {
+    PATCH: 'program lists.read',
+    DELETE: 'program lists.read',
+  },
   'app/api/internal/programs/[program]/lists/[list]/revisions/[revision]/totals/route.ts': {
     GET: 'program lists.read',
   },

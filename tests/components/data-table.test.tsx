@@ -11,6 +11,7 @@ import {
   inGroup,
   nextSort,
   paramsWithView,
+  columnsShown,
   PLAIN_VIEW,
   type TableView,
   viewFromParams,
@@ -123,6 +124,10 @@ describe("the view in a page's address", () => {
           group: fc.string(),
           subtotals: fc.boolean(),
           hidden: fc.array(fc.stringMatching(/^[a-z]{1,8}$/)),
+          shown: fc.array(fc.string()),
+          by: fc.string(),
+          only: fc.option(fc.record({ column: fc.string({ minLength: 1 }), value: fc.string() })),
+          unfolded: fc.array(fc.string()),
           open: fc.option(fc.string()),
         }),
         (view) => {
@@ -132,6 +137,15 @@ describe("the view in a page's address", () => {
         },
       ),
     );
+  });
+
+  it('shows the columns chosen in the order chosen, after the first, and the usual ones where none is', () => {
+    const columns = ['item', 'mass', 'x', 'note'].map((id) => ({ id }));
+    const ids = (view: Partial<typeof PLAIN_VIEW>) =>
+      columnsShown(columns, { ...PLAIN_VIEW, ...view }, ({ id }) => id !== 'note').map(({ id }) => id);
+    expect(ids({})).toEqual(['item', 'mass', 'x']);
+    expect(ids({ hidden: ['mass'] })).toEqual(['item', 'x']);
+    expect(ids({ shown: ['note', 'gone', 'mass', 'note', 'item'] })).toEqual(['item', 'note', 'mass']);
   });
 
   it('leaves no trace when it is plain', () => {

@@ -1,12 +1,13 @@
 import { type Db } from '@/db/client';
-import { subtotalsOf } from '@/db/queries/configurations';
-import { type RowFilter, sumRows, unsummedRows } from '@/db/queries/list-rows';
+import { basicSubtotalsOf } from '@/db/queries/basic-subtotals';
+import { type RowFilter, type RowSums, sumRows } from '@/db/queries/list-rows';
 import { type RowTotals } from '@/lib/contracts/list-rows';
 import { listToAirframe } from '@/lib/frames/pose';
 import { lateralIndex } from '@/lib/frames/reflection';
 import { type AirframeVec, type ListVec } from '@/lib/frames/tags';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
+import { pathsUp } from '@/lib/mass/allowances';
 import { isMirrored } from '@/lib/mass/place';
 import { type GroupTotal, groupBranches, NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { applyMat, transpose } from '@/lib/numerics/mat3';
@@ -20,9 +21,18 @@ export interface ListTotals {
   readonly groups: readonly (RowTotals & { readonly group: string })[];
 }
 
-interface InFrame {
+export interface InFrame {
   readonly declarations: ListDeclarations;
   readonly geometry: AirframeGeometry;
+}
+
+/** Columns by whose values the stored subtotals are kept apart. */
+const KEPT_APART = ['group', 'category', 'maturity'] as const;
+type KeptApart = (typeof KEPT_APART)[number];
+
+/** The same column where the stored subtotals tell its values apart. */
+export function keptApart(column: string): KeptApart | undefined {
+  return KEPT_APART.find((one) => one === column);
 }
 
 /** Totals of a revision and of its groups of today from the stored subtotals, basic (without growth): no row is read. */
@@ -31,60 +41,68 @@ export async function totalsOfRevision(
   revisionId: string,
   frameIssueId: string,
   frame: InFrame,
+  by: KeptApart = 'group',
 ): Promise<ListTotals> {
   const { present } = await revisionGroups(db, revisionId);
-  const stored = await subtotalsOf(db, [revisionId], frameIssueId);
-  const subtotals = stored.map((part) => ({ ...part, group: present(part.group) }));
+  const stored = await basicSubtotalsOf(db, revisionId, frameIssueId);
+  const subtotals = stored.map((part) => ({
+    ...part,
+    group: by === 'group' ? present(part.group) : (part[by] ?? ''),
+  }));
   const approved = rollUp(subtotals, [], frame.geometry, NO_GROWTH);
   const waiting = new Map<string, number>();
+  let allWaiting = 0;
   for (const part of subtotals) {
     if (part.status === 'approved') continue;
-    const levels = part.group.split('/');
-    for (let depth = 0; depth <= levels.length; depth += 1) {
-      const path = levels.slice(0, depth).join('/');
-      waiting.set(path, (waiting.get(path) ?? 0) + part.rows);
-    }
+    allWaiting += part.rows;
+    for (const path of pathsUp(part.group)) waiting.set(path, (waiting.get(path) ?? 0) + part.rows);
   }
   const totals = (
     total: Pick<GroupTotal, 'rows' | 'pieces' | 'memoRows' | 'basic'>,
-    path: string,
+    waitingRows: number,
   ): RowTotals => ({
     rows: total.rows,
     pieces: total.pieces,
     mass: fromSi(total.basic.mass, frame.declarations.massUnit),
     cg: total.basic.properties === null ? null : inListUnits(total.basic.properties.cg, frame),
     memoRows: total.memoRows,
-    waitingRows: waiting.get(path) ?? 0,
+    waitingRows,
   });
+  const branches = by === 'group' ? groupBranches(approved.groups, frame.geometry) : approved.groups;
   return {
-    whole: totals(approved, ''),
-    groups: groupBranches(approved.groups, frame.geometry).map((branch) => ({
+    whole: totals(approved, allWaiting),
+    groups: branches.map((branch) => ({
       group: branch.group,
-      ...totals(branch, branch.group),
+      ...totals(branch, waiting.get(branch.group) ?? 0),
     })),
   };
 }
 
-/**
- * Totals of the rows that a filter leaves in, summed in the database. A mirror image has its piece's place but for the lateral
- * coordinate, so pairs need no more than their own first moment.
- */
+/** Totals of the rows that a filter leaves in, summed in the database. */
 export async function totalsOfView(
   db: Db,
   revisionId: string,
   filter: RowFilter,
   frame: InFrame,
 ): Promise<RowTotals> {
+  return totalsOfSums(await sumRows(db, revisionId, filter, nearOf(frame)), frame);
+}
+
+/** The point about which first moments are summed: the reference in list axes, m. */
+export function nearOf(frame: InFrame): ListVec {
+  return toList(frame.geometry.reference, frame);
+}
+
+/**
+ * Sums of rows as totals. A mirror image has its piece's place but for the lateral coordinate, so pairs need no more than their own
+ * first moment.
+ */
+export function totalsOfSums(sums: Iterable<RowSums>, frame: InFrame): RowTotals {
   const { declarations, geometry } = frame;
-  const near = toList(geometry.reference, frame);
-  const [sums, unsummed] = await Promise.all([
-    sumRows(db, revisionId, filter, near),
-    unsummedRows(db, revisionId, filter),
-  ]);
   const matrix = matrixOf(frame);
   const lateral = lateralIndex(geometry.axes);
   const across = geometry.lateralPlane - geometry.reference[lateral];
-  let [rows, pieces, mass] = [0, 0, 0];
+  let [rows, pieces, mass, memoRows, waitingRows] = [0, 0, 0, 0, 0];
   let first: AirframeVec = [0, 0, 0];
   for (const sum of sums) {
     const own = applyMat(matrix, [sum.px, sum.py, sum.pz]);
@@ -94,14 +112,16 @@ export async function totalsOfView(
     rows += sum.rows;
     pieces += mirrored ? 2 * sum.pieces : sum.pieces;
     mass += mirrored ? 2 * sum.mass : sum.mass;
+    memoRows += sum.memo;
+    waitingRows += sum.waiting;
   }
   return {
     rows,
     pieces,
     mass: fromSi(mass, declarations.massUnit),
     cg: mass > 0 ? inListUnits(addVec(geometry.reference, scaleVec(1 / mass, first)), frame) : null,
-    memoRows: unsummed.memo,
-    waitingRows: unsummed.waiting,
+    memoRows,
+    waitingRows,
   };
 }
 

@@ -17,6 +17,7 @@ export function filterOf(
   return {
     text: view.find,
     groups: view.group === '' ? null : groups.statedIn(view.group),
+    only: view.where === '' ? null : { column: view.where, value: view.is },
     category: view.category === '' ? null : view.category,
     counting: view.counting === '' ? null : view.counting,
     items: view.finding === '' ? null : (findings.find(({ rule }) => rule === view.finding)?.rows ?? []),

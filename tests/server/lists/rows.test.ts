@@ -1,12 +1,14 @@
 import { Readable } from 'node:stream';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { countRows, rowsOfView } from '@/db/queries/list-rows';
+import { countRows, pageOfView } from '@/db/queries/list-rows';
 import { findRevision, type ListRevision } from '@/db/queries/lists';
-import { listViewOf } from '@/lib/contracts/list-view';
+import { type RowGroups } from '@/lib/contracts/list-groups';
+import { type GroupingColumn, listViewOf } from '@/lib/contracts/list-view';
 import { readMassList } from '@/lib/ingest/mass-list';
 import { type Component } from '@/lib/mass/component';
 import { findFrameIssue, geometryOf } from '@/db/queries/frames';
-import { exportRows } from '@/lib/server/lists/export-rows';
+import { exportColumnsOf, exportRows } from '@/lib/server/lists/export-rows';
+import { loadGroups } from '@/lib/server/lists/load-groups';
 import { totalsOfRevision, totalsOfView } from '@/lib/server/lists/row-totals';
 import { revisionGroups } from '@/lib/server/lists/revision-groups';
 import { filterOf, orderOf, rowReader } from '@/lib/server/lists/row-view';
@@ -52,9 +54,9 @@ async function revise(
 async function itemsOf(address: string, of = revision, page = { offset: 0, limit: 100 }): Promise<string[]> {
   const view = listViewOf(new URLSearchParams(address));
   const filter = filterOf(view, of.findings, await revisionGroups(test.db, of.id));
-  const rows = await rowsOfView(test.db, of.id, filter, orderOf(view, of.declarations), page);
-  if (page.offset === 0 && page.limit === 100)
-    expect(await countRows(test.db, of.id, filter)).toBe(rows.length);
+  const { rows, total } = await pageOfView(test.db, of.id, filter, orderOf(view, of.declarations), page);
+  expect(total).toBe(await countRows(test.db, of.id, filter));
+  if (page.offset === 0 && page.limit === 100) expect(total).toBe(rows.length);
   return rows.map(({ item }) => item);
 }
 
@@ -67,6 +69,16 @@ describe('The rows of a view', () => {
     ['find=%25', 'P-4'],
     ['find=_piper', 'P-4'],
     ['find=Sandxpiper', ''],
+    ['find=Supplier', ''],
+    ['where=own:Supplier&is=Tern+Metals', 'P-1 P-2'],
+    ['where=own:Supplier', 'P-3 P-5 P-6'],
+    ['where=maturity&is=C', 'P-1 P-6'],
+    ['where=maturity&is=C&group=Wing', 'P-1'],
+    ['where=nonsense&is=C', 'P-1 P-2 P-3 P-4 P-5 P-6'],
+    ['sort=own:Supplier', 'P-4 P-1 P-2 P-3 P-5 P-6'],
+    ['sort=-own:Supplier&find=P-', 'P-1 P-2 P-4 P-3 P-5 P-6'],
+    ['sort=symmetry', 'P-1 P-2 P-3 P-4 P-5 P-6'],
+    ['sort=mass_sigma', 'P-1 P-2 P-3 P-4 P-5 P-6'],
     ['group=Wing', 'P-1 P-2 P-3 P-5'],
     ['group=Wing/Spars', 'P-1 P-2'],
     ['group=Wing+tips', 'P-4'],
@@ -103,7 +115,7 @@ describe('The rows of a view', () => {
       inertia_unit: 'slug.ft2',
       products: 'negative',
     });
-    const rows = await rowsOfView(
+    const { rows } = await pageOfView(
       test.db,
       stated.id,
       filterOf(listViewOf(new URLSearchParams('find=P-3')), [], await revisionGroups(test.db, stated.id)),
@@ -174,14 +186,111 @@ describe('The totals of a list', () => {
   });
 });
 
+describe('The groups of a view', () => {
+  const groupsOf = (by: GroupingColumn, address = '', of = revision) =>
+    loadGroups(test.db, of, listViewOf(new URLSearchParams(address)), by);
+
+  it('by group come as a tree of the stored subtotals, with the share of each', async () => {
+    const { of, groups, whole } = await groupsOf('group');
+    expect(of).toBe(5);
+    expect(whole.mass).toBe(164);
+    expect(groups.map(({ value, rows, mass, share }) => [value, rows, mass, share])).toEqual([
+      ['Tail', 1, 12, 12 / 164],
+      ['Wing', 3, 150, 150 / 164],
+      ['Wing/Ribs', 1, 10, 10 / 164],
+      ['Wing/Spars', 2, 140, 140 / 164],
+      ['Wing tips', 1, 2, 2 / 164],
+    ]);
+  });
+
+  it('by a column of the list’s own add up pairs with their mirror images, heaviest first', async () => {
+    const { groups, whole } = await groupsOf('own:Supplier');
+    expect(whole).toMatchObject({ rows: 5, mass: 164, memoRows: 1 });
+    expect(
+      groups.map(({ value, rows, pieces, mass, memoRows }) => [value, rows, pieces, mass, memoRows]),
+    ).toEqual([
+      ['Tern Metals', 2, 4, 140, 0],
+      ['', 2, 5, 22, 1],
+      ['100 % Sand_piper', 1, 2, 2, 0],
+    ]);
+    // By hand: x of the two pairs (2 × 40 × 5 + 2 × 30 × 6) / 140; their images bring y to the plane of symmetry.
+    expect(groups[0]?.cg?.[0]).toBeCloseTo(760 / 140, 12);
+    expect(groups[0]?.cg?.[1]).toBeCloseTo(0, 12);
+  });
+
+  it.each(['group', 'maturity', 'category'] as const)(
+    'summed from rows are those of the stored subtotals, by %s',
+    async (by) => {
+      const kept = await groupsOf(by);
+      // A text that every item has makes the database read the rows.
+      const summed = await groupsOf(by, 'find=P-');
+      const byValue = (groups: RowGroups['groups']) =>
+        [...groups]
+          .filter(({ rows }) => rows > 0)
+          .sort((a, b) => (a.value < b.value ? -1 : 1))
+          .map(({ value, rows, pieces, mass, cg, share, memoRows }) => [
+            value,
+            rows,
+            pieces,
+            mass,
+            cg,
+            share,
+            memoRows,
+          ]);
+      expect(byValue(summed.groups)).toEqual(
+        byValue(kept.groups).map((group) =>
+          group.map((one) =>
+            typeof one === 'number'
+              ? expect.closeTo(one, 9)
+              : Array.isArray(one)
+                ? one.map((x) => expect.closeTo(x, 9))
+                : one,
+          ),
+        ),
+      );
+    },
+  );
+
+  it('leave the choice of one of them out, and keep the other choices', async () => {
+    const all = await groupsOf('group');
+    expect(await groupsOf('group', 'group=Wing')).toEqual(all);
+    const { groups } = await groupsOf('maturity', 'where=maturity&is=E&group=Wing');
+    expect(groups.map(({ value, mass }) => [value, mass])).toEqual([
+      ['C', 80],
+      ['E', 60],
+      ['', 10],
+    ]);
+  });
+
+  it('give the rows of each when its value is asked for', async () => {
+    for (const by of ['own:Supplier', 'maturity', 'category', 'counting', 'part_number'] as const) {
+      const { groups } = await groupsOf(by);
+      for (const { value, rows, memoRows } of groups) {
+        const asked = new URLSearchParams({ where: by, is: value });
+        expect(await itemsOf(asked.toString())).toHaveLength(rows + memoRows);
+      }
+    }
+  });
+
+  it('tell the heaviest of very many values, and how many there are', async () => {
+    const rows = Array.from({ length: 700 }, (_, k) => `N${k},${k + 1},1,0,0,L${k}`);
+    const many = await revise('many', {}, `item,mass,x,y,z,Lot\n${rows.join('\n')}\n`);
+    const { of, groups, whole } = await groupsOf('own:Lot', '', many);
+    expect([of, groups.length, groups[0]?.value, groups[499]?.mass]).toEqual([700, 500, 'L699', 201]);
+    expect(whole).toMatchObject({ rows: 700, mass: 245_350 });
+  });
+});
+
 describe('The export of a view', () => {
   async function exported(address: string, marking: string | null = null): Promise<string> {
+    const params = new URLSearchParams(address);
     let text = '';
     for await (const piece of exportRows(
       test.db,
       revision,
-      listViewOf(new URLSearchParams(address)),
+      listViewOf(params),
       marking,
+      exportColumnsOf(params),
     ))
       text += piece;
     return text;
@@ -206,6 +315,21 @@ describe('The export of a view', () => {
   it('holds the rows that the view shows, in its order', async () => {
     const components = await read(await exported('group=Wing&sort=-mass'));
     expect(components.map(({ item }) => item)).toEqual(['P-5', 'P-1', 'P-2', 'P-3']);
+  });
+
+  it('has every column, or those asked for in their order, the list’s own among them', async () => {
+    expect((await exported('')).split('\r\n')[0]).toMatch(/^item,.*,note,Supplier$/);
+    const asked = 'column=item&column=own:Supplier&column=mass&column=mass&column=position&column=nonsense';
+    const lines = (await exported(`${asked}&group=Wing&sort=mass`, 'Level 2')).split('\r\n');
+    expect(lines).toEqual([
+      'item,Supplier,mass,marking',
+      'P-3,,2.5,Level 2',
+      'P-2,Tern Metals,30,Level 2',
+      'P-1,Tern Metals,40,Level 2',
+      'P-5,,999,Level 2',
+      '',
+    ]);
+    expect(await exported('column=own:Supplier&column=description&find=P-6')).toContain("\r\n,'=SUM(A1)\r\n");
   });
 
   it('neutralises texts that a spreadsheet would run', async () => {

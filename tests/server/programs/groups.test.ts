@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { findConfiguration, subtotalsOf } from '@/db/queries/configurations';
 import { groupBreakdownOf, groupChangesOf, groupsInLists } from '@/db/queries/settings';
-import { rowsOfView } from '@/db/queries/list-rows';
+import { pageOfView } from '@/db/queries/list-rows';
 import { listViewOf } from '@/lib/contracts/list-view';
 import { filterOf, rowReader } from '@/lib/server/lists/row-view';
 import { revisionGroups } from '@/lib/server/lists/revision-groups';
@@ -108,7 +108,7 @@ describe('a breakdown of groups', () => {
       const filter = filterOf({ ...listViewOf(new URLSearchParams({ group })) }, [], groups);
       const page = { offset: 0, limit: 10 };
       const order = { column: 'position', descending: false } as const;
-      const inView = await rowsOfView(test.db, revision.id, filter, order, page);
+      const { rows: inView } = await pageOfView(test.db, revision.id, filter, order, page);
       return inView.map(rowReader(IN_SI, groups)).map(({ cells }) => [cells.item, cells.group]);
     };
     expect(await found('Mainplane')).toEqual([

@@ -11,7 +11,6 @@ import { placedFindings } from '@/components/configurations/placed-findings';
 import { type FindingLine, FindingLines } from '@/components/findings/finding-lines';
 import { Declared } from '@/components/lists/declared';
 import { FindingCounts } from '@/components/lists/finding-counts';
-import { GroupTable } from '@/components/lists/group-table';
 import { ListNotices } from '@/components/lists/list-notices';
 import { counted } from '@/components/lists/list-words';
 import { ListSketch } from '@/components/lists/list-sketch';
@@ -26,6 +25,7 @@ import { PageHead, Section } from '@/components/ui/section';
 import { TextLink } from '@/components/ui/text-link';
 import { driversAsked, withDrivers } from '@/lib/drivers/drivers';
 import { toNumbersWithRest } from '@/lib/mass/account';
+import { listViewOf } from '@/lib/contracts/list-view';
 import { CATEGORIES } from '@/lib/mass/component';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { noConversion } from '@/lib/mass/issue-conversion';
@@ -33,7 +33,8 @@ import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { serverDb } from '@/lib/server/database';
 import { reachRevision } from '@/lib/server/lists/reach-list';
 import { typedExample } from '@/lib/server/lists/typed-example';
-import { totalsOfRevision } from '@/lib/server/lists/row-totals';
+import { loadGroups } from '@/lib/server/lists/load-groups';
+import { loadViews } from '@/lib/server/lists/views/load-views';
 import { DriversComing, DriversHere } from '../../drivers-here';
 import { ProgramFrame } from '../../frame';
 import { orNotFound, requireList } from './list-page';
@@ -93,19 +94,16 @@ export default async function ListPage({ params, searchParams }: Props) {
   const revision = await orNotFound(() => reachRevision(db, list, number));
   const issue = frames.issue(revision.frame_issue_id);
   const geometry = frames.geometry(issue.id);
-  const [author, totals, own, source, pinned, row] = await Promise.all([
+  const [author, groups, views, own, source, pinned, row] = await Promise.all([
     findRevisionAuthor(db, revision.id),
-    totalsOfRevision(db, revision.id, revision.frame_issue_id, {
-      declarations: revision.declarations,
-      geometry,
-    }),
+    loadGroups(db, revision, listViewOf(new URLSearchParams()), 'group'),
+    loadViews(db, list, access.person),
     ownColumnsOf(db, revision.id),
     listSource(list, revision, geometry),
     wholesWithRevision(db, revision.id, revision.frame_issue_id),
     exampleRow(db, revision.id),
   ]);
   const wholes = wholesOnPage(revision.number, source, pinned);
-  const here = `${listHref}?revision=${revision.number}`;
   const plain = () => new URLSearchParams({ revision: String(revision.number) });
   const { massUnit, lengthUnit, inertiaUnit } = revision.declarations;
   return (
@@ -171,9 +169,10 @@ export default async function ListPage({ params, searchParams }: Props) {
             declarations={revision.declarations}
             geometry={geometry}
             wholes={wholes}
-            totals={totals.whole}
+            totals={groups.whole}
             rows={revision.rows}
-            groups={totals.groups.map(({ group }) => group)}
+            groups={groups}
+            views={views}
             findings={revision.findings.map(({ rule, message }) => ({ rule, message }))}
             own={own}
             file={revision.file_name}
@@ -181,14 +180,6 @@ export default async function ListPage({ params, searchParams }: Props) {
           />
         </QueryRoot>
       </div>
-      <Section title="Groups">
-        <GroupTable
-          groups={totals.groups}
-          whole={totals.whole}
-          declarations={revision.declarations}
-          hrefOf={(group) => `${here}&group=${encodeURIComponent(group)}#rows`}
-        />
-      </Section>
       <Suspense fallback={<DriversComing />}>
         <DriversHere
           source={Promise.resolve(source)}

@@ -1,4 +1,4 @@
-import { countRows, rowsOfView } from '@/db/queries/list-rows';
+import { pageOfView } from '@/db/queries/list-rows';
 import { offsetOf, type RowPage, ROWS_PER_PAGE } from '@/lib/contracts/list-rows';
 import { listViewOf } from '@/lib/contracts/list-view';
 import { serverDb } from '@/lib/server/database';
@@ -18,13 +18,10 @@ export const GET = programRoute<Params>('lists.read', async ({ request, params, 
   const groups = await revisionGroups(db, revision.id);
   const filter = filterOf(view, revision.findings, groups);
   const offset = offsetOf(query.get('offset'));
-  const [total, rows] = await Promise.all([
-    countRows(db, revision.id, filter),
-    rowsOfView(db, revision.id, filter, orderOf(view, revision.declarations), {
-      offset,
-      limit: ROWS_PER_PAGE,
-    }),
-  ]);
+  const { total, rows } = await pageOfView(db, revision.id, filter, orderOf(view, revision.declarations), {
+    offset,
+    limit: ROWS_PER_PAGE,
+  });
   const page: RowPage = { offset, total, rows: rows.map(rowReader(revision.declarations, groups)) };
   return Response.json(page);
 });
