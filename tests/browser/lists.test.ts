@@ -176,7 +176,9 @@ describe('a weights engineer', () => {
     await page.reload();
     await expect.poll(items).toEqual(['W-2', 'W-1']);
     const part = await downloaded(page, 'Export rows shown');
-    expect(part.name).toBe('lists-flow-wing-revision-1-part.csv');
+    expect(part.name).toMatch(
+      /^lists-flow-wing-revision-1-part_lb_in_[a-z.0-9]+_products-(positive|negative)_aft-right-up\.csv$/,
+    );
     expect(
       part.text
         .split('\r\n')
