@@ -17,7 +17,8 @@ interface TriadSketchProps {
  * symmetry; the sentences beneath say the same.
  */
 export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
-  const { airframeAxes, listAxes, bodyX, origin, example, image, plane, sentences, doubts } = triads;
+  const { airframeAxes, listAxes, bodyX, origin, example, item, image, plane } = triads;
+  const { sentences, doubts } = triads;
   const near = [origin, example, image].filter((one) => one !== null);
   const { datum, isMoved } = shownDatum(near);
   const sheet = sheetFor([datum, ...near], 340, 66);
@@ -26,12 +27,12 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
   return (
     <figure className="grid content-start gap-2">
       <svg
-        viewBox={`0 0 ${sheet.width} ${sheet.height.toFixed(0)}`}
+        viewBox={`-40 0 ${sheet.width + 80} ${sheet.height.toFixed(0)}`}
         role="img"
         aria-label={`Airframe axes and the axes of the ${name.toLowerCase()}. ${sentences.join(' ')}`}
-        className="block w-full max-w-96 overflow-visible"
+        className="block w-full max-w-100"
       >
-        {image === null ? null : <Plane at={sheet.at} plane={plane} about={[...near, datum]} />}
+        <Plane at={sheet.at} plane={plane} about={[...near, datum]} />
         {apart ? <Line from={from} to={listFrom} /> : null}
         {example === null ? null : <Line from={listFrom} to={sheet.at(example)} />}
         {example === null || image === null ? null : <Line from={sheet.at(example)} to={sheet.at(image)} />}
@@ -43,7 +44,7 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
             along={axis}
             length={64}
             className="fill-spin stroke-spin"
-            label={LETTERS[k] ?? ''}
+            label={`${LETTERS[k] ?? ''} ${pointing(axis)}`}
           />
         ))}
         {listAxes.map((axis, k) => (
@@ -53,7 +54,7 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
             along={axis}
             length={apart ? 52 : 38}
             className="fill-sheet stroke-caution"
-            label={LETTERS[k] ?? ''}
+            label={apart ? `${LETTERS[k] ?? ''} ${pointing(axis)}` : (LETTERS[k] ?? '')}
           />
         ))}
         <circle cx={from[0]} cy={from[1]} r="3" className="fill-spin" />
@@ -64,8 +65,8 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
           className="fill-sheet stroke-caution"
           strokeWidth="2"
         />
-        {example === null ? null : <Mark at={sheet.at(example)} isImage={false} />}
-        {image === null ? null : <Mark at={sheet.at(image)} isImage />}
+        {example === null ? null : <Mark at={sheet.at(example)} isImage={false} label={item} />}
+        {image === null ? null : <Mark at={sheet.at(image)} isImage label="" />}
       </svg>
       <figcaption className="grid gap-1 text-note text-ink-2">
         <span>
@@ -73,7 +74,7 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
           {isMoved ? ' (far away, drawn nearer)' : ''}.{' '}
           <span className="text-caution">Open heads: {name.toLowerCase()}, at its origin</span>.
           {example === null ? '' : ' Dot: the example.'}
-          {image === null ? '' : ' Ring: its mirror image.'}
+          {image === null ? '' : ' Ring: its mirror image.'} Shaded: the plane of symmetry.
         </span>
       </figcaption>
       <ul className="measure grid gap-0.5">
@@ -168,15 +169,40 @@ function Arrow({ from, along, length, className, label, dashed = false }: ArrowP
   );
 }
 
-function Mark({ at, isImage }: { readonly at: Point; readonly isImage: boolean }) {
+/** The direction that an arrow comes nearest to; frd. */
+function pointing([ahead, right, down]: Vec3): string {
+  const size = Math.max(Math.abs(ahead), Math.abs(right), Math.abs(down));
+  if (Math.abs(ahead) === size) return ahead > 0 ? 'forward' : 'aft';
+  if (Math.abs(right) === size) return right > 0 ? 'right' : 'left';
+  return down > 0 ? 'down' : 'up';
+}
+
+interface MarkProps {
+  readonly at: Point;
+  readonly isImage: boolean;
+  readonly label: string;
+}
+
+function Mark({ at, isImage, label }: MarkProps) {
   return (
-    <circle
-      cx={at[0]}
-      cy={at[1]}
-      r="5"
-      className={isImage ? 'fill-paper stroke-ink' : 'fill-ink stroke-ink'}
-      strokeWidth="1.5"
-    />
+    <g>
+      <circle
+        cx={at[0]}
+        cy={at[1]}
+        r="5"
+        className={isImage ? 'fill-paper stroke-ink' : 'fill-ink stroke-ink'}
+        strokeWidth="1.5"
+      />
+      <text
+        x={at[0] + 9}
+        y={at[1] - 6}
+        paintOrder="stroke"
+        strokeWidth="4"
+        className="fill-ink stroke-paper text-note"
+      >
+        {label.length > 20 ? `${label.slice(0, 19)}…` : label}
+      </text>
+    </g>
   );
 }
 

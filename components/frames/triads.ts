@@ -37,6 +37,8 @@ export interface Triads {
   readonly bodyX: Vec3;
   readonly origin: Vec3;
   readonly example: Vec3 | null;
+  /** What the example is called; '' without one. */
+  readonly item: string;
   readonly image: Vec3 | null;
   /** How far right of the datum the plane of symmetry lies. */
   readonly plane: number;
@@ -109,6 +111,7 @@ export function triadsOf({ airframe, subject = 'The list', ...input }: TriadsInp
     bodyX: [Math.cos(airframe.incidence), 0, 0 - Math.sin(airframe.incidence)],
     origin: frd(pose.origin),
     example: place && frd(place),
+    item: example?.item ?? '',
     image: image && frd(image),
     plane,
     sentences,

@@ -4,10 +4,19 @@ import { listParameter, programParameter } from '@/lib/contracts/api/parameters'
 import { titleSchema } from '@/lib/contracts/codes';
 import { listDeclarationsSchema } from '@/lib/contracts/list-declarations';
 
+const frameIssue = z
+  .number()
+  .int()
+  .min(1)
+  .describe(
+    'Number of the frame issue that coming revisions are stated in. Left out, the one in force for a new list, else the one it has',
+  );
+
 /** A list as it is to be. Members that do not exist are refused: a mistyped one would leave a default in force unseen. */
 export const listBodySchema = z.strictObject({
   title: titleSchema.describe('For people, at most 200 characters'),
   ...listDeclarationsSchema.shape,
+  frame_issue: frameIssue.optional(),
 });
 
 export const listSchema = z
@@ -16,6 +25,7 @@ export const listSchema = z
     list: z.string().describe('Code of the list'),
     title: z.string(),
     ...listDeclarationsSchema.shape,
+    frame_issue: frameIssue.optional().describe('As it was sent; absent where it was not'),
   })
   .meta({ id: 'List', description: "A mass list and what it declares, in the list's own units" });
 
@@ -41,8 +51,8 @@ export const saveListEndpoint = {
   summary: 'Create a mass list, or change its declarations',
   description:
     'Creates the list, or changes title and declarations for the revisions to come; those that exist keep what they were read ' +
-    'with. The three units have no default. Members left out take their defaults, also in a list that exists. A new list is pinned ' +
-    "to the program's frame issue in force.",
+    'with. The three units have no default. Members left out take their defaults, also in a list that exists. A new list is stated ' +
+    "in the program's frame issue in force unless another is named; where a configuration stands in another, it is converted.",
   scope: 'lists:write',
   pathParameters: z.object({ program: programParameter, list: listParameter }),
   body: {

@@ -118,13 +118,17 @@ describe('the picture of a list frame', () => {
       expect(turn(a, b)).toBeGreaterThan(0);
   });
 
-  it('says the same in its text alternative, and draws plane and image only where something is mirrored', () => {
+  it('says the same in its text alternative, names the example, and draws an image only where something is mirrored', () => {
     const example = { item: 'rib', position: [6, -2, 1], pair: true } as const;
     const pair = markup({ example });
     expect(pair).toMatch(/role="img" aria-label="[^"]*\+x points aft[^"]*mirror image/);
     expect(pair.match(/<circle/g)?.length).toBe(4);
     expect(markup({ example: { ...example, pair: false } }).match(/<circle/g)?.length).toBe(3);
-    expect(markup({ example: { ...example, pair: false } })).not.toContain('stroke-dasharray="6 4"');
+    expect(pair).toContain('>rib</text>');
+    expect(pair).toContain('>x aft</text>');
+    expect(markup({ axes: ['forward', 'left', 'up'], pose: { ...NO_POSE, origin: [9, 0, 0] } })).toContain(
+      '>y left</text>',
+    );
   });
 
   it('draws a datum 10 km away nearer, and says so', () => {

@@ -55,6 +55,11 @@ describe('PUT lists', () => {
     expect(list?.declarations.pose.origin).toEqual([2.54, 0, 0]);
   });
 
+  it('names the frame issue that it is stated in, and says it back', async () => {
+    const { status, body } = await put({ ...WING, frame_issue: 1 });
+    expect([status, body['frame_issue']]).toEqual([200, 1]);
+  });
+
   it.each([
     ['no title', { ...WING, title: undefined }, '/title'],
     ['no unit of mass', { ...WING, mass_unit: undefined }, '/mass_unit'],
@@ -62,6 +67,7 @@ describe('PUT lists', () => {
     ['axes that do not span space', { ...WING, axes: ['aft', 'forward', 'up'] }, '/axes'],
     ['an angle that is text', { ...WING, frame: { yaw: '90' } }, '/frame/yaw'],
     ['a mistyped member', { ...WING, product: 'negative' }, ''],
+    ['a frame issue that there is not', { ...WING, frame_issue: 9 }, '/frame_issue'],
     ['a mistyped member of the frame', { ...WING, frame: { jaw: 90 } }, '/frame'],
   ])('refuses %s, with its JSON pointer', async (_what, body, pointer) => {
     const answer = await put(body);

@@ -21,15 +21,17 @@ export const PUT = apiProgramRoute<ListParams>(
     if (!code.success) {
       throw parametersWrong(code.error.issues.map(({ message }) => ({ parameter: 'list', message })));
     }
-    const { title, ...declared } = await readJson(request, listBodySchema);
+    const { title, frame_issue: frameIssue, ...declared } = await readJson(request, listBodySchema);
     const { created } = await saveList(serverDb(), {
       person: caller.person,
       programId: program.id,
       code: code.data,
       title,
       declarations: declarationsFromBody(declared),
+      ...(frameIssue === undefined ? {} : { frameIssue }),
     });
-    const list = { program: program.code, list: code.data, title, ...declared };
+    const told = frameIssue === undefined ? {} : { frame_issue: frameIssue };
+    const list = { program: program.code, list: code.data, title, ...declared, ...told };
     return respond(saveListEndpoint, created ? 201 : 200, list);
   },
 );
