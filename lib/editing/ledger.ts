@@ -91,8 +91,14 @@ export function problemsByKey(
   const found = new Map<string, readonly CellProblem[]>();
   for (const edit of edits.values()) {
     const { problems } = ledger.entry(edit, edit.kind === 'add' ? null : baseOf(edit.item));
-    const all = [...problems, ...(ofSet.get(keyOf(edit)) ?? [])];
+    const more = ofSet.get(keyOf(edit));
+    const all = more === undefined ? problems : [...problems, ...more.filter((one) => !told(problems, one))];
     if (all.length > 0) found.set(keyOf(edit), all);
   }
   return found;
+}
+
+/** Whether a column's problem is among those that the row itself tells: one a cell is enough. */
+function told(problems: readonly CellProblem[], { column }: CellProblem): boolean {
+  return column !== null && problems.some((one) => one.column === column);
 }

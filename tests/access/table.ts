@@ -131,11 +131,20 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/(workspace)/programs/[program]/lists/[list]/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/lists/[list]/changes/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/lists/[list]/declarations/page.tsx': { page: 'program lists.keep' },
+  'app/(workspace)/programs/[program]/lists/[list]/edit/page.tsx': { page: 'program lists.keep' },
   'app/(workspace)/programs/[program]/lists/[list]/imports/[import]/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/lists/[list]/revisions/page.tsx': { page: 'program lists.read' },
   'app/(workspace)/programs/[program]/lists/[list]/upload/page.tsx': { page: 'program lists.keep' },
 
   'app/api/internal/programs/[program]/lists/example/route.ts': { GET: 'program lists.read' },
+  'app/api/internal/programs/[program]/lists/[list]/draft/route.ts': {
+    GET: 'program lists.keep',
+    PATCH: 'program lists.keep',
+    DELETE: 'program lists.keep',
+  },
+  'app/api/internal/programs/[program]/lists/[list]/draft/move/route.ts': { POST: 'program lists.keep' },
+  'app/api/internal/programs/[program]/lists/[list]/draft/save/route.ts': { POST: 'program lists.keep' },
+  'app/api/internal/programs/[program]/lists/[list]/drafts/route.ts': { GET: 'program lists.read' },
   'app/api/internal/programs/[program]/lists/[list]/edits/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': {
     GET: 'program lists.read',

@@ -29,7 +29,9 @@ export async function mergeDraft(
   choices: readonly Choice[],
 ): Promise<MergedDraft> {
   const base = await baseOfDraft(db, draft);
-  const difference = unlike(base.declarations, onto.declarations);
+  const difference =
+    unlike(base.declarations, onto.declarations) ??
+    (base.frame_issue_id === onto.frame_issue_id ? null : 'another frame issue');
   if (difference !== null) {
     throw new AppError(
       'conflict',

@@ -10,6 +10,7 @@ import { openUploadsOf } from '@/db/queries/mappings';
 import { placedFindings } from '@/components/configurations/placed-findings';
 import { type FindingLine, FindingLines } from '@/components/findings/finding-lines';
 import { Declared } from '@/components/lists/declared';
+import { DraftOffer } from '@/components/lists/editing/draft-offer';
 import { FindingCounts } from '@/components/lists/finding-counts';
 import { ListNotices } from '@/components/lists/list-notices';
 import { counted } from '@/components/lists/list-words';
@@ -31,6 +32,7 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { noConversion } from '@/lib/mass/issue-conversion';
 import { NO_GROWTH, rollUp } from '@/lib/mass/roll-up';
 import { serverDb } from '@/lib/server/database';
+import { loadPresence } from '@/lib/server/lists/draft/load-presence';
 import { reachRevision } from '@/lib/server/lists/reach-list';
 import { typedExample } from '@/lib/server/lists/typed-example';
 import { loadGroups } from '@/lib/server/lists/load-groups';
@@ -119,6 +121,7 @@ export default async function ListPage({ params, searchParams }: Props) {
         }
         actions={
           <>
+            {keeps ? <ButtonLink href={`${listHref}/edit`}>Edit rows</ButtonLink> : null}
             {keeps ? upload : null}
             <ButtonLink href={`${listHref}/revisions`}>See all revisions</ButtonLink>
             {keeps ? <ButtonLink href={`${listHref}/declarations`}>Change declarations</ButtonLink> : null}
@@ -132,6 +135,9 @@ export default async function ListPage({ params, searchParams }: Props) {
         import={newestImport}
         uploads={uploads}
       />
+      <QueryRoot>
+        <DraftOffer start={await loadPresence(db, list, access.person)} route={route} listHref={listHref} />
+      </QueryRoot>
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
         <Section title="Findings" aside={<FindingCounts findings={revision.findings} />}>
           <FindingLines findings={findingsOnPage(revision, list.code, access.program.code)} />
