@@ -45,7 +45,7 @@ export function RowShares({ row, declarations, geometry, wholes }: RowSharesProp
       <h4 className="font-semibold">What it contributes</h4>
       {wholes.length > 1 ? (
         <SelectField
-          label="To"
+          label="Contribution to"
           name="whole"
           value={chosen.key}
           onChange={(event) => setKey(event.target.value)}
@@ -95,6 +95,7 @@ function Shares({
         <tbody>
           {TEN.map((number) => {
             const unit = unitOf(number, units);
+            // The panel is narrow: full precision is on hover, as everywhere.
             const [part, all] = [fromSi(own[number], unit), fromSi(ten[number], unit)];
             return (
               <tr key={number}>
@@ -103,10 +104,10 @@ function Shares({
                   <span className="text-note text-ink-2">{unitLabel(unit)}</span>
                 </RowHead>
                 <Cell side="right">
-                  <Num value={part} digits={5} plus={number !== 'mass'} />
+                  <Num value={part} digits={4} plus={number !== 'mass'} />
                 </Cell>
                 <Cell side="right">
-                  <Num value={all} decimals={sharedDecimals([all])} />
+                  <Num value={all} decimals={sharedDecimals([all], [], 5)} />
                 </Cell>
                 <Cell side="right">
                   <Num value={isPlace(number) || all === 0 ? null : (100 * part) / all} digits={3} />

@@ -12,6 +12,9 @@ import { pictureBounds } from '@/lib/three-views/bounds';
 import { placesOf } from '@/lib/three-views/places';
 import { SHEET, VIEW_NAMES } from '@/lib/three-views/views';
 
+/** Of the aircraft's longer measure. */
+const MARK_ROOM = 0.14;
+
 interface RowViewsProps {
   readonly row: ListRow;
   readonly declarations: ListDeclarations;
@@ -25,9 +28,11 @@ export function RowViews({ row, declarations, geometry, cg }: RowViewsProps) {
   const placed = placedRow(row, declarations);
   if (placed === null) return null;
   const places = placesOf(placed, new Placement(declarations, geometry));
+  // Room for the marks, which are drawn in pixels whatever the scale.
+  const room = MARK_ROOM * Math.max(geometry.length, geometry.span);
   const bounds = pictureBounds(
-    places.map((place) => ({ place, radius: 0 })),
-    [...(cg === null ? [] : [cg]), ...airframeEnds(geometry)],
+    [...places, ...(cg === null ? [] : [cg])].map((place) => ({ place, radius: room })),
+    airframeEnds(geometry),
     geometry,
   );
   return (

@@ -81,13 +81,17 @@ async function pageOf(role: Role, width = 1440): Promise<{ page: Page; context: 
   const { name } = sessionCookie(url);
   await context.addCookies([{ name, value: people.cookies[role].slice(name.length + 1), url }]);
   const page = await context.newPage();
-  page.setDefaultTimeout(15_000);
+  page.setDefaultTimeout(30_000);
   return { page, context };
 }
 
 /** The figure of a line and column of the table of effects, as it is shown at full precision. */
 async function figure(page: Page, line: number, column: number): Promise<number> {
-  const cell = page.locator('#drivers section table tbody tr').nth(line).locator('td').nth(column);
+  const cell = page
+    .locator('#drivers [aria-label^="Effect of"] tbody tr')
+    .nth(line)
+    .locator('td')
+    .nth(column);
   return Number(await cell.locator('data').first().getAttribute('value'));
 }
 const [X, IXZ] = [1, 8];
@@ -140,7 +144,7 @@ describe('what drives a condition', () => {
     await beside.getByRole('img', { name: 'side, from the left' }).waitFor();
     const ixz = beside.getByRole('row', { name: /^Ixz/ }).locator('data').first();
     expect(Number(await ixz.getAttribute('value'))).toBeCloseTo(90, 9);
-    await beside.getByLabel('To').selectOption({ label: 'First, Empty aircraft' });
+    await beside.getByLabel('Contribution to').selectOption({ label: 'First, Empty aircraft' });
     expect(Number(await ixz.getAttribute('value'))).toBeCloseTo(90, 9);
     await context.close();
   });
