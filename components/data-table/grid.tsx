@@ -10,7 +10,9 @@ import { at, bounds, moved, type Selection } from '@/components/data-table/selec
 import { nextSort, type TableView } from '@/components/data-table/view';
 import { usePrinting, useRowHeight } from '@/components/data-table/surroundings';
 import { useRowWindow } from '@/components/data-table/use-row-window';
+import { columnsOnPaper, PAPER_SCALE } from '@/components/data-table/paper';
 import { Button } from '@/components/ui/button';
+import { classes } from '@/components/ui/classes';
 
 interface GridProps<Row> {
   readonly caption: string;
@@ -38,11 +40,14 @@ const MOST_PRINTED = 2000;
 
 /** The ruled grid itself: only the lines in sight are in the document. */
 export function Grid<Row>(props: GridProps<Row>) {
-  const { caption, columns, lines, shown, total, of, view, onView, loading, totals, opens, onPlain } = props;
+  const { caption, lines, shown, total, of, view, onView, loading, totals, opens, onPlain } = props;
   const id = useId();
   const box = useRef<HTMLDivElement>(null);
   const rowHeight = useRowHeight();
   const printing = usePrinting();
+  const paper = useMemo(() => columnsOnPaper(props.columns), [props.columns]);
+  const columns = printing ? paper.columns : props.columns;
+  const drawnWidth = (column: DataColumn<Row>) => columnWidth(column) * (printing ? PAPER_SCALE : 1);
   const subject = props.subject ?? lines;
   const [kept, setKept] = useState<{ readonly subject: unknown; readonly selection: Selection }>();
   const selection = kept?.subject === subject ? kept.selection : at(0, 0);
@@ -101,7 +106,13 @@ export function Grid<Row>(props: GridProps<Row>) {
   };
 
   return (
-    <div ref={box} className="print-whole max-h-[70vh] min-w-0 overflow-auto border-b border-ink-2">
+    <div
+      ref={box}
+      className={classes(
+        'print-whole max-h-[70vh] min-w-0 overflow-auto border-b border-ink-2',
+        paper.isWide && 'print-wide',
+      )}
+    >
       <table
         role="grid"
         tabIndex={0}
@@ -116,11 +127,11 @@ export function Grid<Row>(props: GridProps<Row>) {
         onKeyDown={onKeyDown}
         onCopy={onCopy}
         className="ruled grid-table w-full border-separate border-spacing-0"
-        style={{ minWidth: width }}
+        style={printing ? undefined : { minWidth: width }}
       >
         <colgroup>
           {columns.map((column) => (
-            <col key={column.id} style={{ width: columnWidth(column) }} />
+            <col key={column.id} style={{ width: drawnWidth(column) }} />
           ))}
         </colgroup>
         <GridHead
@@ -159,6 +170,12 @@ export function Grid<Row>(props: GridProps<Row>) {
         </tbody>
         <GridFoot columns={columns} rows={shown} total={total} of={of} totals={totals} />
       </table>
+      {printing && paper.left.length > 0 ? (
+        <p className="pt-2 text-note">
+          Not on this paper, which is too narrow: {paper.left.join(', ')}. Columns chosen, and their order,
+          say which are.
+        </p>
+      ) : null}
       {printing && lines.length > body.length ? (
         <p className="pt-2 text-note">
           The first {body.length} of {lines.length} lines. The CSV export has them all.
