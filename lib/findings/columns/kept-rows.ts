@@ -59,10 +59,6 @@ export class KeptRows {
     return id;
   }
 
-  mass(id: number): number {
-    return this.#numbers[id * NUMBERS] ?? NaN;
-  }
-
   right(id: number): number {
     return this.#numbers[id * NUMBERS + 1] ?? NaN;
   }
@@ -70,11 +66,6 @@ export class KeptRows {
   /** Coordinate k of the place. */
   place(id: number, k: number): number {
     return this.#numbers[id * NUMBERS + 2 + k] ?? NaN;
-  }
-
-  /** Own moment or product k, in the order ixx, iyy, izz, ixy, ixz, iyz. */
-  moment(id: number, k: number): number {
-    return this.#numbers[id * NUMBERS + 5 + k] ?? NaN;
   }
 
   side(id: number): number {

@@ -1,58 +1,66 @@
-import { ItemIndex, hashOf } from '@/lib/ingest/blocks/item-index';
+import { hashOf } from '@/lib/ingest/blocks/item-index';
 
 import { KEPT } from '../bounded-map';
 
-/** Texts put together from pieces, the first so many of which are kept: `BoundedMap` for keys in bytes. */
+const SLOTS = 1 << 16;
+
+/**
+ * Names in bytes, each within a class, numbered in the order in which they are kept: the keys of a `BoundedMap` without making texts of
+ * them.
+ */
 export class NameIndex {
-  readonly #index = new ItemIndex();
-  readonly #ids = new Int32Array(KEPT);
-  #scratch = new Uint8Array(256);
-  #length = 0;
+  /** Ordinal of a name + 1. */
+  readonly #table = new Uint16Array(SLOTS);
+  readonly #hashes = new Int32Array(KEPT);
+  readonly #classes = new Int32Array(KEPT);
+  readonly #starts = new Int32Array(KEPT + 1);
+  #bytes = new Uint8Array(1 << 16);
+  #count = 0;
+  #slot = 0;
+  #hash = 0;
 
-  /** Begins a key. */
-  begin(): this {
-    this.#length = 0;
-    return this;
+  get isFull(): boolean {
+    return this.#count === KEPT;
   }
 
-  byte(byte: number): this {
-    if (this.#length === this.#scratch.length) this.#enlarge();
-    this.#scratch[this.#length] = byte;
-    this.#length += 1;
-    return this;
-  }
-
-  number(value: number): this {
-    return this.byte(value & 0xff)
-      .byte((value >>> 8) & 0xff)
-      .byte((value >>> 16) & 0xff);
-  }
-
-  bytes(bytes: Uint8Array, start: number, end: number): this {
-    while (this.#length + end - start > this.#scratch.length) this.#enlarge();
-    const to = this.#length - start;
-    for (let at = start; at < end; at += 1) this.#scratch[to + at] = bytes[at] ?? 0;
-    this.#length += end - start;
-    return this;
-  }
-
-  /** What is kept under the key; -1 where there is nothing, and then `id` is kept under it unless too many are. */
-  known(id: () => number): number {
-    const index = this.#index;
-    const hash = hashOf(this.#scratch, 0, this.#length);
-    if (index.count >= KEPT) {
-      const found = index.find(this.#scratch, 0, this.#length, hash);
-      return found === -1 ? -1 : (this.#ids[found] ?? -1);
+  /** The number of a name; -1 for one that is not kept, and then `keep` may follow. */
+  find(bytes: Uint8Array, start: number, end: number, ofClass: number): number {
+    const hash = hashOf(bytes, start, end) ^ Math.imul(ofClass, 0x9e3779b1);
+    const table = this.#table;
+    let slot = (hash ^ (hash >>> 16)) & (SLOTS - 1);
+    for (let entry = table[slot] ?? 0; entry !== 0; entry = table[slot] ?? 0) {
+      if (this.#hashes[entry - 1] === hash && this.#isAt(entry - 1, bytes, start, end, ofClass))
+        return entry - 1;
+      slot = (slot + 1) & (SLOTS - 1);
     }
-    const found = index.add(this.#scratch, 0, this.#length, hash);
-    if (found !== -1) return this.#ids[found] ?? -1;
-    this.#ids[index.count - 1] = id();
+    this.#slot = slot;
+    this.#hash = hash;
     return -1;
   }
 
-  #enlarge(): void {
-    const larger = new Uint8Array(2 * this.#scratch.length);
-    larger.set(this.#scratch);
-    this.#scratch = larger;
+  /** Keeps the name that was not found last; returns its number. */
+  keep(bytes: Uint8Array, start: number, end: number, ofClass: number): number {
+    const at = this.#starts[this.#count] ?? 0;
+    const length = end - start;
+    if (at + length > this.#bytes.length) {
+      const larger = new Uint8Array(2 * (at + length));
+      larger.set(this.#bytes);
+      this.#bytes = larger;
+    }
+    for (let k = 0; k < length; k += 1) this.#bytes[at + k] = bytes[start + k] ?? 0;
+    this.#hashes[this.#count] = this.#hash;
+    this.#classes[this.#count] = ofClass;
+    this.#count += 1;
+    this.#starts[this.#count] = at + length;
+    this.#table[this.#slot] = this.#count;
+    return this.#count - 1;
+  }
+
+  #isAt(ordinal: number, bytes: Uint8Array, start: number, end: number, ofClass: number): boolean {
+    const at = this.#starts[ordinal] ?? 0;
+    const length = end - start;
+    if (this.#classes[ordinal] !== ofClass || this.#starts[ordinal + 1] !== at + length) return false;
+    for (let k = 0; k < length; k += 1) if (this.#bytes[at + k] !== bytes[start + k]) return false;
+    return true;
   }
 }

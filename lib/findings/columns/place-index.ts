@@ -8,9 +8,10 @@ export class PlaceIndex {
   readonly #numbers = new Float64Array(4 * KEPT);
   readonly #ids = new Int32Array(KEPT);
   #count = 0;
+  #slot = 0;
 
-  /** What is kept under the key; -1 where there is nothing, and then `id` is kept under it unless too many are. */
-  known(a: number, b: number, c: number, mass: number, id: () => number): number {
+  /** What is kept under the key; -1 where nothing is, and then `keep` may follow. */
+  find(a: number, b: number, c: number, mass: number): number {
     const numbers = this.#numbers;
     let hash = Math.imul(Math.imul(Math.imul(a | 0, 0x85ebca6b) ^ (b | 0), 0xc2b2ae35) ^ (c | 0), 0x2c1b3c6d);
     hash ^= hash >>> 15;
@@ -21,12 +22,20 @@ export class PlaceIndex {
       if (isSame && isSameMass(numbers[at + 3] ?? NaN, mass)) return this.#ids[entry - 1] ?? -1;
       slot = (slot + 1) & (SLOTS - 1);
     }
-    if (this.#count === KEPT) return -1;
-    numbers.set([a, b, c, mass], 4 * this.#count);
-    this.#ids[this.#count] = id();
-    this.#count += 1;
-    this.#table[slot] = this.#count;
+    this.#slot = slot;
     return -1;
+  }
+
+  get isFull(): boolean {
+    return this.#count === KEPT;
+  }
+
+  /** Keeps a number under the key that was not found last. */
+  keep(id: number, a: number, b: number, c: number, mass: number): void {
+    this.#numbers.set([a, b, c, mass], 4 * this.#count);
+    this.#ids[this.#count] = id;
+    this.#count += 1;
+    this.#table[this.#slot] = this.#count;
   }
 }
 

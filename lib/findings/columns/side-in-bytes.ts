@@ -18,7 +18,9 @@ function isLetter(byte: number): boolean {
 /** Letters with which, after a side's name, `namedSide` may see another sense: hand, thread, screw, angle, over, another name. */
 const letters = (text: string): Uint8Array =>
   Uint8Array.from({ length: 256 }, (_, byte) => (text.includes(String.fromCharCode(byte | LOWER)) ? 1 : 0));
-const APART = letters('htsaolr');
+const AFTER_LEFT = letters('htso');
+const AFTER_RIGHT = letters('htsa');
+const AFTER_HAND = letters('hts');
 const JOINED = letters('holr');
 
 /**
@@ -37,8 +39,10 @@ export function sideInBytes(bytes: Uint8Array, start: number, end: number): numb
       const next = bytes[at + 1] ?? 0;
       if (JOINED[next] === 1) return ASK_THE_TEXT;
       if (isLetter(next)) continue;
-      if ((next === 32 || next === 45) && at + 2 < end && APART[bytes[at + 2] ?? 0] === 1)
-        return ASK_THE_TEXT;
+      if ((next === 32 || next === 45) && at + 2 < end) {
+        const others = lower === H ? AFTER_HAND : at - from === 3 ? AFTER_LEFT : AFTER_RIGHT;
+        if (others[bytes[at + 2] ?? 0] === 1) return ASK_THE_TEXT;
+      }
     }
     if (from > start && isLetter(bytes[from - 1] ?? 0)) continue;
     found |= ((bytes[from] ?? 0) | LOWER) === L ? NAMES_LEFT : NAMES_RIGHT;

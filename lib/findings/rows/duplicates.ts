@@ -1,11 +1,11 @@
 import { normVec, subVec } from '@/lib/numerics/vec3';
 
 import { BoundedMap, KEPT } from '../bounded-map';
-import { addName } from '../columns/add-name';
 import { type CheckBlock } from '../columns/check-block';
 import { type KeptRow } from '../columns/kept-rows';
 import { NameIndex } from '../columns/name-index';
 import { PlaceIndex } from '../columns/place-index';
+import { RowName } from '../columns/row-names';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
 import { BlockBook, Book } from '../shared-books';
@@ -89,15 +89,21 @@ class RepeatBlocks extends BlockBook {
     this.found = [];
     const { rows, counted: isCounted, place, right, placement } = block;
     const { mass: masses } = rows.numbers;
+    const known = this.#known;
     const tenths = (value: number | undefined): number => Math.round(1e4 * (value ?? NaN));
     const [first, second] = [0, 1, 2].filter((k) => k !== placement.lateral);
     const [a, b] = [place[first === 1 ? 1 : 0], place[second === 1 ? 1 : 2]];
     for (let row = 0; row < rows.rows; row += 1) {
       const mass = masses[row] ?? NaN;
       if (isCounted[row] === 0 || mass === 0) continue;
-      const [along, up, across] = [tenths(a[row]), tenths(b[row]), tenths(Math.abs(right[row] ?? NaN))];
-      const before = this.#known.known(along, up, across, mass, () => block.kept.keep(block, row));
-      if (before === -1) continue;
+      const along = tenths(a[row]);
+      const up = tenths(b[row]);
+      const across = tenths(Math.abs(right[row] ?? NaN));
+      const before = known.find(along, up, across, mass);
+      if (before === -1) {
+        if (!known.isFull) known.keep(block.kept.keep(block, row), along, up, across, mass);
+        continue;
+      }
       const facts = block.facts(row);
       this.found.push({
         row: facts,
@@ -216,6 +222,9 @@ export const nearDuplicate: RowRule = {
       );
     };
     const names = new NameIndex();
+    const name = new RowName();
+    /** Of the names in blocks, by their numbers. */
+    const [firstMass, firstRow] = [new Float64Array(KEPT), new Int32Array(KEPT)];
     return {
       block: (block) => {
         const { rows, counted: isCounted, place, kept } = block;
@@ -223,10 +232,18 @@ export const nearDuplicate: RowRule = {
         for (let row = 0; row < rows.rows; row += 1) {
           const mass = masses[row] ?? NaN;
           if (isCounted[row] === 0 || mass === 0) continue;
-          names.begin().number(rows.group[row] ?? 0);
-          addName(names, rows, row);
-          const before = names.known(() => kept.keep(block, row));
-          if (before === -1 || Math.abs(mass / kept.mass(before) - 1) > NEAR_MASS) continue;
+          const group = rows.group[row] ?? 0;
+          name.take(rows, row);
+          const known = names.find(name.bytes, name.start, name.end, group);
+          if (known === -1) {
+            if (names.isFull) continue;
+            const number = names.keep(name.bytes, name.start, name.end, group);
+            firstMass[number] = mass;
+            firstRow[number] = kept.keep(block, row);
+            continue;
+          }
+          if (Math.abs(mass / (firstMass[known] ?? NaN) - 1) > NEAR_MASS) continue;
+          const before = firstRow[known] ?? -1;
           const isNear = place.every(
             (along, k) => Math.abs((along[row] ?? NaN) - kept.place(before, k)) <= NEAR_PLACE,
           );

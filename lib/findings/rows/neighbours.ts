@@ -122,13 +122,15 @@ export class PlaceBlockBook extends BlockBook {
     for (let row = 0; row < rows.rows; row += 1) {
       if (isCounted[row] === 0 || mass[row] === 0) continue;
       const spread = this.#spreadOf(rows, rows.group[row] ?? 0);
+      const isInX = spread[0].pass(x[row] ?? NaN);
+      const isInY = spread[1].pass(y[row] ?? NaN);
+      const isInZ = spread[2].pass(z[row] ?? NaN);
+      if (isInX && isInY && isInZ) continue;
       const position: Vec3 = [x[row] ?? NaN, y[row] ?? NaN, z[row] ?? NaN];
-      let item: string | null = null;
-      for (const axis of AXES) {
-        if (spread[axis].pass(position[axis])) continue;
-        item ??= rows.text('item', row) ?? '';
-        spread[axis].add(position[axis], { item, position });
-      }
+      const of = { item: rows.text('item', row) ?? '', position };
+      if (!isInX) spread[0].add(position[0], of);
+      if (!isInY) spread[1].add(position[1], of);
+      if (!isInZ) spread[2].add(position[2], of);
     }
   }
 

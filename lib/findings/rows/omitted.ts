@@ -5,7 +5,6 @@ import { type RowRule } from '../rule';
 import { counted, inUnit, shown } from '../watch';
 
 const GROUPS = 1000;
-const AXES = [0, 1, 2] as const;
 
 /** What rows without moments could add to tr S of the list, as a share, before it is worth saying. */
 const OMITTED = 0.02;
@@ -42,10 +41,12 @@ export const omittedInertia: RowRule = {
     let own = 0;
     /** By the number of a group in blocks. */
     const numbered: Masses[] = [];
-    const take = (sums: Masses, all: number, at: Vec3, isBare: boolean): void => {
+    const take = (sums: Masses, all: number, x: number, y: number, z: number, isBare: boolean): void => {
       sums.all += all;
-      for (const k of AXES) sums.first[k] += all * at[k];
-      sums.second += all * (at[0] ** 2 + at[1] ** 2 + at[2] ** 2);
+      sums.first[0] += all * x;
+      sums.first[1] += all * y;
+      sums.first[2] += all * z;
+      sums.second += all * (x ** 2 + y ** 2 + z ** 2);
       if (!isBare) return;
       sums.bare += all;
       sums.bareRows += 1;
@@ -57,10 +58,11 @@ export const omittedInertia: RowRule = {
           const one = mass[row] ?? NaN;
           if (isCounted[row] === 0 || one <= 0) continue;
           const group = rows.group[row] ?? 0;
-          const position: Vec3 = [x[row] ?? NaN, y[row] ?? NaN, z[row] ?? NaN];
-          origin ??= position;
+          origin ??= [x[row] ?? NaN, y[row] ?? NaN, z[row] ?? NaN];
+          const alongX = (x[row] ?? NaN) - origin[0];
+          const alongY = (y[row] ?? NaN) - origin[1];
+          const alongZ = (z[row] ?? NaN) - origin[2];
           const pieces = quantity[row] ?? NaN;
-          const at: Vec3 = [position[0] - origin[0], position[1] - origin[1], position[2] - origin[2]];
           own += (pieces * ((ixx[row] ?? NaN) + (iyy[row] ?? NaN) + (izz[row] ?? NaN))) / 2;
           let sums = numbered[group];
           if (sums === undefined) {
@@ -70,8 +72,8 @@ export const omittedInertia: RowRule = {
             numbered[group] = sums;
           }
           const isBare = rows.hasMoments[row] === 0;
-          take(sums, one * pieces, at, isBare);
-          take(whole, one * pieces, at, isBare);
+          take(sums, one * pieces, alongX, alongY, alongZ, isBare);
+          take(whole, one * pieces, alongX, alongY, alongZ, isBare);
         }
       },
       see: (row) => {
@@ -83,7 +85,7 @@ export const omittedInertia: RowRule = {
         own += (quantity * (moments.ixx + moments.iyy + moments.izz)) / 2;
         const sums = groups.get(group) ?? nothing();
         groups.set(group, sums);
-        for (const each of [sums, whole]) take(each, all, at, !row.hasOwnMoments);
+        for (const each of [sums, whole]) take(each, all, at[0], at[1], at[2], !row.hasOwnMoments);
       },
       report: () => {
         const total = aboutCentre(whole) + own;

@@ -8,9 +8,8 @@ import { BoundedMap, KEPT } from '../bounded-map';
 import { type CheckBlock } from '../columns/check-block';
 import { type KeptRow } from '../columns/kept-rows';
 import { NameIndex } from '../columns/name-index';
-import { addNameWithoutSide } from '../columns/name-without-side';
+import { RowName } from '../columns/row-names';
 import { ASK_THE_TEXT, NAMES_NO_SIDE } from '../columns/side-in-bytes';
-import { encoded } from '../columns/text-bytes';
 import { withoutSide } from '../named-side';
 import { type RowFacts } from '../row-facts';
 import { type RowRule, type Watch, type WatchedList } from '../rule';
@@ -99,8 +98,9 @@ function twinOfKept({ item, side, right, mass, moments, turn }: KeptRow): Twin {
 /** The same of rows that come in blocks: `found` are those of the block at hand whose twin is not plainly like them. */
 class TwinBlocks extends BlockBook {
   found: { readonly row: RowFacts; readonly twins: Twins }[] = [];
-  readonly #numbers = new NameIndex();
-  readonly #names = new NameIndex();
+  readonly #numbers = new FirstRows();
+  readonly #names = new FirstRows();
+  readonly #name = new RowName();
 
   protected take(block: CheckBlock): void {
     this.found = [];
@@ -111,49 +111,71 @@ class TwinBlocks extends BlockBook {
       if (isCounted[row] === 0 || mass[row] === 0) continue;
       const hasNumber = start[row] !== end[row];
       const told = side[row] === ASK_THE_TEXT ? facts(row).side !== null : side[row] !== NAMES_NO_SIDE;
-      let [byNumber, byName] = [-1, -1];
-      if (hasNumber) byNumber = this.#byNumber(block, row);
-      if (told) byName = this.#byName(block, row);
+      const byNumber = hasNumber ? this.#byNumber(block, row) : -1;
+      const byName = told ? this.#byName(block, row) : -1;
       const isPlain =
-        (byNumber === -1 || isAlike(block, row, byNumber)) &&
-        (byName === -1 || (isAlike(block, row, byName) && !mayBeMirrored(block, row, byName)));
+        (byNumber === -1 || this.#numbers.isAlike(block, row, byNumber)) &&
+        (byName === -1 ||
+          (this.#names.isAlike(block, row, byName) && !mayBeMirrored(block, row, this.#names.row(byName))));
       if (isPlain) continue;
-      const twin = (id: number): Twin | undefined => (id === -1 ? undefined : twinOfKept(kept.row(id)));
-      const twins = { now: twinOf(facts(row)), byNumber: twin(byNumber), byName: twin(byName) };
+      const twin = (rowsOf: FirstRows, known: number): Twin | undefined =>
+        known === -1 ? undefined : twinOfKept(kept.row(rowsOf.row(known)));
+      const twins = {
+        now: twinOf(facts(row)),
+        byNumber: twin(this.#numbers, byNumber),
+        byName: twin(this.#names, byName),
+      };
       this.found.push({ row: facts(row), twins });
     }
   }
 
   #byNumber(block: CheckBlock, row: number): number {
-    const key = this.#numbers.begin();
-    const { rows } = block;
-    const number = rows.textBytes('part_number', row);
-    const revision = rows.textBytes('part_revision', row);
-    // A NUL stands in no text.
-    key.bytes(number, 0, number.length).byte(0).bytes(revision, 0, revision.length);
-    return key.known(() => block.kept.keep(block, row));
+    this.#name.takeNumber(block.rows, row);
+    return this.#numbers.find(this.#name, block, row, 0);
   }
 
   #byName(block: CheckBlock, row: number): number {
-    const { rows } = block;
-    const key = this.#names.begin().number(rows.group[row] ?? 0);
-    if (!addNameWithoutSide(key, rows, row)) {
-      const name = encoded(withoutSide(block.facts(row).name));
-      key.bytes(name, 0, name.length);
-    }
-    return key.known(() => block.kept.keep(block, row));
+    const name = this.#name;
+    if (!name.takeWithoutSide(block.rows, row)) name.takeText(withoutSide(block.facts(row).name));
+    return this.#names.find(name, block, row, block.rows.group[row] ?? 0);
+  }
+}
+
+/** The first row of each name, with what most rows are compared by close at hand. */
+class FirstRows {
+  readonly #index = new NameIndex();
+  readonly #mass = new Float64Array(KEPT);
+  readonly #sum = new Float64Array(KEPT);
+  readonly #rows = new Int32Array(KEPT);
+
+  /** The number of the name, or -1: then the row is its first, and kept as such. */
+  find({ bytes, start, end }: RowName, block: CheckBlock, row: number, ofClass: number): number {
+    const known = this.#index.find(bytes, start, end, ofClass);
+    if (known !== -1 || this.#index.isFull) return known;
+    const number = this.#index.keep(bytes, start, end, ofClass);
+    this.#mass[number] = block.rows.numbers.mass[row] ?? NaN;
+    this.#sum[number] = sumAt(block.rows, row);
+    this.#rows[number] = block.kept.keep(block, row);
+    return -1;
+  }
+
+  /** The number under which the first row was kept. */
+  row(number: number): number {
+    return this.#rows[number] ?? -1;
+  }
+
+  /** Whether mass and moments are so near to the first row's that no factor of a unit lies between, nor anything else to speak of. */
+  isAlike({ rows }: CheckBlock, row: number, number: number): boolean {
+    if (!(Math.abs((rows.numbers.mass[row] ?? NaN) / (this.#mass[number] ?? NaN) - 1) < AT_FACTOR))
+      return false;
+    const sum = sumAt(rows, row);
+    const former = this.#sum[number] ?? NaN;
+    return sum === 0 || former === 0 || Math.abs(sum / former - 1) < SAME_PART;
   }
 }
 
 const sumAt = ({ numbers: { ixx, iyy, izz } }: CheckBlock['rows'], row: number): number =>
   (ixx[row] ?? NaN) + (iyy[row] ?? NaN) + (izz[row] ?? NaN);
-
-/** Whether mass and moments are so near to a kept row's that no factor of a unit lies between, nor anything else to speak of. */
-function isAlike({ rows, kept }: CheckBlock, row: number, id: number): boolean {
-  if (!(Math.abs((rows.numbers.mass[row] ?? NaN) / kept.mass(id) - 1) < AT_FACTOR)) return false;
-  const [sum, former] = [sumAt(rows, row), kept.moment(id, 0) + kept.moment(id, 1) + kept.moment(id, 2)];
-  return sum === 0 || former === 0 || Math.abs(sum / former - 1) < SAME_PART;
-}
 
 /** Whether a row and a kept one may be mirror images with products. */
 function mayBeMirrored({ rows, kept, right, side }: CheckBlock, row: number, id: number): boolean {
