@@ -139,7 +139,7 @@ export function TickedGroupsForm({ action, program, offered, words }: TickedForm
     <form action={send} className="grid gap-4">
       <FormAnswer state={state} />
       <input type="hidden" name="program" value={program} />
-      <ul className="grid gap-x-8 sm:grid-cols-2 xl:grid-cols-3">
+      <ul className="grid max-h-[60vh] gap-x-8 overflow-y-auto sm:grid-cols-2 xl:grid-cols-3">
         {offered.map(({ path, words: about }, index) => (
           <li key={path}>
             <label className="flex items-start gap-2 py-1 pointer-coarse:py-2.5">
