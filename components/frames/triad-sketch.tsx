@@ -25,68 +25,74 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
   const [from, listFrom] = [sheet.at(datum), sheet.at(origin)];
   const apart = Math.hypot(from[0] - listFrom[0], from[1] - listFrom[1]) > 3;
   return (
-    <figure className="grid content-start gap-2">
-      <svg
-        viewBox={`-40 0 ${sheet.width + 80} ${sheet.height.toFixed(0)}`}
-        role="img"
-        aria-label={`Airframe axes and the axes of the ${name.toLowerCase()}. ${sentences.join(' ')}`}
-        className="block w-full max-w-100"
-      >
-        <Plane at={sheet.at} plane={plane} about={[...near, datum]} />
-        {apart ? <Line from={from} to={listFrom} /> : null}
-        {example === null ? null : <Line from={listFrom} to={sheet.at(example)} />}
-        {example === null || image === null ? null : <Line from={sheet.at(example)} to={sheet.at(image)} />}
-        <Arrow from={from} along={bodyX} length={92} className="stroke-ink-2" dashed label="body x" />
-        {airframeAxes.map((axis, k) => (
-          <Arrow
-            key={LETTERS[k]}
-            from={from}
-            along={axis}
-            length={64}
-            className="fill-spin stroke-spin"
-            label={`${LETTERS[k] ?? ''} ${pointing(axis)}`}
-          />
-        ))}
-        {listAxes.map((axis, k) => (
-          <Arrow
-            key={LETTERS[k]}
-            from={listFrom}
-            along={axis}
-            length={apart ? 52 : 38}
-            className="fill-sheet stroke-caution"
-            label={apart ? `${LETTERS[k] ?? ''} ${pointing(axis)}` : (LETTERS[k] ?? '')}
-          />
-        ))}
-        <circle cx={from[0]} cy={from[1]} r="3" className="fill-spin" />
-        <circle
-          cx={listFrom[0]}
-          cy={listFrom[1]}
-          r="3"
-          className="fill-sheet stroke-caution"
-          strokeWidth="2"
-        />
-        {example === null ? null : <Mark at={sheet.at(example)} isImage={false} label={item} />}
-        {image === null ? null : <Mark at={sheet.at(image)} isImage label="" />}
-      </svg>
-      <figcaption className="grid gap-1 text-note text-ink-2">
-        <span>
-          {SEEN_FROM} <span className="text-spin">Filled heads: airframe, at its datum</span>
-          {isMoved ? ' (far away, drawn nearer)' : ''}.{' '}
-          <span className="text-caution">Open heads: {name.toLowerCase()}, at its origin</span>.
-          {example === null ? '' : ' Dot: the example.'}
-          {image === null ? '' : ' Ring: its mirror image.'} Shaded: the plane of symmetry.
-        </span>
-      </figcaption>
-      <ul className="measure grid gap-0.5">
-        {doubts.map((doubt) => (
-          <li key={doubt} className="font-semibold text-caution">
-            {doubt}
-          </li>
-        ))}
-        {sentences.map((sentence) => (
-          <li key={sentence}>{sentence}</li>
-        ))}
-      </ul>
+    <figure className="@container">
+      <div className="grid items-start gap-x-6 gap-y-2 @2xl:grid-cols-[minmax(0,21rem)_1fr]">
+        <div className="grid gap-2">
+          <svg
+            viewBox={`-40 0 ${sheet.width + 80} ${sheet.height.toFixed(0)}`}
+            role="img"
+            aria-label={`Airframe axes and the axes of the ${name.toLowerCase()}. ${sentences.join(' ')}`}
+            className="block w-full max-w-100"
+          >
+            <Plane at={sheet.at} plane={plane} about={[...near, datum]} />
+            {apart ? <Line from={from} to={listFrom} /> : null}
+            {example === null ? null : <Line from={listFrom} to={sheet.at(example)} />}
+            {example === null || image === null ? null : (
+              <Line from={sheet.at(example)} to={sheet.at(image)} />
+            )}
+            <Arrow from={from} along={bodyX} length={92} className="stroke-ink-2" dashed label="body x" />
+            {airframeAxes.map((axis, k) => (
+              <Arrow
+                key={LETTERS[k]}
+                from={from}
+                along={axis}
+                length={64}
+                className="fill-spin stroke-spin"
+                label={`${LETTERS[k] ?? ''} ${pointing(axis)}`}
+              />
+            ))}
+            {listAxes.map((axis, k) => (
+              <Arrow
+                key={LETTERS[k]}
+                from={listFrom}
+                along={axis}
+                length={apart ? 52 : 38}
+                className="fill-sheet stroke-caution"
+                label={apart ? `${LETTERS[k] ?? ''} ${pointing(axis)}` : (LETTERS[k] ?? '')}
+              />
+            ))}
+            <circle cx={from[0]} cy={from[1]} r="3" className="fill-spin" />
+            <circle
+              cx={listFrom[0]}
+              cy={listFrom[1]}
+              r="3"
+              className="fill-sheet stroke-caution"
+              strokeWidth="2"
+            />
+            {example === null ? null : <Mark at={sheet.at(example)} isImage={false} label={item} />}
+            {image === null ? null : <Mark at={sheet.at(image)} isImage label="" />}
+          </svg>
+          <figcaption className="grid gap-1 text-note text-ink-2">
+            <span>
+              {SEEN_FROM} <span className="text-spin">Filled heads: airframe, at its datum</span>
+              {isMoved ? ' (far away, drawn nearer)' : ''}.{' '}
+              <span className="text-caution">Open heads: {name.toLowerCase()}, at its origin</span>.
+              {example === null ? '' : ' Dot: the example.'}
+              {image === null ? '' : ' Ring: its mirror image.'} Shaded: the plane of symmetry.
+            </span>
+          </figcaption>
+        </div>
+        <ul className="measure grid gap-0.5">
+          {doubts.map((doubt) => (
+            <li key={doubt} className="font-semibold text-caution">
+              {doubt}
+            </li>
+          ))}
+          {sentences.map((sentence) => (
+            <li key={sentence}>{sentence}</li>
+          ))}
+        </ul>
+      </div>
     </figure>
   );
 }

@@ -139,9 +139,18 @@ export default async function ListPage({ params, searchParams }: Props) {
         <DraftOffer start={await loadPresence(db, list, access.person)} route={route} listHref={listHref} />
       </QueryRoot>
       <div className="grid items-start gap-8 lg:grid-cols-[2fr_1fr]">
-        <Section title="Findings" aside={<FindingCounts findings={revision.findings} />}>
-          <FindingLines findings={findingsOnPage(revision, list.code, access.program.code)} />
-        </Section>
+        <div className="grid min-w-0 gap-8">
+          <Section title="Findings" aside={<FindingCounts findings={revision.findings} />}>
+            <FindingLines findings={findingsOnPage(revision, list.code, access.program.code)} />
+          </Section>
+          <Section title="Where the list lies">
+            <ListSketch
+              declarations={revision.declarations}
+              frame={geometry}
+              example={row === undefined ? null : typedExample(row, revision.declarations)}
+            />
+          </Section>
+        </div>
         <Section title="As declared">
           <Declared declarations={revision.declarations} issue={issue} />
           {inForce === undefined || inForce.id === issue.id ? null : (
@@ -155,11 +164,6 @@ export default async function ListPage({ params, searchParams }: Props) {
               ) : null}
             </p>
           )}
-          <ListSketch
-            declarations={revision.declarations}
-            frame={geometry}
-            example={row === undefined ? null : typedExample(row, revision.declarations)}
-          />
         </Section>
       </div>
       <div id="rows" className="grid min-w-0 gap-8">
