@@ -53,7 +53,7 @@ const LETTERS = ['x', 'y', 'z'] as const;
 /** How a list's frame lies in the airframe, for the picture and for its words. */
 export function triadsOf({ airframe, subject = 'The list', ...input }: TriadsInput): Triads {
   const { axes, pose, extent, example, unit } = input;
-  const ofSubject = subject === 'The list' ? 'the list' : subject;
+  const ofSubject = `${subject.slice(0, 1).toLowerCase()}${subject.slice(1)}`;
   const frameName = subject === 'The list' ? 'the airframe' : 'the new frame';
   const matrix = listToAirframe(axes, pose, airframe.axes);
   const toFrd = toForwardRightDown(airframe.axes);

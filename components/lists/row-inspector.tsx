@@ -1,6 +1,7 @@
 import { OwnTensor } from '@/components/lists/own-tensor';
 import { rowFieldGroups, type RowField, type RowFieldGroup } from '@/components/lists/row-fields';
-import { placeInAirframe } from '@/components/lists/row-place';
+import { useFrameInForce } from '@/components/lists/frame-in-force';
+import { placeInAirframe, placeInForce } from '@/components/lists/row-place';
 import { RowShares, type WholeOnPage } from '@/components/lists/row-shares';
 import { RowViews } from '@/components/lists/row-views';
 import { DefinitionList, type Definition } from '@/components/ui/definition-list';
@@ -25,6 +26,7 @@ interface RowInspectorProps {
 /** What one row says, in full: fields that hold something, its own tensor, its place in the airframe, where it came from. */
 export function RowInspector({ row, declarations, geometry, wholes, file }: RowInspectorProps) {
   const own = Object.entries(row.own);
+  const inForce = useFrameInForce();
   const fieldGroups = rowFieldGroups(declarations);
   const group = ({ title, fields }: RowFieldGroup) => (
     <Fields key={title} title={title} items={fields.flatMap((field) => stated(field, row))} />
@@ -43,6 +45,12 @@ export function RowInspector({ row, declarations, geometry, wholes, file }: RowI
       {fieldGroups.slice(2).map(group)}
       <OwnTensor row={row} declarations={declarations} />
       <Fields title="Place in the airframe" items={placeInAirframe(row, declarations, geometry)} />
+      {inForce === null ? null : (
+        <Fields
+          title={`Place in frame issue ${inForce.number}, in force`}
+          items={placeInForce(row, declarations, geometry, inForce)}
+        />
+      )}
       <Fields title="Columns of the list's own" items={own.map(([term, value]) => ({ term, value }))} />
     </div>
   );
