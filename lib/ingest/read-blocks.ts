@@ -47,6 +47,7 @@ export async function readMassListBlocks(
     whole = await reading.run();
   } catch (error) {
     if (!(error instanceof CsvFault)) throw error;
+    await reading.flush();
     log.add(error.problem);
     whole = false;
   } finally {
@@ -120,13 +121,13 @@ class BlockReading {
         this.#tell(feed.before + feed.filled);
         break;
       }
-      await this.#flush();
+      await this.flush();
       await feed.fill(at);
       this.#free = FEED_BYTES;
       at = 0;
       this.#tell(feed.before);
     }
-    await this.#flush();
+    await this.flush();
     refuseEmpty(this.log, this.#hasHeader, this.#records);
     return true;
   }
@@ -164,7 +165,7 @@ class BlockReading {
     for (;;) {
       at = parser.parse(this.#feed.buffer, at, limit);
       if (parser.stop !== 'full') break;
-      await this.#flush();
+      await this.flush();
     }
     this.#line = parser.line;
     this.#records = parser.records;
@@ -197,7 +198,7 @@ class BlockReading {
     this.#records += 1;
     const component = this.#list.takeRow(record);
     if (component === null) return true;
-    if (this.#block.rows === BLOCK_ROWS) await this.#flush();
+    if (this.#block.rows === BLOCK_ROWS) await this.flush();
     this.#free = this.#block.put(component, record.line, this.#groups.numberOf(component.group), this.#free);
     this.#settled = this.#block.rows;
     return true;
@@ -205,7 +206,7 @@ class BlockReading {
 
   /** Reads the rest of the file as text; `within` says that `from` is where a record begins after the first. */
   async #readAsText(from: number, within: boolean): Promise<boolean> {
-    await this.#flush();
+    await this.flush();
     const { recordLength } = this.#limits;
     const start = { line: this.#line, bytes: this.#feed.before + from, delimiter: this.#delimiter };
     const batches = readRecords(this.#feed.rest(from), recordLength, undefined, within ? start : null);
@@ -214,7 +215,7 @@ class BlockReading {
       for (const record of records) if (!(await this.#takeWithRoom(record))) return false;
       this.#tell(bytes);
     }
-    await this.#flush();
+    await this.flush();
     refuseEmpty(this.log, this.#hasHeader, this.#records);
     return true;
   }
@@ -222,7 +223,7 @@ class BlockReading {
   /** The buffer is free for the texts of rows then, which take three bytes a character at most. */
   async #takeWithRoom(record: CsvRecord): Promise<boolean> {
     if (this.#free + 3 * this.#limits.recordLength > this.#feed.buffer.length) {
-      await this.#flush();
+      await this.flush();
       this.#free = 0;
     }
     return this.#take(record);
@@ -232,7 +233,8 @@ class BlockReading {
     return fields.reduce((length, field) => length + field.length, fields.length) > this.#limits.recordLength;
   }
 
-  async #flush(): Promise<void> {
+  /** Gives the rows at hand away. */
+  async flush(): Promise<void> {
     const block = this.#block;
     if (block.rows === 0) return;
     this.#settle();
