@@ -6,13 +6,9 @@ import {
   type RollUpsTable,
 } from '@/db/schema/configurations';
 import { groupBreakdownOf, growthAllowancesOf } from '@/db/queries/settings';
-import { type RevisionSubtotalsTable } from '@/db/schema/lists';
-import { fromNumbers } from '@/lib/mass/account';
 import { type GrowthAllowances, NO_GROWTH } from '@/lib/mass/roll-up';
-import { type Subtotal } from '@/lib/mass/subtotals';
-import { type UncertaintySubtotal } from '@/lib/mass/uncertainty/book';
-import { fromNumbers as uncertaintyFrom } from '@/lib/mass/uncertainty/sums';
 import { framesWithIssue } from './program-frames';
+import { type StoredSubtotal, storedSubtotals } from './subtotals';
 
 export type Configuration = Selectable<ConfigurationsTable>;
 export type RotorRevision = Selectable<RotorRevisionsTable>;
@@ -106,59 +102,25 @@ export async function subtotalsOf(
   frameIssueId: string,
 ): Promise<StoredSubtotal[]> {
   if (revisionIds.length === 0) return [];
-  const rows = await db
-    .selectFrom('revision_subtotals')
-    .innerJoin('list_revisions', (join) =>
-      join
-        .onRef('list_revisions.id', '=', 'revision_subtotals.revision_id')
-        .onRef('list_revisions.frame_issue_id', '=', 'revision_subtotals.frame_issue_id'),
-    )
-    .selectAll('revision_subtotals')
-    .where('revision_id', 'in', revisionIds)
-    .orderBy('revision_id')
-    .orderBy('group_path')
-    .orderBy('category')
-    .orderBy('maturity')
-    .orderBy('status')
+  const stored = await storedSubtotals(db, revisionIds);
+  const statedIn = await db
+    .selectFrom('list_revisions')
+    .select(['id', 'frame_issue_id'])
+    .where('id', 'in', revisionIds)
     .execute();
-  const isElsewhere = rows.some((row) => row.frame_issue_id !== frameIssueId);
+  const isElsewhere = statedIn.some((revision) => revision.frame_issue_id !== frameIssueId);
   const frames = isElsewhere ? await framesWithIssue(db, frameIssueId) : null;
-  return rows.map((row) => {
-    const part = subtotalOf(row);
-    if (frames === null || row.frame_issue_id === frameIssueId) return part;
-    const conversion = frames.conversion(row.frame_issue_id, frameIssueId);
-    return {
+  const issueOf = new Map(statedIn.map((revision) => [revision.id, revision.frame_issue_id]));
+  return [...revisionIds].sort().flatMap((id) => {
+    const parts = stored.get(id) ?? [];
+    const issueId = issueOf.get(id);
+    if (frames === null || issueId === undefined || issueId === frameIssueId) return parts;
+    const conversion = frames.conversion(issueId, frameIssueId);
+    return parts.map((part) => ({
       ...conversion.subtotal(part),
       uncertainty: conversion.uncertaintySubtotal(part.uncertainty),
-    };
+    }));
   });
-}
-
-type StoredSubtotal = Subtotal & { readonly revisionId: string; readonly uncertainty: UncertaintySubtotal };
-
-function subtotalOf(row: Selectable<RevisionSubtotalsTable>): StoredSubtotal {
-  const key = {
-    group: row.group_path,
-    category: row.category,
-    maturity: row.maturity === '' ? null : row.maturity,
-    status: row.status,
-  };
-  return {
-    revisionId: row.revision_id,
-    ...key,
-    rows: row.rows,
-    pieces: row.pieces,
-    memoRows: row.memo_rows,
-    basic: fromNumbers(row.basic),
-    statedPredicted: fromNumbers(row.stated_predicted),
-    unstatedBasic: fromNumbers(row.unstated_basic),
-    uncertainty: {
-      ...key,
-      basic: uncertaintyFrom(row.basic_uncertainty),
-      statedPredicted: uncertaintyFrom(row.stated_predicted_uncertainty),
-      unstatedBasic: uncertaintyFrom(row.unstated_basic_uncertainty),
-    },
-  };
 }
 
 /** The conditions of a configuration in their order, each with its items. */

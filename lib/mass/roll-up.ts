@@ -86,6 +86,14 @@ class Tally {
     this.memoRows += part.memoRows;
   }
 
+  addTally(other: Tally): void {
+    this.count(other);
+    for (const maturity of [...MATURITIES, 'none'] as const)
+      this.maturity.add(maturity, other.maturity.masses[maturity]);
+    this.basic.add(other.basic.account);
+    this.predicted.add(other.predicted.account);
+  }
+
   total(geometry: AirframeGeometry): Omit<GroupTotal, 'group'> {
     const [basicAccount, predictedAccount] = [this.basic.account, this.predicted.account];
     return {
@@ -161,14 +169,15 @@ export function rollUp(
     if (!statuses.includes(part.status) || !categories.includes(part.category)) continue;
     const allowance = allowanceFor(allowances, part.group, part.maturity).fraction;
     if (allowance === 0) ungrown.add(part.unstatedBasic.mass);
-    for (const tally of [whole, tallyOf(groups, part.group)]) {
-      tally.count(part);
-      tally.maturity.add(part.maturity ?? 'none', part.basic.mass);
-      tally.basic.add(part.basic);
-      tally.predicted.add(part.statedPredicted);
-      tally.predicted.add(part.unstatedBasic, 1 + allowance);
-    }
+    const tally = tallyOf(groups, part.group);
+    tally.count(part);
+    tally.maturity.add(part.maturity ?? 'none', part.basic.mass);
+    tally.basic.add(part.basic);
+    tally.predicted.add(part.statedPredicted);
+    tally.predicted.add(part.unstatedBasic, 1 + allowance);
   }
+  // The accounts of the groups hold twice the digits, so that adding them loses nothing against adding every part.
+  for (const tally of groups.values()) whole.addTally(tally);
   const onBoard = new AccountSum();
   for (const item of items) onBoard.add(accountOfItem(item, geometry));
   whole.basic.add(onBoard.account);

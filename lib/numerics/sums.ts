@@ -59,6 +59,15 @@ export class CompensatedSums {
   /** Adds k times each term without rounding the product; `rest` is what rounding left out of the terms. */
   add(terms: ArrayLike<number>, k = 1, rest?: ArrayLike<number>): void {
     const [sums, lost] = [this.#sums, this.#lost];
+    if (k === 1 && rest === undefined) {
+      for (let i = 0; i < sums.length; i += 1) {
+        const [before, term] = [sums[i] ?? NaN, terms[i] ?? NaN];
+        const sum = before + term;
+        lost[i] = (lost[i] ?? NaN) + sumError(before, term, sum);
+        sums[i] = sum;
+      }
+      return;
+    }
     for (let i = 0; i < sums.length; i += 1) {
       const [before, factor] = [sums[i] ?? NaN, terms[i] ?? NaN];
       const term = k * factor;

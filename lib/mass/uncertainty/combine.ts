@@ -22,12 +22,19 @@ export function combineUncertainty(
 ): CombinedUncertainty {
   const { statuses = ['approved'], categories = CATEGORIES } = options;
   const [basic, predicted] = [new UncertaintySum(), new UncertaintySum()];
+  // What grows alike is added up before it grows: there are few allowances and many parts.
+  const growing = new Map<number, UncertaintySum>();
   for (const part of parts) {
     if (!statuses.includes(part.status) || !categories.includes(part.category)) continue;
     basic.add(part.basic);
-    predicted.add(part.statedPredicted);
-    predicted.add(part.unstatedBasic, 1 + allowanceFor(allowances, part.group, part.maturity).fraction);
+    // Σ |m| of no rows.
+    if (part.statedPredicted.mass !== 0) predicted.add(part.statedPredicted);
+    const { fraction } = allowanceFor(allowances, part.group, part.maturity);
+    const alike = growing.get(fraction) ?? new UncertaintySum();
+    growing.set(fraction, alike);
+    alike.add(part.unstatedBasic);
   }
+  for (const [fraction, alike] of growing) predicted.add(alike.uncertainty, 1 + fraction);
   for (const { mass } of items) {
     basic.addWithoutSigma(mass);
     predicted.addWithoutSigma(mass);
