@@ -1,7 +1,10 @@
 import { type FindingLine } from '@/components/findings/finding-lines';
 import { viewsAsked, viewsHref } from '@/components/three-views/views-address';
 import { LIMIT_RULES } from '@/lib/findings/limits/rules';
+import { REMOVAL_RULES } from '@/lib/findings/removals/rules';
 import { unknownGroup } from '@/lib/findings/rows/groups';
+import { groupWithoutMass } from '@/lib/findings/whole/mass';
+import { impossibleGroup } from '@/lib/findings/whole/tensor';
 import { type PlacedFinding } from '@/lib/findings/finding';
 
 /** Findings of a roll-up, each with where it was seen and the way to its rows; without a configuration to look into, none to groups of a condition. */
@@ -20,11 +23,16 @@ export function placedFindings(
 }
 
 const LIMITS: readonly string[] = Object.values(LIMIT_RULES).map(({ id }) => id);
+const ON_GROUPS: readonly string[] = [...LIMITS, impossibleGroup.id, groupWithoutMass.id];
+const REMOVALS: readonly string[] = REMOVAL_RULES.map(({ id }) => id);
 
-/** Findings that name groups instead of rows lead to the rows of each group. */
+/**
+ * Findings that name groups instead of rows lead to the rows of each group. Those on removals are of a configuration and not kept with
+ * the list, which cannot show their rows by the finding: they lead to each removal.
+ */
 function groupLinks({ rule, rows, where }: PlacedFinding, program: string, configuration: string | null) {
   const home = `/programs/${program}`;
-  if (where.kind === 'condition' && LIMITS.includes(rule)) {
+  if (where.kind === 'condition' && ON_GROUPS.includes(rule)) {
     if (configuration === null) return null;
     const views = `${home}/configurations/${configuration}/views`;
     return (rows.length === 0 ? [''] : rows).map((group) => ({
@@ -32,6 +40,11 @@ function groupLinks({ rule, rows, where }: PlacedFinding, program: string, confi
       href: viewsHref(views, viewsAsked({ condition: where.code, within: group })),
     }));
   }
+  if (where.kind === 'list' && REMOVALS.includes(rule))
+    return rows.map((item) => {
+      const query = new URLSearchParams({ revision: String(where.revision), find: item, row: item });
+      return { words: item, href: `${home}/lists/${where.code}?${query.toString()}#rows` };
+    });
   if (where.kind !== 'list' || rule !== unknownGroup.id) return null;
   return rows.map((group) => {
     const query = new URLSearchParams({ revision: String(where.revision), group });

@@ -48,6 +48,24 @@ describe('the findings on a page', () => {
     expect(markup).toContain('Weighed twice.');
   });
 
+  it('on removals lead to each removal, which its list does not know by the finding', () => {
+    const markup = lines([finding({ rule: 'removal-exceeds-row', rows: ['-P-7'], count: 1 })]);
+    expect(markup).toContain('href="/programs/p/lists/wing?revision=3&amp;find=-P-7&amp;row=-P-7#rows"');
+    expect(markup).not.toContain('finding=');
+  });
+
+  it('on groups of a condition lead to the components of each', () => {
+    const where = { kind: 'condition' as const, code: 'empty' };
+    for (const rule of ['impossible-group', 'group-without-mass', 'beyond-allocation']) {
+      const [line] = placedFindings([finding({ rule, rows: ['Wing/Ribs'], where })], 'p', [], 'c');
+      const [link] = line?.groups ?? [];
+      const href = new URL(link?.href ?? '', 'http://x');
+      expect(href.pathname).toBe('/programs/p/configurations/c/views');
+      expect(href.searchParams.get('within')).toBe('Wing/Ribs');
+      expect(href.searchParams.get('condition')).toBe('empty');
+    }
+  });
+
   it('say so when there are none', () => {
     expect(lines([])).toContain('saw nothing');
   });
