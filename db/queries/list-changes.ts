@@ -47,13 +47,13 @@ export interface ChangeCounts {
 export type RowChangeKind = keyof ChangeCounts;
 
 /**
- * How many rows two revisions of a list differ by, rows being the same that have the same item. `group` narrows it to rows that
- * are in that group path, or below it, on either side.
+ * How many rows two revisions of a list differ by, rows being the same that have the same item; null is no revision: held against it
+ * every row of the other side is new or gone. `group` narrows it to rows that are in that group path, or below it, on either side.
  */
 export async function countChanges(
   db: Db,
-  before: string,
-  after: string,
+  before: string | null,
+  after: string | null,
   group: string | null = null,
 ): Promise<ChangeCounts> {
   const { rows } = await sql<ChangeCounts>`
@@ -71,8 +71,8 @@ export async function countChanges(
 /** The items of the rows that differ and how, in the order of the newer revision, removed ones last. */
 export async function changedItems(
   db: Db,
-  before: string,
-  after: string,
+  before: string | null,
+  after: string | null,
   page: { readonly offset: number; readonly limit: number; readonly group?: string | null },
 ): Promise<{ item: string; kind: RowChangeKind }[]> {
   const { rows } = await sql<{ item: string; kind: RowChangeKind }>`
@@ -116,6 +116,13 @@ function differing(before: RowRange, after: RowRange, group: string | null) {
   `;
 }
 
-async function rangesOf(db: Db, before: string, after: string): Promise<[RowRange, RowRange]> {
-  return Promise.all([neededRowRange(db, before), neededRowRange(db, after)]);
+async function rangesOf(db: Db, before: string | null, after: string | null): Promise<[RowRange, RowRange]> {
+  const [was, is] = await Promise.all(
+    [before, after].map((id) => (id === null ? null : neededRowRange(db, id))),
+  );
+  if (was && is) return [was, is];
+  const one = was ?? is;
+  if (!one) throw new RangeError('a comparison has a revision on one side at least');
+  const nothing = { listNo: one.listNo, lastRow: 0, lastEnd: 0 };
+  return was ? [was, nothing] : [nothing, one];
 }

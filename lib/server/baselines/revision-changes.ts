@@ -31,9 +31,6 @@ export async function revisionPairs(
   });
 }
 
-/** No revision has this id: held against it, every row of the other side is new or gone. */
-const NOWHERE = '';
-
 const NO_CHANGES: ChangeCounts = { added: 0, removed: 0, changed: 0 };
 
 /** How many rows each list differs by, of a group path and below it where one is named. */
@@ -44,7 +41,7 @@ export function countPairs(
 ): Promise<(RevisionPair & { readonly counts: ChangeCounts })[]> {
   return Promise.all(
     pairs.map(async (pair) => {
-      const [before, after] = [pair.before?.revision_id ?? NOWHERE, pair.after?.revision_id ?? NOWHERE];
+      const [before, after] = [pair.before?.revision_id ?? null, pair.after?.revision_id ?? null];
       return {
         ...pair,
         counts: before === after ? NO_CHANGES : await countChanges(db, before, after, group),
@@ -63,8 +60,8 @@ export async function rowsOfPair(
   if (declarations === undefined) throw new RangeError('a pair has a revision on one side at least');
   return compareRevisions(
     db,
-    { id: before?.revision_id ?? NOWHERE },
-    { id: after?.revision_id ?? NOWHERE, declarations },
+    { id: before?.revision_id ?? null },
+    { id: after?.revision_id ?? null, declarations },
     page,
   );
 }

@@ -23,11 +23,14 @@ export interface Comparison {
   readonly rows: readonly RowChange[];
 }
 
-/** What changed from one revision of a list to a later one, by row and field, figures in the later one's units and signs. */
+/**
+ * What changed from one revision of a list to a later one, by row and field, figures in the later one's units and signs. Without a
+ * revision on one side (its id null) every row of the other is new or gone.
+ */
 export async function compareRevisions(
   db: Db,
-  before: Pick<ListRevision, 'id'>,
-  after: Pick<ListRevision, 'id' | 'declarations'>,
+  before: { readonly id: string | null },
+  after: Pick<ListRevision, 'declarations'> & { readonly id: string | null },
   page: { readonly offset: number; readonly limit: number; readonly group?: string | null },
 ): Promise<Comparison> {
   const [counts, items] = await Promise.all([
@@ -35,9 +38,11 @@ export async function compareRevisions(
     changedItems(db, before.id, after.id, page),
   ]);
   const names = items.map(({ item }) => item);
-  const [old, now] = await Promise.all([rowsByItem(db, before.id, names), rowsByItem(db, after.id, names)]);
+  const [old, now] = await Promise.all(
+    [before.id, after.id].map((id) => (id === null ? [] : rowsByItem(db, id, names))),
+  );
   const stated = statedBy(after);
-  const [oldOf, nowOf] = [byItem(old, stated), byItem(now, stated)];
+  const [oldOf, nowOf] = [byItem(old ?? [], stated), byItem(now ?? [], stated)];
   return {
     counts,
     rows: items.map(({ item, kind }) => ({

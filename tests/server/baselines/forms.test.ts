@@ -232,6 +232,21 @@ describe('a review', () => {
     expect(radar?.counts).toEqual({ added: 0, removed: 0, changed: 1 });
   });
 
+  it('has every row of a list new without a former baseline, and gone without a later one', async () => {
+    const { db, program } = test;
+    const { after } = await loadSides(db, program.id, { from: '1', submission: second });
+    const [pair] = await countPairs(db, await revisionPairs(db, null, after.submissionId));
+    if (pair?.after == null) throw new Error('no pair');
+    const all = pair.after.rows;
+    expect(pair.counts).toEqual({ added: all, removed: 0, changed: 0 });
+    const page = { offset: 0, limit: 50, group: null };
+    const { rows } = await rowsOfPair(db, pair, page);
+    expect(rows.map(({ kind }) => kind)).toEqual(Array.from({ length: all }, () => 'added'));
+    expect(rows[0]?.fields.some(({ before, after: now }) => before === null && now !== null)).toBe(true);
+    const gone = await rowsOfPair(db, { ...pair, before: pair.after, after: null }, page);
+    expect(gone.counts).toEqual({ added: 0, removed: all, changed: 0 });
+  });
+
   it('shows a chief what waits with what it changes', async () => {
     const listed = await submissionsOfProgram(test.db, test.program.id);
     const [waiting, ...others] = await loadWaiting(
