@@ -29,7 +29,7 @@ export function TriadSketch({ triads, name = 'List' }: TriadSketchProps) {
       <div className="grid items-start gap-x-6 gap-y-2 @2xl:grid-cols-[minmax(0,21rem)_1fr]">
         <div className="grid gap-2">
           <svg
-            viewBox={`-40 0 ${sheet.width + 80} ${sheet.height.toFixed(0)}`}
+            viewBox={`-58 0 ${sheet.width + 116} ${sheet.height.toFixed(0)}`}
             role="img"
             aria-label={`Airframe axes and the axes of the ${name.toLowerCase()}. ${sentences.join(' ')}`}
             className="block w-full max-w-100"

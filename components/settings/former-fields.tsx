@@ -2,10 +2,12 @@
 
 import { TriadSketch } from '@/components/frames/triad-sketch';
 import { triadsOf } from '@/components/frames/triads';
+import { frameDoubts } from '@/components/settings/frame-doubts';
 import { FieldRow } from '@/components/ui/form-grid';
 import { NumberField } from '@/components/ui/text-field';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type AxisTriple } from '@/lib/frames/axes';
+import { type Pose } from '@/lib/frames/pose';
 import { radians, toSi } from '@/lib/units/convert';
 import { type LengthUnit } from '@/lib/units/table';
 
@@ -38,6 +40,33 @@ export function FormerFields({ former, unit, field, texts, axes }: FormerFieldsP
     return Number.isFinite(value) ? value : 0;
   };
   const length = (name: string): number => toSi(number(name), unit);
+  const place = (name: string) => [length(`${name}_x`), length(`${name}_y`), length(`${name}_z`)] as const;
+  const lies: Pose = {
+    origin: place('former'),
+    yaw: radians(number('former_yaw')),
+    pitch: radians(number('former_pitch')),
+    roll: radians(number('former_roll')),
+  };
+  const hasReference = ['x', 'y', 'z'].every((letter) => (texts[`reference_${letter}`] ?? '') !== '');
+  // The form that only says how the former frame lies has no chord to hold against it.
+  const doubts =
+    axes === null || texts['lemac_x'] === undefined
+      ? []
+      : frameDoubts(
+          former,
+          lies,
+          {
+            axes,
+            lateralPlane: length('lateral_plane'),
+            incidence: radians(number('incidence')),
+            lemac: place('lemac'),
+            mac: length('mac'),
+            span: length('span'),
+            length: length('length'),
+            reference: hasReference ? place('reference') : null,
+          },
+          unit,
+        );
   return (
     <fieldset className="grid gap-4">
       <legend className="mb-1 text-lead font-semibold">{`Where issue ${former.number} lies in this one`}</legend>
@@ -72,24 +101,22 @@ export function FormerFields({ former, unit, field, texts, axes }: FormerFieldsP
       {axes === null ? null : (
         <TriadSketch
           name={`Issue ${former.number}`}
-          triads={triadsOf({
-            airframe: {
-              axes,
-              lateralPlane: length('lateral_plane'),
-              incidence: radians(number('incidence')),
-            },
-            subject: `Issue ${former.number}`,
-            axes: former.geometry.axes,
-            pose: {
-              origin: [length('former_x'), length('former_y'), length('former_z')],
-              yaw: radians(number('former_yaw')),
-              pitch: radians(number('former_pitch')),
-              roll: radians(number('former_roll')),
-            },
-            extent: 'whole',
-            example: { item: former.example.item, position: former.example.place, pair: false },
-            unit,
-          })}
+          triads={{
+            ...triadsOf({
+              airframe: {
+                axes,
+                lateralPlane: length('lateral_plane'),
+                incidence: radians(number('incidence')),
+              },
+              subject: `Issue ${former.number}`,
+              axes: former.geometry.axes,
+              pose: lies,
+              extent: 'whole',
+              example: { item: former.example.item, position: former.example.place, pair: false },
+              unit,
+            }),
+            doubts,
+          }}
         />
       )}
     </fieldset>

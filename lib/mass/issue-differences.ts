@@ -1,8 +1,10 @@
 import { arrow } from '@/lib/frames/axes';
+import { airframeToBody } from '@/lib/frames/body';
 import { percentMac } from '@/lib/frames/chord';
 import { type IssueChange, changedArrow, changedPlace } from '@/lib/frames/issue-change';
 import { lateralIndex } from '@/lib/frames/reflection';
 import { type AirframeVec } from '@/lib/frames/tags';
+import { multiply } from '@/lib/numerics/mat3';
 import { dotVec, normVec, scaleVec, subVec } from '@/lib/numerics/vec3';
 
 import { type AirframeGeometry } from './geometry';
@@ -22,7 +24,7 @@ export interface IssueDifferences {
   readonly isPlaneKept: boolean;
   /** The mean chord is the same stretch of the aircraft: what is stated in per cent of it means the same. */
   readonly isChordKept: boolean;
-  /** Body axes point as they did: the incidence is the same about the same reference line. */
+  /** Body axes point as they did on the aircraft: reference line and incidence as they were, or turned by as much. */
   readonly isBodyKept: boolean;
 }
 
@@ -55,7 +57,9 @@ export function issueDifferences(
     isPlaneKept,
     isChordKept:
       isAftKept && Math.abs(from.mac - to.mac) <= SAME && near(changedPlace(change, from.lemac), to.lemac),
-    isBodyKept: isDirectionKept && Math.abs(from.incidence - to.incidence) <= SAME,
+    isBodyKept: multiply(airframeToBody(to.axes, to.incidence), change.matrix).every((axis, k) =>
+      near(axis, airframeToBody(from.axes, from.incidence)[k] ?? [NaN, NaN, NaN]),
+    ),
   };
 }
 
