@@ -130,7 +130,7 @@ function subtotalOf(row: Row): StoredSubtotal {
 function arraysOf(bytes: Buffer): number[][] {
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   const arrays: number[][] = [];
-  for (let at = 0; at < bytes.length; ) {
+  for (let at = 0; at < bytes.length;) {
     const length = view.getInt32(at + 12);
     const numbers = new Array<number>(length);
     for (let k = 0; k < length; k += 1) numbers[k] = view.getFloat64(at + 24 + 12 * k);

@@ -78,7 +78,7 @@ export default async function ChangesPage({
       {mayRestore ? (
         <Section
           title={`Bring revision ${after.number} back`}
-          lead={`It becomes revision ${before.number + 1}, with its own declarations. What this page shows is what that changes; revisions ${after.number + 1} to ${before.number} stay as they are.`}
+          lead={`It becomes revision ${before.number + 1}, with its own declarations, and this page shows what that changes. The revisions since stay as they are.`}
         >
           <RestoreForm
             action={restoreRevisionAction}
