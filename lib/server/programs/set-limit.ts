@@ -45,7 +45,10 @@ export async function stateLimit(db: Db, input: StateLimit): Promise<string> {
       value: limit.value,
       group_path: limit.group,
       condition_code: limit.condition,
-      frame_issue_id: issue?.id ?? null,
+      // A place whose value stays was stated in the issue of its day: 8.2 m from another datum would be another limit.
+      ...(isPlace && before?.quantity === limit.quantity && before.value === limit.value
+        ? {}
+        : { frame_issue_id: issue?.id ?? null }),
       source: limit.source,
       source_date: limit.sourceDate,
       valid_from: limit.from,

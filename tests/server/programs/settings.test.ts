@@ -226,6 +226,30 @@ describe('limits', () => {
     for (const one of [id, past, future]) await removeLimit(test.db, { ...here(), id: one });
   });
 
+  it('of a place stay in the issue of their day until their value changes', async () => {
+    const id = await limit('at-most', 7.5, { quantity: 'cgx' });
+    const issueOf = async () =>
+      (await limitsOf(test.db, test.program.id)).find((one) => one.id === id)?.frameIssue;
+    const day = await issueOf();
+    if (day === undefined || day === null) throw new Error('the limit has an issue');
+    const form = frameIssueSchema.parse(FORM);
+    await issueFrame(test.db, {
+      ...here(),
+      base: day,
+      title: 'Datum moved',
+      geometry: geometryOfForm(form),
+      validFrom: '2026-07-01',
+      reason: 'datum moved',
+      former: formerOfForm(form),
+      carryPoints: false,
+    });
+    await limit('at-most', 7.5, { quantity: 'cgx', source: 'the same, cited rightly' }, id);
+    expect(await issueOf()).toBe(day);
+    await limit('at-most', 7.6, { quantity: 'cgx' }, id);
+    expect(await issueOf()).toBe(day + 1);
+    await removeLimit(test.db, { ...here(), id });
+  });
+
   it('read a form in the unit that it names, and refuse one of another quantity', () => {
     const form = {
       id: '',
