@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { fieldNumber } from '@/lib/ingest/blocks/field-number';
+import { CROWDED, ItemIndex, hashOf } from '@/lib/ingest/blocks/item-index';
 import { CsvFault } from '@/lib/ingest/csv/fault';
 import { readRecords } from '@/lib/ingest/csv/records';
 import { MASS_LIST_LIMITS } from '@/lib/ingest/limits';
@@ -243,6 +244,23 @@ describe('a mass list read by blocks', () => {
     const { problems } = await readList(utf8(`${text}I7,1,0,0,0\n`));
     expect(problems).toMatchObject([{ kind: 'duplicate-item', line: 100_002, found: 'I7' }]);
     expect(problems[0]?.message).toContain('line 9');
+  });
+});
+
+describe('items', () => {
+  it('that were made to have one hash end the reading with a problem, and not the patience of whoever waits', () => {
+    const index = new ItemIndex();
+    const answers = new Set<number>();
+    const words = new Int32Array(2);
+    const bytes = new Uint8Array(words.buffer);
+    for (let k = 0; k < 12_000; k += 1) {
+      // The second word undoes what the first one did to the hash.
+      const first = Math.imul(8 ^ k, 0x2c1b3c6d);
+      words.set([k, first ^ (first >>> 15)]);
+      expect(hashOf(bytes, 0, 8)).toBe(0);
+      answers.add(index.add(bytes, 0, 8, 0));
+    }
+    expect(answers).toEqual(new Set([-1, CROWDED]));
   });
 });
 

@@ -1,9 +1,15 @@
 const CHUNK_BITS = 20;
 const CHUNK = 1 << CHUNK_BITS;
+const START_BITS = 16;
+const STARTS = 1 << START_BITS;
 /** A slot holds an ordinal + 1 in its lower bits and some bits of the hash above them. */
 const ORDINAL_BITS = 22;
 const ORDINALS = 1 << ORDINAL_BITS;
 const ORDINAL_MASK = ORDINALS - 1;
+
+/** Returned for a text that is one of thousands with neighbouring hashes: no list has such items but one that was made for it. */
+export const CROWDED = -2;
+const STEPS = 10_000;
 
 /** A hash of some bytes, four at a time and every bit spread over all (after MurmurHash3, public domain). */
 export function hashOf(bytes: Uint8Array, start: number, end: number): number {
@@ -30,19 +36,18 @@ export function hashOf(bytes: Uint8Array, start: number, end: number): number {
 export class ItemIndex {
   #table = new Uint32Array(1 << 10);
   readonly #chunks: Uint8Array[] = [];
-  #starts = new Uint32Array(1 << 9);
-  #hashes = new Int32Array(1 << 9);
+  readonly #starts: Uint32Array[] = [];
   #free = 0;
   count = 0;
 
-  /** The ordinal of a text that is known; otherwise -1, and the text gets the next ordinal. `hash` is its `hashOf`. */
+  /** The ordinal of a text that is known; otherwise -1, and the text gets the next ordinal, or `CROWDED`. `hash` is its `hashOf`. */
   add(bytes: Uint8Array, start: number, end: number, hash: number): number {
     const slot = this.#slotOf(bytes, start, end, hash);
+    if (slot === CROWDED) return CROWDED;
     const known = ((this.#table[slot] ?? 0) & ORDINAL_MASK) - 1;
     if (known >= 0) return known;
     if (this.count + 1 >= ORDINALS) throw new RangeError(`No more than ${ORDINALS} texts are told apart.`);
     this.#keep(bytes, start, end);
-    this.#hashes[this.count] = hash;
     this.#table[slot] = (hash & ~ORDINAL_MASK) | (this.count + 1);
     this.count += 1;
     if (2 * this.count > this.#table.length) this.#grow();
@@ -56,23 +61,27 @@ export class ItemIndex {
 
   /** The ordinal of a text, -1 where it is not known. */
   find(bytes: Uint8Array, start: number, end: number, hash: number): number {
-    return ((this.#table[this.#slotOf(bytes, start, end, hash)] ?? 0) & ORDINAL_MASK) - 1;
+    const slot = this.#slotOf(bytes, start, end, hash);
+    return slot === CROWDED ? -1 : ((this.#table[slot] ?? 0) & ORDINAL_MASK) - 1;
   }
 
   bytesOf(ordinal: number): Uint8Array {
-    const place = this.#starts[ordinal] ?? 0;
+    const place = this.#startOf(ordinal);
     const chunk = this.#chunks[place >>> CHUNK_BITS] ?? new Uint8Array(0);
     const at = (place & (CHUNK - 1)) + 2;
     return chunk.subarray(at, at + lengthAt(chunk, at - 2));
   }
 
-  /** Where the text is, or the empty slot where it would go. */
+  /** Where the text is, or the empty slot where it would go, or `CROWDED`. */
   #slotOf(bytes: Uint8Array, start: number, end: number, hash: number): number {
     const table = this.#table;
     const mask = table.length - 1;
     const tag = (hash & ~ORDINAL_MASK) >>> 0;
     let slot = hash & mask;
+    let steps = 0;
     for (let entry = table[slot] ?? 0; entry !== 0; entry = table[slot] ?? 0) {
+      steps += 1;
+      if (steps > STEPS) return CROWDED;
       if ((entry & ~ORDINAL_MASK) >>> 0 === tag && this.#isAt((entry & ORDINAL_MASK) - 1, bytes, start, end))
         return slot;
       slot = (slot + 1) & mask;
@@ -81,7 +90,7 @@ export class ItemIndex {
   }
 
   #isAt(ordinal: number, bytes: Uint8Array, start: number, end: number): boolean {
-    const place = this.#starts[ordinal] ?? 0;
+    const place = this.#startOf(ordinal);
     const chunk = this.#chunks[place >>> CHUNK_BITS];
     if (chunk === undefined) return false;
     const at = place & (CHUNK - 1);
@@ -90,6 +99,10 @@ export class ItemIndex {
     // From the end: neighbours begin alike.
     for (let k = length - 1; k >= 0; k -= 1) if (chunk[at + 2 + k] !== bytes[start + k]) return false;
     return true;
+  }
+
+  #startOf(ordinal: number): number {
+    return this.#starts[ordinal >>> START_BITS]?.[ordinal & (STARTS - 1)] ?? 0;
   }
 
   #keep(bytes: Uint8Array, start: number, end: number): void {
@@ -101,13 +114,10 @@ export class ItemIndex {
       this.#chunks.push(chunk);
       this.#free = 0;
     }
-    if (this.count === this.#starts.length) {
-      this.#starts = enlarged(this.#starts);
-      const hashes = new Int32Array(this.#starts.length);
-      hashes.set(this.#hashes);
-      this.#hashes = hashes;
-    }
-    this.#starts[this.count] = ((this.#chunks.length - 1) << CHUNK_BITS) | this.#free;
+    const at = this.count & (STARTS - 1);
+    if (at === 0) this.#starts.push(new Uint32Array(STARTS));
+    const starts = this.#starts[this.count >>> START_BITS];
+    if (starts !== undefined) starts[at] = ((this.#chunks.length - 1) << CHUNK_BITS) | this.#free;
     chunk[this.#free] = length & 0xff;
     chunk[this.#free + 1] = length >>> 8;
     for (let k = 0; k < length; k += 1) chunk[this.#free + 2 + k] = bytes[start + k] ?? 0;
@@ -119,7 +129,8 @@ export class ItemIndex {
     const mask = table.length - 1;
     this.#table = table;
     for (let ordinal = 0; ordinal < this.count; ordinal += 1) {
-      const hash = this.#hashes[ordinal] ?? 0;
+      const text = this.bytesOf(ordinal);
+      const hash = hashOf(text, 0, text.length);
       let slot = hash & mask;
       while (table[slot] !== 0) slot = (slot + 1) & mask;
       table[slot] = (hash & ~ORDINAL_MASK) | (ordinal + 1);

@@ -1,4 +1,5 @@
-import { ItemIndex, enlarged, hashOf } from '@/lib/ingest/blocks/item-index';
+import { CROWDED, ItemIndex, enlarged, hashOf } from '@/lib/ingest/blocks/item-index';
+import { CsvFault } from '@/lib/ingest/csv/fault';
 import { type ProblemLog } from '@/lib/ingest/problem-log';
 
 const encoder = new TextEncoder();
@@ -42,6 +43,7 @@ export class ItemTree {
     column: string,
   ): boolean {
     const earlier = this.#items.add(bytes, start, end, hash);
+    if (earlier === CROWDED) throw crowded(line, column);
     if (earlier === -1) {
       this.#lines.add(line);
       return true;
@@ -55,6 +57,7 @@ export class ItemTree {
   /** The parent of the item that was added last. */
   addParent(bytes: Uint8Array, start: number, end: number): void {
     const known = this.#parents.add(bytes, start, end, hashOf(bytes, start, end));
+    if (known === CROWDED) throw crowded(this.#lines.at(this.#items.count - 1), 'parent');
     const parent = known === -1 ? this.#parents.count - 1 : known;
     const item = this.#items.count - 1;
     if (this.#parentOf.length === 0) this.#parentOf = new Uint32Array(1024);
@@ -103,6 +106,11 @@ export class ItemTree {
     for (const seen of path) settled[seen] = 1;
     return at !== -1 && path.has(at);
   }
+}
+
+function crowded(line: number, column: string): CsvFault {
+  const message = `The texts of ${column} are too alike to be told apart. Give the rows other ones.`;
+  return new CsvFault({ kind: 'crowded', line, column, found: null, message });
 }
 
 /** The line of every item, kept only where it is not the next one after the item before. */

@@ -1,9 +1,9 @@
-import { createReadStream } from 'node:fs';
 import { parseArgs } from 'node:util';
 import { declarationsOfQuery, rollUpAnswer, rollUpQuerySchema } from '@/lib/contracts/api/roll-ups';
 import { problemSentence } from '@/lib/ingest/problem-log';
 import { rollUpList } from '@/lib/ingest/roll-up-list';
 import { fail } from './arguments';
+import { fileBytes } from './file-bytes';
 
 const USAGE =
   'npm run -s roll-up -- FILE.csv --mass-unit lb --length-unit in --inertia-unit lb.in2 ' +
@@ -37,7 +37,7 @@ async function main(): Promise<void> {
     throw new Error(`${wrong.join('\n')}\n${USAGE}`);
   }
   const declarations = declarationsOfQuery(query.data);
-  const rolled = await rollUpList(createReadStream(file), declarations);
+  const rolled = await rollUpList(fileBytes(file), declarations);
   if ('problems' in rolled) {
     for (const problem of rolled.problems) console.error(problemSentence(problem));
     const count = Object.values(rolled.problemCounts).reduce((sum, one) => sum + one, 0);
