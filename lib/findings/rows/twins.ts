@@ -101,10 +101,12 @@ class TwinBlocks extends BlockBook {
   readonly #numbers = new FirstRows();
   readonly #names = new FirstRows();
   readonly #name = new RowName();
+  #slips: Slips | null = null;
 
   protected take(block: CheckBlock): void {
     this.found = [];
     const { rows, counted: isCounted, side, kept, facts } = block;
+    const slips = (this.#slips ??= slipsOf(block));
     const { start, end } = rows.texts.part_number;
     const { mass } = rows.numbers;
     for (let row = 0; row < rows.rows; row += 1) {
@@ -114,9 +116,10 @@ class TwinBlocks extends BlockBook {
       const byNumber = hasNumber ? this.#byNumber(block, row) : -1;
       const byName = told ? this.#byName(block, row) : -1;
       const isPlain =
-        (byNumber === -1 || this.#numbers.isAlike(block, row, byNumber)) &&
+        (byNumber === -1 || this.#numbers.isAlike(block, row, byNumber, true, slips)) &&
         (byName === -1 ||
-          (this.#names.isAlike(block, row, byName) && !mayBeMirrored(block, row, this.#names.row(byName))));
+          (this.#names.isAlike(block, row, byName, false, slips) &&
+            !mayBeMirrored(block, row, this.#names.row(byName))));
       if (isPlain) continue;
       const twin = (rowsOf: FirstRows, known: number): Twin | undefined =>
         known === -1 ? undefined : twinOfKept(kept.row(rowsOf.row(known)));
@@ -164,14 +167,51 @@ class FirstRows {
     return this.#rows[number] ?? -1;
   }
 
-  /** Whether mass and moments are so near to the first row's that no factor of a unit lies between, nor anything else to speak of. */
-  isAlike({ rows }: CheckBlock, row: number, number: number): boolean {
-    if (!(Math.abs((rows.numbers.mass[row] ?? NaN) / (this.#mass[number] ?? NaN) - 1) < AT_FACTOR))
-      return false;
+  /**
+   * Whether nothing is to be said of a row beside the first of its name, as far as mass and moments go: no factor of a unit lies
+   * between them and, where they should be one part (`isOnePart`), the masses are one.
+   */
+  isAlike({ rows }: CheckBlock, row: number, number: number, isOnePart: boolean, slips: Slips): boolean {
+    const ratio = (rows.numbers.mass[row] ?? NaN) / (this.#mass[number] ?? NaN);
+    const apart = Math.abs(ratio - 1);
+    if (apart > AT_FACTOR) {
+      if (isOnePart && apart > SAME_PART / 2) return false;
+      if (mayBeSlip(ratio, slips.mass)) return false;
+      if (apart > 2 * SAME_MASS) return true;
+    }
     const sum = sumAt(rows, row);
     const former = this.#sum[number] ?? NaN;
-    return sum === 0 || former === 0 || Math.abs(sum / former - 1) < SAME_PART;
+    return (
+      sum === 0 ||
+      former === 0 ||
+      Math.abs(sum / former - 1) < SAME_PART ||
+      !mayBeSlip(sum / former, slips.inertia)
+    );
   }
+}
+
+/** The factors by which two figures for one thing may differ. */
+interface Slips {
+  readonly mass: readonly number[];
+  readonly inertia: readonly number[];
+}
+
+function slipsOf({ placement: { declarations } }: CheckBlock): Slips {
+  const { massUnit, inertiaUnit } = declarations;
+  return {
+    mass: slipsOfOneThing(massUnit, MASS_UNITS).map(({ factor }) => factor),
+    inertia: slipsOfOneThing(inertiaUnit, INERTIA_UNITS, 1.2).map(({ factor }) => factor),
+  };
+}
+
+/** Whether a ratio, or its reverse, is one of the factors or nearly so. */
+function mayBeSlip(ratio: number, factors: readonly number[]): boolean {
+  for (const factor of factors) {
+    const off = ratio / factor;
+    const reverse = 1 / (ratio * factor);
+    if (Math.abs(off - 1) < 2 * AT_FACTOR || Math.abs(reverse - 1) < 2 * AT_FACTOR) return true;
+  }
+  return false;
 }
 
 const sumAt = ({ numbers: { ixx, iyy, izz } }: CheckBlock['rows'], row: number): number =>

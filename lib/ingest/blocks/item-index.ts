@@ -6,6 +6,7 @@ const STARTS = 1 << START_BITS;
 const ORDINAL_BITS = 22;
 const ORDINALS = 1 << ORDINAL_BITS;
 const ORDINAL_MASK = ORDINALS - 1;
+const NO_BYTES = new Uint8Array(0);
 
 /** Returned for a text that is one of thousands with neighbouring hashes: no list has such items but one that was made for it. */
 export const CROWDED = -2;
@@ -67,7 +68,7 @@ export class ItemIndex {
 
   bytesOf(ordinal: number): Uint8Array {
     const place = this.#startOf(ordinal);
-    const chunk = this.#chunks[place >>> CHUNK_BITS] ?? new Uint8Array(0);
+    const chunk = this.#chunks[place >>> CHUNK_BITS] ?? NO_BYTES;
     const at = (place & (CHUNK - 1)) + 2;
     return chunk.subarray(at, at + lengthAt(chunk, at - 2));
   }
@@ -129,8 +130,10 @@ export class ItemIndex {
     const mask = table.length - 1;
     this.#table = table;
     for (let ordinal = 0; ordinal < this.count; ordinal += 1) {
-      const text = this.bytesOf(ordinal);
-      const hash = hashOf(text, 0, text.length);
+      const place = this.#startOf(ordinal);
+      const chunk = this.#chunks[place >>> CHUNK_BITS] ?? NO_BYTES;
+      const at = (place & (CHUNK - 1)) + 2;
+      const hash = hashOf(chunk, at, at + lengthAt(chunk, at - 2));
       let slot = hash & mask;
       while (table[slot] !== 0) slot = (slot + 1) & mask;
       table[slot] = (hash & ~ORDINAL_MASK) | (ordinal + 1);
