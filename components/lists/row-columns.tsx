@@ -1,5 +1,4 @@
 import { type CellValue, type DataColumn } from '@/components/data-table/column';
-import { itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
 import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
 import { groupingOf, ownColumn, type SortColumn } from '@/lib/contracts/list-view';
 import { type ListColumn, MOMENTS, PLACES } from '@/lib/ingest/mass-list/columns';
@@ -14,10 +13,8 @@ export type RowColumn = DataColumn<ListRow> & { readonly id: Exclude<SortColumn,
  */
 export function rowColumns(
   { massUnit, lengthUnit, inertiaUnit, axes, kind }: ListDeclarations,
-  edits: readonly RowEdit[],
   own: readonly string[],
 ): readonly RowColumn[] {
-  const edited = new Map(edits.map((edit) => [itemOfEdit(edit), edit.kind]));
   const value =
     (column: ListColumn) =>
     (row: ListRow): CellValue =>
@@ -46,7 +43,7 @@ export function rowColumns(
   });
   const [mass, length, inertia] = [unitLabel(massUnit), unitLabel(lengthUnit), unitLabel(inertiaUnit)];
   return [
-    { ...text('item', 'Item', 152), cell: (row) => <ItemCell row={row} edited={edited} /> },
+    text('item', 'Item', 152),
     text('description', 'Description', 224),
     text('group', 'Group', 176),
     text('part_number', 'Part number', 152),
@@ -110,25 +107,6 @@ export const isUsual = ({ id }: Pick<RowColumn, 'id'>): boolean => USUAL.include
 /** Columns by whose values rows can be put into groups. */
 export function groupingColumns(columns: readonly RowColumn[]): readonly RowColumn[] {
   return columns.filter(({ id }) => groupingOf(id) !== undefined);
-}
-
-function ItemCell({
-  row,
-  edited,
-}: {
-  readonly row: ListRow;
-  readonly edited: ReadonlyMap<string, RowEdit['kind']>;
-}) {
-  const item = String(row.cells.item ?? '');
-  const edit = edited.get(item);
-  return (
-    <span className="flex items-baseline gap-2" title={item}>
-      <span className={edit === 'remove' ? 'truncate line-through' : 'truncate'}>{item}</span>
-      {edit === undefined ? null : (
-        <span className="ml-auto text-note text-caution">{edit === 'remove' ? 'goes' : 'edited'}</span>
-      )}
-    </span>
-  );
 }
 
 /** What stands under the columns: sums, and the CG under the coordinates. */

@@ -30,7 +30,6 @@ interface RowsBarProps {
   /** Whether the view is another than the whole list in its own order. */
   readonly differs: boolean;
   readonly views: ReactNode;
-  readonly onAdd: (() => void) | null;
 }
 
 /** Find, group, columns, export, add: what changes the view of the rows, or goes with them. */
@@ -48,7 +47,6 @@ export function RowsBar(props: RowsBarProps) {
     exportHref,
     differs,
     views,
-    onAdd,
   } = props;
   const id = useId();
   return (
@@ -88,7 +86,6 @@ export function RowsBar(props: RowsBarProps) {
           <a href={exportHref(true)} download className={buttonClass('secondary')}>
             Export all rows
           </a>
-          {onAdd === null ? null : <Button onClick={onAdd}>Add row</Button>}
         </div>
       </div>
       {only === null ? null : (

@@ -1,14 +1,13 @@
 'use client';
 
 import { useRouter, useSearchParams } from 'next/navigation';
-import { useMemo, useRef, useState } from 'react';
+import { useMemo, useState } from 'react';
 import { Grid } from '@/components/data-table/grid';
 import { Inspector } from '@/components/data-table/inspector';
 import { columnsShown } from '@/components/data-table/view';
 import { useUrlView } from '@/components/data-table/use-url-view';
 import { counted } from '@/components/lists/list-words';
 import { GroupsSection } from '@/components/lists/groups-section';
-import { PendingPanel } from '@/components/lists/pending-panel';
 import {
   groupingColumns,
   isUsual,
@@ -16,16 +15,14 @@ import {
   rowColumns,
   totalCells,
 } from '@/components/lists/row-columns';
-import { type Beside, RowBeside } from '@/components/lists/row-beside';
+import { RowBeside } from '@/components/lists/row-beside';
 import { type WholeOnPage } from '@/components/lists/row-shares';
 import { RowsBar } from '@/components/lists/rows-bar';
-import { usePendingEdits } from '@/components/lists/use-pending-edits';
 import { rowIdOf, useRowPages, useRowTotals } from '@/components/lists/use-row-pages';
 import { SavedViews } from '@/components/lists/saved-views';
 import { Banner } from '@/components/ui/banner';
 import { Button } from '@/components/ui/button';
 import { Section } from '@/components/ui/section';
-import { type EditProblem, EDITS_AT_ONCE, itemOfEdit, type RowEdit } from '@/lib/contracts/list-edits';
 import { type RowGroups } from '@/lib/contracts/list-groups';
 import { type ListRow, type RowTotals } from '@/lib/contracts/list-rows';
 import { isFiltered, type ListView, listViewOf, viewQuery } from '@/lib/contracts/list-view';
@@ -34,8 +31,6 @@ import { type AirframeGeometry } from '@/lib/mass/geometry';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 
 export interface RowsStationProps {
-  /** `program/list`: what the edits kept in the browser belong to. */
-  readonly listKey: string;
   readonly listHref: string;
   /** The internal routes of the list, and of this revision. */
   readonly listRoute: string;
@@ -56,10 +51,7 @@ export interface RowsStationProps {
   readonly mayEdit: boolean;
 }
 
-const NO_EDITS: readonly RowEdit[] = [];
-const NEW_ROW = '\u0000new';
-
-/** The rows of a revision: looked through, opened, edited; edits gather until they are saved as the next revision. */
+/** The rows of a revision: looked through, put in order and groups, opened. */
 export function RowsStation(props: RowsStationProps) {
   const { declarations, revision, newest, revisionRoute, findings } = props;
   const router = useRouter();
@@ -85,62 +77,19 @@ export function RowsStation(props: RowsStationProps) {
   const { totals, error } = useRowTotals(revisionRoute, query, props.totals, filtered);
 
   const [views, setViews] = useState(props.views);
-  const [pending, setPending] = usePendingEdits(props.listKey);
-  const [problems, setProblems] = useState<readonly EditProblem[]>([]);
-  const [editing, setEditing] = useState<string | null>(null);
   const [said, setSaid] = useState('');
   const plainHref = `${props.listHref}?revision=${revision}`;
   const mayEdit = props.mayEdit && revision === newest;
-  const edits = pending?.edits ?? NO_EDITS;
-  const columns = useMemo(() => rowColumns(declarations, edits, props.own), [declarations, edits, props.own]);
+  const columns = useMemo(() => rowColumns(declarations, props.own), [declarations, props.own]);
   const visible = useMemo(
     () => columnsShown(columns, { shown: view.shown, hidden: view.hidden }, isUsual),
     [columns, view.shown, view.hidden],
   );
   const grouping = useMemo(() => groupingColumns(columns), [columns]);
-  const typed = useRef(false);
-  /** Goes elsewhere, unless that would lose what has been typed. */
-  const leaving = (go: () => void) => {
-    if (typed.current)
-      setSaid('Keep the edit or leave without it first: nothing that is typed is lost unasked.');
-    else go();
-  };
-  const edit = (item: string | null) => {
-    typed.current = false;
-    setSaid('');
-    setEditing(item);
-  };
-  const close = () => {
-    edit(null);
-    setView({ ...view, open: null });
-  };
-  const beside = besideOf(view.open, editing, edits, pages.loaded);
+  const beside = pages.loaded.find((row) => view.open !== null && rowIdOf(row) === view.open);
 
   return (
     <>
-      {props.mayEdit && pending !== null ? (
-        <PendingPanel
-          pending={pending}
-          onChange={setPending}
-          problems={problems}
-          onProblems={setProblems}
-          onOpen={(item) =>
-            leaving(() => {
-              edit(null);
-              setView({ ...view, text: item, group: '', open: item });
-            })
-          }
-          to={`${props.listRoute}/edits`}
-          newest={newest}
-          rows={props.rows}
-          listHref={props.listHref}
-          onSaved={(saved) => {
-            setSaid(`Revision ${saved} is saved.`);
-            router.push(`${props.listHref}?revision=${saved}`);
-            router.refresh();
-          }}
-        />
-      ) : null}
       <Section title="Rows" {...(said === '' ? {} : { aside: <span role="status">{said}</span> })}>
         <RowsBar
           columns={columns}
@@ -161,15 +110,6 @@ export function RowsStation(props: RowsStationProps) {
               route={`${props.listRoute}/views`}
               plainHref={plainHref}
             />
-          }
-          onAdd={
-            mayEdit && edits.length < EDITS_AT_ONCE
-              ? () =>
-                  leaving(() => {
-                    setView({ ...view, open: null });
-                    edit(NEW_ROW);
-                  })
-              : null
           }
         />
         {(pages.failure ?? error) ? (
@@ -192,7 +132,7 @@ export function RowsStation(props: RowsStationProps) {
             total={props.rows}
             of="rows"
             view={view}
-            onView={(next) => (next.open === view.open ? setView(next) : leaving(() => setView(next)))}
+            onView={setView}
             loading={pages.total === null ? 'Loading rows' : null}
             totals={totals === null ? {} : totalCells(totals)}
             opens
@@ -203,26 +143,16 @@ export function RowsStation(props: RowsStationProps) {
               setSaid('Some of these rows are not loaded yet. Scroll through them first, or export them.')
             }
           />
-          {beside === null ? null : (
-            <Inspector onClose={() => leaving(close)}>
+          {beside === undefined ? null : (
+            <Inspector onClose={() => setView({ ...view, open: null })}>
               <RowBeside
-                key={`${beside.kind} ${editing ?? ''} ${view.open ?? ''}`}
-                beside={beside}
+                key={rowIdOf(beside)}
+                row={beside}
                 declarations={declarations}
                 geometry={props.geometry}
                 wholes={props.wholes}
-                own={props.own}
                 file={props.file}
-                mayEdit={mayEdit}
-                pending={pending}
-                revision={revision}
-                problems={problems}
-                onPending={setPending}
-                onEdit={(on) => edit(on ? view.open : null)}
-                onClose={close}
-                onTyped={() => {
-                  typed.current = true;
-                }}
+                editHref={mayEdit ? `${props.listHref}/edit` : null}
               />
             </Inspector>
           )}
@@ -241,21 +171,6 @@ export function RowsStation(props: RowsStationProps) {
       />
     </>
   );
-}
-
-/** A new row, a row that is in the table, or an added one that is not yet. */
-function besideOf(
-  open: string | null,
-  editing: string | null,
-  edits: readonly RowEdit[],
-  loaded: readonly ListRow[],
-): Beside | null {
-  if (editing === NEW_ROW) return { kind: 'new', edit: null };
-  if (open === null) return null;
-  const edit = edits.find((one) => itemOfEdit(one) === open);
-  if (edit?.kind === 'add') return { kind: 'new', edit };
-  const row = loaded.find((one) => rowIdOf(one) === open);
-  return row === undefined ? null : { kind: editing === open ? 'edit' : 'look', row };
 }
 
 function statusWords(shown: number | null, all: number, filtered: boolean): string {

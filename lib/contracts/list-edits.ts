@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { reasonSchema } from './codes';
 
 /** Texts by column name, in the list's own units and signs, as they would stand in its file; '' blanks a cell. */
 const fields = z.record(z.string().min(1).max(8192), z.string().max(8192));
@@ -19,15 +18,6 @@ export const rowEditSchema = z.discriminatedUnion('kind', [
 ]);
 export type RowEdit = z.output<typeof rowEditSchema>;
 
-/** So many rows can be edited in one go; more belong in a file. */
-export const EDITS_AT_ONCE = 500;
-
-export const saveEditsSchema = z.object({
-  baseRevision: z.number().int().min(1),
-  reason: reasonSchema,
-  edits: z.array(rowEditSchema).min(1, 'There is no edit to save.').max(EDITS_AT_ONCE),
-});
-
 /** What is wrong with a set of edits: in which row (null: the list as a whole) and column, what was found, what would be right. */
 export const editProblemSchema = z.object({
   item: z.string().nullable(),
@@ -37,15 +27,10 @@ export const editProblemSchema = z.object({
 });
 export type EditProblem = z.output<typeof editProblemSchema>;
 
-export const savedEditsSchema = z.discriminatedUnion('status', [
-  z.object({ status: z.literal('saved'), revision: z.number().int() }),
-  z.object({
-    status: z.literal('problems'),
-    problems: z.array(editProblemSchema),
-    count: z.number().int().describe('Of all problems; the first 200 are told'),
-  }),
-]);
-export type SavedEdits = z.output<typeof savedEditsSchema>;
+/** What became of edits: a revision, or problems, of which the first 200 are told and all counted. */
+export type SavedEdits =
+  | { readonly status: 'saved'; readonly revision: number }
+  | { readonly status: 'problems'; readonly problems: EditProblem[]; readonly count: number };
 
 /** The key under which an edit's row is known: an added row by the item it is given. */
 export function itemOfEdit(edit: RowEdit): string {

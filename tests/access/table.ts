@@ -145,7 +145,6 @@ export const ACCESS: Readonly<Record<string, Readonly<Record<string, string>>>> 
   'app/api/internal/programs/[program]/lists/[list]/draft/move/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/draft/save/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/drafts/route.ts': { GET: 'program lists.read' },
-  'app/api/internal/programs/[program]/lists/[list]/edits/route.ts': { POST: 'program lists.keep' },
   'app/api/internal/programs/[program]/lists/[list]/imports/[import]/route.ts': {
     GET: 'program lists.read',
     DELETE: 'program lists.keep',

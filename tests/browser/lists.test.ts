@@ -1,9 +1,10 @@
 import { readFile } from 'node:fs/promises';
 import { type Browser, type BrowserContext, type Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { sessionCookie } from '@/lib/server/auth/session';
+import { sessionCookie, startSession } from '@/lib/server/auth/session';
 import { newId } from '@/lib/server/ids';
 import { openBrowser } from '../support/browser';
+import { makePerson } from '../support/people';
 import { testWeb } from '../support/web';
 import { type Role, type WebPeople, webPeople } from '../support/web-people';
 
@@ -62,6 +63,26 @@ async function pageOf(role: Role): Promise<{ page: Page; context: BrowserContext
   return { page, context, failures };
 }
 
+async function keys(page: Page, key: string, times: number): Promise<void> {
+  for (let time = 0; time < times; time += 1) await page.keyboard.press(key);
+}
+
+/** By the clipboard, as from a spreadsheet. */
+async function paste(page: Page, text: string): Promise<void> {
+  await page.context().grantPermissions(['clipboard-read', 'clipboard-write'], { origin: url });
+  await page.evaluate((block) => navigator.clipboard.writeText(block), text);
+  await page.keyboard.press('Control+v');
+}
+
+/** A line of what the edits do: before, as edited, difference. */
+async function effectOf(page: Page, name: string): Promise<string[]> {
+  const line = page.getByRole('row', { name: new RegExp(`^${name} `) }).first();
+  return (await line.innerText())
+    .split('\t')
+    .slice(1)
+    .map((cell) => cell.replace(/\s/g, ''));
+}
+
 const csv = (rows: readonly string[]): string => `item,group,mass,x,y,z,Zone\n${rows.join('\n')}\n`;
 const RIGHT = csv([
   'W-1,Wing/Spars,40.5,200,10,50,7',
@@ -111,18 +132,18 @@ describe('a weights engineer', () => {
     await page.getByLabel('Length', { exact: true }).selectOption('in');
     await page.getByLabel('Inertia', { exact: true }).selectOption('lb.in2');
     await page.getByLabel('Negative integral').check();
-    await page.getByLabel('+y points').selectOption('up');
+    await page.getByLabel('+y points', { exact: true }).selectOption('up');
     await page
       .getByText('The axes aft, up, up do not span space: none of them points right or left.')
       .waitFor();
     await page.getByRole('button', { name: 'Add list' }).click();
     await page.getByText('Use lower-case letters, digits and hyphens').waitFor();
-    expect(await page.getByLabel('+y points').inputValue()).toBe('up');
+    expect(await page.getByLabel('+y points', { exact: true }).inputValue()).toBe('up');
     expect(await page.getByLabel('Mass', { exact: true }).inputValue()).toBe('lb');
     await page.getByLabel('Code').fill('wing');
-    await page.getByLabel('+y points').selectOption('left');
+    await page.getByLabel('+y points', { exact: true }).selectOption('left');
     await page.getByText('These axes are left-handed.').waitFor();
-    await page.getByLabel('+y points').selectOption('right');
+    await page.getByLabel('+y points', { exact: true }).selectOption('right');
     await page.getByRole('button', { name: 'Add list' }).click();
     await page.waitForURL(`${home}/wing/upload`);
     await page.getByText('negative integral').waitFor();
@@ -188,71 +209,113 @@ describe('a weights engineer', () => {
     const all = await downloaded(page, 'Export all rows');
     expect(all.text).toContain("\r\n'=W-3,");
     await page.locator('[role=grid] tbody tr', { hasText: 'W-1' }).locator('td').nth(1).click();
-    await page.getByText('Line 2 of wing-b.csv').waitFor();
+    await page.getByText('As in wing-b.csv').waitFor();
     expect(new URL(page.url()).searchParams.get('row')).toBe('W-1');
     await page.goBack();
-    await expect.poll(() => page.getByText('Line 2 of wing-b.csv').count()).toBe(0);
+    await expect.poll(() => page.getByText('As in wing-b.csv').count()).toBe(0);
   });
 
-  it('gathers edits that outlast the page, is told what is wrong in them, and saves them as a revision', async () => {
+  it('pastes into the grid, sees what is wrong at its cell and what the edits do, mends it, comes back later, and saves', async () => {
     await page.goto(`${home}/wing?row=W-1`);
-    await page.getByRole('button', { name: 'Edit row' }).click();
-    await page.getByLabel('Mass of one piece').fill('41,5');
-    await page.getByRole('button', { name: 'Close row' }).click();
-    await page.getByText('nothing that is typed is lost unasked').waitFor();
-    await page.getByRole('button', { name: 'Keep the edit' }).click();
-    await page.getByRole('button', { name: 'Add row' }).click();
-    const beside = page.getByRole('complementary', { name: 'Row' });
-    await beside.getByLabel('Item', { exact: true }).fill('W-4');
-    for (const [label, text] of [
-      ['Mass of one piece', '2'],
-      ['x, aft', '220'],
-      ['y, right', '0'],
-      ['z, up', '50'],
-    ] as const)
-      await beside.getByLabel(label).fill(text);
-    await page.getByRole('button', { name: 'Add to the edits' }).click();
-    await page.getByRole('heading', { name: '2 edits not saved yet' }).waitFor();
-    await page.reload();
-    await page.getByRole('heading', { name: '2 edits not saved yet' }).waitFor();
+    await page.getByRole('link', { name: 'Edit row', exact: true }).click();
+    await page.waitForURL(/\/wing\/edit\?edit=W-1$/);
+    await page.getByRole('button', { name: 'Leave without' }).click();
+    const grid = page.getByRole('grid');
+    await keys(page, 'ArrowRight', 4);
+    await paste(page, '41.5\t200\n12,250\t210');
+    await page.getByText('1 problem', { exact: true }).waitFor();
+    const wrong = grid.locator('[aria-invalid=true]');
+    expect(await wrong.innerText()).toBe('12,250');
+    await expect.poll(() => effectOf(page, 'Mass')).toEqual(['60.7500', '61.7500', '+1.0000']);
     await page.getByLabel('Reason for the revision').fill('weighed');
     await page.getByRole('button', { name: 'Save revision 2' }).click();
-    await page.getByText('The edits have 1 problem').waitFor();
-    await page.getByRole('button', { name: 'W-1', exact: true }).click();
-    await page.getByRole('button', { name: 'Edit row' }).click();
-    await page.getByLabel('Mass of one piece').fill('41.5');
-    await page.getByRole('button', { name: 'Keep the edit' }).click();
+    await page.getByText('1 problem to mend before this can be a revision.').waitFor();
+    await page.keyboard.press('F2');
+    await page.getByText('has a thousands separator').waitFor();
+    await page.keyboard.press('Control+a');
+    await page.keyboard.type('=2*6');
+    await page.getByText('is a formula').waitFor();
+    await page.keyboard.press('Control+a');
+    await page.keyboard.type('12,5');
+    await page.keyboard.press('Enter');
+    await expect.poll(() => wrong.count()).toBe(0);
+    await expect.poll(() => effectOf(page, 'Mass')).toEqual(['60.7500', '62.0000', '+1.2500']);
+    await page.keyboard.press('Control+z');
+    await expect.poll(() => wrong.count()).toBe(1);
+    await page.keyboard.press('ArrowUp');
+    await page.keyboard.type('12.25');
+    await page.keyboard.press('Enter');
+    await page.getByText('1 row edited').waitFor();
+
+    await page.getByRole('button', { name: 'Add row' }).click();
+    await page.keyboard.type('W-4');
+    await page.keyboard.press('Tab');
+    await keys(page, 'ArrowRight', 3);
+    for (const text of ['2', '220', '0', '50']) {
+      await page.keyboard.type(text);
+      await page.keyboard.press('Tab');
+    }
+    await expect.poll(() => effectOf(page, 'Mass')).toEqual(['60.7500', '63.7500', '+3.0000']);
+    // (40.5*200 + 12.25*210 + 8*400 + 1*200 + 2*220) / 63.75, by hand.
+    await expect.poll(async () => (await effectOf(page, 'CG x aft'))[1]).toBe('227.647');
+    await page.getByText(/^Draft kept at/).waitFor();
+
+    await page.goto('about:blank');
+    await page.goto(`${home}/wing`);
+    await page.getByText(/^Your draft of .*, 2 rows changed$/).waitFor();
+    await page.getByRole('link', { name: 'Go on with the draft' }).click();
+    await expect.poll(() => effectOf(page, 'Mass')).toEqual(['60.7500', '63.7500', '+3.0000']);
+    await page.getByLabel('Reason for the revision').fill('weighed');
     await page.getByRole('button', { name: 'Save revision 2' }).click();
     await page.waitForURL(/revision=2$/);
     await page.getByText('Revision 2, 4 rows').waitFor();
-    expect(await page.getByText('not saved yet').count()).toBe(0);
+    expect(await page.getByText('Your draft of').count()).toBe(0);
   });
 
-  it('is refused when a colleague was faster, told who, and overwrites nothing by going on', async () => {
-    await page.goto(`${home}/wing?row=W-1`);
-    await page.getByRole('button', { name: 'Edit row' }).click();
-    await page.getByLabel('Mass of one piece').fill('42');
-    await page.getByRole('button', { name: 'Keep the edit' }).click();
-    const faster = await fetch(`${route}/edits`, {
-      method: 'POST',
-      headers: { cookie: people.cookies.weights, origin: url, 'content-type': 'application/json' },
-      body: JSON.stringify({
-        baseRevision: 2,
-        reason: 'faster',
-        edits: [{ kind: 'change', item: 'W-1', fields: { mass: '43' } }],
-      }),
+  it('is told of a colleague at work on the list, and where both changed a field chooses between both versions', async () => {
+    const email = 'colleague@lists-flow.example';
+    const id = await makePerson(people.db, { email, name: 'The colleague', admin: false });
+    await people.db
+      .insertInto('program_members')
+      .values({ program_id: people.program.id, user_id: id, role: 'weights', added_by: people.ids.admin })
+      .execute();
+    const cookie = `${sessionCookie(url).name}=${await startSession(people.pool, id, '127.0.0.1')}`;
+    const colleague = async (method: string, path: string, body: unknown): Promise<unknown> => {
+      const headers = { cookie, origin: url, 'content-type': 'application/json' };
+      return (await fetch(`${route}${path}`, { method, headers, body: JSON.stringify(body) })).json();
+    };
+    await page.goto(`${home}/wing/edit`);
+    await page.getByRole('grid').focus();
+    await keys(page, 'ArrowRight', 4);
+    await page.keyboard.type('42');
+    await page.keyboard.press('Enter');
+    await page.getByText(/^Draft kept at/).waitFor();
+    const put = [{ kind: 'change', item: 'W-1', fields: { mass: '43' } }];
+    expect(await colleague('PATCH', '/draft', { base: 2, version: 0, put, drop: [] })).toMatchObject({
+      version: 1,
     });
-    expect(await faster.json()).toEqual({ status: 'saved', revision: 3 });
+    await page.getByText('The colleague has a draft from revision 2').waitFor({ timeout: 40_000 });
+    expect(await colleague('POST', '/draft/save', { version: 1, reason: 'faster' })).toEqual({
+      status: 'saved',
+      revision: 3,
+      merged: null,
+    });
     await page.getByLabel('Reason for the revision').fill('weighed again');
-    await page.getByRole('button', { name: 'Save revision 3' }).click();
-    await page.getByText('The weights made revision 3 after you began from revision 2.').waitFor();
-    await page.reload();
-    await page.getByRole('button', { name: 'Go on from revision 3' }).click();
-    await page.getByLabel('Reason for the revision').fill('weighed again');
-    await page.getByRole('button', { name: 'Save revision 4' }).click();
-    await page.getByText('in revision 3 it is').waitFor();
-    await page.getByRole('button', { name: 'Undo the edit', exact: true }).click();
-    await expect.poll(() => page.getByText('not saved yet').count()).toBe(0);
+    await page.getByRole('button', { name: /^Save revision/ }).click();
+    await page.getByRole('heading', { name: '1 row changed by both' }).waitFor();
+    const line = page
+      .locator('tr', { hasText: 'theirs for W-1' })
+      .or(page.locator('tr:has(input[type=radio])'));
+    const cells = (await line.innerText()).split('\t').map((text) => text.trim());
+    expect(cells).toEqual(['W-1', 'mass', '41.5', '42', '43']);
+    const goOn = page.getByRole('button', { name: 'Go on from revision 3 with these' });
+    expect(await goOn.isDisabled()).toBe(true);
+    await page.getByLabel('theirs for W-1, mass: 43').check();
+    await goOn.click();
+    await page.getByText('From revision 3.').waitFor();
+    await page.getByText('Nothing edited yet').waitFor();
+    await page.goto(`${home}/wing`);
+    await page.getByText('Revision 3, 4 rows').waitFor();
   });
 
   it('sees who made each revision, why, from what file, and what changed', async () => {
@@ -293,7 +356,7 @@ describe('a chief engineer', () => {
     const { page, context, failures } = await pageOf('chief');
     await page.goto(`${home}/wing?row=W-1`);
     await page.getByText('Mass of one piece').waitFor();
-    for (const words of ['Edit row', 'Remove row', 'Add row', 'Upload a file', 'Change declarations'])
+    for (const words of ['Edit row', 'Edit rows', 'Upload a file', 'Change declarations'])
       expect(await page.getByText(words, { exact: true }).count()).toBe(0);
     expect(failures).toEqual([]);
     await context.close();

@@ -1,5 +1,6 @@
 'use client';
 
+import { Quoted } from '@/components/lists/quoted';
 import { type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
 
 /** Which way the grid goes on after a cell is done. */
@@ -73,7 +74,7 @@ export function CellEditor({ label, start, isNumber, choices, check, onDone, onC
       )}
       {wrong === null ? null : (
         <span id={`${id}-wrong`} className="cell-wrong" aria-live="polite">
-          {wrong}
+          <Quoted text={wrong} />
         </span>
       )}
     </>

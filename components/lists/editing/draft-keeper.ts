@@ -26,6 +26,8 @@ export interface Keeping {
 interface Services {
   readonly send: (patch: DraftPatch) => Promise<PatchedDraft>;
   readonly load: () => Promise<Draft | null>;
+  /** Told what the server has and what it is to have, whenever either changes. */
+  readonly note: (kept: Edits, wanted: Edits) => void;
 }
 
 const REST_MS = 500;
@@ -72,7 +74,10 @@ export class DraftKeeper {
 
   want(edits: Edits): void {
     this.#wanted = edits;
-    if (this.#now.state === 'elsewhere') return;
+    if (this.#now.state === 'elsewhere') {
+      this.#set({});
+      return;
+    }
     this.#set({ state: 'waiting' });
     this.#later(REST_MS);
   }
@@ -102,6 +107,7 @@ export class DraftKeeper {
 
   #set(next: Partial<Keeping>): void {
     this.#now = { ...this.#now, ...next };
+    this.services.note(this.#kept, this.#wanted);
     this.onChange();
   }
 

@@ -1,7 +1,15 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useCallback, useDeferredValue, useMemo, useRef, useState, useSyncExternalStore } from 'react';
+import {
+  useCallback,
+  useDeferredValue,
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+  useSyncExternalStore,
+} from 'react';
 import { Inspector } from '@/components/data-table/inspector';
 import { at, bounds, type Selection } from '@/components/data-table/selection';
 import { useUrlView } from '@/components/data-table/use-url-view';
@@ -13,6 +21,7 @@ import { EditBar } from '@/components/lists/editing/edit-bar';
 import { EditGrid, type Goal } from '@/components/lists/editing/edit-grid';
 import { EffectTable } from '@/components/lists/editing/effect-table';
 import { gridColumns, RARELY_SHOWN } from '@/components/lists/editing/grid-columns';
+import { Journal } from '@/components/lists/editing/journal';
 import { OthersAtWork } from '@/components/lists/editing/others-at-work';
 import { byKey, placesOf, type ProblemPlace } from '@/components/lists/editing/problem-places';
 import { SaveForm } from '@/components/lists/editing/save-form';
@@ -41,7 +50,6 @@ import { addedKey, addedRows, rowKey, type Texts } from '@/lib/editing/edits';
 import { effectFigures } from '@/lib/editing/effect-figures';
 import { Ledger, problemsByKey } from '@/lib/editing/ledger';
 import { RowReader } from '@/lib/editing/read-row';
-import { type LeftBehind } from '@/lib/editing/rejoin';
 import {
   addRow,
   type Area,
@@ -63,6 +71,10 @@ import { type ListDeclarations } from '@/lib/mass/declarations';
 import { type AirframeGeometry } from '@/lib/mass/geometry';
 
 export interface EditStationProps {
+  /** Id of the person whose draft it is. */
+  readonly person: string;
+  /** The row to begin with, and its place in the list from 0. */
+  readonly open: { readonly item: string; readonly place: number } | null;
   readonly listHref: string;
   /** The internal route of the list. */
   readonly route: string;
@@ -84,14 +96,29 @@ export interface EditStationProps {
 const newId = (): string => crypto.randomUUID();
 const FROM_START = at(0, 0);
 
+/** Only asked for in the browser. */
+const browserStorage = {
+  getItem: (key: string) => window.localStorage.getItem(key),
+  setItem: (key: string, text: string) => window.localStorage.setItem(key, text),
+  removeItem: (key: string) => window.localStorage.removeItem(key),
+};
+
 /** The page on which a list is edited: the grid, what the edits do to the sums, problems, drafts, saving. */
 export function EditStation(props: EditStationProps) {
   const { route, listHref, base, declarations, geometry, first } = props;
   const router = useRouter();
-  const [store] = useState(() => new DraftStore(`${route}/draft`, base, props.draft));
+  const [store] = useState(
+    () =>
+      new DraftStore(
+        `${route}/draft`,
+        base,
+        props.draft,
+        new Journal(browserStorage, `polhode-unsent:${route}:${props.person}`, base),
+      ),
+  );
   const [known] = useState(() => new KnownRows(props.draft));
   useUnsavedGuard(store);
-  const { history, keeping } = useSyncExternalStore(store.subscribe, store.get, store.get);
+  const { history, keeping, leftBehind } = useSyncExternalStore(store.subscribe, store.get, store.get);
   const { edits } = history;
   const presence = usePresence(route, props.presence);
 
@@ -150,13 +177,17 @@ export function EditStation(props: EditStationProps) {
     [problems],
   );
 
-  const [selection, setSelection] = useState<Selection>(FROM_START);
-  const [goal, setGoal] = useState<Goal | null>(null);
+  const [selection, setSelection] = useState<Selection>(
+    props.open === null ? FROM_START : at(props.open.place, 0),
+  );
+  const [goal, setGoal] = useState<Goal | null>(
+    props.open === null ? null : { line: props.open.place, column: 0 },
+  );
   const [said, setSaid] = useState<{ readonly words: string; readonly isRefusal: boolean } | null>(null);
   const [busy, setBusy] = useState(false);
   const [clashes, setClashes] = useState<Clashes | null>(null);
-  const [leftBehind, setLeftBehind] = useState<readonly LeftBehind[]>([]);
-  const [form, setForm] = useState(false);
+  const [form, setForm] = useState(props.open !== null);
+  useEffect(() => store.takeUnsent(), [store]);
   const lastProblem = useRef<ProblemPlace | null>(null);
 
   const present = (): Sheet => {
@@ -294,6 +325,10 @@ export function EditStation(props: EditStationProps) {
     [reader],
   );
   const area = bounds(selection);
+  const closeForm = () => {
+    setForm(false);
+    setGoal({ line: activeLine, column: activeColumn });
+  };
   const movedOn = presence.newest.number > base;
 
   return (
@@ -326,11 +361,7 @@ export function EditStation(props: EditStationProps) {
           word="Not kept"
           live
           title="This draft was changed in another window"
-          action={
-            <Button onClick={() => void store.takeOther().then((left) => setLeftBehind(left ?? []), report)}>
-              Bring both together
-            </Button>
-          }
+          action={<Button onClick={() => void store.takeOther().catch(report)}>Bring both together</Button>}
         >
           <p>
             Nothing was overwritten. What only one window changed is taken; where both changed a field, the
@@ -344,7 +375,7 @@ export function EditStation(props: EditStationProps) {
           word="Left out"
           live
           title="Both windows changed these, and the other window has them"
-          action={<Button onClick={() => setLeftBehind([])}>Close this note</Button>}
+          action={<Button onClick={() => store.forgetLeftBehind()}>Close this note</Button>}
         >
           <ul>
             {leftBehind.map(({ key, column, text }) => (
@@ -438,7 +469,7 @@ export function EditStation(props: EditStationProps) {
             onRedo={() => store.redo()}
           />
           {formTexts === null ? null : (
-            <Inspector onClose={() => setForm(false)}>
+            <Inspector onClose={closeForm}>
               <RowForm
                 key={activeKey ?? activeLine}
                 declarations={declarations}
@@ -452,9 +483,9 @@ export function EditStation(props: EditStationProps) {
                   message,
                 }))}
                 onDone={(fields) => {
-                  if (take(setRow(present(), activeLine, fields))) setForm(false);
+                  if (take(setRow(present(), activeLine, fields))) closeForm();
                 }}
-                onLeave={() => setForm(false)}
+                onLeave={closeForm}
                 onTyped={() => undefined}
               />
             </Inspector>

@@ -65,7 +65,7 @@ describe('The groups in sight', () => {
 });
 
 describe('The columns of a list', () => {
-  const columns = rowColumns(declare(), [], ['Supplier', 'x']);
+  const columns = rowColumns(declare(), ['Supplier', 'x']);
 
   it('take in the list’s own, told from those of the contract, and leave them out until chosen', () => {
     const row = { cells: { item: 'A', x: 4 }, own: { Supplier: 'Tern Metals', x: 'own text' } };

@@ -1,5 +1,6 @@
 import { type Metadata } from 'next';
 import { subtotalsOf } from '@/db/queries/configurations';
+import { placesInRevision } from '@/db/queries/drafts';
 import { ownColumnsOf, pageOfView } from '@/db/queries/list-rows';
 import { EDIT_KEYS } from '@/components/lists/editing/edit-keys';
 import { EditStation } from '@/components/lists/editing/edit-station';
@@ -25,7 +26,10 @@ import { orNotFound, requireList } from '../list-page';
 export const metadata: Metadata = { title: 'Edit rows' };
 
 /** The rows of a list in a grid, to be edited; edits are kept as a draft until they are saved as a revision. */
-export default async function EditPage({ params }: PageProps<'/programs/[program]/lists/[list]/edit'>) {
+export default async function EditPage({
+  params,
+  searchParams,
+}: PageProps<'/programs/[program]/lists/[list]/edit'>) {
   const { access, list, listHref, route } = await requireList(params, 'lists.keep');
   const above = <TextLink href={listHref}>{list.title}</TextLink>;
   const db = serverDb();
@@ -48,6 +52,9 @@ export default async function EditPage({ params }: PageProps<'/programs/[program
   const view = listViewOf(new URLSearchParams());
   const page = { offset: 0, limit: ROWS_PER_PAGE };
   const stated = await revisionGroups(db, base.id);
+  const asked = (await searchParams)['edit'];
+  const item = typeof asked === 'string' ? asked : '';
+  const place = (await placesInRevision(db, base.id, [item])).get(item);
   const [presence, subtotals, totals, own, { total, rows }] = await Promise.all([
     loadPresence(db, list, access.person),
     subtotalsOf(db, [base.id], base.frame_issue_id),
@@ -65,6 +72,8 @@ export default async function EditPage({ params }: PageProps<'/programs/[program
       <QueryRoot>
         <EditStation
           key={base.number}
+          person={access.person.userId}
+          open={place === undefined ? null : { item, place }}
           listHref={listHref}
           route={route}
           base={base.number}
