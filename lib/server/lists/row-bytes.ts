@@ -1,9 +1,4 @@
-import {
-  NO_MATURITY,
-  type RowBlock,
-  type TextColumn,
-  type TextRanges,
-} from '@/lib/ingest/blocks/row-block';
+import { NO_MATURITY, type RowBlock, type TextColumn, type TextRanges } from '@/lib/ingest/blocks/row-block';
 import { CATEGORIES, CHANGE_STATUSES, type Component, MATURITIES } from '@/lib/mass/component';
 import { PLACE_COLUMNS, SIGMA_FIELDS, VALUE_COLUMNS } from './row-codec';
 
