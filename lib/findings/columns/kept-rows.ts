@@ -1,12 +1,13 @@
 import { type Vec3 } from '@/lib/numerics/vec3';
 
+import { type RowBlock, type TextColumn, type TextRanges } from '@/lib/ingest/blocks/row-block';
+
 import { type Side, namedSide } from '../named-side';
 import { type CheckBlock } from './check-block';
 import { ASK_THE_TEXT, NAMES_LEFT, NAMES_NO_SIDE } from './side-in-bytes';
 import { decoded } from './text-bytes';
 
-const CHUNK = 1 << 18;
-const NUMBERS = 15;
+const NUMBERS = 14;
 
 /** A row as several books keep it: what they may have to say of it later. SI; place in airframe components. */
 export interface KeptRow {
@@ -25,10 +26,9 @@ export interface KeptRow {
 
 /** Rows that books of a list keep, as bytes and numbers: some 200 bytes a row, and one entry for all books. */
 export class KeptRows {
-  readonly #chunks: Uint8Array[] = [];
-  #free = CHUNK;
-  /** Where the three texts of each row begin: chunk and offset; then their lengths. */
-  readonly #starts: number[] = [];
+  #bytes = new Uint8Array(1 << 12);
+  /** Where the item, the description and the part number of each row end, and the ones before the first row: at 0. */
+  #ends = new Int32Array(3 * 64 + 1);
   #numbers = new Float64Array(64 * NUMBERS);
   #codes = new Uint8Array(64);
   #groups = new Int32Array(64);
@@ -52,7 +52,7 @@ export class KeptRows {
     this.#count += 1;
     this.#kept[row] = id;
     if (id === this.#codes.length) this.#enlarge();
-    this.#keepTexts(block, row);
+    this.#keepTexts(block, row, id);
     this.#keepNumbers(block, row, id);
     this.#groups[id] = rows.group[row] ?? 0;
     this.#codes[id] = (block.side[row] ?? 0) | ((block.isMirrored[row] ?? 0) << 2);
@@ -99,43 +99,64 @@ export class KeptRows {
   }
 
   #texts(id: number): (string | null)[] {
-    const [chunk = 0, start = 0, ...lengths] = this.#starts.slice(5 * id, 5 * id + 5);
-    let from = start;
-    return lengths.map((length) => {
-      const text = this.#chunks[chunk]?.subarray(from, from + length);
-      from += length;
-      return length === 0 ? null : decoded(text ?? new Uint8Array(0));
-    });
+    const [from = 0, afterItem = 0, afterDescription = 0, to = 0] = this.#ends.subarray(3 * id, 3 * id + 4);
+    const text = (start: number, end: number): string | null =>
+      start === end ? null : decoded(this.#bytes.subarray(start, end));
+    return [text(from, afterItem), text(afterItem, afterDescription), text(afterDescription, to)];
   }
 
-  #keepTexts({ rows }: CheckBlock, row: number): void {
-    const texts = [
-      rows.textBytes('item', row),
-      rows.textBytes('description', row),
-      rows.textBytes('part_number', row),
-    ];
-    const length = texts.reduce((sum, text) => sum + text.length, 0);
-    let chunk = this.#chunks.at(-1);
-    if (chunk === undefined || this.#free + length > chunk.length) {
-      chunk = new Uint8Array(Math.max(CHUNK, length));
-      this.#chunks.push(chunk);
-      this.#free = 0;
+  #keepTexts({ rows }: CheckBlock, row: number, id: number): void {
+    const { item, description, part_number: number } = rows.texts;
+    const start = this.#ends[3 * id] ?? 0;
+    const afterItem = this.#keepText(rows, 'item', item, row, start);
+    const afterDescription = this.#keepText(rows, 'description', description, row, afterItem);
+    this.#ends[3 * id + 1] = afterItem;
+    this.#ends[3 * id + 2] = afterDescription;
+    this.#ends[3 * id + 3] = this.#keepText(rows, 'part_number', number, row, afterDescription);
+  }
+
+  /** Returns where the text ends. */
+  #keepText(rows: RowBlock, column: TextColumn, { start, end }: TextRanges, row: number, at: number): number {
+    const [from, to] = [start[row] ?? 0, end[row] ?? 0];
+    if (to < 0) return this.#keepBytes(rows.textBytes(column, row), 0, null, at);
+    return this.#keepBytes(rows.bytes, from, to, at);
+  }
+
+  #keepBytes(bytes: Uint8Array, from: number, to: number | null, at: number): number {
+    const end = at + (to ?? bytes.length) - from;
+    if (end > this.#bytes.length) {
+      const larger = new Uint8Array(2 * end);
+      larger.set(this.#bytes);
+      this.#bytes = larger;
     }
-    this.#starts.push(this.#chunks.length - 1, this.#free, ...texts.map((text) => text.length));
-    for (const text of texts) {
-      chunk.set(text, this.#free);
-      this.#free += text.length;
-    }
+    for (let k = 0; k < end - at; k += 1) this.#bytes[at + k] = bytes[from + k] ?? 0;
+    return end;
   }
 
   #keepNumbers({ rows, right, place }: CheckBlock, row: number, id: number): void {
     const { mass, ixx, iyy, izz, ixy, ixz, iyz, yaw, pitch, roll } = rows.numbers;
-    const columns = [mass, right, ...place, ixx, iyy, izz, ixy, ixz, iyz, yaw, pitch, roll];
-    for (const [k, column] of columns.entries()) this.#numbers[id * NUMBERS + k] = column[row] ?? NaN;
+    const numbers = this.#numbers;
+    const at = id * NUMBERS;
+    numbers[at] = mass[row] ?? NaN;
+    numbers[at + 1] = right[row] ?? NaN;
+    numbers[at + 2] = place[0][row] ?? NaN;
+    numbers[at + 3] = place[1][row] ?? NaN;
+    numbers[at + 4] = place[2][row] ?? NaN;
+    numbers[at + 5] = ixx[row] ?? NaN;
+    numbers[at + 6] = iyy[row] ?? NaN;
+    numbers[at + 7] = izz[row] ?? NaN;
+    numbers[at + 8] = ixy[row] ?? NaN;
+    numbers[at + 9] = ixz[row] ?? NaN;
+    numbers[at + 10] = iyz[row] ?? NaN;
+    numbers[at + 11] = yaw[row] ?? NaN;
+    numbers[at + 12] = pitch[row] ?? NaN;
+    numbers[at + 13] = roll[row] ?? NaN;
   }
 
   #enlarge(): void {
-    const [numbers, codes, groups] = [this.#numbers, this.#codes, this.#groups];
+    const [numbers, codes, groups, ends] = [this.#numbers, this.#codes, this.#groups, this.#ends];
+    this.#ends = new Int32Array(2 * ends.length - 1);
+    this.#ends.set(ends);
     this.#numbers = new Float64Array(2 * numbers.length);
     this.#numbers.set(numbers);
     this.#codes = new Uint8Array(2 * codes.length);

@@ -16,7 +16,7 @@ import {
 } from '@/lib/mass/component';
 
 /** Rows of a block at most. */
-export const BLOCK_ROWS = 512;
+export const BLOCK_ROWS = 256;
 
 export type NumberColumn = 'quantity' | ValueName | AngleName | 'growth' | `${ValueName}_sigma`;
 
