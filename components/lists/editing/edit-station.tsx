@@ -20,7 +20,7 @@ import { DraftStore, json } from '@/components/lists/editing/draft-store';
 import { EditBar } from '@/components/lists/editing/edit-bar';
 import { EditGrid, type Goal } from '@/components/lists/editing/edit-grid';
 import { EffectTable } from '@/components/lists/editing/effect-table';
-import { gridColumns, RARELY_SHOWN } from '@/components/lists/editing/grid-columns';
+import { gridColumns, unusedColumns } from '@/components/lists/editing/grid-columns';
 import { Journal } from '@/components/lists/editing/journal';
 import { OthersAtWork } from '@/components/lists/editing/others-at-work';
 import { byKey, placesOf, type ProblemPlace } from '@/components/lists/editing/problem-places';
@@ -46,7 +46,7 @@ import {
 import { type EditProblem } from '@/lib/contracts/list-edits';
 import { type RowPage } from '@/lib/contracts/list-rows';
 import { readBlock, writeBlock } from '@/lib/editing/block';
-import { addedKey, addedRows, rowKey, type Texts } from '@/lib/editing/edits';
+import { addedKey, addedRows, rowKey, type Texts, textsOfRow } from '@/lib/editing/edits';
 import { effectFigures } from '@/lib/editing/effect-figures';
 import { Ledger, problemsByKey } from '@/lib/editing/ledger';
 import { RowReader } from '@/lib/editing/read-row';
@@ -123,7 +123,8 @@ export function EditStation(props: EditStationProps) {
   const presence = usePresence(route, props.presence);
 
   const [urlView, setUrlView] = useUrlView();
-  const [hidden, setHidden] = useState<readonly string[]>(RARELY_SHOWN);
+  const allColumns = useMemo(() => gridColumns(declarations, props.own), [declarations, props.own]);
+  const [hidden, setHidden] = useState(() => unusedColumns(allColumns, first.rows.map(textsOfRow)));
   const view = { ...urlView, hidden };
   const query = useMemo(() => {
     const asked = new URLSearchParams();
@@ -141,7 +142,6 @@ export function EditStation(props: EditStationProps) {
     () => 0,
   );
 
-  const allColumns = useMemo(() => gridColumns(declarations, props.own), [declarations, props.own]);
   const columns = useMemo(
     () => allColumns.filter(({ id }, index) => index === 0 || !hidden.includes(id)),
     [allColumns, hidden],

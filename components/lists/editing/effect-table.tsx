@@ -1,5 +1,6 @@
 'use client';
 
+import { memo } from 'react';
 import { Num } from '@/components/mass/num';
 import { sharedDecimals } from '@/components/mass/number-text';
 import { Cell, ColumnHead, RowHead, Table } from '@/components/ui/table';
@@ -16,7 +17,8 @@ interface EffectTableProps {
 }
 
 /** What the edits do to the sums of the list, before anything is saved. */
-export function EffectTable({ before, after, base, declarations }: EffectTableProps) {
+export const EffectTable = memo(function EffectTable(props: EffectTableProps) {
+  const { before, after, base, declarations } = props;
   const { massUnit, lengthUnit, inertiaUnit, axes } = declarations;
   const lines: Line[] = [
     { name: 'Mass', unit: unitLabel(massUnit), before: before.mass, after: after.mass },
@@ -56,7 +58,7 @@ export function EffectTable({ before, after, base, declarations }: EffectTablePr
       </p>
     </div>
   );
-}
+});
 
 interface Line {
   readonly name: string;

@@ -1,8 +1,9 @@
 import { type DataColumn } from '@/components/data-table/column';
 
 import { columnsOfKind, isNumberColumn } from '@/lib/editing/columns';
+import { type Texts } from '@/lib/editing/edits';
 import { type BaseRow } from '@/lib/editing/sheet';
-import { MOMENTS, type ListColumn } from '@/lib/ingest/mass-list/columns';
+import { CHANGE_COLUMNS, MOMENTS, type ListColumn } from '@/lib/ingest/mass-list/columns';
 import { CATEGORIES, CHANGE_STATUSES, MATURITIES } from '@/lib/mass/component';
 import { type ListDeclarations } from '@/lib/mass/declarations';
 import { unitLabel } from '@/lib/units/names';
@@ -54,12 +55,16 @@ const FIRST: readonly ListColumn[] = [
   'note',
 ];
 
-/** Columns that few lists fill. */
-export const RARELY_SHOWN: readonly string[] = [
-  'part_revision',
-  'source_date',
-  ...['mass', 'x', 'y', 'z', ...MOMENTS].map((name) => `${name}_sigma`),
-];
+/** What a column holds in rows that say nothing by it. */
+const DEFAULTS: Readonly<Record<string, string>> = { yaw: '0', pitch: '0', roll: '0', counting: 'counted' };
+
+/** Columns that are not shown at first, for none of some rows says anything by them. */
+export function unusedColumns(columns: readonly GridColumn[], rows: readonly Texts[]): readonly string[] {
+  const always: readonly string[] = [...FIRST, ...CHANGE_COLUMNS];
+  return columns
+    .map(({ id }) => id)
+    .filter((id) => !always.includes(id) && !rows.some((row) => (row[id] ?? '') !== (DEFAULTS[id] ?? '')));
+}
 
 /** The contract's columns in the units, axes and signs of the list, then the list's own. */
 export function gridColumns(declarations: ListDeclarations, own: readonly string[]): readonly GridColumn[] {
