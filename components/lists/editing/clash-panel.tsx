@@ -145,7 +145,7 @@ function Question({
 }) {
   const name = useId();
   const side = (which: Take) => (
-    <Cell className={take === which ? 'bg-chosen' : ''}>
+    <Cell className={take === which ? 'min-w-32 bg-chosen' : 'min-w-32'}>
       <label className="flex cursor-pointer items-baseline gap-2">
         <input
           type="radio"

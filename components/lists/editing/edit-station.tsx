@@ -510,8 +510,8 @@ export function EditStation(props: EditStationProps) {
         </p>
         <p className="measure text-note text-ink-2">
           Products in the grid are as the list states them: {PRODUCT_WORDS[declarations.products]}. Enter or
-          F2 edits a cell, the last line begins a new row, a block from a spreadsheet can be pasted. The key
-          `?` lists all keys.
+          F2 edits a cell, the last line begins a new row, a block from a spreadsheet can be pasted. The key{' '}
+          <kbd>?</kbd> lists all keys.
         </p>
       </Section>
       <Section
